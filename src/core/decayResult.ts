@@ -1,0 +1,80 @@
+import type { Flag } from "./flag.ts";
+import type { Quantity } from "./quantity.ts";
+
+/** What the user decided about a fit; the sheet's `fit` with its surroundings. */
+export interface DecaySettings {
+  readonly quantity: "auto" | "k" | "uu" | "q";
+  readonly window: "auto" | readonly [number, number];
+  readonly x0: number | null;
+  readonly n: number | null;
+  readonly residuals: "log" | "linear";
+  readonly weights: "sampling" | "equal";
+  readonly along: "x" | "t";
+  readonly referenceLength: number | null;
+  readonly referenceSpeed: number | null;
+  readonly kinematicViscosity: number | null;
+  /** Which dissipation is adopted: what derive needs. */
+  readonly dissipation: "auto" | "gradient" | "decay" | "inertial";
+  readonly kind: "measurement" | "dns" | "les" | null;
+}
+
+/** One station as the fit sees it. */
+export interface DecayPoint {
+  readonly x: number;
+  /** k/Us², uu/Us² or the given column. */
+  readonly q: number;
+  /** Standard error of ln q from the station's own sampling; null where there is none. */
+  readonly error: number | null;
+  /** The error the fit weighted with: smoothed along x; null with equal weights. */
+  readonly smoothedError: number | null;
+  readonly used: boolean;
+}
+
+/** q = A ((x - x0)/ell)^(-n), with what is needed to draw its band. */
+export interface PowerLaw {
+  readonly A: number;
+  readonly x0: number;
+  readonly n: number;
+  /** ell; 1 where the case has no reference length. */
+  readonly length: number;
+  /** Covariance of (ln A, x0, n), row-major 3 × 3; rows and columns of what was held are zero. */
+  readonly covariance: readonly number[];
+  /** Student's t (or the normal's) 97.5 % point that belongs to the covariance. */
+  readonly quantile: number;
+}
+
+/** The decay of one case. Keys are those of the results file, to the letter; the rest is for the page. */
+export interface DecayResult {
+  readonly quantity: "k" | "uu" | "q";
+  /** What was taken for granted of the components that were not measured. */
+  readonly assumption: "none" | "axisymmetric" | "isotropic";
+  readonly residuals: "log" | "linear";
+  /** As it worked out: "equal" where no standard errors were to be had. */
+  readonly weights: "sampling" | "equal";
+  readonly window: readonly [number, number];
+  readonly windowChosen: "auto" | "given";
+  /** Why this window, one sentence. */
+  readonly windowReason: string;
+  /** Stations inside the window that were fitted. */
+  readonly stations: number;
+  /** Us of q = k/Us²; null in a q profile. */
+  readonly speed: number | null;
+  readonly n: Quantity;
+  readonly x0: Quantity;
+  readonly A: Quantity;
+  readonly correlation_n_x0: number | null;
+  readonly chi2_reduced: number | null;
+  /** Probability of a larger chi-square; null with equal weights. */
+  readonly p: number | null;
+  readonly given_window: { readonly n: Quantity; readonly x0: Quantity };
+  readonly lambda_route: { readonly n: Quantity; readonly x0: Quantity };
+  readonly epsilon_route: { readonly n: Quantity; readonly x0: Quantity };
+  readonly growth: { readonly m: Quantity };
+  readonly hypotheses: readonly { readonly name: string; readonly n: number; readonly p: number | null }[];
+  readonly law: PowerLaw | null;
+  readonly points: readonly DecayPoint[];
+  /** Fits over every window that begins later (or ends earlier): for the window scan. */
+  readonly flags: readonly Flag[];
+  readonly iterations: number;
+  readonly converged: boolean;
+}

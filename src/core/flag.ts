@@ -1,0 +1,45 @@
+/** A doubt that travels with a result and prints beside it. Codes are stable and listed in the README. */
+export interface Flag {
+  readonly code: FlagCode;
+  /** One sentence: the fact and its consequence. */
+  readonly text: string;
+  /** The figure behind the flag, where there is one. */
+  readonly value?: number;
+}
+
+export const flagCodes = [
+  "short-record",
+  "record-unsteady-scale",
+  "unequal-steps",
+  "missing-values",
+  "backward-time",
+  "taylor-doubtful",
+  "reversed-flow",
+  "noise-floor",
+  "resolution",
+  "aliasing",
+  "no-zero-crossing",
+  "isotropy-assumed",
+  "axisymmetry-assumed",
+  "no-viscosity",
+  "inhomogeneous",
+  "trend",
+  "probes-joined",
+  "left-out-lines",
+  "damaged-file",
+  "resolved-scales",
+  "start-up",
+  "replayed-inflow",
+  "sensor-length",
+  "few-stations",
+  "short-span",
+  "held-origin",
+  "equal-weights",
+  "chi-square-fails",
+  "half-open",
+  "u-varies",
+  "window-without-plateau",
+  "law-refused",
+  "circular-route",
+] as const;
+export type FlagCode = (typeof flagCodes)[number];

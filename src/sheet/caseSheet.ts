@@ -1,0 +1,70 @@
+import type { Layout, Role, Separator } from "../core/records.ts";
+import type { IntegralScaleRoute } from "../core/stationResult.ts";
+
+/**
+ * A case sheet with every default filled in: what the results file prints as `settings`.
+ * What a user writes is checked and completed by readCaseSheet; keys are those of the contract, to the letter.
+ */
+export interface CaseSheet {
+  readonly case: string;
+  readonly kinematicViscosity: number | null;
+  readonly units: "SI" | "nondimensional";
+  readonly reference: SheetReference;
+  readonly layout: Layout;
+  readonly along: "x" | "t";
+  /** Role to heading, 1-based column number, or either with a unit; null: recognised. */
+  readonly columns: Readonly<Partial<Record<Role, SheetColumn>>> | null;
+  readonly files: readonly SheetFile[];
+  readonly fit: SheetFit;
+  readonly kind: "measurement" | "dns" | "les" | null;
+  readonly read: SheetRead;
+  readonly zero: number;
+  readonly simultaneous: boolean | "auto";
+  readonly periodic: boolean | "auto";
+  readonly startup: number;
+  readonly extent: number | null;
+  readonly sensorLength: number | null;
+  readonly reduce: SheetReduce;
+  readonly body: SheetBody | null;
+  readonly compare: { readonly align: "x0" | "x" | "Tu"; readonly tolerance: number };
+}
+
+export interface SheetReference {
+  readonly length: number | null;
+  readonly symbol: string;
+  readonly speed: number | null;
+}
+export type SheetColumn = string | number | { readonly from: string | number; readonly unit: string };
+export interface SheetFile {
+  readonly path: string;
+  readonly x: number | null;
+}
+export interface SheetFit {
+  readonly quantity: "auto" | "k" | "uu" | "q";
+  readonly window: "auto" | readonly [number, number];
+  readonly x0: number | null;
+  readonly n: number | null;
+  readonly residuals: "log" | "linear";
+  readonly weights: "sampling" | "equal";
+}
+export interface SheetRead {
+  readonly separator: Separator | null;
+  readonly decimal: "." | "," | null;
+  readonly heading: number | null;
+  readonly step: number | null;
+  readonly missing: readonly string[];
+}
+export interface SheetReduce {
+  readonly integralScale: IntegralScaleRoute;
+  readonly correlation: "biased" | "unbiased";
+  readonly detrend: "mean" | "linear";
+  readonly segment: number | null;
+  readonly taylorCorrection: boolean;
+  readonly dissipation: "auto" | "gradient" | "decay" | "inertial";
+}
+export interface SheetBody {
+  readonly x: number;
+  readonly chord: number | null;
+  readonly Tu: number | null;
+  readonly L11: number | null;
+}

@@ -1,0 +1,148 @@
+import { cpSync, createReadStream, existsSync, readdirSync, statSync } from "node:fs";
+import { extname, join, relative, resolve } from "node:path";
+import react from "@vitejs/plugin-react";
+import type { Plugin } from "vite";
+import { defineConfig } from "vitest/config";
+
+const top = import.meta.dirname;
+const samples = resolve(top, "sample-data");
+
+/** Nothing but the page's own files; the hash is that of the one empty style element Plotly makes. */
+const contentSecurityPolicy = [
+  "default-src 'none'",
+  "script-src 'self'",
+  "worker-src 'self'",
+  "style-src 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='",
+  "img-src 'self' data: blob:",
+  "font-src 'self' data:",
+  "connect-src 'self'",
+  "manifest-src 'self'",
+  "base-uri 'none'",
+  "form-action 'none'",
+].join("; ");
+
+/** The policy as a meta tag, at build only: the development server needs inline scripts. */
+function policyTag(): Plugin {
+  return {
+    name: "policy-tag",
+    apply: "build",
+    transformIndexHtml: () => [
+      {
+        tag: "meta",
+        attrs: { "http-equiv": "Content-Security-Policy", content: contentSecurityPolicy },
+        injectTo: "head-prepend",
+      },
+    ],
+  };
+}
+
+const isDemoFile = (name: string) => [".csv", ".json"].includes(extname(name)) && !name.startsWith("truth");
+
+/** Every demo file below sample-data, as paths relative to it. */
+function demoFiles(folder = samples): string[] {
+  if (!existsSync(folder)) return [];
+  return readdirSync(folder)
+    .sort()
+    .flatMap((name) => {
+      const path = join(folder, name);
+      if (statSync(path).isDirectory()) return demoFiles(path);
+      return isDemoFile(name) ? [relative(samples, path).split("\\").join("/")] : [];
+    });
+}
+
+/** The demo is the sample data itself: served in development, copied beside the page in a build. */
+function demoData(): Plugin {
+  let outDir = "";
+  return {
+    name: "demo-data",
+    configResolved: (config) => {
+      outDir = resolve(config.root, config.build.outDir);
+    },
+    configureServer: (server) => {
+      server.middlewares.use("/demo", (request, response, next) => {
+        const path = decodeURIComponent((request.url ?? "/").split("?")[0].slice(1));
+        if (path === "files.json") return void response.end(JSON.stringify(demoFiles()));
+        if (!demoFiles().includes(path)) return next();
+        createReadStream(join(samples, path)).pipe(response);
+      });
+    },
+    generateBundle() {
+      this.emitFile({ type: "asset", fileName: "demo/files.json", source: JSON.stringify(demoFiles()) });
+    },
+    writeBundle: () => {
+      for (const path of demoFiles()) cpSync(join(samples, path), join(outDir, "demo", path));
+    },
+  };
+}
+
+const tests = {
+  projects: [
+    {
+      extends: true as const,
+      test: {
+        name: "unit",
+        environment: "node",
+        include: ["../../test/**/*.test.ts"],
+        exclude: ["../../test/browser/**"],
+      },
+    },
+    {
+      extends: true as const,
+      test: {
+        name: "component",
+        environment: "happy-dom",
+        include: ["../../test/app/**/*.test.tsx"],
+        setupFiles: ["../../test/app/setup.ts"],
+      },
+    },
+    {
+      extends: true as const,
+      test: {
+        name: "browser",
+        environment: "node",
+        include: ["../../test/browser/**/*.test.ts"],
+        globalSetup: ["../../test/browser/setup.ts"],
+        fileParallelism: false,
+        testTimeout: 120_000,
+        hookTimeout: 120_000,
+      },
+    },
+  ],
+};
+
+export default defineConfig(({ mode }) => {
+  if (mode === "batch") {
+    return {
+      root: resolve(top, "src/batch"),
+      publicDir: false,
+      ssr: { noExternal: true },
+      build: {
+        ssr: true,
+        target: "node20",
+        outDir: resolve(top, "dist-batch"),
+        emptyOutDir: true,
+        minify: false,
+        rollupOptions: {
+          input: { main: resolve(top, "src/batch/main.ts"), thread: resolve(top, "src/engine/thread.ts") },
+          output: { entryFileNames: "[name].js" },
+        },
+      },
+    };
+  }
+  return {
+    root: resolve(top, "src/app"),
+    base: "./",
+    publicDir: resolve(top, "public"),
+    plugins: [react(), policyTag(), demoData()],
+    worker: { format: "es" },
+    build: {
+      target: "es2022",
+      outDir: resolve(top, "dist"),
+      emptyOutDir: true,
+      chunkSizeWarningLimit: 1700,
+      assetsInlineLimit: 0,
+    },
+    preview: { headers: { "Content-Security-Policy": contentSecurityPolicy } },
+    test: tests,
+  };
+});
