@@ -1,0 +1,30 @@
+/**
+ * What the pilot (a record's first 2^20 samples, or all of it) decides for the whole record.
+ * A plan is plain data: a record that has to be read once more is read with the plan it came back with.
+ */
+export interface RecordPlan {
+  /** Time between samples: their mean where the steps are equal, their median where not; > 0. */
+  readonly step: number;
+  /** The steps are unequal: moments are weighted with the trapezoid rule, and there is no spectrum. */
+  readonly weighted: boolean;
+  /** Last digit the time stamps are printed with; 0 where none was found. */
+  readonly quantum: number;
+  /** Mean of u, v, w in the pilot, subtracted from every sample before anything is summed. */
+  readonly reference: readonly number[];
+  /** Slope of u, v, w in time about `centre`, subtracted too; zero unless a linear trend is removed. */
+  readonly slope: readonly number[];
+  /** Time at which the trend is zero. */
+  readonly centre: number;
+  /** Integral time of u in the pilot; null where its correlation does not fall to zero. */
+  readonly integralTime: number | null;
+  /** Lag products are formed for 0 … lagLimit - 1 samples; a power of two. */
+  readonly lagLimit: number;
+  /** Every lagStride-th of them is kept; a power of two. */
+  readonly lagStride: number;
+  /** Samples in a segment of the Welch spectrum; a power of two. */
+  readonly segment: number;
+  /** Samples in the smallest block, 64 · 2^m. */
+  readonly blockSamples: number;
+  /** Samples either side in the central difference behind the derivative skewness. */
+  readonly derivativeStep: number;
+}
