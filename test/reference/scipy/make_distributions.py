@@ -1,0 +1,22 @@
+"""Quantiles and tails for test/core/signal/distributions.test.ts. Run: python3 make_distributions.py"""
+import json
+import pathlib
+
+import numpy
+import scipy
+from scipy import stats
+
+probabilities = [1e-6, 0.001, 0.025, 0.05, 0.3, 0.5, 0.9, 0.95, 0.975, 0.999, 1 - 1e-6]
+freedoms = [1, 2, 3, 4.5, 9, 10, 19, 49, 200, 5000]
+out = {
+    "made_with": f"SciPy {scipy.__version__}, NumPy {numpy.__version__}",
+    "normal": [[p, stats.norm.ppf(p)] for p in probabilities],
+    "student": [[p, f, stats.t.ppf(p, f)] for p in probabilities for f in freedoms],
+    "chi_square": [[p, f, stats.chi2.ppf(p, f)] for p in probabilities for f in freedoms],
+    "f": [[p, a, b, stats.f.ppf(p, a, b)] for p in probabilities for a in (1, 2, 3, 10) for b in (2, 7, 30, 400)],
+    "normal_cdf": [[x, stats.norm.cdf(x)] for x in (-8.0, -3.0, -1.0, -0.1, 0.0, 0.5, 2.0, 5.0)],
+    "chi_square_tail": [[x, f, stats.chi2.sf(x, f)] for x in (0.01, 1, 3.84, 20, 150) for f in freedoms],
+    "f_tail": [[x, a, b, stats.f.sf(x, a, b)] for x in (0.1, 1, 4, 30) for a in (1, 2, 10) for b in (3, 20, 400)],
+}
+path = pathlib.Path(__file__).with_name("distributions.json")
+path.write_text(json.dumps(out, indent=0) + "\n")
