@@ -1,0 +1,1 @@
+export function seededRandom(seed: number): { uniform(): number; gaussian(): number };
