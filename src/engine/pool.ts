@@ -1,6 +1,6 @@
 import type { PlainFailure } from "../core/failure.ts";
 import { ReductionFailure } from "../core/failure.ts";
-import type { Ask, Engine, Reply, TaskName, Tasks } from "./protocol.ts";
+import type { Ask, Engine, Reply, RunOptions, TaskName, Tasks } from "./protocol.ts";
 
 /** One worker as the pool sees it: asked by messages, ended without being asked. */
 export interface Channel {
@@ -17,13 +17,6 @@ export interface Listener {
 
 /** Starts one worker. */
 export type Spawn = (listener: Listener) => Channel;
-
-export interface RunOptions {
-  readonly onProgress?: (bytes: number) => void;
-  readonly signal?: AbortSignal;
-  /** Buffers of the ask that are given away with it. */
-  readonly transfer?: readonly Transferable[];
-}
 
 /** An ask from the moment it is made to its one end. */
 interface Job {

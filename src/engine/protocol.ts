@@ -62,12 +62,16 @@ export type Reply =
   | { id: number; kind: "answer"; answer: Tasks[TaskName]["answer"] }
   | { id: number; kind: "failed"; failure: PlainFailure };
 
+export interface RunOptions {
+  /** Bytes read since the last call. */
+  readonly onProgress?: ((bytes: number) => void) | undefined;
+  readonly signal?: AbortSignal | undefined;
+  /** Buffers of the ask that are given away with it instead of being copied. */
+  readonly transfer?: readonly Transferable[] | undefined;
+}
+
 /** What the shells hold: ask a task, hear of progress, get one end. Rejects with a ReductionFailure. */
 export interface Engine {
-  run<N extends TaskName>(
-    task: N,
-    ask: Tasks[N]["ask"],
-    options?: { onProgress?: (bytes: number) => void; signal?: AbortSignal },
-  ): Promise<Tasks[N]["answer"]>;
+  run<N extends TaskName>(task: N, ask: Tasks[N]["ask"], options?: RunOptions): Promise<Tasks[N]["answer"]>;
   close(): void;
 }

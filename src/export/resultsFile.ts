@@ -1,0 +1,173 @@
+import type { CaseInput, ComparedRatio, Comparison } from "../core/comparison.ts";
+import { comparedQuantities } from "../core/comparison.ts";
+import type { DecayResult } from "../core/decayResult.ts";
+import type { Flag } from "../core/flag.ts";
+import { program } from "../core/program.ts";
+import type { Quantity } from "../core/quantity.ts";
+import type { SourceNote } from "../core/records.ts";
+import type { StationResult } from "../core/stationResult.ts";
+
+/** One case on its way into the results file. */
+export interface ResultCase {
+  readonly argued: CaseInput;
+  /** The case sheet with every default filled in. */
+  readonly settings: object;
+  readonly sources: readonly SourceNote[];
+  /** Doubts about the case as a whole, beside those of its decay. */
+  readonly flags: readonly Flag[];
+}
+
+/** A value as scripts read it: plain numbers, an interval or a reason for none. */
+export type PlainQuantity =
+  | { value: number; low: number | null; high: number | null; why_low?: string; why_high?: string }
+  | { value: null; why: string };
+
+export type ResultsFile = ReturnType<typeof resultsFile>;
+
+/** Every quantity of a station, in the order in which files and tables give them. */
+export const stationQuantities = [
+  "U",
+  "uu",
+  "vv",
+  "ww",
+  "uv",
+  "uw",
+  "vw",
+  "k",
+  "Tu",
+  "isotropy_uv",
+  "isotropy_uw",
+  "T_int",
+  "L11",
+  "lambda",
+  "gradient",
+  "epsilon",
+  "epsilon_gradient",
+  "epsilon_decay",
+  "epsilon_inertial",
+  "eta",
+  "Re_lambda",
+  "Re_L",
+  "C_epsilon",
+  "S_dudx",
+  "balance",
+  "q",
+] as const satisfies readonly (keyof StationResult)[];
+
+/**
+ * Everything that was found, for scripts: one object per case, one per comparison.
+ * `scan`, `development` and `body` are objects whose keys are quantities; without keys where nothing was found.
+ * @param cases       in the order of the sheets
+ * @param comparisons every later case against the first
+ */
+export function resultsFile(cases: readonly ResultCase[], comparisons: readonly Comparison[]) {
+  return {
+    program: program.name,
+    version: program.version,
+    schema: program.schema,
+    cases: cases.map(plainCase),
+    comparisons: comparisons.map(plainComparison),
+  };
+}
+
+/** The results file as text: JSON, numbers with all their digits. */
+export function resultsText(file: ResultsFile): string {
+  return `${JSON.stringify(file, null, 1)}\n`;
+}
+
+/** A quantity without what only the program needs. */
+export function plainQuantity(quantity: Quantity): PlainQuantity {
+  if (quantity.value === null) return { value: null, why: quantity.why };
+  const { value, low, high, why_low, why_high } = quantity;
+  return {
+    value,
+    low,
+    high,
+    ...(low === null && why_low !== undefined ? { why_low } : {}),
+    ...(high === null && why_high !== undefined ? { why_high } : {}),
+  };
+}
+
+function plainCase({ argued, settings, sources, flags }: ResultCase) {
+  return {
+    case: argued.name,
+    settings,
+    sources: sources.map(({ name, bytes, x, position }) => ({ name, bytes, x, position })),
+    stations: argued.stations.map(plainStation),
+    decay: plainDecay(argued.decay),
+    scan: {},
+    development: {},
+    body: {},
+    flags: [...flags, ...argued.decay.flags].map(plainFlag),
+  };
+}
+
+function plainStation(station: StationResult) {
+  const { x, samples, duration, routes, flags, facts } = station;
+  const quantities = Object.fromEntries(
+    stationQuantities.map((key) => [key, plainQuantity(station[key])]),
+  ) as Record<(typeof stationQuantities)[number], PlainQuantity>;
+  return {
+    x,
+    samples,
+    duration,
+    ...quantities,
+    routes: plainEach(routes),
+    flags: flags.map(plainFlag),
+    facts,
+  };
+}
+
+function plainDecay(decay: DecayResult) {
+  return {
+    quantity: decay.quantity,
+    assumption: decay.assumption,
+    residuals: decay.residuals,
+    weights: decay.weights,
+    window: decay.window,
+    window_chosen: decay.windowChosen,
+    window_reason: decay.windowReason,
+    stations: decay.stations,
+    speed: decay.speed,
+    n: plainQuantity(decay.n),
+    x0: plainQuantity(decay.x0),
+    A: plainQuantity(decay.A),
+    correlation_n_x0: decay.correlation_n_x0,
+    chi2_reduced: decay.chi2_reduced,
+    p: decay.p,
+    given_window: plainEach(decay.given_window),
+    lambda_route: plainEach(decay.lambda_route),
+    epsilon_route: plainEach(decay.epsilon_route),
+    growth: plainEach(decay.growth),
+    hypotheses: decay.hypotheses.map(({ name, n, p }) => ({ name, n, p })),
+  };
+}
+
+function plainComparison(comparison: Comparison) {
+  const { cases, align, tolerance, overlap, why, aligned_with, quantities, common_n } = comparison;
+  return {
+    cases,
+    align,
+    tolerance,
+    overlap,
+    why,
+    aligned_with,
+    quantities: Object.fromEntries(comparedQuantities.map((key) => [key, plainRatio(quantities[key])])),
+    extra_distance: plainQuantity(comparison.extra_distance),
+    matched_distance: plainQuantity(comparison.matched_distance),
+    common_n,
+  };
+}
+
+function plainRatio({ ratio, largest, verdict, p_equivalent, p_different }: ComparedRatio) {
+  return { ratio: plainQuantity(ratio), largest: plainQuantity(largest), verdict, p_equivalent, p_different };
+}
+
+function plainEach<K extends string>(quantities: Readonly<Record<K, Quantity>>): Record<K, PlainQuantity> {
+  const entries = Object.entries<Quantity>(quantities).map(([key, each]) => [key, plainQuantity(each)]);
+  return Object.fromEntries(entries) as Record<K, PlainQuantity>;
+}
+
+function plainFlag({ code, text, value }: Flag) {
+  return value === undefined ? { code, text } : { code, text, value };
+}
