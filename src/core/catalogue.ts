@@ -1,3 +1,9 @@
+import { decayLabels } from "./decayLabels.ts";
+import { assert } from "./failure.ts";
+import { figureLabels } from "./figureLabels.ts";
+import { routeLabels } from "./routeLabels.ts";
+import { stationLabels } from "./stationLabels.ts";
+
 /**
  * Symbol, name, dimension and digits of everything that is shown. One list for page, figures, tables and batch.
  * A symbol is written as runs, so that each door sets italics and subscripts in its own way.
@@ -18,9 +24,22 @@ export interface Label {
   readonly dimension: Dimension;
   /** Shown times 100 with the unit % . */
   readonly percent?: true;
+  /** Shown in thousandths of the SI unit (mm, ms) where the case is in SI. */
+  readonly milli?: true;
   /** Significant digits where no interval sets them. */
   readonly digits: number;
   /** Definition in one line: formula in words and symbols. */
   readonly definition: string;
   readonly source: string;
+}
+
+/** Every label by its key: the keys of the results file, then the axes of the figures. */
+export const catalogue: Readonly<Record<string, Label>> = Object.fromEntries(
+  [...stationLabels, ...routeLabels, ...decayLabels, ...figureLabels].map((label) => [label.key, label]),
+);
+
+/** The label of a key that the program itself names. */
+export function labelOf(key: string): Label {
+  assert(Object.hasOwn(catalogue, key), `no label for ${key}`);
+  return catalogue[key];
 }

@@ -1,0 +1,24 @@
+import type { Dimension, Label } from "./catalogue.ts";
+import { symbolRuns } from "./symbolRuns.ts";
+
+/** What a label may say beyond the usual. */
+interface Manner {
+  readonly percent?: true;
+  readonly milli?: true;
+  readonly digits?: number;
+}
+
+const pope = "Pope (2000)";
+
+/** One entry of the catalogue; three significant digits and Pope (2000) unless said otherwise. */
+export function label(
+  key: string,
+  symbol: string,
+  name: string,
+  dimension: Dimension,
+  definition: string,
+  manner: Manner = {},
+  source = pope,
+): Label {
+  return { key, symbol: symbolRuns(symbol), name, dimension, digits: 3, ...manner, definition, source };
+}
