@@ -1,52 +1,11 @@
 import type { Dimension } from "../core/catalogue.ts";
+import { labelOf } from "../core/catalogue.ts";
 import type { Quantity } from "../core/quantity.ts";
 import type { StationResult } from "../core/stationResult.ts";
+import { unitOf } from "../core/unitText.ts";
 import { stationQuantities } from "./resultsFile.ts";
 
 type Key = (typeof stationQuantities)[number];
-
-const dimensions: Record<Key, Dimension> = {
-  U: "L/T",
-  uu: "L²/T²",
-  vv: "L²/T²",
-  ww: "L²/T²",
-  uv: "L²/T²",
-  uw: "L²/T²",
-  vw: "L²/T²",
-  k: "L²/T²",
-  Tu: "1",
-  isotropy_uv: "1",
-  isotropy_uw: "1",
-  T_int: "T",
-  L11: "L",
-  lambda: "L",
-  gradient: "1/T²",
-  epsilon: "L²/T³",
-  epsilon_gradient: "L²/T³",
-  epsilon_decay: "L²/T³",
-  epsilon_inertial: "L²/T³",
-  eta: "L",
-  Re_lambda: "1",
-  Re_L: "1",
-  C_epsilon: "1",
-  S_dudx: "1",
-  balance: "1",
-  q: "1",
-};
-
-/** Units in plain letters: not every spreadsheet takes a file for UTF-8. */
-const units: Record<Dimension, string> = {
-  "1": "",
-  L: "m",
-  T: "s",
-  "L/T": "m/s",
-  "L²/T²": "m2/s2",
-  "L²/T³": "m2/s3",
-  "1/T²": "1/s2",
-  "1/L": "1/m",
-  "L³/T²": "m3/s2",
-  "L²/T": "m2/s",
-};
 
 export interface TableSettings {
   /** "nondimensional": headings without units. */
@@ -69,10 +28,11 @@ export function stationsCsv(
   settings: TableSettings,
 ): string {
   const unit = (dimension: Dimension) => {
-    const text = settings.units === "SI" ? units[dimension] : "";
+    const text = plainLetters(unitOf(dimension, settings.units));
     return text === "" ? "" : ` [${text}]`;
   };
-  const triple = (key: Key) => [key, `${key} low`, `${key} high`].map((each) => each + unit(dimensions[key]));
+  const triple = (key: Key) =>
+    [key, `${key} low`, `${key} high`].map((each) => each + unit(labelOf(key).dimension));
   const place = settings.along === "x" ? `x${unit("L")}` : `t${unit("T")}`;
   const heading = ["case", place, "samples", `duration${unit("T")}`];
   const rows = [
@@ -80,6 +40,11 @@ export function stationsCsv(
     ...stations.map((station) => row(name, station)),
   ];
   return `${rows.map((cells) => cells.join(",")).join("\n")}\n`;
+}
+
+/** Not every spreadsheet takes a file for UTF-8. */
+function plainLetters(unit: string): string {
+  return unit.replaceAll("²", "2").replaceAll("³", "3").replaceAll("⁻¹", "-1");
 }
 
 function row(name: string, station: StationResult): string[] {
