@@ -1,0 +1,35 @@
+import { mkdirSync, mkdtempSync, rmSync, symlinkSync, writeFileSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { dirname, join } from "node:path";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { candidateFiles } from "../../src/batch/candidateFiles.ts";
+
+let top = "";
+beforeAll(() => {
+  top = mkdtempSync(join(tmpdir(), "waneline-"));
+  for (const path of ["sheets/s.json", "data/x1.csv", "data/x2.csv", "data/deep/x3.csv", "data/b/p1.csv"]) {
+    mkdirSync(dirname(join(top, path)), { recursive: true });
+    writeFileSync(join(top, path), "");
+  }
+  symlinkSync(join(top, "data/x1.csv"), join(top, "sheets/linked.csv"));
+});
+afterAll(() => rmSync(top, { recursive: true }));
+
+describe("files that a path of a sheet may mean", () => {
+  it.each([
+    ["../data/x1.csv", ["../data/x1.csv"]],
+    ["../data/x*.csv", ["../data/x1.csv", "../data/x2.csv"]],
+    ["../data/*/*.csv", ["../data/b/p1.csv", "../data/deep/x3.csv"]],
+    ["..\\data\\x1.csv", ["../data/x1.csv"]],
+    ["*.csv", ["linked.csv"]],
+    ["nothing.csv", []],
+    ["nowhere/*.csv", []],
+    ["../data", []],
+  ])("%s, seen from the sheet's folder", (path, expected) => {
+    const found = candidateFiles(join(top, "sheets"), path);
+    for (const file of expected) expect(found).toContain(file);
+    // the sheet narrows by name; here only what is no file is ruled out
+    const others = found.filter((file) => !expected.includes(file));
+    expect(others.every((file) => path.includes("*") && !file.endsWith("/"))).toBe(true);
+  });
+});
