@@ -1,0 +1,83 @@
+import { type ReactNode, type Ref, useState } from "react";
+import type { SectionName } from "./sectionList.ts";
+import { WordMark } from "./WordMark.tsx";
+
+/** One thing that can be done from the head: an underlined verb. */
+export interface HeadAction {
+  readonly name: string;
+  readonly run: () => void;
+  readonly disabled?: boolean;
+  readonly title?: string;
+}
+
+/** The fixed head: word mark, index of the sections that hold something, actions; under them the ruler. */
+export function Head({
+  sections,
+  actions,
+  ref,
+  children,
+}: {
+  sections: readonly (SectionName & { readonly there: boolean })[];
+  actions: readonly HeadAction[];
+  ref: Ref<HTMLElement>;
+  children: ReactNode;
+}) {
+  const [menu, setMenu] = useState<"none" | "sections" | "more">("none");
+  const toggle = (name: "sections" | "more") => setMenu(menu === name ? "none" : name);
+  return (
+    <header className="head" ref={ref}>
+      <div className="bar">
+        <WordMark />
+        <SectionIndex sections={sections} />
+        <div className="actions">
+          <Actions actions={actions} />
+        </div>
+        <div className="narrow-menus">
+          <button
+            type="button"
+            className="action"
+            aria-expanded={menu === "sections"}
+            onClick={() => toggle("sections")}
+          >
+            Sections
+          </button>
+          <button
+            type="button"
+            className="action"
+            aria-expanded={menu === "more"}
+            onClick={() => toggle("more")}
+          >
+            More
+          </button>
+        </div>
+      </div>
+      {menu !== "none" && (
+        // biome-ignore lint/a11y/useKeyWithClickEvents lint/a11y/noStaticElementInteractions: closes behind the link or button that was used, by pointer or by key
+        <div className="narrow-panel" onClick={() => setMenu("none")}>
+          {menu === "sections" ? <SectionIndex sections={sections} /> : <Actions actions={actions} />}
+        </div>
+      )}
+      {children}
+    </header>
+  );
+}
+
+function SectionIndex({ sections }: { sections: readonly (SectionName & { readonly there: boolean })[] }) {
+  return (
+    <nav className="index" aria-label="Sections">
+      {sections.map(({ id, number, short, there }) => (
+        <a key={id} {...(there ? { href: `#${id}` } : { "aria-disabled": true })}>
+          <i>{number}</i> {short}
+        </a>
+      ))}
+    </nav>
+  );
+}
+
+function Actions({ actions }: { actions: readonly HeadAction[] }) {
+  return actions.map(({ name, run, disabled = false, title }) => (
+    <button type="button" className="action" key={name} onClick={run} disabled={disabled} title={title}>
+      {name}
+    </button>
+  ));
+}

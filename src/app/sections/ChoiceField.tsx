@@ -1,0 +1,36 @@
+import { type ReactNode, useId } from "react";
+
+/** One choice among a few words. */
+export function ChoiceField<T extends string>({
+  label,
+  value,
+  choices,
+  onChange,
+}: {
+  label: ReactNode;
+  value: T;
+  choices: Readonly<Record<T, string>>;
+  onChange: (value: T) => void;
+}) {
+  const id = useId();
+  const keys = Object.keys(choices) as T[]; // the record's own keys, which TypeScript widens to string
+  return (
+    <div className="field">
+      <label htmlFor={id}>{label}</label>
+      <select
+        id={id}
+        value={value}
+        onChange={(event) => {
+          const chosen = keys.find((key) => key === event.target.value);
+          if (chosen !== undefined) onChange(chosen);
+        }}
+      >
+        {keys.map((key) => (
+          <option value={key} key={key}>
+            {choices[key]}
+          </option>
+        ))}
+      </select>
+    </div>
+  );
+}

@@ -1,0 +1,33 @@
+import { useId, useRef, type ReactNode } from "react";
+import { labelOf } from "../../core/catalogue.ts";
+
+/**
+ * What stands in a table's head, opening what it means and who says so. A native popover: it needs no place
+ * in the table, closes by Esc or a click elsewhere, and is announced as one.
+ */
+export function Definition({ of, children }: { of: string; children: ReactNode }) {
+  const id = useId();
+  const text = useRef<HTMLDivElement>(null);
+  const button = useRef<HTMLButtonElement>(null);
+  const label = labelOf(of);
+  const place = () => {
+    const panel = text.current;
+    const box = button.current?.getBoundingClientRect();
+    if (!panel || !box) return;
+    panel.style.left = `${Math.max(8, Math.min(box.left, window.innerWidth - 356))}px`;
+    panel.style.top = `${box.bottom + 6}px`;
+  };
+  return (
+    <span className="definition">
+      <button type="button" ref={button} popoverTarget={id} onClick={place}>
+        {children}
+      </button>
+      <div id={id} ref={text} popover="auto" className="definition-text">
+        <p>
+          <b>{label.name}</b>: {label.definition}.
+        </p>
+        <p>{label.source}</p>
+      </div>
+    </span>
+  );
+}

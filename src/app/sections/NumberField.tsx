@@ -1,0 +1,69 @@
+import { type ReactNode, useId, useState } from "react";
+
+/**
+ * A number to type: it counts when the field is left or Enter is pressed, never while half a number stands there.
+ * An empty field means "none"; what is no number is said and changes nothing.
+ */
+export function NumberField({
+  label,
+  value,
+  unit = "",
+  above,
+  open = false,
+  placeholder,
+  onChange,
+}: {
+  label: ReactNode;
+  value: number | null;
+  unit?: string;
+  /** The number must be above this. */
+  above?: number;
+  /** True where the page asks for it. */
+  open?: boolean;
+  placeholder?: string;
+  onChange: (value: number | null) => void;
+}) {
+  const id = useId();
+  const [text, setText] = useState<string | null>(null);
+  const shown = text ?? (value === null ? "" : String(value));
+  const parsed = parseNumber(shown);
+  const wrong = parsed === "wrong" || (above !== undefined && parsed !== null && parsed <= above);
+  const settle = () => {
+    if (text === null || wrong || parsed === "wrong") return;
+    setText(null);
+    if (parsed !== value) onChange(parsed);
+  };
+  return (
+    <div className="field" data-open={open && value === null && text === null}>
+      <label htmlFor={id}>
+        {label}
+        {unit !== "" && ` (${unit})`}
+      </label>
+      <input
+        id={id}
+        inputMode="decimal"
+        autoComplete="off"
+        value={shown}
+        placeholder={placeholder}
+        aria-invalid={wrong}
+        onChange={(event) => setText(event.target.value)}
+        onBlur={settle}
+        onKeyDown={(event) => {
+          if (event.key === "Enter") settle();
+          if (event.key === "Escape") setText(null);
+        }}
+      />
+      {wrong && (
+        <span role="alert">{above === 0 ? "A number above zero is needed." : "This is not a number."}</span>
+      )}
+    </div>
+  );
+}
+
+/** Decimal point or comma, powers of ten as 1.5e-5; null: nothing typed. */
+export function parseNumber(text: string): number | null | "wrong" {
+  const plain = text.trim().replace("−", "-").replace(",", ".");
+  if (plain === "") return null;
+  const value = Number(plain);
+  return Number.isFinite(value) ? value : "wrong";
+}

@@ -1,0 +1,42 @@
+import { labelOf } from "../../core/catalogue.ts";
+import type { Quantity } from "../../core/quantity.ts";
+import type { Units } from "../../core/unitText.ts";
+import { raisedDigits, thinSpace, withUnit } from "../../figures/formatNumber.ts";
+import { type FormattedQuantity, formatQuantity, formatScaled } from "../../figures/formatQuantity.ts";
+
+/** How a quantity is to be shown: by its label, or in multiples of a length. */
+export interface Manner {
+  readonly label: string;
+  readonly units: Units;
+  /** A length is divided by this and followed by its letter. */
+  readonly per?: { readonly length: number; readonly symbol: string };
+}
+
+export function formatted(quantity: Quantity, { label, units, per }: Manner): FormattedQuantity {
+  const entry = labelOf(label);
+  return per
+    ? formatScaled(quantity, { factor: 1 / per.length, unit: per.symbol, digits: entry.digits })
+    : formatQuantity(quantity, entry, units);
+}
+
+/** "× 10⁻³" behind the value, where it is written in powers of ten. */
+export function valueText({ value, power }: FormattedQuantity): string {
+  return power === null ? value : `${value}${thinSpace}×${thinSpace}10${raisedDigits(power)}`;
+}
+
+/** A value and its interval as two cells of a table; the reason of a gap spans both. */
+export function QuantityCells({ quantity, ...manner }: { quantity: Quantity } & Manner) {
+  const shown = formatted(quantity, manner);
+  if (quantity.value === null)
+    return (
+      <td className="why" colSpan={2}>
+        {shown.why}
+      </td>
+    );
+  return (
+    <>
+      <td title={String(quantity.value)}>{withUnit(valueText(shown), manner.per ? shown.unit : "")}</td>
+      <td className="pm">{shown.interval ?? "–"}</td>
+    </>
+  );
+}

@@ -1,0 +1,154 @@
+import type { ReactNode } from "react";
+import { labelOf } from "../../core/catalogue.ts";
+import { isEstimate } from "../../core/quantity.ts";
+import type { StationResult } from "../../core/stationResult.ts";
+import { unitOf } from "../../core/unitText.ts";
+import { formatCount, formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { CaseMark } from "./CaseMark.tsx";
+import { Definition } from "./Definition.tsx";
+import { SymbolText } from "./SymbolText.tsx";
+
+/** What was read, a row for each case; on a narrow screen a list that says the same. */
+export function RecordsTable({ cases, narrow }: { cases: readonly CaseView[]; narrow: boolean }) {
+  return narrow ? <RecordsList cases={cases} /> : <WideTable cases={cases} />;
+}
+
+function WideTable({ cases }: { cases: readonly CaseView[] }) {
+  const units = cases[0].of.sheet.units;
+  return (
+    <div className="table-scroll">
+      <table className="data">
+        <thead>
+          <tr>
+            <th scope="col">Case</th>
+            <th scope="col" className="text">
+              Layout
+            </th>
+            <th scope="col">Stations</th>
+            <Head of="x" unit={unitOf("L", units)} />
+            <Head of="U" unit={unitOf("L/T", units)} />
+            <th scope="col">
+              Record/
+              <SymbolText runs={labelOf("T_int").symbol} />
+            </th>
+            <th scope="col">
+              <SymbolText runs={[{ text: "k" }, { text: "1,max", place: "sub", upright: true }, { text: " η" }]} />
+            </th>
+            <th scope="col" className="text">
+              Flags
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {cases.map((view) => (
+            <tr key={view.id}>
+              <th scope="row">
+                <CaseMark mark={view.mark} line /> {view.name}
+              </th>
+              <td className="text">{layoutOf(view)}</td>
+              <td>{view.stations.length}</td>
+              <td>{rangeOf(view.stations.map((station) => station.x), 2)}</td>
+              <td>{speedOf(view)}</td>
+              <td>{lengthsOf(view)}</td>
+              <td>{resolutionOf(view)}</td>
+              <td className="text">{flagsOf(view)}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+function RecordsList({ cases }: { cases: readonly CaseView[] }) {
+  return (
+    <ul className="records-list">
+      {cases.map((view) => {
+        const { units } = view.of.sheet;
+        const xs = rangeOf(view.stations.map((station) => station.x), 2);
+        return (
+          <li key={view.id}>
+            <CaseMark mark={view.mark} line />
+            <span>
+              <b>{view.name}</b>, {layoutOf(view)}, {view.stations.length} stations,{" "}
+              <span className="nowrap">{withUnit(xs, unitOf("L", units))}</span>
+              <br />
+              <SymbolText runs={labelOf("U").symbol} /> = {withUnit(speedOf(view), unitOf("L/T", units))}
+              {lengthsOf(view) !== "–" && (
+                <>
+                  ; records of {lengthsOf(view)} <SymbolText runs={labelOf("T_int").symbol} />
+                </>
+              )}
+            </span>
+          </li>
+        );
+      })}
+    </ul>
+  );
+}
+
+function Head({ of, unit }: { of: string; unit: string }) {
+  return (
+    <th scope="col">
+      <Definition of={of}>
+        <SymbolText runs={labelOf(of).symbol} />
+        {unit !== "" && ` (${unit})`}
+      </Definition>
+    </th>
+  );
+}
+
+const layoutNames = { series: "probe series", lines: "line samples", profile: "profile" } as const;
+
+function layoutOf({ of, stations }: CaseView): ReactNode {
+  const components = stations[0]?.facts.components ?? [];
+  return (
+    <>
+      {layoutNames[of.sheet.layout]}
+      {components.length > 0 && ", "}
+      {components.length > 0 && <span className="sym">{components.join(" ")}</span>}
+    </>
+  );
+}
+
+/** "0.15 to 1.80"; one number where they are all alike. */
+function rangeOf(values: readonly number[], decimals: number): string {
+  if (values.length === 0) return "–";
+  const [low, high] = [Math.min(...values), Math.max(...values)];
+  const text = (value: number) =>
+    Math.abs(value) >= 1000 ? formatCount(roundTo(value, 2)) : formatNumber(value, decimals);
+  return text(low) === text(high) ? text(low) : `${text(low)} to ${text(high)}`;
+}
+
+function roundTo(value: number, digits: number): number {
+  return Number(value.toPrecision(digits));
+}
+
+function speedOf({ stations }: CaseView): string {
+  const speeds = stations.map((station) => station.U).filter(isEstimate);
+  if (speeds.length === 0) return "–";
+  return formatDigits(speeds.reduce((sum, speed) => sum + speed.value, 0) / speeds.length, 3);
+}
+
+const facts = (stations: readonly StationResult[], key: "integralTimes" | "k1max_eta") =>
+  stations.map((station) => station.facts[key]).filter((value) => value !== null);
+
+const lengthsOf = ({ stations }: CaseView) =>
+  rangeOf(facts(stations, "integralTimes").map((times) => roundTo(times, 2)), 0);
+
+/** The least along the case: what limits the gradients. */
+function resolutionOf({ stations }: CaseView): string {
+  const values = facts(stations, "k1max_eta");
+  return values.length === 0 ? "–" : formatDigits(Math.min(...values), 2);
+}
+
+function flagsOf({ stations, decay, reduced }: CaseView): string {
+  const flagged = stations.filter((station) => station.flags.length > 0).length;
+  const others = (decay?.flags.length ?? 0) + (reduced?.flags.length ?? 0);
+  const parts = [
+    flagged > 0 ? `${flagged} at stations` : null,
+    others > 0 ? `${others} of the case` : null,
+  ].filter((part) => part !== null);
+  return parts.length === 0 ? "none" : parts.join(", ");
+}

@@ -1,0 +1,129 @@
+import { labelOf } from "../../core/catalogue.ts";
+import { isEstimate } from "../../core/quantity.ts";
+import { withReference } from "../../core/symbolRuns.ts";
+import { unitOf } from "../../core/unitText.ts";
+import { decimalsForDigits, formatNumber } from "../../figures/formatNumber.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { Definition } from "./Definition.tsx";
+import { SymbolText } from "./SymbolText.tsx";
+import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.ts";
+import { UnitText } from "./UnitText.tsx";
+
+/** Every station of one case with its intervals; a row points at its tick on the ruler. */
+export function StationTable({
+  view,
+  onHover,
+}: {
+  view: CaseView;
+  onHover: (x: number | null) => void;
+}) {
+  const { units, along } = view.of.sheet;
+  const columns = tableKeys.map((key) => stationColumn(view.stations, key, units));
+  const shown = columns.filter((column) => column.why === null);
+  const decimals = positionDecimals(view.stations.map((station) => station.x));
+  const distances = distancesOf(view);
+  return (
+    <>
+      <div className="table-scroll">
+        <table className="data stations-table">
+          <thead>
+            <tr>
+              <th scope="col">
+                <SymbolText runs={labelOf(along === "t" ? "t" : "x").symbol} />
+                {units === "SI" && ` (${unitOf(along === "t" ? "T" : "L", units)})`}
+              </th>
+              {distances && (
+                <th scope="col">
+                  <SymbolText runs={withReference(labelOf("(x-x0)/ell").symbol, view.symbol)} />
+                </th>
+              )}
+              {shown.map((column) => (
+                <ColumnHead column={column} key={column.key} />
+              ))}
+            </tr>
+          </thead>
+          <tbody>
+            {view.stations.map((station, row) => (
+              <tr
+                key={station.x}
+                id={`station-${view.id}-${row}`}
+                className={isUsed(view, station.x) ? undefined : "outside"}
+                onPointerEnter={() => onHover(station.x)}
+                onPointerLeave={() => onHover(null)}
+              >
+                <td>{formatNumber(station.x, decimals)}</td>
+                {distances && <td>{distances[row]}</td>}
+                {shown.map((column) => (
+                  <Cells column={column} row={row} key={column.key} />
+                ))}
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </div>
+      <Gaps columns={columns} />
+    </>
+  );
+}
+
+function ColumnHead({ column }: { column: StationColumn }) {
+  return (
+    <th scope="colgroup" colSpan={2}>
+      <Definition of={column.key}>
+        <SymbolText runs={labelOf(column.key).symbol} />
+        {column.unit !== "" && (
+          <>
+            {" "}
+            (<UnitText unit={column.unit} />)
+          </>
+        )}
+      </Definition>
+    </th>
+  );
+}
+
+function Cells({ column, row }: { column: StationColumn; row: number }) {
+  const { value, error, title } = column.cells[row];
+  return (
+    <>
+      <td title={title}>{value}</td>
+      <td className="pm">{error}</td>
+    </>
+  );
+}
+
+/** Columns left out because every cell has the same gap: their names and the reason. */
+function Gaps({ columns }: { columns: readonly StationColumn[] }) {
+  const gaps = new Map<string, StationColumn[]>();
+  for (const column of columns)
+    if (column.why !== null) gaps.set(column.why, [...(gaps.get(column.why) ?? []), column]);
+  return [...gaps].map(([why, missing]) => (
+    <p className="reason" key={why}>
+      No{" "}
+      {missing.map((column, i) => (
+        <span key={column.key}>
+          {i > 0 && (i === missing.length - 1 ? " or " : ", ")}
+          <SymbolText runs={labelOf(column.key).symbol} />
+        </span>
+      ))}
+      : {why}.
+    </p>
+  ));
+}
+
+function isUsed({ decay }: CaseView, x: number): boolean {
+  return decay?.points.some((point) => point.x === x && point.used) ?? true;
+}
+
+/** Decimals that tell neighbouring stations apart. */
+function positionDecimals(xs: readonly number[]): number {
+  const steps = xs.slice(1).map((x, i) => Math.abs(x - xs[i]));
+  const least = Math.min(...steps.filter((step) => step > 0), Math.abs(xs.at(-1) ?? 1) || 1);
+  return Math.min(decimalsForDigits(least, 1), 6);
+}
+
+function distancesOf({ stations, decay, length }: CaseView): string[] | null {
+  const origin = decay?.x0;
+  if (!origin || !isEstimate(origin) || length === null) return null;
+  return stations.map((station) => formatNumber((station.x - origin.value) / length, 1));
+}
