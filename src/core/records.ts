@@ -54,6 +54,8 @@ export interface ReadSettings {
   readonly zero: number;
   /** Time left out at the start of the record. */
   readonly startup: number;
+  /** Layout "profile": the column that stands for x; left out: "x". */
+  readonly along?: "x" | "t";
 }
 
 /** Where a position came from; printed beside it and written to the results. */
@@ -106,7 +108,11 @@ export interface Preview {
     readonly x: number | null;
     readonly source: PositionSource | null;
     readonly matched: string | null;
+    /** How it was read, in words: "after x in the name, in mm". */
+    readonly rule?: string;
   };
+  /** Roles that several columns could be, with their 1-based numbers: for the user to decide. */
+  readonly clashes?: readonly { readonly role: Role; readonly columns: readonly number[] }[];
   /** Time between the first samples, in the case's unit; null without a time column or note. */
   readonly step: number | null;
   /** Estimated from the bytes of the first lines. */

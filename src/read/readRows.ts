@@ -1,0 +1,184 @@
+import type { ReadSettings } from "../core/records.ts";
+import type { ByteSource } from "./byteSource.ts";
+import { commentText } from "./commentLine.ts";
+import { parseNumber } from "./parseNumber.ts";
+import { badField, missingField, raggedRow } from "./rowFailures.ts";
+import { splitRows } from "./splitRows.ts";
+import type { TableForm } from "./surveyTable.ts";
+import type { TakenColumn } from "./takeColumns.ts";
+import { wholeLines } from "./wholeLines.ts";
+
+/** What is read of each row. A column that is `sparse` may be empty in a row: its number is NaN there. */
+export interface RowPlan {
+  readonly columns: readonly TakenColumn[];
+  readonly sparse: readonly boolean[];
+  readonly missing: ReadSettings["missing"];
+}
+
+/** How the reading went. */
+export interface RowTally {
+  readonly rows: number;
+  /** 1-based lines between the rows that held none: comments, repeated headings, blank lines. */
+  readonly leftOut: readonly number[];
+  readonly leftOutCount: number;
+  /** 1-based; null where the last row is whole. */
+  readonly cutLine: number | null;
+}
+
+/** Enough lines left out to list; the rest is only counted. */
+const listed = 100;
+
+/**
+ * Streams the rows of a table as numbers in the units of the case.
+ * @param onRow gets the numbers of a row in the order of `plan.columns`, in one array that is used again for the
+ *              next row, and the row's 1-based line
+ * @throws not-a-number a field that is none, a value that is missing, a row of another length
+ */
+export async function readRows(
+  source: ByteSource,
+  form: TableForm,
+  plan: RowPlan,
+  onRow: (values: Float64Array, line: number) => void,
+  onBytes?: (bytes: number) => void,
+): Promise<RowTally> {
+  const reader = new RowReader(form, plan, onRow);
+  for await (const chunk of wholeLines(source, onBytes)) {
+    const rows = splitRows(chunk.text, form.separator);
+    for (let i = 0; i < rows.length; i++) reader.read(rows[i], chunk.firstLine + i, chunk.unended);
+  }
+  return reader.tally();
+}
+
+class RowReader {
+  private readonly values: Float64Array;
+  private readonly noValue: ReadonlySet<string>;
+  private readonly noNumber: readonly number[];
+  private readonly headings: ReadonlySet<string>;
+  private rows = 0;
+  private leftOut: number[] = [];
+  private leftOutCount = 0;
+  private blank: number[] = [];
+  private cutLine: number | null = null;
+
+  constructor(
+    private readonly form: TableForm,
+    private readonly plan: RowPlan,
+    private readonly onRow: (values: Float64Array, line: number) => void,
+  ) {
+    this.values = new Float64Array(plan.columns.length);
+    this.noValue = new Set([...alwaysMissing, ...plan.missing.map((token) => token.toLowerCase())]);
+    this.headings = new Set(form.headingRows.map(words));
+    this.noNumber = plan.missing.map(Number).filter((value) => !Number.isNaN(value));
+  }
+
+  /** One line, in order. The common row is read without a look at what else the line could be. */
+  read(fields: string[], line: number, unended: boolean): void {
+    if (line < this.form.firstLine) return;
+    if (fields.length === this.form.width && !mayBeComment(fields[0]) && this.fill(fields)) {
+      if (this.blank.length > 0) this.skip(...this.blank.splice(0));
+      this.rows++;
+      this.onRow(this.values, line);
+    } else {
+      this.odd(fields, line, unended);
+    }
+  }
+
+  tally(): RowTally {
+    const { rows, leftOut, leftOutCount, cutLine } = this;
+    return { rows, leftOut, leftOutCount, cutLine };
+  }
+
+  private fill(fields: readonly string[]): boolean {
+    const { columns } = this.plan;
+    for (let i = 0; i < columns.length; i++) {
+      const value = parseNumber(fields[columns[i].index], this.form.decimal);
+      if (value !== value || (this.noNumber.length > 0 && this.noNumber.includes(value))) return false;
+      this.values[i] = value * columns[i].factor;
+    }
+    return true;
+  }
+
+  private odd(fields: string[], line: number, unended: boolean): void {
+    const { form } = this;
+    if (fields.every((field) => field.trim() === "")) {
+      this.blank.push(line);
+    } else if (commentText(fields[0], form.separator) !== null || this.repeatsHeading(fields)) {
+      this.skip(...this.blank.splice(0), line);
+    } else {
+      const whole = this.fitted(fields);
+      const problem = whole === null ? raggedRow(form, fields, line) : this.problem(whole, line);
+      if (problem === null) {
+        if (this.blank.length > 0) this.skip(...this.blank.splice(0));
+        this.rows++;
+        this.onRow(this.values, line);
+      } else if (unended) {
+        this.cutLine = line;
+      } else {
+        throw problem;
+      }
+    }
+  }
+
+  /** The row in the table's width, empty fields at its end taken off or added; null where it has another. */
+  private fitted(fields: string[]): string[] | null {
+    const { width } = this.form;
+    if (fields.length < width) {
+      const lacks = this.plan.columns.some(({ index }, i) => index >= fields.length && !this.plan.sparse[i]);
+      return lacks ? null : [...fields, ...Array.from({ length: width - fields.length }, () => "")];
+    }
+    return fields.slice(width).every((field) => field.trim() === "") ? fields.slice(0, width) : null;
+  }
+
+  /** Fills the row's numbers, gaps as NaN; tells what is wrong with the first field that cannot be read. */
+  private problem(fields: readonly string[], line: number) {
+    const { columns, sparse } = this.plan;
+    for (let i = 0; i < columns.length; i++) {
+      const { index, factor } = columns[i];
+      const value = parseNumber(fields[index], this.form.decimal);
+      const gap = this.noValue.has(fields[index].trim().toLowerCase()) || this.noNumber.includes(value);
+      if (gap && !sparse[i]) return missingField(this.form, columns[i], fields[index], line);
+      if (!gap && Number.isNaN(value)) return badField(this.form, columns[i], fields[index], line);
+      this.values[i] = gap ? Number.NaN : value * factor;
+    }
+    return null;
+  }
+
+  private repeatsHeading(fields: readonly string[]): boolean {
+    return this.form.headingRows.length > 0 && this.headings.has(words(fields));
+  }
+
+  private skip(...lines: number[]): void {
+    this.leftOutCount += lines.length;
+    for (const line of lines) if (this.leftOut.length < listed) this.leftOut.push(line);
+  }
+}
+
+/** A heading may be parted by other signs than the rows. */
+function words(fields: readonly string[]): string {
+  return fields
+    .join(" ")
+    .replace(/[\s,;"]+/g, " ")
+    .trim();
+}
+
+/** What programs write where they have no number. */
+const alwaysMissing = [
+  "",
+  "-",
+  "nan",
+  "+nan",
+  "-nan",
+  "inf",
+  "+inf",
+  "-inf",
+  "infinity",
+  "na",
+  "n/a",
+  "null",
+];
+
+/** A row begins with a digit, a sign, a point, a blank or a quote; only what does not is looked at further. */
+function mayBeComment(field: string): boolean {
+  const code = field.charCodeAt(0);
+  return code === 35 || code === 37 || code === 33 || code === 47 || code === 59; // # % ! / ;
+}
