@@ -1,6 +1,6 @@
 import { useState } from "react";
-import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
 import { unitOf } from "../../core/unitText.ts";
+import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
 import type { SheetFit } from "../../sheet/caseSheet.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import type { CaseView } from "../session/caseView.ts";
@@ -81,9 +81,24 @@ function ChoicesForm({
   };
   return (
     <div className="choices-form">
-      <ChoiceField label="quantity" value={fit.quantity} choices={quantities} onChange={(quantity) => all({ quantity })} />
-      <ChoiceField label="residuals" value={fit.residuals} choices={residuals} onChange={(residuals) => all({ residuals })} />
-      <ChoiceField label="weights" value={fit.weights} choices={weights} onChange={(weights) => all({ weights })} />
+      <ChoiceField
+        label="quantity"
+        value={fit.quantity}
+        choices={quantities}
+        onChange={(quantity) => all({ quantity })}
+      />
+      <ChoiceField
+        label="residuals"
+        value={fit.residuals}
+        choices={residuals}
+        onChange={(residuals) => all({ residuals })}
+      />
+      <ChoiceField
+        label="weights"
+        value={fit.weights}
+        choices={weights}
+        onChange={(weights) => all({ weights })}
+      />
       {cases.map(({ id, name, of }) => (
         <fieldset key={id} className="case-choices">
           <legend>{name}</legend>
@@ -135,7 +150,9 @@ function fitted({ decay }: CaseView): string {
   if (!decay) return "";
   const speed = decay.speed === null ? "" : `, U ${formatNumber(decay.speed, 2)}`;
   const assumed = { none: "", axisymmetric: ", axisymmetry assumed", isotropic: ", isotropy assumed" };
-  return quantities[decay.quantity] + (decay.quantity === "q" ? "" : "/U²") + assumed[decay.assumption] + speed;
+  return (
+    quantities[decay.quantity] + (decay.quantity === "q" ? "" : "/U²") + assumed[decay.assumption] + speed
+  );
 }
 
 const held = (value: number | null, unit: string) =>

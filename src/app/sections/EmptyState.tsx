@@ -38,8 +38,8 @@ export function EmptyState({
         <p>Four stations for a law with a free origin; a viscosity for what depends on it.</p>
         <h3>With a case sheet</h3>
         <p>
-          A sheet in the drop names its files and carries the choices; this page
-          saves one that the batch command takes as well.
+          A sheet in the drop names its files and carries the choices; this page saves one that the batch
+          command takes as well.
         </p>
       </div>
     </div>

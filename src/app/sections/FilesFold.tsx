@@ -12,13 +12,7 @@ const origins = {
 } as const;
 
 /** Every file: what its columns were taken as, where it stands and how that is known. */
-export function FilesFold({
-  cases,
-  previews,
-}: {
-  cases: readonly CaseView[];
-  previews: readonly Preview[];
-}) {
+export function FilesFold({ cases, previews }: { cases: readonly CaseView[]; previews: readonly Preview[] }) {
   const count = cases.reduce((sum, view) => sum + view.of.sources.length, 0);
   const byName = new Map(previews.map((preview) => [preview.file, preview]));
   return (
@@ -43,7 +37,12 @@ export function FilesFold({
           <tbody>
             {cases.flatMap((view) =>
               view.of.sources.map((source) => (
-                <FileRow key={view.id + source.name} name={source.name} view={view} preview={byName.get(source.name)} />
+                <FileRow
+                  key={view.id + source.name}
+                  name={source.name}
+                  view={view}
+                  preview={byName.get(source.name)}
+                />
               )),
             )}
           </tbody>

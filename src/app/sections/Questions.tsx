@@ -12,7 +12,12 @@ interface Ask {
 }
 
 /** What one case has not told, asked in one place: its name, viscosity, reference, and missing positions. */
-export function Questions({ view, onChange, onSave, onClose }: Ask & { onSave: () => void; onClose: () => void }) {
+export function Questions({
+  view,
+  onChange,
+  onSave,
+  onClose,
+}: Ask & { onSave: () => void; onClose: () => void }) {
   const missing = missingPositions(view);
   return (
     <div className="questions">
@@ -146,10 +151,13 @@ function missingPositions({ reduced }: CaseView): string[] {
 function askText({ of }: CaseView, positions: number): string {
   const open = [
     of.sheet.kinematicViscosity === null ? "scales and dissipation need a viscosity" : null,
-    of.sheet.reference.length === null ? "distances are given in metres until a reference length is typed" : null,
+    of.sheet.reference.length === null
+      ? "distances are given in metres until a reference length is typed"
+      : null,
     positions > 0 ? `${positions === 1 ? "one file names" : `${positions} files name`} no position` : null,
   ].filter((each) => each !== null);
-  if (open.length === 0) return "Nothing is open. What is changed here is used at once; the files are never written.";
+  if (open.length === 0)
+    return "Nothing is open. What is changed here is used at once; the files are never written.";
   const text = open.join("; ");
   return `${text[0].toUpperCase()}${text.slice(1)}. The answers can be saved as a case sheet, which the batch command takes too.`;
 }

@@ -17,13 +17,7 @@ export function LookingState({ offer }: { offer: Offer }) {
 }
 
 /** Records on their way to stations: one tick a file, open until it is in. */
-export function ReducingState({
-  work,
-  onCancel,
-}: {
-  work: readonly Work[];
-  onCancel: () => void;
-}) {
+export function ReducingState({ work, onCancel }: { work: readonly Work[]; onCancel: () => void }) {
   const sum = (of: (each: Work) => number) => work.reduce((total, each) => total + of(each), 0);
   const [files, done] = [sum((each) => each.files), sum((each) => each.filesDone)];
   const [bytes, read] = [sum((each) => each.bytes), sum((each) => each.bytesDone)];
@@ -50,7 +44,14 @@ function Ticks({ done, of }: { done: number; of: number }) {
   const count = Math.min(of, mostTicks);
   const full = Math.floor((done / Math.max(of, 1)) * count);
   return (
-    <div className="progress-ticks" role="progressbar" aria-valuemin={0} aria-valuemax={of} aria-valuenow={done} aria-label="Files">
+    <div
+      className="progress-ticks"
+      role="progressbar"
+      aria-valuemin={0}
+      aria-valuemax={of}
+      aria-valuenow={done}
+      aria-label="Files"
+    >
       {Array.from({ length: count }, (_, i) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: a tick is its place
         <i key={i} className={i < full ? "done" : undefined} />

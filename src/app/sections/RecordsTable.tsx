@@ -33,7 +33,9 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
               <SymbolText runs={labelOf("T_int").symbol} />
             </th>
             <th scope="col">
-              <SymbolText runs={[{ text: "k" }, { text: "1,max", place: "sub", upright: true }, { text: " η" }]} />
+              <SymbolText
+                runs={[{ text: "k" }, { text: "1,max", place: "sub", upright: true }, { text: " η" }]}
+              />
             </th>
             <th scope="col" className="text">
               Flags
@@ -48,7 +50,12 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
               </th>
               <td className="text">{layoutOf(view)}</td>
               <td>{view.stations.length}</td>
-              <td>{rangeOf(view.stations.map((station) => station.x), 2)}</td>
+              <td>
+                {rangeOf(
+                  view.stations.map((station) => station.x),
+                  2,
+                )}
+              </td>
               <td>{speedOf(view)}</td>
               <td>{lengthsOf(view)}</td>
               <td>{resolutionOf(view)}</td>
@@ -66,7 +73,10 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
     <ul className="records-list">
       {cases.map((view) => {
         const { units } = view.of.sheet;
-        const xs = rangeOf(view.stations.map((station) => station.x), 2);
+        const xs = rangeOf(
+          view.stations.map((station) => station.x),
+          2,
+        );
         return (
           <li key={view.id}>
             <CaseMark mark={view.mark} line />
@@ -135,7 +145,10 @@ const facts = (stations: readonly StationResult[], key: "integralTimes" | "k1max
   stations.map((station) => station.facts[key]).filter((value) => value !== null);
 
 const lengthsOf = ({ stations }: CaseView) =>
-  rangeOf(facts(stations, "integralTimes").map((times) => roundTo(times, 2)), 0);
+  rangeOf(
+    facts(stations, "integralTimes").map((times) => roundTo(times, 2)),
+    0,
+  );
 
 /** The least along the case: what limits the gradients. */
 function resolutionOf({ stations }: CaseView): string {

@@ -10,13 +10,7 @@ import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.t
 import { UnitText } from "./UnitText.tsx";
 
 /** Every station of one case with its intervals; a row points at its tick on the ruler. */
-export function StationTable({
-  view,
-  onHover,
-}: {
-  view: CaseView;
-  onHover: (x: number | null) => void;
-}) {
+export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: number | null) => void }) {
   const { units, along } = view.of.sheet;
   const columns = tableKeys.map((key) => stationColumn(view.stations, key, units));
   const shown = columns.filter((column) => column.why === null);

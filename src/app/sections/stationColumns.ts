@@ -58,8 +58,10 @@ export function stationColumn(
 function cell(quantity: Quantity, factor: number, decimals: number): StationCell {
   if (!isEstimate(quantity)) return { value: "–", error: null, title: quantity.why };
   const { value, low, high, why_low, why_high } = quantity;
-  const error = low === null || high === null ? "–" : `±\u202f${formatNumber(((high - low) / 2) * factor, decimals)}`;
-  const interval = low === null || high === null ? (why_low ?? why_high ?? "no interval") : `${low} to ${high}`;
+  const error =
+    low === null || high === null ? "–" : `±\u202f${formatNumber(((high - low) / 2) * factor, decimals)}`;
+  const interval =
+    low === null || high === null ? (why_low ?? why_high ?? "no interval") : `${low} to ${high}`;
   return { value: formatNumber(value * factor, decimals), error, title: `${value} (${interval})` };
 }
 

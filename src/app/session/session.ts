@@ -1,8 +1,10 @@
+import type { Comparison } from "../../core/comparison.ts";
+import type { DecayResult } from "../../core/decayResult.ts";
 import type { PlainFailure } from "../../core/failure.ts";
 import type { Flag } from "../../core/flag.ts";
 import type { Preview, SourceNote } from "../../core/records.ts";
 import type { StationResult } from "../../core/stationResult.ts";
-import type { Argument, SourceFile } from "../../engine/protocol.ts";
+import type { SourceFile } from "../../engine/protocol.ts";
 import type { Workspace, WorkspaceCase } from "../../sheet/workspace.ts";
 import type { History } from "./history.ts";
 
@@ -40,11 +42,20 @@ export interface Reduced {
   readonly complete: boolean;
 }
 
-/** Fits and comparison from the worker, with the key of what they were made from. */
+/** Fits and comparison from the worker, with the keys of what they were made from. */
 export interface Argued {
+  /** Of the whole: cases, their order, and how they are compared. */
   readonly key: string;
-  readonly caseIds: readonly string[];
-  readonly argument: Argument;
+  /** Of each case's fit, by its id. */
+  readonly keys: Readonly<Record<string, string>>;
+  readonly cases: Readonly<Record<string, ArguedCase>>;
+  readonly comparisons: readonly Comparison[];
+}
+
+/** One case fitted and derived; curves and blocks are those of the reduction, not copies. */
+export interface ArguedCase {
+  readonly stations: readonly StationResult[];
+  readonly decay: DecayResult;
 }
 
 export interface Offer {
