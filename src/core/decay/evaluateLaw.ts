@@ -41,7 +41,8 @@ function solveLine(problem: LawProblem, law: CentredLaw, held: Held): void {
   if (held.lnA !== null) {
     if (held.n === null) {
       const shift = Math.log(law.kappa * problem.length);
-      let [top, bottom] = [0, 0];
+      let top = 0;
+      let bottom = 0;
       for (let i = 0; i < count; i++) {
         const h = law.kappa * g[i] - shift;
         const weight = w[i] * w[i];
@@ -53,7 +54,9 @@ function solveLine(problem: LawProblem, law: CentredLaw, held: Held): void {
     law.c = levelOfHeldA(problem, law, held.lnA);
     return;
   }
-  let [weights, meanY, meanG] = [0, 0, 0];
+  let weights = 0;
+  let meanY = 0;
+  let meanG = 0;
   for (let i = 0; i < count; i++) {
     const weight = w[i] * w[i];
     weights += weight;
@@ -63,7 +66,8 @@ function solveLine(problem: LawProblem, law: CentredLaw, held: Held): void {
   meanY /= weights;
   meanG /= weights;
   if (held.n === null) {
-    let [top, bottom] = [0, 0];
+    let top = 0;
+    let bottom = 0;
     for (let i = 0; i < count; i++) {
       const weighted = w[i] * w[i] * (g[i] - meanG);
       top -= weighted * (y[i] - meanY);
@@ -81,7 +85,8 @@ function solveLevel(problem: LawProblem, law: CentredLaw, held: Held): void {
     return;
   }
   const { count, y, w, g } = problem;
-  let [top, bottom] = [0, 0];
+  let top = 0;
+  let bottom = 0;
   for (let i = 0; i < count; i++) {
     const shape = Math.exp(-law.b * g[i]) * w[i];
     top += shape * y[i] * w[i];

@@ -75,6 +75,10 @@ export interface LawProblem {
   readonly byC: Float64Array;
   readonly byB: Float64Array;
   readonly byKappa: Float64Array;
+  /** Scratch: the normal equations, row-major 3 × 3, and their solution. */
+  readonly matrix: Float64Array;
+  readonly gradient: Float64Array;
+  readonly step: Float64Array;
 }
 
 /**
@@ -86,9 +90,20 @@ export function lawProblem(data: PowerLawData, options: PowerLawOptions): LawPro
   const count = data.x.length;
   assert(count > 1 && data.q.length === count, "a law needs two stations or more, each with its q");
   const linear = options.residuals === "linear";
-  const scratch = () => new Float64Array(count);
-  const [d, y, w] = [scratch(), scratch(), scratch()];
-  let [first, last, sum] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY, 0];
+  // one buffer for all arrays: a refit is short enough for each allocation to show
+  const buffer = new ArrayBuffer(8 * (8 * count + 15));
+  let used = 0;
+  const array = (size = count) => {
+    const view = new Float64Array(buffer, 8 * used, size);
+    used += size;
+    return view;
+  };
+  const d = array();
+  const y = array();
+  const w = array();
+  let first = Number.POSITIVE_INFINITY;
+  let last = Number.NEGATIVE_INFINITY;
+  let sum = 0;
   for (let i = 0; i < count; i++) {
     sum += data.x[i];
     first = Math.min(first, data.x[i]);
@@ -116,11 +131,14 @@ export function lawProblem(data: PowerLawData, options: PowerLawOptions): LawPro
     w,
     errorsKnown: data.error !== null,
     magnitude,
-    g: scratch(),
-    residual: scratch(),
-    byC: scratch(),
-    byB: scratch(),
-    byKappa: scratch(),
+    g: array(),
+    residual: array(),
+    byC: array(),
+    byB: array(),
+    byKappa: array(),
+    matrix: array(9),
+    gradient: array(3),
+    step: array(3),
   };
 }
 

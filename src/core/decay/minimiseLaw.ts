@@ -1,7 +1,7 @@
 import { evaluateLaw } from "./evaluateLaw.ts";
-import { inverseOfSymmetric, times } from "./inverseOfSymmetric.ts";
 import { type CentredLaw, type Held, kappaFloor, kappaLimit, type LawProblem } from "./lawProblem.ts";
-import { type NormalMatrix, normalMatrix } from "./normalMatrix.ts";
+import { normalMatrix } from "./normalMatrix.ts";
+import { solveSymmetric } from "./solveSymmetric.ts";
 
 export interface Minimum {
   readonly law: CentredLaw;
@@ -14,6 +14,8 @@ export interface Minimum {
 }
 
 const mostIterations = 200;
+/** A minimum found on a step damped more than this is none. */
+const littleDamping = 1e-3;
 
 /**
  * Least squares of a law by Gauss-Newton steps, damped where a full step does not descend (Levenberg, Marquardt);
@@ -23,28 +25,30 @@ const mostIterations = 200;
  * @param tolerance the search ends when a step is below this share of the standard error
  */
 export function minimiseLaw(problem: LawProblem, start: CentredLaw, held: Held, tolerance: number): Minimum {
-  let law = { ...start };
+  let law = { c: start.c, b: start.b, kappa: start.kappa };
   let sum = evaluateLaw(problem, law, held);
   const nothingNonlinear = held.x0 !== null && (!problem.linear || held.n !== null);
   if (nothingNonlinear) return { law, sum, iterations: 1, converged: true, exponential: false };
+  const { matrix, gradient, step } = problem;
   let damping = 0;
-  let normal = normalMatrix(problem, law, held);
-  for (let iteration = 1; iteration <= mostIterations; iteration++) {
-    const step = dampedStep(normal, damping);
-    if (step === null) return ended(problem, held, law, sum, iteration, false);
-    const small = isSmall(problem, normal, step, law, sum, tolerance);
-    const trial = stepped(problem, law, normal, step);
+  normalMatrix(problem, law, held);
+  for (let iteration = 1; iteration <= mostIterations && damping < 1e12; iteration++) {
+    if (!solveSymmetric(matrix, damping, gradient, step)) {
+      damping = Math.max(10 * damping, littleDamping);
+      continue;
+    }
+    const small = damping < littleDamping && isSmall(problem, sum, tolerance);
+    const trial = stepped(problem, law);
     const trialSum = evaluateLaw(problem, trial, held);
     // near the minimum the sum is flat to its last digits, and the step knows better than the sum
-    const descends = trialSum <= sum + roundingOf(problem, sum);
-    if (small && descends && damping < 1e-3) return ended(problem, held, trial, trialSum, iteration, true);
-    if (descends) {
-      [law, sum] = [trial, trialSum];
+    if (trialSum <= sum + roundingOf(problem, sum)) {
+      if (small) return ended(problem, held, trial, trialSum, iteration, true);
+      law = trial;
+      sum = trialSum;
       damping = damping < 1e-6 ? 0 : damping / 10;
-      normal = normalMatrix(problem, law, held);
+      normalMatrix(problem, law, held);
     } else {
-      damping = damping === 0 ? 1e-3 : damping * 10;
-      if (damping > 1e12) return ended(problem, held, law, sum, iteration, false);
+      damping = Math.max(10 * damping, littleDamping);
     }
   }
   return ended(problem, held, law, sum, mostIterations, false);
@@ -67,44 +71,22 @@ function roundingOf({ magnitude }: LawProblem, sum: number): number {
   return 2e-15 * Math.sqrt(sum * magnitude) + 1e-30 * magnitude;
 }
 
-/** (J'J + damping · diagonal)⁻¹ J'r. */
-function dampedStep({ matrix, gradient }: NormalMatrix, damping: number): number[] | null {
-  const size = gradient.length;
-  const damped = matrix.map((value, at) => (at % (size + 1) === 0 ? value * (1 + damping) : value));
-  const inverse = inverseOfSymmetric(damped, size);
-  return inverse === null ? null : times(inverse, gradient);
-}
-
-/** Whether the fall that the step promises is nothing beside what one standard error costs. */
-function isSmall(
-  problem: LawProblem,
-  { matrix, gradient, free }: NormalMatrix,
-  step: readonly number[],
-  law: CentredLaw,
-  sum: number,
-  tolerance: number,
-): boolean {
-  const fall = step.reduce((total, value, i) => total + value * gradient[i], 0);
-  const freedom = Math.max(problem.count - free.length, 1);
-  const oneError = problem.errorsKnown ? Math.max(1, sum / freedom) : sum / freedom;
-  if (fall <= tolerance ** 2 * oneError) return true;
-  // data that lie on the law to the last digit: the step itself tells
-  const at = free.indexOf("kappa");
-  const last = matrix.length - 1;
-  return at >= 0 && matrix[last] > 0 && Math.abs(step[at]) <= 4e-16 * law.kappa;
+/** Whether the fall that the step promises is nothing beside what one standard error costs, or beside rounding. */
+function isSmall(problem: LawProblem, sum: number, tolerance: number): boolean {
+  const { step, gradient, count, errorsKnown, magnitude } = problem;
+  const fall = step[0] * gradient[0] + step[1] * gradient[1] + step[2] * gradient[2];
+  const variance = sum / Math.max(count - 3, 1);
+  const worth = tolerance ** 2 * (errorsKnown ? Math.max(1, variance) : variance);
+  return fall <= Math.max(worth, 1e-30 * magnitude);
 }
 
 /** The law after a step; kappa goes at most half way to the end of its bracket. */
-function stepped(
-  problem: LawProblem,
-  law: CentredLaw,
-  { free }: NormalMatrix,
-  step: readonly number[],
-): CentredLaw {
-  const next = { ...law };
-  for (let i = 0; i < free.length; i++) next[free[i]] += step[i];
-  const [low, high] = [kappaFloor(problem), kappaLimit(problem)];
-  if (next.kappa <= low) next.kappa = (law.kappa + low) / 2;
-  if (next.kappa >= high) next.kappa = (law.kappa + high) / 2;
-  return next;
+function stepped(problem: LawProblem, law: CentredLaw): CentredLaw {
+  const { step } = problem;
+  let kappa = law.kappa + step[2];
+  const low = kappaFloor(problem);
+  const high = kappaLimit(problem);
+  if (kappa <= low) kappa = (law.kappa + low) / 2;
+  if (kappa >= high) kappa = (law.kappa + high) / 2;
+  return { c: law.c + step[0], b: law.b + step[1], kappa };
 }

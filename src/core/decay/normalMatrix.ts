@@ -1,42 +1,52 @@
 import type { CentredLaw, Held, LawProblem } from "./lawProblem.ts";
 
-/** J'J and J'r of the free numbers, in the order c, b, kappa; `free` says which those are. */
-export interface NormalMatrix {
-  readonly free: readonly ("c" | "b" | "kappa")[];
-  /** Row-major, free.length squared. */
-  readonly matrix: number[];
-  readonly gradient: number[];
-}
-
 /**
- * The normal equations of a law from the derivatives its last evaluation left in the scratch.
+ * J'J and J'r of a law into the problem's `matrix` and `gradient`, rows in the order c, b, kappa,
+ * from the derivatives its last evaluation left in the scratch. The row of what is not free is that of the unit
+ * matrix with gradient zero, so that a step leaves it alone.
  * What is held ties the others: with n held b = n kappa, with A held c = ln A + (b/kappa) ln(kappa ell).
  */
-export function normalMatrix(problem: LawProblem, law: CentredLaw, held: Held): NormalMatrix {
-  const { byC, byB, byKappa, residual, count } = problem;
+export function normalMatrix(problem: LawProblem, law: CentredLaw, held: Held): void {
+  const { byC, byB, byKappa, residual, count, matrix, gradient } = problem;
   const { b, kappa } = law;
   const freeC = held.lnA === null;
   const freeB = held.n === null;
   const freeKappa = held.x0 === null;
-  const shift = Math.log(kappa * problem.length);
+  const shift = freeC ? 0 : Math.log(kappa * problem.length);
   const levelByB = freeC ? 0 : shift / kappa;
-  const levelByKappa = freeC ? 0 : freeB ? (b / kappa ** 2) * (1 - shift) : b / kappa ** 2;
+  const levelByKappa = freeC ? 0 : (b / kappa ** 2) * (freeB ? 1 - shift : 1);
   const slopeByKappa = held.n ?? 0;
-  const free = [...(freeC ? ["c"] : []), ...(freeB ? ["b"] : []), ...(freeKappa ? ["kappa"] : [])];
-  const size = free.length;
-  const matrix = new Array<number>(size * size).fill(0);
-  const gradient = new Array<number>(size).fill(0);
-  const row = new Array<number>(size).fill(0);
+  let cc = 0;
+  let cb = 0;
+  let ck = 0;
+  let bb = 0;
+  let bk = 0;
+  let kk = 0;
+  let rc = 0;
+  let rb = 0;
+  let rk = 0;
   for (let i = 0; i < count; i++) {
-    let at = 0;
-    if (freeC) row[at++] = byC[i];
-    if (freeB) row[at++] = byB[i] + levelByB * byC[i];
-    if (freeKappa) row[at++] = byKappa[i] + slopeByKappa * byB[i] + levelByKappa * byC[i];
-    for (let j = 0; j < size; j++) {
-      gradient[j] += row[j] * residual[i];
-      for (let k = 0; k <= j; k++) matrix[j * size + k] += row[j] * row[k];
-    }
+    const r = residual[i];
+    const k = freeKappa ? byKappa[i] + slopeByKappa * byB[i] + levelByKappa * byC[i] : 0;
+    const s = freeB ? byB[i] + levelByB * byC[i] : 0;
+    const c = freeC ? byC[i] : 0;
+    cc += c * c;
+    cb += c * s;
+    ck += c * k;
+    bb += s * s;
+    bk += s * k;
+    kk += k * k;
+    rc += c * r;
+    rb += s * r;
+    rk += k * r;
   }
-  for (let j = 0; j < size; j++) for (let k = 0; k < j; k++) matrix[k * size + j] = matrix[j * size + k];
-  return { free: free as NormalMatrix["free"], matrix, gradient };
+  matrix[0] = freeC ? cc : 1;
+  matrix[4] = freeB ? bb : 1;
+  matrix[8] = freeKappa ? kk : 1;
+  matrix[1] = matrix[3] = cb;
+  matrix[2] = matrix[6] = ck;
+  matrix[5] = matrix[7] = bk;
+  gradient[0] = rc;
+  gradient[1] = rb;
+  gradient[2] = rk;
 }

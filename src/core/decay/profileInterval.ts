@@ -111,10 +111,13 @@ function crossing(
   excessThere: number,
 ): number | null {
   const beyond = (at: number) => (step > 0 ? at >= limit : at <= limit);
-  let [inside, inner] = [from, excessThere];
-  let [outside, outer] = [from, excessThere];
+  let inside = from;
+  let inner = excessThere;
+  let outside = from;
+  let outer = excessThere;
   for (let tries = 0; outer < 0; tries++) {
-    [inside, inner] = [outside, outer];
+    inside = outside;
+    inner = outer;
     if (inside === limit || tries > 24) return null;
     outside = from + step * 1.5 ** tries;
     if (beyond(outside)) outside = limit;
@@ -126,10 +129,12 @@ function crossing(
     const value = excess(at);
     if (Math.abs(value) < endTolerance * -excessThere) return at;
     if (value < 0) {
-      [inside, inner] = [at, value];
+      inside = at;
+      inner = value;
       outer *= 0.5;
     } else {
-      [outside, outer] = [at, value];
+      outside = at;
+      outer = value;
       inner *= 0.5;
     }
   }

@@ -2,7 +2,7 @@ import { evaluateLaw } from "./evaluateLaw.ts";
 import { type CentredLaw, type Held, kappaLimit, type LawProblem } from "./lawProblem.ts";
 
 /** Distances of the origin upstream of the first station that are tried, in spans of the stations. */
-const distances = [0.001, 0.004, 0.015, 0.04, 0.1, 0.2, 0.35, 0.6, 1, 1.7, 3, 6, 12, 30, 100];
+const distances = [0.003, 0.02, 0.07, 0.2, 0.5, 1.2, 3, 10, 60];
 
 /** The same law with a given origin and exponent, its level still unsolved. */
 export function lawAbout(problem: LawProblem, x0: number, n: number): CentredLaw {
@@ -26,7 +26,10 @@ export function startLaw(problem: LawProblem, held: Held): CentredLaw {
   for (const distance of distances) {
     const law = lawAbout(problem, problem.first - distance * problem.span, held.n ?? 1);
     const sum = evaluateLaw(problem, law, held);
-    if (sum < least) [best, least] = [law, sum];
+    if (sum < least) {
+      best = law;
+      least = sum;
+    }
   }
   return best ?? lawAbout(problem, problem.first - problem.span, 1);
 }
