@@ -16,7 +16,8 @@ const recognisedAll = { separator: null, decimal: null, heading: null };
  * A first look at a file, from its head alone. What the settings give is used, the rest recognised; a doubt about
  * columns is told (`clashes`, or roles that are null) and not thrown, so that it can be mended.
  * The position is in the file's own axis: `zero` is not subtracted.
- * @throws empty-file, heading-only, not-a-record, ambiguous-columns (a comma for both, names that fit no rows)
+ * @throws empty-file, heading-only, not-a-record, ambiguous-columns (a comma for both, names that fit no rows,
+ * a choice of the settings that names no column)
  */
 export async function previewFile(
   source: ByteSource,
@@ -50,7 +51,7 @@ export async function previewFile(
   };
 }
 
-/** Choices of the settings go before what was recognised; choices that name no column are left to the reading. */
+/** Choices of the settings go before what was recognised. */
 function previewColumns(form: TableForm, seen: RecognisedColumns, settings: Partial<ReadSettings>) {
   const roles = settings.columns ? chosenRoles(form, seen, settings) : seen.roles;
   return form.headings.map(({ name, unit }, i) => {

@@ -21,8 +21,8 @@ export interface RecordSink {
 }
 export interface ReadSummary {
   /** One for each position of the file. */
-  readonly sources: readonly SourceNote[];
-  readonly flags: readonly Flag[];
+  readonly sources: SourceNote[];
+  readonly flags: Flag[];
   readonly rows: number;
   /** Lines between the rows that held none. */
   readonly leftOut: number;
@@ -32,6 +32,7 @@ export interface ReadSummary {
  * Streams one file of velocities, probe by probe, as column blocks in the units of the case.
  * A table with x, y or z columns may hold several probes, one after the other or time by time: each row goes to
  * the probe of its position. A position given in the settings goes before a column, a comment, the name.
+ * @param options.onBytes hears how many bytes have been read since it was last told
  * @throws empty-file, heading-only, not-a-record, ambiguous-columns, no-velocity, no-time, no-position, not-a-number
  */
 export async function readRecords(

@@ -92,7 +92,7 @@ class RowReader {
     const { columns } = this.plan;
     for (let i = 0; i < columns.length; i++) {
       const value = parseNumber(fields[columns[i].index], this.form.decimal);
-      if (value !== value || (this.noNumber.length > 0 && this.noNumber.includes(value))) return false;
+      if (Number.isNaN(value) || (this.noNumber.length > 0 && this.noNumber.includes(value))) return false;
       this.values[i] = value * columns[i].factor;
     }
     return true;

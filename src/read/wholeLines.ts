@@ -17,7 +17,7 @@ const longestLine = 2 ** 24;
 /**
  * A file's text as whole lines, a chunk at a time; where the bytes were cut on their way makes no difference.
  * UTF-8, or UTF-16 with a byte-order mark; line ends LF, CR LF or CR.
- * @param onBytes hears how many bytes have been read so far
+ * @param onBytes hears how many bytes have been read since it was last told
  * @throws not-a-record a line without end
  */
 export async function* wholeLines(
@@ -48,9 +48,8 @@ async function* decoded(
 ): AsyncGenerator<{ text: string; ended: boolean }> {
   let decoder: TextDecoder | null = null;
   let start = new Uint8Array(0);
-  let bytes = 0;
   for await (const chunk of source.stream()) {
-    bytes += chunk.length;
+    onBytes?.(chunk.length);
     if (decoder === null) {
       start = joined(start, chunk);
       if (start.length < 2) continue;
@@ -59,7 +58,6 @@ async function* decoded(
     } else {
       yield { text: decoder.decode(chunk, { stream: true }), ended: false };
     }
-    onBytes?.(bytes);
   }
   yield { text: decoder === null ? new TextDecoder().decode(start) : decoder.decode(), ended: true };
 }

@@ -1,0 +1,16 @@
+import type { DecaySettings } from "../core/decayResult.ts";
+import type { CaseSheet } from "./caseSheet.ts";
+
+/** What of a sheet decides how the decay is fitted. */
+export function decaySettings(sheet: CaseSheet): DecaySettings {
+  const { along, kinematicViscosity, kind, reference } = sheet;
+  return {
+    ...sheet.fit,
+    along,
+    referenceLength: reference.length,
+    referenceSpeed: reference.speed,
+    kinematicViscosity,
+    dissipation: sheet.reduce.dissipation,
+    kind,
+  };
+}
