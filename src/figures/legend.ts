@@ -1,0 +1,81 @@
+import { drawingOf } from "./drawing.ts";
+import type { FigureCase, FigureOptions } from "./figureSpec.ts";
+import { letterCorner } from "./letterCorner.ts";
+import { pageNote } from "./pageNote.ts";
+import type { Box, Decor, Panel } from "./panel.ts";
+import { pointsOf } from "./pointsOf.ts";
+import { caseLine, loneMarker } from "./stationTrace.ts";
+import { escapeText } from "./symbolHtml.ts";
+
+const rowMm = 3.4;
+const lineMm = 6;
+/** About the mean width of a letter at 7.5 pt. */
+const letterMm = 1.27;
+const longestName = 26;
+
+/** One row: a line with a marker, and a name. */
+export interface LegendRow {
+  readonly mark: number;
+  readonly text: string;
+  readonly marker: boolean;
+  readonly weightPt: number;
+}
+
+export function caseRows(cases: readonly FigureCase[]): LegendRow[] {
+  return cases.map(({ name, mark }) => ({
+    mark,
+    text: escapeText(shortened(name)),
+    marker: true,
+    weightPt: 0.95,
+  }));
+}
+
+export function shortened(name: string): string {
+  return name.length > longestName ? `${name.slice(0, longestName - 1)}…` : name;
+}
+
+/** The legend in that corner of a panel where it covers fewest of its points, upper right first. */
+export function legend(rows: readonly LegendRow[], panel: Panel, options: FigureOptions): Decor {
+  const drawing = drawingOf(options);
+  const longest = Math.max(...rows.map(({ text }) => text.replace(/<[^>]*>/g, "").length), 0);
+  const size = { width: lineMm + 2 + longest * letterMm, height: rows.length * rowMm };
+  const corner = emptiestCorner(panel, size);
+  const traces = rows.flatMap(({ mark, marker, weightPt }, i) => {
+    const y = corner.top - (i + 0.5) * rowMm;
+    const line = caseLine([corner.left, corner.left + lineMm], [y, y], mark, options, {
+      weightPt,
+      dashed: true,
+    });
+    return marker ? [line, loneMarker({ x: corner.left + lineMm / 2, y }, mark, options)] : [line];
+  });
+  const notes = rows.map(({ text }, i) =>
+    pageNote(text, corner.left + lineMm + 1.4, corner.top - (i + 0.5) * rowMm, {
+      xanchor: "left",
+      yanchor: "middle",
+      font: { ...drawing.numeral, color: options.tokens.ink2 },
+    }),
+  );
+  return { traces, notes, shapes: [] };
+}
+
+function emptiestCorner(panel: Panel, size: { width: number; height: number }): Box {
+  const { box } = panel;
+  const places = pointsOf(panel);
+  const letter = panel.letter === "" ? null : letterCorner(panel);
+  const right = box.right - 2.4 - size.width;
+  const [upper, lower] = [box.top - 1.8, box.bottom + 2 + size.height];
+  const corners = [
+    { left: right, top: upper },
+    { left: box.left + 2.4, top: letter?.corner === "lower" ? lower + 3.4 : lower },
+    { left: right, top: lower },
+    { left: box.left + 2.4, top: letter?.corner === "upper" ? upper - 3.4 : upper },
+  ].map(({ left, top }): Box => ({ left, right: left + size.width, top, bottom: top - size.height }));
+  const covered = corners.map(
+    (corner) =>
+      places.filter(
+        ([x, y]) =>
+          x > corner.left - 1 && x < corner.right + 1 && y > corner.bottom - 1 && y < corner.top + 1,
+      ).length,
+  );
+  return corners[covered.indexOf(Math.min(...covered))];
+}
