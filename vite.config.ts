@@ -132,6 +132,7 @@ export default defineConfig(({ mode }) => {
   return {
     root: resolve(top, "src/app"),
     base: "./",
+    cacheDir: resolve(top, "node_modules/.vite"),
     publicDir: resolve(top, "public"),
     plugins: [react(), policyTag(), demoData()],
     worker: { format: "es" },
