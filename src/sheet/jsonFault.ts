@@ -5,8 +5,9 @@ export interface JsonFault {
   readonly found: string;
 }
 
+const blanks = /[\t\n\r ]*/y;
 const token =
-  /[\s]*(?:([{}[\]:,])|("(?:[^"\\\u0000-\u001f]|\\(?:["\\/bfnrt]|u[0-9a-fA-F]{4}))*")|(-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?(?![\w.])|(?:true|false|null)\b))/y;
+  /([{}[\]:,])|("(?:[^"\\\p{Cc}]|\\(?:["\\/bfnrt]|u[0-9a-fA-F]{4}))*")|(-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?(?![\w.])|(?:true|false|null)\b)/uy;
 
 /** What may come next; "first" may also close what was just opened. */
 type Want = "value" | "first-value" | "key" | "first-key" | "colon" | "end" | "nothing";
@@ -18,13 +19,16 @@ type Want = "value" | "first-value" | "key" | "first-key" | "colon" | "end" | "n
 export function jsonFault(text: string): JsonFault {
   const open: string[] = [];
   let want: Want = "value";
-  token.lastIndex = 0;
+  let at = 0;
   for (;;) {
+    blanks.lastIndex = at;
+    token.lastIndex = at + (blanks.exec(text)?.[0].length ?? 0);
     const from = token.lastIndex;
     const match = token.exec(text);
     const next: Want | null = match === null ? null : after(want, match, open);
-    if (next === null) return placeOf(text, from);
+    if (match === null || next === null) return placeOf(text, from);
     want = next;
+    at = from + match[0].length;
   }
 }
 
@@ -57,8 +61,7 @@ function after(want: Want, [, sign, string]: RegExpExecArray, open: string[]): W
   }
 }
 
-function placeOf(text: string, from: number): JsonFault {
-  const at = from + (/^\s*/.exec(text.slice(from))?.[0].length ?? 0);
+function placeOf(text: string, at: number): JsonFault {
   const before = text.slice(0, at).split("\n");
   const rest = text.slice(at).split("\n", 1)[0].slice(0, 20);
   return {
