@@ -8,8 +8,10 @@ const room = (name, allowed, packages = []) => ({
     pathNot: [
       `^src/${name}/`,
       ...allowed.map((folder) => (folder === "core" ? "^src/core/" : `^src/${folder}/`)),
-      ...packages.map((name) => (name === "node:" ? "^node:" : `node_modules/${name}(/|$)`)),
+      ...packages.filter((name) => name !== "node:").map((name) => `node_modules/${name}(/|$)`),
     ],
+    // Node's own modules are resolved to bare names such as `fs`: they are told by their kind
+    ...(packages.includes("node:") ? { dependencyTypesNot: ["core"] } : {}),
   },
 });
 
