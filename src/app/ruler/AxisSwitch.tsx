@@ -54,7 +54,7 @@ export function AxisSwitch({ choices, axis, along, onAxis }: AxisSwitchProps) {
 
 /** "x (m)", "x/M", "(x − x0)/M": as the switch and the scale write them. */
 function ChoiceText({ choice: { axis, over, unit }, along }: { choice: AxisChoice; along: "x" | "t" }) {
-  const inUnit = unit === null ? "" : `\u2009(${unit})`;
+  const inUnit = unit !== null && <span className="of">({unit})</span>;
   const divided = over !== null && (
     <>
       /<span className="sym">{over}</span>
@@ -71,7 +71,7 @@ function ChoiceText({ choice: { axis, over, unit }, along }: { choice: AxisChoic
   const difference = (
     <>
       <PlaceSymbol along={along} />
-      {"\u2009\u2212\u2009"}
+      <span className="minus">{"\u2212"}</span>
       <OriginSymbol along={along} />
     </>
   );

@@ -1,11 +1,8 @@
-import { type FocusEvent, type KeyboardEvent, useRef } from "react";
-import { bracketKeys } from "./bracketKeys.ts";
 import type { LaneActions } from "./laneActions.ts";
-import type { RulerCase, RulerWindow } from "./rulerProps.ts";
+import type { RulerCase } from "./rulerProps.ts";
 import { type Edge, edgeRange, edgeStation, type StationWindow } from "./snapWindow.ts";
 import { bracketName, bracketPlace, type SpokenScale } from "./spokenText.ts";
-import { usePointerDrag } from "./usePointerDrag.ts";
-import { windowAsChosen } from "./useWindowGesture.ts";
+import { useBracketGrip } from "./useBracketGrip.ts";
 
 interface BracketProps {
   readonly one: RulerCase;
@@ -22,29 +19,8 @@ interface BracketProps {
 /** One end of the fit window, as a slider; it is drawn by the lane, this is what is taken hold of. */
 export function Bracket({ one, edge, window, px, scale, active, actions }: BracketProps) {
   const stations = one.stations.map(({ x }) => x);
-  const range = edgeRange(stations, window, edge).map((i) => stations[i]);
-  const atFocus = useRef<RulerWindow>("auto");
-  const drag = usePointerDrag({
-    start: (shift) => actions.windowStart(one.id, edge, shift),
-    move: actions.windowDrag,
-    end: actions.windowEnd,
-    cancel: actions.windowCancel,
-  });
-  const { putBack, ...pointer } = drag;
-  const onKeyDown = (event: KeyboardEvent<HTMLElement>) => {
-    if (event.ctrlKey || event.metaKey || event.altKey) return;
-    const move = bracketKeys(stations, window, edge, event.key, event.shiftKey);
-    if (move === null) return;
-    event.preventDefault();
-    if (putBack(event)) return;
-    if (move.kind === "back") actions.windowBack(one.id, atFocus.current);
-    else actions.windowKey(one.id, edge, move);
-  };
-  const onBlur = (event: FocusEvent<HTMLElement>) => {
-    actions.windowKeysEnd();
-    if (!(event.relatedTarget instanceof Element && event.relatedTarget.closest(".ruler-stepper")))
-      actions.bracketBlur();
-  };
+  const [least, most] = edgeRange(stations, window, edge).map((i) => stations[i]);
+  const grip = useBracketGrip(one, edge, window, stations, actions);
   return (
     <div
       className={`ruler-grip ruler-bracket ${edge}${active ? " active" : ""}`}
@@ -53,18 +29,11 @@ export function Bracket({ one, edge, window, px, scale, active, actions }: Brack
       tabIndex={0}
       aria-label={bracketName(edge, one.name)}
       aria-orientation="horizontal"
-      aria-valuemin={range[0]}
-      aria-valuemax={range[1]}
+      aria-valuemin={least}
+      aria-valuemax={most}
       aria-valuenow={stations[edgeStation(stations, window, edge)]}
       aria-valuetext={bracketPlace(stations, window, edge, scale)}
-      onFocus={() => {
-        atFocus.current = windowAsChosen(one);
-        actions.bracketFocus(one.id, edge);
-      }}
-      onBlur={onBlur}
-      onKeyDown={onKeyDown}
-      onKeyUp={actions.windowKeysEnd}
-      {...pointer}
+      {...grip}
     />
   );
 }

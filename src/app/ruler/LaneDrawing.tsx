@@ -34,10 +34,12 @@ export function LaneDrawing(props: LaneDrawingProps) {
         <rect className="ruler-window" x={ends[0]} y={1} width={ends[1] - ends[0]} height={height - 2} />
       )}
       {waits && <line className="ruler-midline" x1={0} x2={width} y1={height / 2} y2={height / 2} />}
-      {!waits && <Band {...props} ends={ends} />}
+      {!waits && <Band {...props} ends={ends} part="fill" />}
       {one.stations.map((station) => (
         <StationTick key={station.x} station={station} px={at(station.x)} height={height} />
       ))}
+      {/* over the ticks, whose paper edge would break the lines */}
+      {!waits && <Band {...props} ends={ends} part="sides" />}
       {one.law && one.x0.value !== null && <OriginDrawing {...props} />}
       {picks.map(({ x, letter }) => (
         <Pick key={x} px={at(x)} letter={letter} height={height} />
@@ -67,26 +69,23 @@ function edgePx({ edge, window }: { edge: Edge; window: StationWindow }, at: (x:
   return at(edge === "start" ? window[0] : window[1]);
 }
 
-function Band({
-  one,
-  map,
-  width,
-  height,
-  ends,
-}: LaneDrawingProps & { ends: readonly [number, number] | null }) {
+interface BandProps extends LaneDrawingProps {
+  readonly ends: readonly [number, number] | null;
+  readonly part: "fill" | "sides";
+}
+
+function Band({ one, map, width, height, ends, part }: BandProps) {
   const { law, lawTu } = one;
   const band = useMemo(
     () => (law === null || lawTu === null ? null : bandShape(law, lawTu, map, { width, height })),
     [law, lawTu, map, width, height],
   );
   if (band === null) return null;
-  return (
-    <g className="ruler-band">
-      {ends && <path className="fill" d={bandPath(cutBand(band, ends[0], ends[1]), height / 2)} />}
-      <path className="side" d={sidePath(band, height / 2, -1)} />
-      <path className="side" d={sidePath(band, height / 2, 1)} />
-    </g>
-  );
+  if (part === "sides") {
+    const sides = sidePath(band, height / 2, -1) + sidePath(band, height / 2, 1);
+    return <path className="ruler-band-sides" d={sides} />;
+  }
+  return ends && <path className="ruler-band" d={bandPath(cutBand(band, ends[0], ends[1]), height / 2)} />;
 }
 
 interface BracketLineProps {

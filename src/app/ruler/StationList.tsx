@@ -56,7 +56,6 @@ export function StationList({ one, map, picks, scale, actions }: StationListProp
     event.preventDefault();
   };
   return (
-    // biome-ignore lint/a11y/useFocusableInteractive: the focus roves over its options
     <div
       ref={list}
       className="ruler-stations"

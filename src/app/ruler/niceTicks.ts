@@ -21,13 +21,13 @@ export function niceStep(least: number): number {
  * minors a quarter of a step for 2, a fifth for 1 and 5.
  * @param from,to    ends of the scale, in the numbers it shows; from < to
  * @param width      its length, px; > 0
- * @param leastGap   room that a numeral needs, px
  */
-export function niceTicks(from: number, to: number, width: number, leastGap: number): ScaleTicks {
+export function niceTicks(from: number, to: number, width: number): ScaleTicks {
   const span = to - from;
   // 0.8: ten majors is the aim, twelve are still calm, five are not enough to read between.
-  const step = niceStep(Math.max((0.8 * span) / 10, (leastGap * span) / width));
-  const decimals = Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
+  let step = niceStep((0.8 * span) / 10);
+  while ((step * width) / span < numeralRoom(from, to, step) && step < span) step = niceStep(step * 1.5);
+  const decimals = decimalsOf(step);
   const parts = Math.round(step / 10 ** Math.floor(Math.log10(step) + 1e-9)) === 2 ? 4 : 5;
   const first = Math.ceil((from / step) * parts - 1e-9);
   const last = Math.floor((to / step) * parts + 1e-9);
@@ -39,4 +39,14 @@ export function niceTicks(from: number, to: number, width: number, leastGap: num
     step,
     decimals,
   };
+}
+
+function decimalsOf(step: number): number {
+  return Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
+}
+
+/** Px that the longest numeral takes, with a gap: 6 px a sign at 13 px. */
+function numeralRoom(from: number, to: number, step: number): number {
+  const signs = [from, to].map((end) => (Math.trunc(end / step) * step).toFixed(decimalsOf(step)).length);
+  return 6 * Math.max(...signs) + 5;
 }

@@ -31,12 +31,12 @@ const upstream = 0.35;
 
 /**
  * The scale of all lanes: it holds every station, each virtual origin and its whisker unless they lie more
- * than a third of the stations' span upstream, and begins on a minor mark, so that small shifts do not move it.
+ * than a third of the stations' span upstream, and begins on a tenth of a mark, so that small shifts do not move it.
  */
 export function rulerScale(cases: readonly RulerCase[], axis: Axis, width: number): RulerScale {
   const shown = cases.map((one) => shownAs(one, axis, cases));
   const [from, to] = extent(cases, shown, width);
-  const ticks = niceTicks(from, to, width, 32);
+  const ticks = niceTicks(from, to, width);
   const perShown = width / (to - from);
   const maps = shown.map((one) =>
     one === null ? null : { at: -(from + one.shift / one.unit) * perShown, perX: perShown / one.unit },
@@ -89,6 +89,6 @@ function extent(
   const perPx = (last - lowest || span) / Math.max(1, width - room.whisker - room.right);
   const from = Math.min(...held.map(({ at, left }) => Math.max(at, furthest) - left * perPx));
   const to = last + room.right * perPx;
-  const minor = niceTicks(from, to, width, 32).step / 5;
-  return [Math.floor(from / minor) * minor, to];
+  const grain = niceTicks(from, to, width).step / 10;
+  return [Math.floor(from / grain) * grain, to];
 }

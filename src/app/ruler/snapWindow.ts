@@ -18,8 +18,10 @@ export function edgeStation(stations: readonly number[], window: StationWindow, 
     const first = stations.findIndex((x) => x >= window[0] - slack);
     return first < 0 ? stations.length - 1 : first;
   }
-  const last = stations.findLastIndex((x) => x <= window[1] + slack);
-  return last < 0 ? 0 : last;
+  return Math.max(
+    0,
+    stations.findLastIndex((x) => x <= window[1] + slack),
+  );
 }
 
 /** The window with one bracket moved to a station; the brackets never meet: two stations stay inside. */

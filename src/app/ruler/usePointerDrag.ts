@@ -34,7 +34,6 @@ export function usePointerDrag(drag: PointerDrag) {
     onPointerDown: (event: PointerEvent<HTMLElement>) => {
       if (event.button !== 0) return;
       event.currentTarget.setPointerCapture?.(event.pointerId);
-      event.currentTarget.focus({ preventScroll: true });
       grip.current = { pointer: event.pointerId, from: event.clientX, shift: event.shiftKey, started: false };
     },
     onPointerMove: (event: PointerEvent<HTMLElement>) => {
