@@ -89,6 +89,8 @@ export interface StationCurves {
   readonly E33: Float64Array | null;
   /** Degrees of freedom of one bin's chi-square. */
   readonly freedom: number;
+  /** The same at each k1: more where a point stands for several bins. */
+  readonly freedoms?: Float64Array;
   /** Time lags of rho, from 0. */
   readonly lag: Float64Array;
   readonly rho_u: Float64Array;
@@ -140,6 +142,9 @@ export const routeNames = [
   "L_v",
   "L_w",
   "lambda_f",
+  "lambda_gradient",
+  "eta_gradient",
+  "Re_lambda_gradient",
   "gradient_u",
   "gradient_v",
   "gradient_w",

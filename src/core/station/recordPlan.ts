@@ -17,6 +17,8 @@ export interface RecordPlan {
   readonly centre: number;
   /** Integral time of u in the pilot; null where its correlation does not fall to zero. */
   readonly integralTime: number | null;
+  /** Set in the plan of a second reading: the pilot's integral time, which did not hold for the record. */
+  readonly pilotTime?: number | null;
   /** Lag products are formed for 0 … lagLimit - 1 samples; a power of two. */
   readonly lagLimit: number;
   /** Every lagStride-th of them is kept; a power of two. */

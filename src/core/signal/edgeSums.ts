@@ -1,0 +1,39 @@
+/** Sums of the first and of the last l samples of a sequence that arrives in chunks, for l = 0, stride, … */
+export interface EdgeSums {
+  add(x: Float64Array, from: number, to: number): void;
+  heads(): Float64Array;
+  tails(): Float64Array;
+}
+
+/**
+ * With them a constant can be taken out of lag products afterwards and exactly: for N samples and sum S,
+ *     Σ (x_i - d)(x_(i-l) - d) = Σ x_i x_(i-l) - d (2S - head_l - tail_l) + (N - l) d²
+ * @param limit   lags 0 … limit - 1
+ * @param stride  every stride-th lag is kept; a divisor of limit
+ */
+export function startEdges(limit: number, stride: number): EdgeSums {
+  const first = new Float64Array(limit);
+  const recent = new Float64Array(limit);
+  let count = 0;
+
+  return {
+    add(x, from, to) {
+      for (let i = from; i < to && count + i - from < limit; i++) first[count + i - from] = x[i];
+      // only the last `limit` of them can stay
+      for (let i = Math.max(from, to - limit); i < to; i++) recent[(count + i - from) % limit] = x[i];
+      count += to - from;
+    },
+    heads: () => runningSums(limit, stride, (l) => (l < count ? first[l] : 0)),
+    tails: () => runningSums(limit, stride, (l) => (l < count ? recent[(count - 1 - l) % limit] : 0)),
+  };
+}
+
+function runningSums(limit: number, stride: number, at: (l: number) => number): Float64Array {
+  const sums = new Float64Array(limit / stride);
+  let sum = 0;
+  for (let l = 0; l < limit; l++) {
+    if (l % stride === 0) sums[l / stride] = sum;
+    sum += at(l);
+  }
+  return sums;
+}

@@ -1,0 +1,30 @@
+/** Blocks gathered into groups of nearly equal weight: what the jackknife leaves out one at a time. */
+export interface BlockGroups {
+  readonly count: number;
+  /** Group of each block. */
+  readonly of: Int32Array;
+}
+
+const fewest = 10;
+const most = 50;
+/** Integral times a group should hold. */
+const perGroup = 20;
+
+/**
+ * B = T/(20 T_int) groups, from 10 to 50, of whole neighbouring blocks, two or more where there are enough.
+ * @param weights  weight of each block, in order
+ * @param integralTimes  length of the record in integral times
+ * @see   Lenschow, Mann & Kristensen (1994), J. Atmos. Ocean. Technol. 11, 661, on independent stretches
+ */
+export function groupBlocks(weights: Float64Array, integralTimes: number): BlockGroups {
+  const wanted = Math.min(Math.max(Math.round(integralTimes / perGroup), fewest), most);
+  const count = Math.min(wanted, Math.max(fewest, Math.floor(weights.length / 2)), weights.length);
+  const total = weights.reduce((sum, weight) => sum + weight, 0);
+  const of = new Int32Array(weights.length);
+  let before = 0;
+  for (let block = 0; block < weights.length; block++) {
+    of[block] = Math.min(count - 1, Math.floor((count * (before + weights[block] / 2)) / total));
+    before += weights[block];
+  }
+  return { count, of };
+}

@@ -1,0 +1,136 @@
+import { jointLayout, pairIndex } from "../signal/jointMoments.ts";
+import { shiftJoint } from "../signal/shiftJoint.ts";
+import type { ReduceSettings } from "../stationResult.ts";
+import { blockFields, differenceFields } from "./blockFields.ts";
+import { wholeMoments } from "./recordCorrelation.ts";
+import type { Component, StationPart } from "./stationPart.ts";
+
+/** All records of one station put together, each about its own mean. */
+export interface JoinedRecord {
+  /** In an order that does not depend on that of arrival. */
+  readonly parts: readonly StationPart[];
+  /** Those of the parts that have spectra, all with one step. */
+  readonly spectral: readonly StationPart[];
+  readonly components: readonly Component[];
+  /** Sampled at the same times: blocks are averaged across probes, and left out together. */
+  readonly together: boolean;
+  readonly samples: number;
+  readonly step: number;
+  readonly start: number;
+  /** Time recorded, all records together. */
+  readonly duration: number;
+  /** Time that counts for sampling errors: that of one record where all were taken at once. */
+  readonly span: number;
+  /** Mean of each component, by length. */
+  readonly means: readonly number[];
+  readonly fields: readonly string[];
+  /** A row a block: sums about the record's own mean; rows and sums add up plainly. */
+  readonly rows: readonly Float64Array[];
+  /** Block of its own record behind each row, for what a part keeps per block: part and index, by probe. */
+  readonly blocks: readonly (readonly BlockPlace[])[];
+  readonly blockSamples: number;
+}
+export interface BlockPlace {
+  readonly part: StationPart;
+  readonly block: number;
+}
+
+export function joinParts(given: readonly StationPart[], settings: ReduceSettings): JoinedRecord {
+  const parts = [...given].sort(byPlace);
+  const components = (["u", "v", "w"] as const).filter((name) =>
+    parts.every((part) => part.components.includes(name)),
+  );
+  const fields = blockFields(components);
+  const wholes = parts.map((part) => wholeMoments(part));
+  const together = areTogether(parts, settings);
+  const perPart = parts.map((part, p) => partRows(part, components, fields.length, wholes[p]));
+  const places = parts.map((part) => perPart[parts.indexOf(part)].map((_, block) => ({ part, block })));
+  const total = parts.reduce((sum, part) => sum + part.samples, 0);
+  const step = parts[0].step;
+  return {
+    parts,
+    spectral: parts.filter((part) => part.lags !== null && Math.abs(part.step / step - 1) < 1e-6),
+    components,
+    together,
+    samples: total,
+    step,
+    start: parts[0].start,
+    duration: parts.reduce((sum, part) => sum + part.duration, 0),
+    span: together ? parts[0].duration : parts.reduce((sum, part) => sum + part.duration, 0),
+    means: components.map(
+      (name) => parts.reduce((sum, part, p) => sum + part.samples * meanOf(part, wholes[p], name), 0) / total,
+    ),
+    fields,
+    rows: together ? averageRows(perPart) : perPart.flat(),
+    blocks: together
+      ? perPart[0].map((_, row) => places.map((list) => list[row]))
+      : places.flat().map((one) => [one]),
+    blockSamples: parts[0].blocks.blockSamples,
+  };
+}
+
+/** By file, then position, then time: never by arrival. */
+function byPlace(a: StationPart, b: StationPart): number {
+  if (a.origin.file !== b.origin.file) return a.origin.file < b.origin.file ? -1 : 1;
+  return (a.origin.y ?? 0) - (b.origin.y ?? 0) || (a.origin.z ?? 0) - (b.origin.z ?? 0) || a.start - b.start;
+}
+
+function areTogether(parts: readonly StationPart[], settings: ReduceSettings): boolean {
+  if (settings.simultaneous === false || parts.length < 2) return false;
+  const [first, ...others] = parts;
+  return others.every(
+    (part) =>
+      part.samples === first.samples &&
+      part.blocks.rows === first.blocks.rows &&
+      part.blocks.blockSamples === first.blocks.blockSamples &&
+      Math.abs(part.step / first.step - 1) < 1e-6 &&
+      // told by hand, records may each count time from their own start
+      (settings.simultaneous === true || Math.abs(part.start - first.start) < 0.5 * first.step),
+  );
+}
+
+function meanOf(part: StationPart, whole: Float64Array, name: Component): number {
+  const c = part.components.indexOf(name);
+  return part.plan.reference[c] + whole[1 + c];
+}
+
+/** A part's blocks as sums about the part's own mean, in the fields of the station. */
+function partRows(
+  part: StationPart,
+  components: readonly Component[],
+  width: number,
+  whole: Float64Array,
+): Float64Array[] {
+  const own = jointLayout(part.components.length);
+  const layout = jointLayout(components.length);
+  const at = components.map((name) => part.components.indexOf(name));
+  const about = whole.subarray(own.mean, own.mean + own.sequences);
+  const sums = new Float64Array(own.length);
+  const stored = part.blocks.fields.length;
+  return Array.from({ length: part.blocks.rows }, (_, block) => {
+    const data = part.blocks.data.subarray(block * stored, (block + 1) * stored);
+    shiftJoint(data, own, about, sums);
+    const row = new Float64Array(width);
+    row[0] = sums[0];
+    at.forEach((a, i) => {
+      row[layout.mean + i] = sums[own.mean + a];
+      row[layout.third + i] = sums[own.third + a];
+      row[layout.fourth + i] = sums[own.fourth + a];
+      for (let j = i; j < at.length; j++) {
+        row[layout.second + pairIndex(at.length, i, j)] =
+          sums[own.second + pairIndex(own.sequences, a, at[j])];
+      }
+    });
+    row.set(data.subarray(own.length, own.length + differenceFields.length), layout.length);
+    return row;
+  });
+}
+
+function averageRows(perPart: readonly Float64Array[][]): Float64Array[] {
+  return perPart[0].map((first, block) => {
+    const row = new Float64Array(first.length);
+    for (const rows of perPart)
+      for (let i = 0; i < row.length; i++) row[i] += rows[block][i] / perPart.length;
+    return row;
+  });
+}

@@ -1,0 +1,42 @@
+import { jointLayout } from "../signal/jointMoments.ts";
+import { mergeJoint } from "../signal/mergeJoint.ts";
+import type { StationPart } from "./stationPart.ts";
+
+/** Joint moments of a whole part: its blocks merged in order. */
+export function wholeMoments(part: Pick<StationPart, "blocks" | "components">): Float64Array {
+  const layout = jointLayout(part.components.length);
+  const width = part.blocks.fields.length;
+  const whole = new Float64Array(layout.length);
+  for (let row = 0; row < part.blocks.rows; row++) {
+    mergeJoint(whole, part.blocks.data.subarray(row * width, row * width + layout.length), layout);
+  }
+  return whole;
+}
+
+/**
+ * Lag products of a whole part about its own mean, exactly,
+ *     R_l = Σ x_i x_(i-l) - d (2 S - head_l - tail_l) + (N - l) d²,   S = N d
+ * with x about the plan's reference and d what is left of the mean.
+ * @param part       a part with lag products
+ * @param component  index of the component
+ * @returns          R at lags 0, stride, 2 stride …; null where the part has none
+ */
+export function recordCorrelation(part: StationPart, component: number): Float64Array | null {
+  const { lags } = part;
+  if (lags === null) return null;
+  const products = lags.products[component];
+  const rest = wholeMoments(part)[1 + component];
+  const heads = lags.heads[component];
+  const tails = lags.tails[component];
+  const sum = part.samples * rest;
+  const correlation = new Float64Array(lags.count);
+  for (let row = 0; row < part.blocks.rows; row++) {
+    const offset = row * lags.count;
+    for (let l = 0; l < lags.count; l++) correlation[l] += products[offset + l];
+  }
+  for (let l = 0; l < lags.count; l++) {
+    const pairs = part.samples - l * lags.stride;
+    correlation[l] += pairs * rest * rest - rest * (2 * sum - heads[l] - tails[l]);
+  }
+  return correlation;
+}

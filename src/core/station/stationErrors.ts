@@ -1,0 +1,91 @@
+import { bare, estimate, missing, type Quantity, type StandardError } from "../quantity.ts";
+import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
+import { jackknife } from "../signal/jackknife.ts";
+import type { BlockGroups } from "./groupBlocks.ts";
+import {
+  type StationValues,
+  stationValues,
+  type ValueContext,
+  type ValueName,
+  valueScales,
+} from "./stationValues.ts";
+
+/** Values of the whole record and of the record less each group. */
+export interface Replicates {
+  readonly whole: StationValues;
+  readonly without: readonly StationValues[];
+  readonly weights: Float64Array;
+  /** Why there is no interval; null where there is one. */
+  readonly why: string | null;
+}
+
+/**
+ * The station's values from all of its blocks and with one group of them left out at a time.
+ * @param rows    sums of each block, adding up plainly
+ * @param groups  null: no intervals, for the reason `why`
+ */
+export function replicates(
+  rows: readonly Float64Array[],
+  groups: BlockGroups | null,
+  context: ValueContext,
+  why: string,
+): Replicates {
+  const total = new Float64Array(rows[0].length);
+  for (const row of rows) for (let i = 0; i < total.length; i++) total[i] += row[i];
+  const whole = stationValues(total, context);
+  if (groups === null) return { whole, without: [], weights: new Float64Array(0), why };
+  const weights = new Float64Array(groups.count);
+  const without = Array.from({ length: groups.count }, (_, group) => {
+    const rest = total.slice();
+    rows.forEach((row, block) => {
+      if (groups.of[block] !== group) return;
+      for (let i = 0; i < rest.length; i++) rest[i] -= row[i];
+      weights[group] += row[0];
+    });
+    return stationValues(rest, context);
+  });
+  return { whole, without, weights, why: null };
+}
+
+/** The 95 % interval of a value, by the jackknife on its own scale; null where none can be had. */
+export function valueError(name: ValueName, { whole, without, weights }: Replicates): StandardError | null {
+  const scale = valueScales[name];
+  const on = (value: number) => (scale === "log" ? Math.log(value) : value);
+  const error = jackknife(
+    on(whole[name]),
+    without.map((values) => on(values[name])),
+    weights,
+  );
+  return error === null ? null : { ...error, scale };
+}
+
+/**
+ * A value with its interval.
+ * @param absent  why the value is missing, where it is not a number
+ */
+export function valueQuantity(name: ValueName, all: Replicates, absent: string): Quantity {
+  const value = all.whole[name];
+  if (!Number.isFinite(value)) return missing(absent);
+  if (all.why !== null) return bare(value, all.why);
+  const error = valueError(name, all);
+  return error === null ? bare(value, "a part of the record gives no value of it") : withError(value, error);
+}
+
+/** A value and the 95 % interval of Student's t on the scale of its error. */
+export function withError(value: number, error: StandardError): Quantity {
+  const reach = studentQuantile(0.975, error.freedom) * error.standard;
+  if (error.scale === "linear") return estimate(value, value - reach, value + reach, error);
+  return estimate(value, value * Math.exp(-reach), value * Math.exp(reach), error);
+}
+
+/** Errors of independent factors of a product, on the scale of the logarithm; freedom by Welch and Satterthwaite. */
+export function joinedError(a: StandardError, b: StandardError): StandardError {
+  const [va, vb] = [a.standard ** 2, b.standard ** 2];
+  const spread =
+    (a.freedom === null ? 0 : va ** 2 / a.freedom) + (b.freedom === null ? 0 : vb ** 2 / b.freedom);
+  return {
+    standard: Math.sqrt(va + vb),
+    freedom: spread > 0 ? (va + vb) ** 2 / spread : null,
+    scale: "log",
+  };
+}

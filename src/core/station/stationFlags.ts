@@ -1,0 +1,154 @@
+import type { Flag } from "../flag.ts";
+import type { Quantity } from "../quantity.ts";
+import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
+import { wholeMoments } from "./recordCorrelation.ts";
+import { shortestRecord } from "./sampling.ts";
+import type { StationMaterial } from "./stationQuantities.ts";
+
+/** Correction of Taylor's hypothesis above which it is doubtful. */
+const doubtfulCorrection = 0.1;
+const resolved = 0.9;
+const longSensor = 4;
+
+/** Facts that the flags are drawn from, beside the material itself. */
+export interface FlagFacts {
+  readonly taylorFactor: number;
+  readonly k1max_eta: number | null;
+  readonly eta: Quantity;
+}
+
+/** All doubts about one station, one a code. */
+export function stationFlags(material: StationMaterial, facts: FlagFacts): Flag[] {
+  const flags = [
+    ...material.record.parts.flatMap((part) => part.flags),
+    ...lengthFlags(material),
+    ...componentFlags(material),
+    ...taylorFlags(material, facts),
+    ...spectrumFlags(material, facts),
+    ...joinFlags(material),
+  ];
+  return flags.filter((flag, i) => flags.findIndex((other) => other.code === flag.code) === i);
+}
+
+function lengthFlags({ sampling, times, correlation, record }: StationMaterial): Flag[] {
+  const flags: Flag[] = [];
+  if (sampling.integralTimes !== null && sampling.integralTimes < shortestRecord) {
+    const length = sampling.integralTimes;
+    const text = `The record is ${length.toFixed(0)} integral times long: an interval needs ${shortestRecord}.`;
+    flags.push({ code: "short-record", text, value: length });
+  }
+  if (correlation !== null && times.tauStar === null) {
+    const text =
+      "The correlation of u does not fall to zero within the lags formed: only a lower bound of the integral time is known.";
+    flags.push({ code: "no-zero-crossing", text });
+  }
+  if (times.scale !== null && times.scale < record.step) {
+    const text =
+      "Successive samples are not correlated: the signal is noise, or sampled too seldom for any scale.";
+    flags.push({ code: "resolution", text, value: times.scale / record.step });
+  }
+  return flags;
+}
+
+function componentFlags({ record, settings }: StationMaterial): Flag[] {
+  const flags: Flag[] = [];
+  if (record.components.length === 1) {
+    flags.push({ code: "isotropy-assumed", text: "u alone was measured: isotropy is assumed, not tested." });
+  }
+  if (record.components.length === 2) {
+    const [, known] = record.components;
+    const other = known === "v" ? "w" : "v";
+    flags.push({
+      code: "axisymmetry-assumed",
+      text: `${other} was not measured and is taken like ${known}.`,
+    });
+  }
+  if (settings.kinematicViscosity === null) {
+    const text =
+      "No kinematic viscosity is given: dissipation, Kolmogorov scales and Reynolds numbers are missing.";
+    flags.push({ code: "no-viscosity", text });
+  }
+  if (settings.kind === "les") {
+    const text = "Large-eddy simulation: scales from gradients are those of the resolved motion.";
+    flags.push({ code: "resolved-scales", text });
+  }
+  return flags;
+}
+
+function taylorFlags({ record, settings }: StationMaterial, { taylorFactor }: FlagFacts): Flag[] {
+  const flags: Flag[] = [];
+  if (settings.taylorCorrection && taylorFactor - 1 > doubtfulCorrection) {
+    const percent = (100 * (taylorFactor - 1)).toFixed(0);
+    const text = `Taylor's hypothesis makes the gradient too large by ${percent} %: corrected, but doubtful at this intensity.`;
+    flags.push({ code: "taylor-doubtful", text, value: taylorFactor });
+  }
+  const lowest = Math.min(...record.parts.map((part) => part.lowestSpeed));
+  if (lowest <= 0) {
+    const text =
+      "The flow reverses at times: Taylor's hypothesis does not hold, and lengths along x are doubtful.";
+    flags.push({ code: "reversed-flow", text, value: lowest });
+  }
+  return flags;
+}
+
+function spectrumFlags({ gradients, spectra, settings }: StationMaterial, facts: FlagFacts): Flag[] {
+  const flags: Flag[] = [];
+  const cut = gradients.find(({ rule }) => rule.cut > 0);
+  if (cut !== undefined) {
+    const percent = (100 * cut.rule.shareBeyond).toPrecision(2);
+    const text = `The spectrum of ${cut.name} ends in noise: it is cut there, and some ${percent} % of the gradient lie beyond.`;
+    flags.push({ code: "noise-floor", text, value: cut.rule.shareBeyond });
+  }
+  const rising = gradients.find(({ rule }) => spectra !== null && rule.slope > risingSlope(spectra));
+  if (rising !== undefined) {
+    const text = `The spectrum of ${rising.name} rises towards the highest frequency: energy from beyond it may be folded in.`;
+    flags.push({ code: "aliasing", text, value: rising.rule.slope });
+  }
+  if (facts.k1max_eta !== null && facts.k1max_eta < resolved) {
+    const text = `The highest usable wavenumber times eta is ${facts.k1max_eta.toPrecision(2)}: lambda and eta are upper bounds, the dissipation is a lower one.`;
+    flags.push({ code: "resolution", text, value: facts.k1max_eta });
+  }
+  const sensor = settings.sensorLength;
+  if (sensor !== null && facts.eta.value !== null && sensor > longSensor * facts.eta.value) {
+    const ratio = sensor / facts.eta.value;
+    const text = `The sensor is ${ratio.toPrecision(2)} eta long and averages over the smallest scales.`;
+    flags.push({ code: "sensor-length", text, value: ratio });
+  }
+  return flags;
+}
+
+/** A slope beyond which a flat end is not to be had by chance: 0.1 and three standard errors. */
+function risingSlope({ size, segments }: { size: number; segments: number }): number {
+  const bins = size / 6;
+  const spread = 0.117;
+  return 0.1 + (3 * Math.sqrt(38 / (36 * segments * bins))) / spread;
+}
+
+function joinFlags({ record, times }: StationMaterial): Flag[] {
+  if (record.parts.length < 2) return [];
+  const flags: Flag[] = [];
+  if (record.spectral.length > 0 && record.spectral.length < record.parts.length) {
+    const text = `${record.parts.length - record.spectral.length} of ${record.parts.length} records have another or an unequal time step: they count for the moments only.`;
+    flags.push({ code: "probes-joined", text, value: record.spectral.length });
+  }
+  const p = times.scale === null ? 1 : homogeneity(record.parts, times.scale);
+  if (p < 0.01) {
+    const text =
+      "The means of the records at this x differ by more than their sampling errors: the flow is not homogeneous across the stream.";
+    flags.push({ code: "inhomogeneous", text, value: p });
+  }
+  return flags;
+}
+
+/** Probability that means of u as different as these come from one flow; se² = 2 uu T_int/T each. */
+function homogeneity(parts: StationMaterial["record"]["parts"], scale: number): number {
+  const means = parts.map((part) => {
+    const whole = wholeMoments(part);
+    const variance = whole[1 + part.components.length] / whole[0];
+    return { mean: part.plan.reference[0] + whole[1], weight: part.duration / (2 * variance * scale) };
+  });
+  const total = means.reduce((sum, { weight }) => sum + weight, 0);
+  const centre = means.reduce((sum, { mean, weight }) => sum + mean * weight, 0) / total;
+  const chi2 = means.reduce((sum, { mean, weight }) => sum + weight * (mean - centre) ** 2, 0);
+  return chiSquareTail(chi2, parts.length - 1);
+}

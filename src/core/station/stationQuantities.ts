@@ -1,0 +1,116 @@
+import { bare, isEstimate, missing, type Quantity, type StandardError } from "../quantity.ts";
+import type { ReduceSettings } from "../stationResult.ts";
+import { dissipationFromInertialRange } from "./inertialRange.ts";
+import type { IntegralTimes } from "./integralTimes.ts";
+import type { JoinedCorrelation } from "./joinCorrelations.ts";
+import type { JoinedRecord } from "./joinParts.ts";
+import type { JoinedSpectra } from "./joinSpectra.ts";
+import type { Sampling } from "./sampling.ts";
+import { joinedError, type Replicates, valueError, valueQuantity, withError } from "./stationErrors.ts";
+import type { ComponentGradient } from "./stationGradients.ts";
+import { type ValueName, valueScales } from "./stationValues.ts";
+import { dissipationFromStructure } from "./structureDissipation.ts";
+import { areaUpTo } from "./zeroCrossing.ts";
+
+/** What the quantities of a station are made from. */
+export interface StationMaterial {
+  readonly record: JoinedRecord;
+  readonly correlation: JoinedCorrelation | null;
+  readonly spectra: JoinedSpectra | null;
+  readonly times: IntegralTimes;
+  readonly gradients: readonly ComponentGradient[];
+  readonly sampling: Sampling;
+  readonly all: Replicates;
+  readonly settings: ReduceSettings;
+}
+
+/** Every value with its interval, or the reason why it is missing. */
+export function valueQuantities(material: StationMaterial): Record<ValueName, Quantity> {
+  const names = Object.keys(valueScales) as ValueName[];
+  const entries = names.map((name) => [name, valueQuantity(name, material.all, absence(name, material))]);
+  return Object.fromEntries(entries);
+}
+
+const needsViscosity = /epsilon|eta$|Re_|lambda_gradient/;
+const needsSpectrum = /gradient|epsilon|lambda|eta|S_dudx|K_/;
+const lateralOf = /^(?:isotropy_u|skewness_|flatness_|gradient_|K_)?([vw])$|^u?([vw])w?$|^([vw])\3$/;
+
+/** Why a value is not to be had from these sums. */
+function absence(name: ValueName, { record, settings, spectra, all }: StationMaterial): string {
+  const found = lateralOf.exec(name);
+  const letters = name === "vw" ? ["v", "w"] : [found?.[1] ?? found?.[2] ?? found?.[3] ?? "u"];
+  const lacking = letters.find((letter) => !record.components.some((own) => own === letter));
+  if (lacking !== undefined) return `${lacking} was not measured`;
+  if (needsViscosity.test(name) && settings.kinematicViscosity === null)
+    return "no kinematic viscosity is given";
+  if (!(all.whole.U > 0))
+    return "the mean velocity is not positive, so time is not to be turned into distance";
+  if (needsSpectrum.test(name) && spectra === null)
+    return "the time steps are unequal, and a spectrum needs equal ones";
+  if (needsSpectrum.test(name)) return "the spectrum shows nothing above its noise floor";
+  return "the fluctuation is zero";
+}
+
+/** A scale found from the correlation, with the error that all of them share. */
+export function scaleQuantity(value: number | string, sampling: Sampling): Quantity {
+  if (typeof value === "string") return missing(value);
+  if (!(value > 0)) return missing("the correlation gives no positive scale");
+  return sampling.scaleError === null ? bare(value, sampling.why) : withError(value, sampling.scaleError);
+}
+
+/** A product of a value per integral time with the integral time: both errors count. */
+export function timesScale(
+  name: ValueName,
+  time: Quantity,
+  material: StationMaterial,
+  values: Record<ValueName, Quantity>,
+): Quantity {
+  const rest = values[name];
+  if (!isEstimate(rest)) return rest;
+  if (!isEstimate(time)) return time;
+  const product = rest.value * time.value;
+  const error: StandardError | null = valueError(name, material.all);
+  if (error === null || material.sampling.scaleError === null) return bare(product, material.sampling.why);
+  return withError(product, joinedError(error, material.sampling.scaleError));
+}
+
+/** Length scale of v or w: its correlation integrated to the first zero crossing of that of u, times U. */
+export function lateralLength(
+  name: "v" | "w",
+  { record, correlation, times, sampling }: StationMaterial,
+): Quantity {
+  const c = record.components.indexOf(name);
+  if (c < 0) return missing(`${name} was not measured`);
+  if (correlation === null) return missing("the time steps are unequal, so there is no correlation");
+  if (times.tauStar === null) return missing("the correlation of u does not fall to zero");
+  const covariance = correlation.covariance[c];
+  const area = (areaUpTo(covariance, times.tauStar / correlation.step) * correlation.step) / covariance[0];
+  return scaleQuantity(record.means[0] * area, sampling);
+}
+
+/** Dissipation by the routes that are no function of the blocks' sums: values without an interval. */
+export function otherDissipation(material: StationMaterial, values: Record<ValueName, Quantity>) {
+  const { record, spectra, correlation, times, all } = material;
+  const U = record.means[0];
+  const lambda = values.lambda.value;
+  const unequal = missing("the time steps are unequal, and a spectrum needs equal ones");
+  if (spectra === null || correlation === null || !(U > 0)) return { inertial: unequal, second: unequal };
+  const unit = (2 * Math.PI) / (U * spectra.size * spectra.step);
+  const k1 = Float64Array.from({ length: spectra.size / 2 }, (_, i) => (i + 1) * unit);
+  const E11 = spectra.density[0].subarray(1).map((value) => (value * U) / (2 * Math.PI));
+  const inertial = dissipationFromInertialRange(k1, E11, all.whole.Re_lambda);
+  const bound =
+    lambda === null || times.scale === null
+      ? null
+      : dissipationFromStructure(correlation, lambda / U, times.scale, U);
+  return {
+    inertial:
+      typeof inertial === "string"
+        ? missing(inertial)
+        : bare(inertial, "the fitted range gives no error of its own"),
+    second:
+      bound === null
+        ? missing("no lag lies between the Taylor and the integral scale")
+        : bare(bound, "a lower bound of the dissipation"),
+  };
+}

@@ -1,0 +1,171 @@
+import type { Component } from "./stationPart.ts";
+
+/** What a station's sums are turned into numbers with. */
+export interface ValueContext {
+  readonly components: readonly Component[];
+  readonly column: Readonly<Record<string, number>>;
+  /** Mean of each component in the whole record: the sums are about it. */
+  readonly means: readonly number[];
+  /** Time between samples, s. */
+  readonly step: number;
+  readonly viscosity: number | null;
+  readonly referenceSpeed: number | null;
+  readonly taylorCorrection: boolean;
+}
+
+/**
+ * Scale on which each value's error is formed: the logarithm for what is positive.
+ * The values are those of one station as functions of its sums; a name is a key of the result or of its routes.
+ */
+export const valueScales = {
+  U: "linear",
+  uu: "log",
+  vv: "log",
+  ww: "log",
+  uv: "linear",
+  uw: "linear",
+  vw: "linear",
+  k: "log",
+  Tu: "log",
+  isotropy_uv: "log",
+  isotropy_uw: "log",
+  gradient_u: "log",
+  gradient_v: "log",
+  gradient_w: "log",
+  gradient_difference2: "log",
+  gradient_difference4: "log",
+  "epsilon_u-gradient": "log",
+  epsilon_gradient: "log",
+  lambda: "log",
+  lambda_f: "log",
+  eta: "log",
+  Re_lambda: "log",
+  S_dudx: "linear",
+  skewness_u: "linear",
+  skewness_v: "linear",
+  skewness_w: "linear",
+  flatness_u: "log",
+  flatness_v: "log",
+  flatness_w: "log",
+  K_v: "log",
+  K_w: "log",
+  /** C_epsilon/T_int and Re_L/T_int: the integral time's own error is added to theirs. */
+  C_epsilon_over_T: "log",
+  Re_L_over_T: "log",
+} as const;
+export type ValueName = keyof typeof valueScales;
+/** NaN: not to be had from these sums. It does not leave this room. */
+export type StationValues = Record<ValueName, number>;
+
+/**
+ * All values of a station from its sums. Components that were not measured are taken like the measured lateral
+ * one, and like u where there is none:
+ *     k = (uu + vv + ww)/2,  Tu = √(2k/3)/Uref,  gradient = <(du/dt)²>/U² over Taylor's factor,
+ *     epsilon = 3ν (g_u + g_v + g_w), 15ν g_u with u alone,  lambda = u'/√g_u,  eta = (ν³/epsilon)^¼
+ * @param sums  of any of the station's blocks, plain sums about the record's means
+ * @see   Pope (2000) §§5.4, 6.3, 6.5; Lumley (1965), Phys. Fluids 8, 1056, and Wyngaard & Clifford (1977),
+ *        J. Atmos. Sci. 34, 922, for the correction of Taylor's hypothesis
+ */
+export function stationValues(sums: Float64Array, context: ValueContext): StationValues {
+  const { column, components, viscosity, means } = context;
+  const sum = (name: string) => (column[name] === undefined ? Number.NaN : sums[column[name]] / sums[0]);
+  const shift = (name: Component) => sum(name);
+  const co = (a: Component, b: Component) => sum(a + b) - shift(a) * shift(b);
+  const U = means[0] + shift("u");
+  const [uu, vv, ww] = [co("u", "u"), co("v", "v"), co("w", "w")];
+  const [v2, w2] = lateral(uu, vv, ww);
+  const factor = taylorFactors(uu, v2, w2, U, context.taylorCorrection);
+  const [gu, gv, gw] = (["u", "v", "w"] as const).map((name, i) => sum(`rate_${name}`) / (U * U) / factor[i]);
+  const isotropic = components.length === 1;
+  const nu = viscosity ?? Number.NaN;
+  const [gv2, gw2] = lateral(2 * gu, gv, gw);
+  const epsilon = isotropic ? 15 * nu * gu : 3 * nu * (gu + gv2 + gw2);
+  const k = (uu + v2 + w2) / 2;
+  const rms = Math.sqrt(uu);
+  const lambda = rms / Math.sqrt(gu);
+  return {
+    U,
+    uu,
+    vv,
+    ww,
+    uv: co("u", "v"),
+    uw: co("u", "w"),
+    vw: co("v", "w"),
+    k,
+    Tu: Math.sqrt((2 * k) / 3) / (context.referenceSpeed ?? U),
+    isotropy_uv: Math.sqrt(uu / vv),
+    isotropy_uw: Math.sqrt(uu / ww),
+    gradient_u: gu,
+    gradient_v: gv,
+    gradient_w: gw,
+    ...differences(sums, context, U * U * factor[0]),
+    "epsilon_u-gradient": 15 * nu * gu,
+    epsilon_gradient: epsilon,
+    lambda,
+    lambda_f: Math.SQRT2 * lambda,
+    eta: (nu ** 3 / epsilon) ** 0.25,
+    Re_lambda: (rms * lambda) / nu,
+    ...shapes(sum, { u: uu, v: vv, w: ww }),
+    K_v: (2 * gu) / gv,
+    K_w: (2 * gu) / gw,
+    C_epsilon_over_T: (epsilon * U) / rms ** 3,
+    Re_L_over_T: (rms * U) / nu,
+  };
+}
+
+/** Lateral values: each as measured, else like the other, else like the one given. */
+export function lateral(like: number, v: number, w: number): [number, number] {
+  if (Number.isNaN(v)) return Number.isNaN(w) ? [like, like] : [w, w];
+  return [v, Number.isNaN(w) ? v : w];
+}
+
+/** What Taylor's hypothesis makes the mean squares of du/dx, dv/dx, dw/dx too large by. */
+export function taylorFactors(
+  uu: number,
+  vv: number,
+  ww: number,
+  U: number,
+  corrected: boolean,
+): [number, number, number] {
+  if (!corrected) return [1, 1, 1];
+  const square = U * U;
+  return [
+    1 + (uu + 2 * vv + 2 * ww) / square,
+    1 + (uu + vv / 2 + ww) / square,
+    1 + (uu + vv + ww / 2) / square,
+  ];
+}
+
+/** Mean squares by differences, not corrected for what a difference loses, and the derivative skewness. */
+function differences(sums: Float64Array, { column, step }: ValueContext, speedSquared: number) {
+  const at = (name: string) => sums[column[name]];
+  const square = at("derivative_squared") / at("derivatives");
+  return {
+    gradient_difference2: at("difference2") / at("differences") / (step * step * speedSquared),
+    gradient_difference4: at("difference4") / at("differences") / (step * step * speedSquared),
+    // d/dx runs against d/dt
+    S_dudx: -(at("derivative_cubed") / at("derivatives")) / square ** 1.5,
+  };
+}
+
+/** Skewness and flatness about the mean of these sums. */
+function shapes(sum: (name: string) => number, variance: Record<Component, number>) {
+  const skewness = (name: Component) => {
+    const d = sum(name);
+    return (sum(name.repeat(3)) - 3 * d * sum(name.repeat(2)) + 2 * d ** 3) / variance[name] ** 1.5;
+  };
+  const flatness = (name: Component) => {
+    const d = sum(name);
+    const fourth =
+      sum(name.repeat(4)) - 4 * d * sum(name.repeat(3)) + 6 * d * d * sum(name.repeat(2)) - 3 * d ** 4;
+    return fourth / variance[name] ** 2;
+  };
+  return {
+    skewness_u: skewness("u"),
+    skewness_v: skewness("v"),
+    skewness_w: skewness("w"),
+    flatness_u: flatness("u"),
+    flatness_v: flatness("v"),
+    flatness_w: flatness("w"),
+  };
+}
