@@ -1,5 +1,5 @@
 import { readdirSync, statSync } from "node:fs";
-import { join } from "node:path";
+import { resolve } from "node:path";
 
 /**
  * Files on disk that a path of a sheet may mean, for the sheet to choose from.
@@ -14,11 +14,11 @@ export function candidateFiles(folder: string, path: string): string[] {
   for (const [i, part] of parts.entries()) {
     const last = i === parts.length - 1;
     found = found.flatMap((before) => {
-      const names = part.includes("*") ? listed(join(folder, before), last) : [part];
+      const names = part.includes("*") ? listed(resolve(folder, before), last) : [part];
       return names.map((name) => before + name + (last ? "" : "/"));
     });
   }
-  return found.filter((each) => isFile(join(folder, each))).sort();
+  return found.filter((each) => isFile(resolve(folder, each))).sort();
 }
 
 function listed(folder: string, files: boolean): string[] {

@@ -40,6 +40,8 @@ export interface FileReduction {
   readonly stations: StationResult[];
   readonly sources: SourceNote[];
   readonly flags: Flag[];
+  /** Probes of the file that had to be left out. */
+  readonly failures?: PlainFailure[];
 }
 
 export interface ArgueAsk {

@@ -49,7 +49,7 @@ function autoregressive(samples: number, keep: number, rms: number, random: Seed
   const series = new Float64Array(samples);
   let value = 0;
   for (let i = -100; i < samples; i++) {
-    value = keep * value + Math.sqrt(1 - keep * keep) * random();
+    value = keep * value + Math.sqrt(1 - keep * keep) * random.gaussian();
     if (i >= 0) series[i] = rms * value;
   }
   return series;

@@ -1,0 +1,56 @@
+import { spawnSync } from "node:child_process";
+import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join, resolve } from "node:path";
+import { build } from "vite";
+
+const top = resolve(import.meta.dirname, "../..");
+
+export interface Ended {
+  readonly code: number | null;
+  readonly stdout: string;
+  readonly stderr: string;
+}
+
+/** The batch command, built from the sources as they are now, away from the one that users run. */
+export interface BuiltBatch {
+  /** thread.js beside main.js: what an engine on threads is started with. */
+  readonly thread: URL;
+  run(args: readonly string[], from: string, env?: Readonly<Record<string, string>>): Ended;
+  remove(): void;
+}
+
+export async function buildBatch(): Promise<BuiltBatch> {
+  const folder = mkdtempSync(join(tmpdir(), "waneline-built-"));
+  writeFileSync(join(folder, "package.json"), '{ "type": "module" }');
+  await build({
+    configFile: join(top, "vite.config.ts"),
+    mode: "batch",
+    logLevel: "error",
+    build: { outDir: join(folder, "dist"), emptyOutDir: true },
+  });
+  const main = join(folder, "dist/main.js");
+  return {
+    thread: new URL(`file://${join(folder, "dist/thread.js")}`),
+    run: (args, from, env = {}) => ended("node", [main, ...args], from, env),
+    remove: () => rmSync(folder, { recursive: true }),
+  };
+}
+
+/** As a user calls it: through npm, from any folder. Uses what `npm ci` has built. */
+export function runThroughNpm(args: readonly string[], from: string): Ended {
+  return ended("npm", ["run", "--silent", "--prefix", top, "batch", "--", ...args], from, {});
+}
+
+function ended(
+  command: string,
+  args: readonly string[],
+  from: string,
+  env: Readonly<Record<string, string>>,
+): Ended {
+  // npm has set INIT_CWD for the tests themselves
+  const { INIT_CWD: _own, ...inherited } = process.env;
+  const options = { cwd: from, env: { ...inherited, ...env }, encoding: "utf8" as const };
+  const { status, stdout, stderr } = spawnSync(command, args, options);
+  return { code: status, stdout, stderr };
+}
