@@ -1,0 +1,13 @@
+import type { Config } from "plotly.js";
+
+/** No tools over a figure, no resizing of its own, and no address that data could be sent to. */
+export const plotConfig: Partial<Config> & { showSendToCloud: false } = {
+  responsive: false,
+  displayModeBar: false,
+  displaylogo: false,
+  scrollZoom: false,
+  doubleClick: false,
+  showTips: false,
+  showSendToCloud: false,
+  plotlyServerURL: "",
+};
