@@ -41,6 +41,8 @@ export interface PowerLaw {
   readonly covariance: readonly number[];
   /** Student's t (or the normal's) 97.5 % point that belongs to the covariance. */
   readonly quantile: number;
+  /** Degrees of freedom behind it; null: the normal's. */
+  readonly freedom?: number | null;
 }
 
 /** The decay of one case. Keys are those of the results file, to the letter; the rest is for the page. */

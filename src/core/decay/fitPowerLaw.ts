@@ -23,6 +23,8 @@ export interface PowerLawFit {
   readonly standardError: { readonly A: number; readonly x0: number; readonly n: number } | null;
   /** Of (ln A, x0, n), row-major 3 × 3. */
   readonly covariance: readonly number[] | null;
+  /** The same for weighted residuals of variance one. */
+  readonly unitCovariance: readonly number[] | null;
   /** Of n and x0; null where either is held. */
   readonly correlation: number | null;
   /** Sum of squared residuals: chi-square where errors are known. */
@@ -80,6 +82,7 @@ export function fitPowerLaw(data: PowerLawData, options: Partial<PowerLawOptions
     n,
     length: problem.length,
     ...errorsOf(covariance, A),
+    unitCovariance: unit,
     residualSum: sum,
     freedom,
     errorsKnown: problem.errorsKnown,

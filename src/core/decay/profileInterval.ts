@@ -69,8 +69,7 @@ interface Path {
 
 function pathOf(fit: PowerLawFit, parameter: "n" | "x0" | "A", root: number): Path {
   const { problem, law, held, n } = fit;
-  const unit = fit.variance > 0 ? root / Math.sqrt(fit.variance) : root;
-  const error = (at: number) => Math.sqrt(Math.max(fit.covariance?.[at] ?? 0, 0)) * unit;
+  const error = (at: number) => Math.sqrt(Math.max(fit.unitCovariance?.[at] ?? 0, 0)) * root;
   const least = (start: CentredLaw, fixed: Partial<Held>) =>
     minimiseLaw(problem, start, { ...held, ...fixed }, innerTolerance).sum;
   const within = (kappa: number) =>

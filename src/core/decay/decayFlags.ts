@@ -1,0 +1,113 @@
+import type { DecayResult, DecaySettings } from "../decayResult.ts";
+import type { Flag } from "../flag.ts";
+import { isEstimate } from "../quantity.ts";
+import type { StationResult } from "../stationResult.ts";
+import type { ChosenWindow } from "./chooseWindow.ts";
+
+/** Below this ratio of the last x - x0 to the first, n and x0 are hardly told apart. */
+const shortSpan = 4;
+const fewStations = 5;
+/** Share by which U may vary before the time of flight is the better coordinate. */
+const steadySpeed = 0.01;
+
+/** All doubts about one case's decay, each with its figure. */
+export function decayFlags(
+  decay: DecayResult,
+  window: ChosenWindow,
+  used: readonly StationResult[],
+  settings: DecaySettings,
+): Flag[] {
+  return [
+    ...aboutData(decay, used, settings),
+    ...("refused" in window.fitted
+      ? [{ code: "law-refused" as const, text: `No law is fitted: ${window.fitted.refused}.` }]
+      : aboutLaw(decay, window, settings)),
+  ];
+}
+
+function aboutData(
+  { assumption, weights, windowChosen }: DecayResult,
+  used: readonly StationResult[],
+  settings: DecaySettings,
+): Flag[] {
+  const flags: Flag[] = [];
+  if (assumption === "isotropic")
+    flags.push({ code: "isotropy-assumed", text: "Only u was measured: isotropy is assumed, not tested." });
+  if (assumption === "axisymmetric")
+    flags.push({
+      code: "axisymmetry-assumed",
+      text: "One lateral component was measured: the other is taken as like it.",
+    });
+  if (weights === "equal" && (settings.weights === "sampling" || windowChosen === "auto"))
+    flags.push({
+      code: "equal-weights",
+      text:
+        settings.weights === "sampling"
+          ? "Not all stations carry a sampling error: all weigh alike, and the scatter alone makes the intervals."
+          : "All stations weigh alike: nothing tells an automatic window which of them leave the law.",
+    });
+  const speeds = used.flatMap(({ U }) => (isEstimate(U) ? [U.value] : []));
+  if (speeds.length > 1 && settings.along === "x") {
+    const mean = speeds.reduce((sum, speed) => sum + speed, 0) / speeds.length;
+    const share = (Math.max(...speeds) - Math.min(...speeds)) / Math.abs(mean);
+    if (share > steadySpeed)
+      flags.push({
+        code: "u-varies",
+        text: `U varies by ${(100 * share).toFixed(1)} % along the window: x and time of flight differ.`,
+        value: share,
+      });
+  }
+  return flags;
+}
+
+function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySettings): Flag[] {
+  const { law, p, stations, chi2_reduced } = decay;
+  if (law === null) return [];
+  const flags: Flag[] = [];
+  if (stations < fewStations)
+    flags.push({
+      code: "few-stations",
+      text: `The law rests on ${stations} stations: hardly anything is left over to test it with.`,
+      value: stations,
+    });
+  const [first, last] = decay.window;
+  const ratio = (last - law.x0) / (first - law.x0);
+  if (ratio < shortSpan)
+    flags.push({
+      code: "short-span",
+      text: `The last x - x0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.`,
+      value: ratio,
+    });
+  if (settings.x0 !== null) flags.push(heldOrigin(law.n, first - law.x0, last - law.x0));
+  if (window.withoutPlateau)
+    flags.push({
+      code: "window-without-plateau",
+      text: "No run of five stations agrees with one law within its sampling errors.",
+    });
+  if (p !== null && p < 0.05)
+    flags.push({
+      code: "chi-square-fails",
+      text: `The scatter about the law exceeds the sampling errors (reduced chi-square ${(chi2_reduced ?? 0).toFixed(1)}): intervals are widened to it.`,
+      value: p,
+    });
+  if ([decay.n, decay.x0].some((quantity) => isEstimate(quantity) && isHalfOpen(quantity)))
+    flags.push({
+      code: "half-open",
+      text: "The interval of n or x0 has an open side: these stations do not bound it there.",
+    });
+  return flags;
+}
+
+function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string }): boolean {
+  return (why_low !== undefined) !== (why_high !== undefined);
+}
+
+/** Had the origin been held elsewhere: dn/dx0 = -n/(x_c - x0), x_c the geometric centre of the window. */
+function heldOrigin(n: number, first: number, last: number): Flag {
+  const slope = -n / Math.sqrt(first * last);
+  return {
+    code: "held-origin",
+    text: `The origin is held: were it held farther downstream by one unit of x, n would change by ${slope.toPrecision(2)}.`,
+    value: slope,
+  };
+}

@@ -1,0 +1,109 @@
+import type { DecaySettings } from "../decayResult.ts";
+import { bare, type Quantity } from "../quantity.ts";
+import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts";
+import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
+import { fQuantile } from "../signal/distributions/fQuantile.ts";
+import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
+import type { RawPoint } from "./decayPoints.ts";
+import { fitPowerLaw, type PowerLawFit } from "./fitPowerLaw.ts";
+import { profileInterval } from "./profileInterval.ts";
+
+/** A law fitted to the stations of one window, with all that is said given that window. */
+export interface WindowFit {
+  readonly fit: PowerLawFit;
+  /** Probability of a larger chi-square; null with equal weights. */
+  readonly p: number | null;
+  /** Whether the errors are told by the residuals: equal weights, or a chi-square that fails at 5 %. */
+  readonly scattered: boolean;
+  /** Variance of one weighted residual: 1 where errors are known. */
+  readonly variance: number;
+  /** Rise of the sum of squares at the ends of a 95 % interval. */
+  readonly drop: number;
+  /** 97.5 % point that belongs to the covariance. */
+  readonly quantile: number;
+}
+
+/** Why no law could be fitted. */
+export interface Refusal {
+  readonly refused: string;
+}
+
+const numerals = ["no station", "one station", "two stations", "three stations", "four stations"];
+/** Chi-square of one number at 95 %. */
+const oneNumber = chiSquareQuantile(0.95, 1);
+
+/**
+ * The law of one window, or why there is none.
+ * @param points   stations of the window, in order of x
+ * @param settings residuals, what is held, ell
+ */
+export function fitWindow(points: readonly RawPoint[], settings: DecaySettings): WindowFit | Refusal {
+  const tooFew = refusalOfCount(points, settings);
+  if (tooFew !== null) return { refused: tooFew };
+  const errors = points.map((point) => point.smoothedError).filter((error) => error !== null);
+  const fit = fitPowerLaw(
+    {
+      x: points.map((point) => point.x),
+      q: points.map((point) => point.q),
+      error: errors.length === points.length ? errors : null,
+    },
+    {
+      residuals: settings.residuals,
+      x0: settings.x0,
+      n: settings.n,
+      length: settings.referenceLength ?? 1,
+    },
+  );
+  if (fit.exponential)
+    return {
+      refused: "the stations in the window fall like an exponential: no finite virtual origin fits best",
+    };
+  if (!fit.converged || fit.covariance === null)
+    return { refused: "the stations in the window do not tell A, n and x0 apart" };
+  if (!(fit.n > 0)) return { refused: "the quantity does not fall along the window" };
+  const p = fit.errorsKnown ? chiSquareTail(fit.residualSum, fit.freedom) : null;
+  const scattered = p === null || p < 0.05;
+  const variance = scattered ? fit.residualSum / fit.freedom : 1;
+  return {
+    fit,
+    p,
+    scattered,
+    variance,
+    drop: scattered ? variance * fQuantile(0.95, 1, fit.freedom) : oneNumber,
+    quantile: studentQuantile(0.975, scattered ? fit.freedom : null),
+  };
+}
+
+/** The words of a refusal for too few stations; null where there are enough. */
+function refusalOfCount(points: readonly RawPoint[], { x0, n }: DecaySettings): string | null {
+  const needed = 4 - (x0 === null ? 0 : 1) - (n === null ? 0 : 1);
+  const places = new Set(points.map((point) => point.x)).size;
+  if (places >= needed) return null;
+  const lie = places === 1 ? "lies" : "lie";
+  const law =
+    x0 === null && n === null
+      ? "a law with a free virtual origin needs four"
+      : x0 === null
+        ? "a law with its exponent held needs three"
+        : n === null
+          ? "a law with its virtual origin held needs three"
+          : "a law with origin and exponent held needs two";
+  return `${numerals[places]} ${lie} in the window, and ${law}`;
+}
+
+/**
+ * One number of the law with its profile interval given the window.
+ * @returns n (1), x0 (unit of x) or A (unit of q); without an interval where it was held
+ */
+export function windowQuantity(
+  { fit, drop, variance, scattered }: WindowFit,
+  key: "n" | "x0" | "A",
+): Quantity {
+  const value = fit[key];
+  if (key !== "A" && fit.held[key] !== null) return bare(value, "held, not fitted");
+  const ends = profileInterval(fit, key, drop);
+  const at = { A: 0, x0: 4, n: 8 }[key];
+  const standard = Math.sqrt((fit.unitCovariance?.[at] ?? 0) * variance);
+  const scale: "log" | "linear" = key === "A" ? "log" : "linear";
+  return { value, ...ends, error: { standard, freedom: scattered ? fit.freedom : null, scale } };
+}

@@ -1,0 +1,115 @@
+import type { DecayResult, DecaySettings } from "../decayResult.ts";
+import { estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
+import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
+import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
+import type { StationResult } from "../stationResult.ts";
+import { decayQuantity, decayValue } from "./decayQuantity.ts";
+import { relativeError } from "./relativeError.ts";
+import { type StraightLine, straightLine } from "./straightLine.ts";
+
+type Route = DecayResult["lambda_route"];
+
+/** Rounds in which the errors of Lambda² are referred to the line itself. */
+const rounds = 3;
+
+/**
+ * Origin and exponent from the growth of the Taylor microscale, without the decay law: on it
+ *     Lambda² = 10 nu k/epsilon = (10 nu/(n U)) (x - x0)
+ * is a straight line whose zero is x0 and whose slope gives n. epsilon is that of the measured gradients alone.
+ * @param stations those of the window, in order of x
+ * @returns        n (1) and x0 (unit of x), x0's interval by Fieller's theorem; missing without viscosity, without U,
+ *                 or with fewer than three stations that carry a dissipation from gradients
+ * @see            Batchelor & Townsend (1948), Proc. R. Soc. A 193, 539; Fieller (1954), J. R. Statist. Soc. B 16, 175
+ */
+export function lambdaRoute(stations: readonly StationResult[], settings: DecaySettings): Route {
+  const { kinematicViscosity: nu } = settings;
+  if (nu === null) return both(missing("no kinematic viscosity is given"));
+  const what = decayQuantity(stations, "k");
+  const points = stations.flatMap((station) => {
+    const k = decayValue(station, what);
+    const { epsilon_gradient: epsilon } = station;
+    if (k === null || !isEstimate(epsilon) || !(epsilon.value > 0)) return [];
+    const [ofK, ofEpsilon] = [k.error, relativeError(epsilon)];
+    const error = ofK === null || ofEpsilon === null ? null : Math.hypot(ofK, ofEpsilon);
+    return [{ x: station.x, square: (10 * nu * k.value) / epsilon.value, error }];
+  });
+  if (points.length < 3)
+    return both(
+      missing(
+        "fewer than three stations carry a dissipation from measured gradients; one that comes from the decay would argue in a circle",
+      ),
+    );
+  const U = meanSpeed(stations, settings);
+  if (U === null) return both(missing("no mean velocity at these stations"));
+  const x = points.map((point) => point.x);
+  const squares = points.map((point) => point.square);
+  const errors = points.map((point) => point.error).filter((error) => error !== null);
+  const line = relativeLine(x, squares, errors.length === points.length ? errors : null);
+  if (line === null || !(line.slope > 0)) return both(missing("Lambda² does not grow along these stations"));
+  const known = errors.length === points.length && chiSquareTail(line.sum, line.freedom) >= 0.05;
+  const variance = known ? 1 : line.sum / line.freedom;
+  const quantile = studentQuantile(0.975, known ? null : line.freedom);
+  return { n: exponent(line, (10 * nu) / U, quantile, variance), x0: zero(line, quantile, variance) };
+}
+
+const both = (quantity: Quantity): Route => ({ n: quantity, x0: quantity });
+
+function meanSpeed(stations: readonly StationResult[], { along }: DecaySettings): number | null {
+  if (along === "t") return 1;
+  const speeds = stations.flatMap(({ U }) => (isEstimate(U) && U.value > 0 ? [U.value] : []));
+  return speeds.length === 0 ? null : speeds.reduce((sum, speed) => sum + speed, 0) / speeds.length;
+}
+
+/** A line through values whose relative errors are known: the errors are taken of the line, not of its scatter. */
+function relativeLine(
+  x: readonly number[],
+  y: readonly number[],
+  errors: readonly number[] | null,
+): StraightLine | null {
+  if (errors === null) return straightLine(x, y, null);
+  let line = straightLine(
+    x,
+    y,
+    errors.map((error, i) => error * y[i]),
+  );
+  for (let round = 0; round < rounds && line !== null; round++) {
+    const { intercept, slope } = line;
+    const expected = x.map((at) => intercept + slope * at);
+    if (expected.some((value) => !(value > 0))) break;
+    line = straightLine(
+      x,
+      y,
+      errors.map((error, i) => error * expected[i]),
+    );
+  }
+  return line;
+}
+
+/** n = (10 nu/U)/slope; open above where a slope of zero lies within the interval. */
+function exponent(line: StraightLine, numerator: number, quantile: number, variance: number): Quantity {
+  const reach = quantile * Math.sqrt(variance * line.varianceOfSlope);
+  const { slope } = line;
+  const high = slope > reach ? numerator / (slope - reach) : null;
+  return {
+    value: numerator / slope,
+    low: numerator / (slope + reach),
+    high,
+    ...(high === null ? { why_high: "a Lambda² that does not grow at all is not excluded" } : {}),
+  };
+}
+
+/** Where the line is zero: all x0 for which |intercept + slope x0| is within its own error (Fieller). */
+function zero(line: StraightLine, quantile: number, variance: number): Quantity {
+  const { intercept, slope } = line;
+  const value = -intercept / slope;
+  const factor = quantile ** 2 * variance;
+  const a = slope ** 2 - factor * line.varianceOfSlope;
+  const half = intercept * slope - factor * line.covariance;
+  const c = intercept ** 2 - factor * line.varianceOfIntercept;
+  if (!(a > 0)) {
+    const why = "the slope of Lambda² is not told from zero: any origin fits";
+    return { value, low: null, high: null, why_low: why, why_high: why };
+  }
+  const root = Math.sqrt(Math.max(half ** 2 - a * c, 0));
+  return estimate(value, (-half - root) / a, (-half + root) / a);
+}
