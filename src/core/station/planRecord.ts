@@ -24,6 +24,7 @@ export const fewestSamples = 64;
 /** Most lags kept per block and component: what bounds the memory of a record. */
 const mostLags = 8192;
 const chunk = 4096;
+const firstLook = 1 << 17;
 
 /**
  * What a record's pilot decides for all of it: step, lags, segments, blocks.
@@ -90,17 +91,27 @@ function blockSize(count: number): number {
   return size;
 }
 
-/** Lags doubled until the zero crossing lies well inside: at two fifths of them or before. */
+/**
+ * Lags doubled until the zero crossing lies well inside: at two fifths of them or before. A first part of the
+ * pilot tells where to begin, so that all of it is seldom transformed more than once.
+ */
 function findLags(u: Float64Array): { limit: number; crossing: number | null; area: number } {
   const most = powerBelow(u.length / 2);
-  for (let limit = Math.min(256, most); ; limit *= 2) {
+  let limit = Math.min(256, most);
+  if (u.length > firstLook)
+    limit = doubleLags(u.subarray(0, firstLook), limit, powerBelow(firstLook / 4)).limit;
+  return doubleLags(u, limit, most);
+}
+
+function doubleLags(u: Float64Array, limit: number, most: number) {
+  for (; ; limit *= 2) {
     const products = startLagProducts(limit, chunk, 1);
     const row = new Float64Array(limit);
     products.add(u, 0, u.length);
     products.flush(row);
     const { at, area } = zeroCrossing(row);
     const inside = at !== null && (at + 2) * 2.5 <= limit;
-    if (inside || limit === most) return { limit, crossing: at, area: area / row[0] };
+    if (inside || limit >= most) return { limit, crossing: at, area: area / row[0] };
   }
 }
 

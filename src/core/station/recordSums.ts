@@ -5,7 +5,7 @@ import { startEdges } from "../signal/edgeSums.ts";
 import { fillJoint, jointLayout } from "../signal/jointMoments.ts";
 import { startLagProducts } from "../signal/lagProducts.ts";
 import { mergeJoint } from "../signal/mergeJoint.ts";
-import { startWelch } from "../signal/welch.ts";
+import { startWelch, type WelchSums } from "../signal/welch.ts";
 import { startBandSums } from "./bandSums.ts";
 import { blockFields, differenceFields } from "./blockFields.ts";
 import { addDifferences } from "./differenceSums.ts";
@@ -46,7 +46,9 @@ export function startRecordSums(
   const moments = momentSeries(components.length);
   const spectral = plan.weighted ? null : startSpectral(plan, components.length);
   const blocks = startBlocks(plan.blockSamples, [moments, ...(spectral?.series ?? [])]);
-  const short = spectral?.bands?.open(blocks) ?? null;
+  const short = spectral?.bands.open(blocks) ?? null;
+  // where one length serves both, a segment is transformed once
+  const welch = spectral?.long ?? short ?? [];
   let samples = 0;
 
   function take(columns: readonly Float64Array[], count: number, weights: Float64Array | null): void {
@@ -74,8 +76,8 @@ export function startRecordSums(
       spectral.lags[c].add(columns[c], history, to);
       spectral.lags[c].flush(blockRow(spectral.products[c], blocks.current));
       spectral.edges[c].add(columns[c], history, to);
-      spectral.welch[c].add(columns[c], history, to);
-      if (short) short[c].add(columns[c], history, to);
+      welch[c].add(columns[c], history, to);
+      if (short && welch !== short) short[c].add(columns[c], history, to);
     }
     samples += count;
   }
@@ -99,7 +101,7 @@ export function startRecordSums(
       },
     };
     if (!spectral) return { ...common, lags: null, spectrum: null, bands: null };
-    return { ...common, ...spectral.tables(rows) };
+    return { ...common, ...spectral.tables(rows, welch) };
   }
   return { take, part };
 }
@@ -124,9 +126,12 @@ function startSpectral(plan: RecordPlan, components: number) {
   const products = each(() => additiveSeries(count));
   const edges = each(() => startEdges(plan.lagLimit, plan.lagStride));
   const bands = startBandSums(Math.min(plan.segment, Math.max(plan.blockSamples, 256)), components);
-  const welch = each(() => startWelch(plan.segment));
+  const long = bands.size === plan.segment ? null : each(() => startWelch(plan.segment));
   const series = [...products, bands.counts, ...bands.sums];
-  const tables = (rows: number): Pick<StationPart, "lags" | "spectrum" | "bands"> => ({
+  const tables = (
+    rows: number,
+    welch: readonly WelchSums[],
+  ): Pick<StationPart, "lags" | "spectrum" | "bands"> => ({
     lags: {
       count,
       stride: plan.lagStride,
@@ -147,7 +152,7 @@ function startSpectral(plan: RecordPlan, components: number) {
       sums: bands.sums.map((one) => trimmed(one, rows)),
     },
   });
-  return { lags, products, edges, bands, welch, series, tables };
+  return { lags, products, edges, bands, long, series, tables };
 }
 
 function trimmed(series: BlockSeries, rows: number): Float64Array {
