@@ -1,5 +1,5 @@
 import { spawnSync } from "node:child_process";
-import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
+import { existsSync, mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join, resolve } from "node:path";
 import { build } from "vite";
@@ -23,12 +23,7 @@ export interface BuiltBatch {
 export async function buildBatch(): Promise<BuiltBatch> {
   const folder = mkdtempSync(join(tmpdir(), "waneline-built-"));
   writeFileSync(join(folder, "package.json"), '{ "type": "module" }');
-  await build({
-    configFile: join(top, "vite.config.ts"),
-    mode: "batch",
-    logLevel: "error",
-    build: { outDir: join(folder, "dist"), emptyOutDir: true },
-  });
+  await buildInto(join(folder, "dist"));
   const main = join(folder, "dist/main.js");
   return {
     thread: new URL(`file://${join(folder, "dist/thread.js")}`),
@@ -37,8 +32,14 @@ export async function buildBatch(): Promise<BuiltBatch> {
   };
 }
 
-/** As a user calls it: through npm, from any folder. Uses what `npm ci` has built. */
-export function runThroughNpm(args: readonly string[], from: string): Ended {
+async function buildInto(outDir: string) {
+  const configFile = join(top, "vite.config.ts");
+  await build({ configFile, mode: "batch", logLevel: "error", build: { outDir, emptyOutDir: true } });
+}
+
+/** As a user calls it: through npm, from any folder, with what `npm ci` has built. */
+export async function runThroughNpm(args: readonly string[], from: string): Promise<Ended> {
+  if (!existsSync(join(top, "dist-batch/main.js"))) await buildInto(join(top, "dist-batch"));
   return ended("npm", ["run", "--silent", "--prefix", top, "batch", "--", ...args], from, {});
 }
 
