@@ -54,7 +54,13 @@ export default {
       from: { path: "^src/engine/", pathNot: "^src/engine/thread[A-Za-z]*\\.ts$" },
       to: { dependencyTypes: ["core"] },
     },
-    room("figures", ["core"]),
+    room("figures", ["core"], ["plotly\\.js", "plotly.js-cartesian-dist-min", "@types/plotly.js"]),
+    {
+      name: "figures-know-plotly-by-type",
+      severity: "error",
+      from: { path: "^src/figures/" },
+      to: { path: "plotly", dependencyTypesNot: ["type-only"] },
+    },
     room("export", ["core", "figures"], ["fflate"]),
     room("batch", ["core", "engine", "sheet", "export"], ["node:"]),
     room(
