@@ -117,7 +117,8 @@ function misfit(line: Line, dialect: Dialect): boolean {
   return row.every((field) => !isNumber(field, dialect)) && knownRoles(row) > 1;
 }
 
-function knownRoles(names: readonly string[]): number {
+/** How many of some names are columns of the trade. */
+export function knownRoles(names: readonly string[]): number {
   const { roles, clashes } = recogniseColumns(names.map(parseHeading), null);
   return roles.filter((role) => role !== null).length + clashes.length;
 }

@@ -7,7 +7,7 @@ import { recognisePosition, tidyLength } from "./recognisePosition.ts";
 import { recogniseStep } from "./recogniseStep.ts";
 import { surveyTable, type TableForm } from "./surveyTable.ts";
 import { recogniseOrOrder, takeColumns } from "./takeColumns.ts";
-import { unitOf } from "./unitFactors.ts";
+import { inCaseUnit, type Scale, unitOf, unscaled } from "./unitFactors.ts";
 
 const shownRows = 8;
 const recognisedAll = { separator: null, decimal: null, heading: null };
@@ -29,10 +29,10 @@ export async function previewFile(
   const seen = recogniseOrOrder(form, form.headings, layout, false);
   const units = settings.units ?? "SI";
   const columns = previewColumns(form, seen, settings);
-  const factorOf = (role: Role) => {
+  const columnOf = (role: Role) => {
     const at = columns.find((column) => column.role === role);
     const unit = at?.unit == null ? null : unitOf(at.unit);
-    return { index: at ? at.number - 1 : -1, factor: units === "SI" ? (unit?.factor ?? 1) : 1 };
+    return { index: at ? at.number - 1 : -1, scale: (units === "SI" ? unit?.scale : null) ?? unscaled };
   };
   return {
     file: source.name,
@@ -44,8 +44,8 @@ export async function previewFile(
     columns,
     firstRows: form.headRows.slice(0, shownRows),
     comments: form.comments,
-    position: positionOf(form, factorOf("x"), settings, units),
-    step: stepOf(form, factorOf, settings.step ?? null, units),
+    position: positionOf(form, columnOf("x"), settings, units),
+    step: stepOf(form, columnOf, settings.step ?? null, units),
     estimatedRows: estimateRows(head, form),
     ...(seen.clashes.length > 0 ? { clashes: seen.clashes } : {}),
   };
@@ -78,7 +78,7 @@ function chosenRoles(
 
 interface Column {
   readonly index: number;
-  readonly factor: number;
+  readonly scale: Scale;
 }
 
 function positionOf(
@@ -103,24 +103,24 @@ function positionOf(
 /** Between the first two rows of one place: in a table written time by time the rows between are other probes'. */
 function stepOf(
   form: TableForm,
-  factorOf: (role: Role) => Column,
+  columnOf: (role: Role) => Column,
   given: number | null,
   units: ReadSettings["units"],
 ): number | null {
-  const time = factorOf("t");
+  const time = columnOf("t");
   if (time.index < 0) return given ?? recogniseStep(form.comments, units);
-  const places = (["x", "y", "z"] as const).map(factorOf).filter(({ index }) => index >= 0);
+  const places = (["x", "y", "z"] as const).map(columnOf).filter(({ index }) => index >= 0);
   const [first, ...rest] = form.headRows;
   const second = rest.find((row) => places.every(({ index }) => row[index] === first?.[index]));
   if (first === undefined || second === undefined) return null;
   const [from, to] = [first, second].map((row) => parseNumber(row[time.index] ?? "", form.decimal));
-  const step = tidyLength((to - from) * time.factor);
+  const step = tidyLength(inCaseUnit(to - from, time.scale));
   return Number.isFinite(step) ? step : null;
 }
 
-function numbersOf(form: TableForm, { index, factor }: Column): number[] {
+function numbersOf(form: TableForm, { index, scale }: Column): number[] {
   return form.headRows
-    .map((row) => parseNumber(row[index] ?? "", form.decimal) * factor)
+    .map((row) => inCaseUnit(parseNumber(row[index] ?? "", form.decimal), scale))
     .filter((value) => !Number.isNaN(value));
 }
 

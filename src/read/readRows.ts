@@ -6,6 +6,7 @@ import { badField, missingField, raggedRow } from "./rowFailures.ts";
 import { splitRows } from "./splitRows.ts";
 import type { TableForm } from "./surveyTable.ts";
 import type { TakenColumn } from "./takeColumns.ts";
+import { inCaseUnit } from "./unitFactors.ts";
 import { wholeLines } from "./wholeLines.ts";
 
 /** What is read of each row. A column that is `sparse` may be empty in a row: its number is NaN there. */
@@ -93,7 +94,7 @@ class RowReader {
     for (let i = 0; i < columns.length; i++) {
       const value = parseNumber(fields[columns[i].index], this.form.decimal);
       if (Number.isNaN(value) || (this.noNumber.length > 0 && this.noNumber.includes(value))) return false;
-      this.values[i] = value * columns[i].factor;
+      this.values[i] = (value * columns[i].times) / columns[i].per;
     }
     return true;
   }
@@ -133,12 +134,12 @@ class RowReader {
   private problem(fields: readonly string[], line: number) {
     const { columns, sparse } = this.plan;
     for (let i = 0; i < columns.length; i++) {
-      const { index, factor } = columns[i];
+      const { index } = columns[i];
       const value = parseNumber(fields[index], this.form.decimal);
       const gap = this.noValue.has(fields[index].trim().toLowerCase()) || this.noNumber.includes(value);
       if (gap && !sparse[i]) return missingField(this.form, columns[i], fields[index], line);
       if (!gap && Number.isNaN(value)) return badField(this.form, columns[i], fields[index], line);
-      this.values[i] = gap ? Number.NaN : value * factor;
+      this.values[i] = gap ? Number.NaN : inCaseUnit(value, columns[i]);
     }
     return null;
   }

@@ -1,5 +1,5 @@
 import type { PositionSource, ReadSettings } from "../core/records.ts";
-import { unitOf } from "./unitFactors.ts";
+import { inCaseUnit, unitOf } from "./unitFactors.ts";
 
 /** A position that was found outside the columns, in the unit of the case. */
 export interface FoundPosition {
@@ -59,11 +59,11 @@ function fromComment(comment: string, units: ReadSettings["units"]): FoundPositi
   }
   const found = spoken.exec(comment);
   if (!found) return null;
-  const x = inCaseUnit(Number(found[2]), found[3] ?? found[4], units);
+  const x = placed(Number(found[2]), found[3] ?? found[4], units);
   if (x === null) return null;
   const [y, z] = ["y", "z"].map((axis) => {
     const [, value, unit] = across(axis).exec(comment) ?? [];
-    return value === undefined ? null : inCaseUnit(Number(value), unit, units);
+    return value === undefined ? null : placed(Number(value), unit, units);
   });
   return { x, y, z, source: "comment", matched: found[1].trim(), rule: "a comment line" };
 }
@@ -76,21 +76,21 @@ function fromName(part: string, units: ReadSettings["units"]): FoundPosition | n
   const value = Number(digits.replace("p", "."));
   const place = { y: null, z: null, source: "name", matched } as const;
   if (unit !== undefined) {
-    const x = inCaseUnit(value, unit, units);
+    const x = placed(value, unit, units);
     return x === null ? null : { x, ...place, rule: `after x in the name, in ${unit}` };
   }
   if (/[.p]/.test(digits) || units === "nondimensional") {
     return { x: value, ...place, rule: "after x in the name, in the unit of the case" };
   }
   if (digits.replace(/^[+-]/, "").length < 3) return null;
-  return { x: tidyLength(value * 1e-3), ...place, rule: "after x in the name, in mm" };
+  return { x: tidyLength(value / 1000), ...place, rule: "after x in the name, in mm" };
 }
 
-function inCaseUnit(value: number, text: string | undefined, units: ReadSettings["units"]): number | null {
+function placed(value: number, text: string | undefined, units: ReadSettings["units"]): number | null {
   if (text === undefined) return value;
   const unit = unitOf(text);
   if (unit?.kind !== "length") return unit === null ? value : null;
-  return units === "SI" ? tidyLength(value * unit.factor) : null;
+  return units === "SI" ? tidyLength(inCaseUnit(value, unit.scale)) : null;
 }
 
 /** 350 mm is 0.35 m and not 0.35000000000000003 m: positions are printed and compared. */

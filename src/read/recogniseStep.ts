@@ -1,5 +1,5 @@
 import type { ReadSettings } from "../core/records.ts";
-import { unitOf } from "./unitFactors.ts";
+import { inCaseUnit, unitOf, unscaled } from "./unitFactors.ts";
 
 const number = "([+-]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][+-]?\\d+)?)";
 const unit = "\\s*(?:\\[([^\\]]+)\\]|([a-zA-Z\u00b5\u03bc]+))?";
@@ -34,7 +34,7 @@ function fromTold(
 ): number | null {
   if (!found) return null;
   const known = unitOf(found[2] ?? found[3] ?? "");
-  const factor = known?.kind === kind && units === "SI" ? known.factor : 1;
-  const value = Number(found[1]) * factor;
+  const scale = known?.kind === kind && units === "SI" ? known.scale : unscaled;
+  const value = inCaseUnit(Number(found[1]), scale);
   return value > 0 ? value : null;
 }

@@ -1,7 +1,7 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { ReadSettings } from "../core/records.ts";
 import { commentText } from "./commentLine.ts";
-import { findHeading } from "./findHeading.ts";
+import { findHeading, knownRoles } from "./findHeading.ts";
 import type { Heading } from "./heading.ts";
 import type { Head } from "./readHead.ts";
 import { type Dialect, recogniseDialect, withoutEnd } from "./recogniseDialect.ts";
@@ -38,7 +38,7 @@ export function surveyTable(head: Head, settings: FormSettings): TableForm {
     line.trim() === "" || commentText(line, settings.separator) !== null || i < after ? [] : [line],
   );
   const dialects = recogniseDialect(written.slice(-sniffed), settings);
-  if (dialects.length === 0) throw withoutNumbers(head);
+  if (dialects.length === 0) throw wordsForNumbers(head) ?? withoutNumbers(head);
   const near = dialects.filter(({ share }) => share > dialects[0].share - 0.02);
   const found = near.map((dialect) => ({ dialect, ...findHeading(head, dialect, settings.heading) }));
   const best = found.find(({ heading }) => heading !== null) ?? found[0];
@@ -106,6 +106,32 @@ function mismatch(head: Head, at: { line: number; names: number }, dialect: Dial
       remedy: "Mend the heading, or say which line is the heading and which columns are meant.",
     },
     { file: head.file, line: at.line },
+  );
+}
+
+/** Lines under a heading of the trade, and not one number in them. */
+function wordsForNumbers(head: Head): ReductionFailure | null {
+  const written = head.lines.flatMap((line, i) =>
+    line.trim() === "" || commentText(line, null) !== null ? [] : [{ line, at: i + 1 }],
+  );
+  for (const separator of [",", ";", "\t", " "] as const) {
+    const heading = written.findIndex(({ line }) => knownRoles(splitRows(line, separator)[0]) > 1);
+    const row = heading < 0 ? undefined : written[heading + 1];
+    if (row) return noNumber(head.file, splitRows(row.line, separator)[0][0], row.at);
+  }
+  return null;
+}
+
+function noNumber(file: string, found: string, line: number): ReductionFailure {
+  return new ReductionFailure(
+    "not-a-number",
+    {
+      message: "No row holds a number",
+      found: found.trim().slice(0, 40),
+      expected: "a number",
+      remedy: "Export the record again, or leave the file out.",
+    },
+    { file, line, column: 1 },
   );
 }
 

@@ -3,14 +3,13 @@ import type { ColumnChoice, Layout, ReadSettings, Role } from "../core/records.t
 import type { Heading } from "./heading.ts";
 import { recogniseColumns } from "./recogniseColumns.ts";
 import type { TableForm } from "./surveyTable.ts";
-import { caseUnit, roleKind, unitOf } from "./unitFactors.ts";
+import { caseUnit, roleKind, type Scale, unitOf, unscaled } from "./unitFactors.ts";
 
-/** A column that is read: where it stands, what it is, and what its numbers are multiplied with. */
-export interface TakenColumn {
+/** A column that is read: where it stands, what it is, and how its numbers become those of the case. */
+export interface TakenColumn extends Scale {
   readonly role: Role;
   /** 0-based. */
   readonly index: number;
-  readonly factor: number;
 }
 type Choices = Pick<ReadSettings, "columns" | "units"> & { readonly layout: Layout | null };
 
@@ -40,7 +39,7 @@ export function takeColumns(form: TableForm, settings: Choices): TakenColumn[] {
   return [...chosen].map(([role, { index, unit }]) => ({
     role,
     index,
-    factor: factorOf(form, role, index, unit, settings.units),
+    ...scaleOf(form, role, index, unit, settings.units),
   }));
 }
 
@@ -86,19 +85,19 @@ function columnOf(form: TableForm, role: Role, from: string | number): number {
   throw noSuchColumn(form, role, `"${from}"`, form.headingLine > 0 ? names : "a file without headings");
 }
 
-function factorOf(
+function scaleOf(
   form: TableForm,
   role: Role,
   index: number,
   text: string | null,
   units: ReadSettings["units"],
-): number {
+): Scale {
   const kind = roleKind[role];
   const unit = text === null ? null : unitOf(text);
   if (text === null || text === "" || unit?.kind === "fraction" || (kind === null && unit === null)) {
-    if (text !== "%" || kind === null) return text === "%" ? 0.01 : 1;
+    if (text !== "%" || kind === null) return unit?.scale ?? unscaled;
   } else if (units === "SI" && unit && (kind === null || unit.kind === kind)) {
-    return unit.factor;
+    return unit.scale;
   }
   throw new ReductionFailure(
     "ambiguous-columns",

@@ -12,59 +12,98 @@ export type UnitKind =
   | "other";
 export interface Unit {
   readonly kind: UnitKind;
-  /** The SI value of one. */
-  readonly factor: number;
+  readonly scale: Scale;
+}
+/** value times / per: one of the two is 1, so that it is rounded once: 602 cm/s is 602 / 100, 6.02 m/s. */
+export interface Scale {
+  readonly times: number;
+  readonly per: number;
 }
 
-const spellings: Readonly<Record<UnitKind, Readonly<Record<string, number>>>> = {
-  time: { s: 1, sec: 1, second: 1, seconds: 1, ms: 1e-3, us: 1e-6, ns: 1e-9, min: 60, h: 3600 },
-  length: { m: 1, mm: 1e-3, cm: 1e-2, um: 1e-6, km: 1e3, in: 0.0254, ft: 0.3048 },
+export function inCaseUnit(value: number, { times, per }: Scale): number {
+  return (value * times) / per;
+}
+
+export const unscaled: Scale = { times: 1, per: 1 };
+const times = (factor: number): Scale => ({ times: factor, per: 1 });
+const per = (divisor: number): Scale => ({ times: 1, per: divisor });
+const one = unscaled;
+
+/** The SI value of one of each. */
+const spellings: Readonly<Record<UnitKind, Readonly<Record<string, Scale>>>> = {
+  time: {
+    s: one,
+    sec: one,
+    second: one,
+    seconds: one,
+    ms: per(1e3),
+    us: per(1e6),
+    ns: per(1e9),
+    min: times(60),
+    h: times(3600),
+  },
+  length: {
+    m: one,
+    mm: per(1e3),
+    cm: per(1e2),
+    um: per(1e6),
+    km: times(1e3),
+    in: times(0.0254),
+    ft: times(0.3048),
+  },
   speed: {
-    "m/s": 1,
-    "ms-1": 1,
-    mps: 1,
-    "m/sec": 1,
-    "mm/s": 1e-3,
-    "mms-1": 1e-3,
-    "cm/s": 1e-2,
-    "cms-1": 1e-2,
-    "km/h": 1 / 3.6,
-    "ft/s": 0.3048,
+    "m/s": one,
+    "ms-1": one,
+    mps: one,
+    "m/sec": one,
+    "mm/s": per(1e3),
+    "mms-1": per(1e3),
+    "cm/s": per(1e2),
+    "cms-1": per(1e2),
+    "km/h": per(3.6),
+    "ft/s": times(0.3048),
   },
   "speed squared": {
-    "m2/s2": 1,
-    "m2s-2": 1,
-    "(m/s)2": 1,
-    "j/kg": 1,
-    "cm2/s2": 1e-4,
-    "cm2s-2": 1e-4,
-    "(cm/s)2": 1e-4,
-    "mm2/s2": 1e-6,
-    "mm2s-2": 1e-6,
+    "m2/s2": one,
+    "m2s-2": one,
+    "(m/s)2": one,
+    "j/kg": one,
+    "cm2/s2": per(1e4),
+    "cm2s-2": per(1e4),
+    "(cm/s)2": per(1e4),
+    "mm2/s2": per(1e6),
+    "mm2s-2": per(1e6),
   },
-  dissipation: { "m2/s3": 1, "m2s-3": 1, "w/kg": 1, "cm2/s3": 1e-4, "cm2s-3": 1e-4, "mm2/s3": 1e-6 },
-  rate: { hz: 1, "1/s": 1, "s-1": 1, khz: 1e3, "samples/s": 1 },
-  fraction: { "-": 1, "1": 1, "%": 1e-2 },
+  dissipation: {
+    "m2/s3": one,
+    "m2s-3": one,
+    "w/kg": one,
+    "cm2/s3": per(1e4),
+    "cm2s-3": per(1e4),
+    "mm2/s3": per(1e6),
+  },
+  rate: { hz: one, "1/s": one, "s-1": one, khz: times(1e3), "samples/s": one },
+  fraction: { "-": one, "1": one, "%": per(1e2) },
   other: {
-    v: 1,
-    mv: 1,
-    volt: 1,
-    volts: 1,
-    k: 1,
-    c: 1,
-    "°c": 1,
-    degc: 1,
-    pa: 1,
-    kpa: 1,
-    bar: 1,
-    deg: 1,
-    "°": 1,
+    v: one,
+    mv: one,
+    volt: one,
+    volts: one,
+    k: one,
+    c: one,
+    "°c": one,
+    degc: one,
+    pa: one,
+    kpa: one,
+    bar: one,
+    deg: one,
+    "°": one,
   },
 };
 
 const units: ReadonlyMap<string, Unit> = new Map(
   Object.entries(spellings).flatMap(([kind, factors]) =>
-    Object.entries(factors).map(([text, factor]) => [text, { kind: kind as UnitKind, factor }] as const),
+    Object.entries(factors).map(([text, scale]) => [text, { kind: kind as UnitKind, scale }] as const),
   ),
 );
 
@@ -78,7 +117,7 @@ export function unitOf(text: string): Unit | null {
     .replace(/[\u207b\u2212]/g, "-")
     .replace(/\u00b9/g, "1")
     .replace(/[\s^*\u00b7{}]|(?<=[a-z])\.(?=[a-z])/g, "");
-  if (even === "MHz") return { kind: "rate", factor: 1e6 };
+  if (even === "MHz") return { kind: "rate", scale: times(1e6) };
   return units.get(even) ?? units.get(even.toLowerCase()) ?? null;
 }
 
