@@ -8,7 +8,7 @@ import { OriginFlag } from "./OriginFlag.tsx";
 import type { RulerCase, RulerPick } from "./rulerProps.ts";
 import type { LaneMap } from "./rulerScale.ts";
 import { StationList } from "./StationList.tsx";
-import type { Edge, StationWindow } from "./snapWindow.ts";
+import { type Edge, onStations, type StationWindow } from "./snapWindow.ts";
 import { withVariables } from "./withVariables.ts";
 
 export interface LaneProps {
@@ -33,7 +33,8 @@ export interface LaneProps {
 
 /** One case on the ruler: name, lane, readings. Drawn anew only when something of its own has changed. */
 export const Lane = memo(function Lane(props: LaneProps) {
-  const { one, order, at, perX, height, units, decimals, along, window, actions } = props;
+  const { one, order, at, perX, height, units, decimals, along, actions } = props;
+  const window = useMemo(() => snapped(one, props.window), [one, props.window]);
   const map = useMemo(() => (at === null || perX === null ? null : { at, perX }), [at, perX]);
   const scale = useMemo(() => ({ units, decimals }), [units, decimals]);
   const count = one.stations.length;
@@ -53,7 +54,7 @@ export const Lane = memo(function Lane(props: LaneProps) {
         {map === null ? (
           <p className="ruler-nowhere">no virtual origin, so no place on this scale</p>
         ) : (
-          <LaneControls {...props} map={map} />
+          <LaneControls {...props} map={map} window={window} />
         )}
       </div>
       <div className="ruler-cell right" style={withVariables(place)}>
@@ -68,14 +69,21 @@ export const Lane = memo(function Lane(props: LaneProps) {
   );
 });
 
+function snapped(one: RulerCase, window: StationWindow | null): StationWindow | null {
+  if (window === null || one.stations.length === 0) return null;
+  return onStations(
+    one.stations.map(({ x }) => x),
+    window,
+  );
+}
+
 function LaneControls({ map, ...props }: LaneProps & { map: LaneMap }) {
   const { one, width, height, along, window, ghost, picks, units, decimals, activeEdge, actions } = props;
   const scale = { units, decimals };
   const px = (x: number) => map.at + map.perX * x;
   const x0 = one.law === null ? null : one.x0.value;
   const bracket = (edge: Edge) =>
-    window &&
-    one.stations.length > 0 && (
+    window && (
       <Bracket
         one={one}
         edge={edge}

@@ -47,6 +47,11 @@ export function edgeRange(
   return [Math.min(last, edgeStation(stations, window, "start") + 1), last];
 }
 
+/** The window as its stations bound it: first and last station inside. */
+export function onStations(stations: readonly number[], window: StationWindow): StationWindow {
+  return [stations[edgeStation(stations, window, "start")], stations[edgeStation(stations, window, "end")]];
+}
+
 export function sameWindow(one: StationWindow, other: StationWindow): boolean {
   return one[0] === other[0] && one[1] === other[1];
 }

@@ -8,7 +8,7 @@ import type { useWindowGesture } from "./useWindowGesture.ts";
 
 interface Host {
   readonly props: RulerProps;
-  readonly gestures: ReturnType<typeof useWindowGesture>;
+  readonly moves: Omit<ReturnType<typeof useWindowGesture>, "gesture">;
   readonly computed: RulerScale;
   readonly setActive: Dispatch<SetStateAction<{ caseId: string; edge: Edge } | null>>;
   readonly setHover: Dispatch<SetStateAction<{ caseId: string; x: number } | null>>;
@@ -18,62 +18,39 @@ interface Host {
 }
 
 /** The ruler's actions as one object that stays the same while what stands behind it changes. */
-export function useLaneActions({ props, gestures, computed, setActive, setHover, setFrozen, say }: Host) {
-  const windowStart = useStable(gestures.windowStart);
-  const windowDrag = useStable(gestures.windowDrag);
-  const windowEnd = useStable(gestures.windowEnd);
-  const windowKeysEnd = useStable(gestures.windowKeysEnd);
-  const windowCancel = useStable(gestures.windowCancel);
-  const windowKey = useStable(gestures.windowKey);
-  const windowBack = useStable(gestures.windowBack);
-  const bracketFocus = useStable((caseId: string, edge: Edge) => setActive({ caseId, edge }));
-  const bracketBlur = useStable(() => setActive(null));
-  const holdOrigin = useStable((caseId: string, x0: number | null, phase: Phase) => {
-    setFrozen((before) => (phase === "drag" ? (before ?? computed) : null));
-    props.onHoldOrigin(caseId, x0, phase);
-    if (phase !== "drag") say(caseId);
-  });
-  const pick = useStable(props.onPick);
-  const hover = useStable((caseId: string, x: number | null) => {
-    setHover((before) =>
-      before?.caseId === caseId && before.x === x ? before : x === null ? null : { caseId, x },
-    );
-    props.onHover?.(caseId, x);
-  });
-  const show = useStable((caseId: string, x: number) => props.onShowStation?.(caseId, x));
-  const cancelReading = useStable((caseId: string) => props.onCancelReading?.(caseId));
-  return useMemo<LaneActions>(
+export function useLaneActions(host: Host): LaneActions {
+  const latest = useStable(() => host);
+  return useMemo(
     () => ({
-      windowStart,
-      windowDrag,
-      windowEnd,
-      windowKeysEnd,
-      windowCancel,
-      windowKey,
-      windowBack,
-      bracketFocus,
-      bracketBlur,
-      holdOrigin,
-      pick,
-      hover,
-      show,
-      cancelReading,
+      windowStart: (...args) => latest().moves.windowStart(...args),
+      windowDrag: (dx) => latest().moves.windowDrag(dx),
+      windowEnd: () => latest().moves.windowEnd(),
+      windowKeysEnd: () => latest().moves.windowKeysEnd(),
+      windowCancel: () => latest().moves.windowCancel(),
+      windowKey: (...args) => latest().moves.windowKey(...args),
+      windowBack: (...args) => latest().moves.windowBack(...args),
+      bracketFocus: (caseId, edge) => latest().setActive({ caseId, edge }),
+      bracketBlur: () => latest().setActive(null),
+      holdOrigin: (...args) => holdOrigin(latest(), ...args),
+      pick: (...args) => latest().props.onPick(...args),
+      hover: (caseId, x) => hover(latest(), caseId, x),
+      show: (caseId, x) => latest().props.onShowStation?.(caseId, x),
+      cancelReading: (caseId) => latest().props.onCancelReading?.(caseId),
     }),
-    [
-      windowStart,
-      windowDrag,
-      windowEnd,
-      windowKeysEnd,
-      windowCancel,
-      windowKey,
-      windowBack,
-      bracketFocus,
-      bracketBlur,
-      holdOrigin,
-      pick,
-      hover,
-      show,
-      cancelReading,
-    ],
+    [latest],
   );
+}
+
+function holdOrigin(host: Host, caseId: string, x0: number | null, phase: Phase): void {
+  host.setFrozen((before) => (phase === "drag" ? (before ?? host.computed) : null));
+  host.props.onHoldOrigin(caseId, x0, phase);
+  if (phase !== "drag") host.say(caseId);
+}
+
+function hover({ props, setHover }: Host, caseId: string, x: number | null): void {
+  setHover((before) => {
+    if (x === null) return null;
+    return before?.caseId === caseId && before.x === x ? before : { caseId, x };
+  });
+  props.onHover?.(caseId, x);
 }
