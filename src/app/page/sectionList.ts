@@ -1,4 +1,4 @@
-/** The sections of the page in the order of its argument; what the index and the headings both print. */
+/** The sections of the page; what the index and the headings both print. */
 export interface SectionName {
   readonly id: string;
   readonly number: number;
@@ -8,13 +8,29 @@ export interface SectionName {
   readonly name: string;
 }
 
-export const sectionList = {
-  records: { id: "records", number: 1, short: "Records", name: "Records" },
-  decay: { id: "decay", number: 2, short: "Decay", name: "Intensity and decay" },
-  isotropy: { id: "isotropy", number: 3, short: "Isotropy", name: "Isotropy" },
-  scales: { id: "scales", number: 4, short: "Scales", name: "Length scales" },
-  spectra: { id: "spectra", number: 5, short: "Spectra", name: "Spectra and correlations" },
-  balance: { id: "balance", number: 6, short: "Balance", name: "Dissipation balance" },
-  compare: { id: "compare", number: 7, short: "Side by side", name: "Side by side" },
-  table: { id: "table", number: 9, short: "Table", name: "Table and export" },
-} as const satisfies Record<string, SectionName>;
+const named = [
+  { id: "records", short: "Records", name: "Records" },
+  { id: "decay", short: "Decay", name: "Intensity and decay" },
+  { id: "isotropy", short: "Isotropy", name: "Isotropy" },
+  { id: "scales", short: "Scales", name: "Length scales" },
+  { id: "spectra", short: "Spectra", name: "Spectra and correlations" },
+  { id: "balance", short: "Balance", name: "Dissipation balance" },
+  { id: "compare", short: "Side by side", name: "Side by side" },
+  { id: "table", short: "Table", name: "Table and export" },
+] as const;
+
+export type SectionId = (typeof named)[number]["id"];
+
+/** In the order of the argument, numbered as they stand. */
+export const sectionList: readonly (SectionName & { readonly id: SectionId })[] = named.map((section, i) => ({
+  ...section,
+  number: i + 1,
+}));
+
+const byId = Object.fromEntries(sectionList.map((section) => [section.id, section])) as Readonly<
+  Record<SectionId, SectionName>
+>; // one entry for each id of the list above
+
+export function sectionOf(id: SectionId): SectionName {
+  return byId[id];
+}

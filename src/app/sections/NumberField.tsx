@@ -29,7 +29,7 @@ export function NumberField({
   const parsed = parseNumber(shown);
   const wrong = parsed === "wrong" || (above !== undefined && parsed !== null && parsed <= above);
   const settle = () => {
-    if (text === null || wrong || parsed === "wrong") return;
+    if (text === null || parsed === "wrong" || wrong) return;
     setText(null);
     if (parsed !== value) onChange(parsed);
   };

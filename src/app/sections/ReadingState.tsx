@@ -1,5 +1,6 @@
-import { formatCount, formatNumber } from "../../figures/formatNumber.ts";
+import { formatCount } from "../../figures/formatNumber.ts";
 import type { Offer, Work } from "../session/session.ts";
+import { bytesText } from "./bytesText.ts";
 
 /** The first look at a drop: how many files, how much. */
 export function LookingState({ offer }: { offer: Offer }) {
@@ -58,11 +59,4 @@ function Ticks({ done, of }: { done: number; of: number }) {
       ))}
     </div>
   );
-}
-
-/** "2.5 of 5.4 GB", in the unit of the whole. */
-export function bytesText(part: number, whole: number): string {
-  const [factor, unit] = whole >= 1e9 ? [1e9, "GB"] : whole >= 1e6 ? [1e6, "MB"] : [1e3, "kB"];
-  const text = (bytes: number) => formatNumber(bytes / factor, whole / factor >= 100 ? 0 : 1);
-  return part === whole ? `${text(whole)}\u202f${unit}` : `${text(part)} of ${text(whole)}\u202f${unit}`;
 }

@@ -40,7 +40,8 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
             {view.stations.map((station, row) => (
               <tr
                 key={station.x}
-                id={`station-${view.id}-${row}`}
+                data-station={`${view.id} ${station.x}`}
+                tabIndex={-1}
                 className={isUsed(view, station.x) ? undefined : "outside"}
                 onPointerEnter={() => onHover(station.x)}
                 onPointerLeave={() => onHover(null)}

@@ -4,16 +4,15 @@ import type { Run } from "../../core/catalogue.ts";
 export function SymbolText({ runs }: { runs: readonly Run[] }) {
   return (
     <span className="sym">
-      {runs.map((run, i) => {
-        const body = run.upright ? <span className="up">{run.text}</span> : run.text;
+      {runs.map((run, i) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: the runs of a symbol never move
-        return run.place === undefined ? <span key={i}>{body}</span> : <Raised key={i} run={run} />;
-      })}
+        <RunText run={run} key={i} />
+      ))}
     </span>
   );
 }
 
-function Raised({ run }: { run: Run }) {
-  const Place = run.place ?? "sub";
+function RunText({ run }: { run: Run }) {
+  const Place = run.place ?? "span";
   return <Place>{run.upright ? <span className="up">{run.text}</span> : run.text}</Place>;
 }

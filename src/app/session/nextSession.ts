@@ -2,7 +2,7 @@ import { assertNever } from "../../core/failure.ts";
 import { changeWorkspace, emptyWorkspace } from "../../sheet/changeWorkspace.ts";
 import type { Workspace } from "../../sheet/workspace.ts";
 import { advance, redo, startHistory, undo } from "./history.ts";
-import type { Held, Offer, Plan, Session, Work } from "./session.ts";
+import type { Aside, Held, Offer, Plan, Session, Work } from "./session.ts";
 import type { SessionEvent } from "./sessionEvent.ts";
 
 /**
@@ -59,13 +59,13 @@ function offered(session: Session, offer: Offer): Session {
 
 /** Cases of a drop join those that are here; a drop without a case only leaves its reasons. */
 function planned(held: Held | null, plan: Plan): Session {
-  if (plan.cases.length === 0 && held === null) return { kind: "failed", failures: plan.leftOut };
+  if (plan.cases.length === 0 && held === null) return { kind: "failed", aside: plan.aside };
   const before: Held = held ?? {
     history: startHistory<Workspace>(emptyWorkspace),
     files: [],
     previews: [],
     reductions: {},
-    leftOut: [],
+    aside: { leftOut: [], failures: [], warnings: [] },
     argued: null,
   };
   const added =
@@ -82,8 +82,16 @@ function planned(held: Held | null, plan: Plan): Session {
       history: held === null ? startHistory(added.present) : added,
       files: [...before.files, ...plan.files],
       previews: [...before.previews, ...plan.previews],
-      leftOut: [...before.leftOut, ...plan.leftOut],
+      aside: joined(before.aside, plan.aside),
     },
+  };
+}
+
+function joined(a: Aside, b: Aside): Aside {
+  return {
+    leftOut: [...a.leftOut, ...b.leftOut],
+    failures: [...a.failures, ...b.failures],
+    warnings: [...a.warnings, ...b.warnings],
   };
 }
 

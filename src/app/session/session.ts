@@ -5,6 +5,7 @@ import type { Flag } from "../../core/flag.ts";
 import type { Preview, SourceNote } from "../../core/records.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import type { SourceFile } from "../../engine/protocol.ts";
+import type { LeftOut } from "../../sheet/dropPlan.ts";
 import type { Workspace, WorkspaceCase } from "../../sheet/workspace.ts";
 import type { History } from "./history.ts";
 
@@ -18,7 +19,7 @@ export type Session =
   | { readonly kind: "reading"; readonly held: Held | null; readonly offer: Offer }
   | { readonly kind: "reducing"; readonly held: Held; readonly work: Readonly<Record<string, Work>> }
   | { readonly kind: "ready"; readonly held: Held }
-  | { readonly kind: "failed"; readonly failures: readonly PlainFailure[] };
+  | { readonly kind: "failed"; readonly aside: Aside };
 
 export interface Held {
   readonly history: History<Workspace>;
@@ -27,9 +28,15 @@ export interface Held {
   readonly previews: readonly Preview[];
   /** Of each case, by its id: what was reduced last, with the key of the settings it was reduced with. */
   readonly reductions: Readonly<Record<string, Reduced>>;
-  /** Files that belong to no case, each with its reason. */
-  readonly leftOut: readonly PlainFailure[];
+  readonly aside: Aside;
   readonly argued: Argued | null;
+}
+
+/** What of the drops is in no case, and what was understood only in part. */
+export interface Aside {
+  readonly leftOut: readonly LeftOut[];
+  readonly failures: readonly PlainFailure[];
+  readonly warnings: readonly string[];
 }
 
 export interface Reduced {
@@ -78,5 +85,5 @@ export interface Plan {
   readonly cases: readonly Omit<WorkspaceCase, "mark">[];
   readonly files: readonly SourceFile[];
   readonly previews: readonly Preview[];
-  readonly leftOut: readonly PlainFailure[];
+  readonly aside: Aside;
 }

@@ -1,0 +1,26 @@
+import { StrictMode } from "react";
+import { createRoot } from "react-dom/client";
+import { createBrowserEngine } from "../engine/browserEngine.ts";
+import { App } from "./App.tsx";
+import { createPageStore } from "./session/pageStore.ts";
+import { startPageWork } from "./session/pageWork.ts";
+import "./styles/fonts.css";
+import "./styles/tokens.css";
+import "./styles/base.css";
+import "./styles/head.css";
+import "./styles/section.css";
+import "./styles/table.css";
+import "./styles/controls.css";
+import "./styles/states.css";
+import "./styles/narrow.css";
+import "./styles/print.css";
+
+const store = createPageStore();
+const work = startPageWork(store, createBrowserEngine());
+const root = document.getElementById("root");
+if (root)
+  createRoot(root).render(
+    <StrictMode>
+      <App store={store} work={work} />
+    </StrictMode>,
+  );

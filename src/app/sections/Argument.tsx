@@ -1,0 +1,117 @@
+import { useMemo } from "react";
+import { useStore } from "zustand";
+import { plainText } from "../../export/sentences/piece.ts";
+import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { LiveRegion } from "../page/LiveRegion.tsx";
+import { pageExports } from "../page/pageExports.ts";
+import { Title } from "../page/Title.tsx";
+import type { CaseView } from "../session/caseView.ts";
+import type { PageStore } from "../session/pageStore.ts";
+import type { PageWork } from "../session/pageWork.ts";
+import type { Held } from "../session/session.ts";
+import { ArgumentSection } from "./ArgumentSection.tsx";
+import { CompareSection } from "./CompareSection.tsx";
+import { DecaySection } from "./DecaySection.tsx";
+import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
+import { findingsOf } from "./findings.ts";
+import { PageFoot } from "./PageFoot.tsx";
+import { RecordsSection } from "./RecordsSection.tsx";
+import { SpectraSection } from "./SpectraSection.tsx";
+import { TableSection } from "./TableSection.tsx";
+
+/** The argument from the records to the comparison, top to bottom. */
+export function Argument({
+  store,
+  work,
+  held,
+  cases,
+  narrow,
+}: {
+  store: PageStore;
+  work: PageWork;
+  held: Held;
+  cases: readonly CaseView[];
+  narrow: boolean;
+}) {
+  const { dispatch, late, setHover } = useStore(store);
+  const workspace = held.history.present;
+  const comparisons = held.argued?.comparisons ?? noComparisons;
+  const findings = useMemo(() => findingsOf(cases, comparisons), [cases, comparisons]);
+  const change = (changed: WorkspaceChange) => dispatch({ kind: "changed", change: changed });
+  const exports = pageExports(cases, held);
+  const stale = late !== null && cases.some((view) => view.stale);
+  const reduced = cases.filter((view) => view.stations.length > 0);
+  const shared = { cases: reduced, stale };
+  return (
+    <>
+      <div className="row page-top">
+        <div />
+        <div>
+          <Title
+            title={workspace.title}
+            cases={cases}
+            onRename={(title) => change({ kind: "set-title", title })}
+          />
+        </div>
+      </div>
+      <RecordsSection
+        cases={cases}
+        held={held}
+        sentences={findings.records}
+        narrow={narrow}
+        onChange={change}
+        onSave={exports.sheets}
+        onCancel={work.cancel}
+        onResume={work.resume}
+      />
+      {reduced.length > 0 && (
+        <>
+          <DecaySection {...shared} sentences={findings.decay} onChange={change} />
+          <ArgumentSection
+            id="isotropy"
+            {...shared}
+            sentences={findings.isotropy}
+            figure={isotropyPicture}
+            notes={isotropyNotes}
+          />
+          <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture} />
+          <SpectraSection
+            {...shared}
+            sentences={findings.spectra}
+            picked={workspace.picked}
+            onChange={change}
+          />
+          <ArgumentSection
+            id="balance"
+            {...shared}
+            sentences={findings.balance}
+            figure={balancePicture}
+            notes={balanceNotes}
+          />
+          <CompareSection
+            cases={reduced}
+            stale={late !== null}
+            sentences={findings.compare}
+            comparisons={comparisons}
+            settings={workspace.cases[0].sheet.compare}
+            onChange={change}
+          />
+          <TableSection
+            cases={reduced}
+            exports={exports}
+            onHover={(caseId, x) => setHover(x === null ? null : { caseId, x })}
+          />
+        </>
+      )}
+      <PageFoot cases={cases} />
+      <LiveRegion text={stale ? "Recomputing." : spoken(cases, findings)} />
+    </>
+  );
+}
+
+const noComparisons = [] as const;
+
+function spoken(cases: readonly CaseView[], { records, decay }: ReturnType<typeof findingsOf>): string {
+  if (cases.some((view) => view.work)) return "";
+  return [...records, ...decay].map(plainText).join(" ");
+}

@@ -1,0 +1,94 @@
+import type { Sentence } from "../../export/sentences/piece.ts";
+import { decayFigure } from "../../figures/decayFigure.ts";
+import { formatNumber } from "../../figures/formatNumber.ts";
+import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
+import { DecayChoices } from "./DecayChoices.tsx";
+import { FitTable, HypothesisTable } from "./FitTable.tsx";
+import { Fold } from "./Fold.tsx";
+import { NoLaw } from "./NoLaw.tsx";
+import type { Note } from "./SectionFrame.tsx";
+
+const figure: SectionFigure = {
+  name: "Figure 1",
+  title: "Decay of the energy, with the joint regions of exponent and origin",
+  widthMm: 178,
+  build: decayFigure,
+  caption: (
+    <>
+      (<i>a</i>) Energy against distance from the virtual origin. Filled: inside the fit window; open:
+      outside; the law is thin where it is extended. Below, residuals from the law. Bars: 95 %. (<i>b</i>)
+      Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
+      <sub>0</sub>; dashed: exponents of the classical hypotheses.
+    </>
+  ),
+};
+
+/** Intensity and decay: the law, its origin, and what else could be said of them. */
+export function DecaySection({
+  cases,
+  sentences,
+  stale,
+  onChange,
+}: {
+  cases: readonly CaseView[];
+  sentences: readonly Sentence[];
+  stale: boolean;
+  onChange: (change: WorkspaceChange) => void;
+}) {
+  const fitted = cases.filter(({ decay }) => decay !== null && decay.points.length > 0);
+  const notes: Note[] = [
+    {
+      name: "Choices",
+      fact: cases.every(({ of }) => of.sheet.fit.window === "auto")
+        ? "automatic window"
+        : "window set by hand",
+      body: <DecayChoices cases={cases} onChange={onChange} />,
+    },
+    ...correlationNote(fitted),
+  ];
+  return (
+    <ArgumentSection
+      id="decay"
+      cases={cases}
+      sentences={sentences}
+      stale={stale}
+      figure={fitted.length > 0 ? figure : null}
+      notes={notes}
+    >
+      {cases.map((view) => (
+        <NoLaw view={view} onChange={onChange} key={view.id} />
+      ))}
+      {fitted.length > 0 && (
+        <Fold name="Fits, other routes, hypotheses">
+          <FitTable cases={fitted} />
+          <HypothesisTable cases={fitted} />
+        </Fold>
+      )}
+    </ArgumentSection>
+  );
+}
+
+/** From this size on, n and x0 cannot be read apart. */
+const tied = 0.8;
+
+function correlationNote(cases: readonly CaseView[]): Note[] {
+  const values = cases.flatMap(({ decay }) => decay?.correlation_n_x0 ?? []);
+  if (!values.some((value) => Math.abs(value) > tied)) return [];
+  const text = values.map((value) => formatNumber(value, 2)).join(" and ");
+  return [
+    {
+      name: "Correlation",
+      body: (
+        <p>
+          <i className="sym">n</i> and{" "}
+          <span className="sym">
+            x<sub className="up">0</sub>
+          </span>{" "}
+          are tied ({text}): an origin further downstream asks for a smaller exponent. Quote both.
+        </p>
+      ),
+    },
+  ];
+}

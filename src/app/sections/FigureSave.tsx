@@ -1,0 +1,55 @@
+import { useState } from "react";
+import { defaultFigureOptions, type FigureOptions, type FigureSpec } from "../../figures/figureSpec.ts";
+import { printTokens } from "../../figures/tokens.ts";
+import { download } from "../page/download.ts";
+import { useFigureSettings } from "../page/figureSettings.ts";
+import { figurePng, figureSvg } from "../plot/exportFigure.ts";
+import { tableText } from "./tableText.ts";
+
+/** Dots per inch of a saved picture. */
+const dpi = 600;
+
+/** Takes a figure along: always in the print's colours and at its printed width, whatever the screen shows. */
+export function FigureSave({
+  widthMm,
+  build,
+}: {
+  widthMm: 86 | 178;
+  build: (options: FigureOptions) => FigureSpec;
+}) {
+  const { axis, units, tolerance, along } = useFigureSettings();
+  const [failed, setFailed] = useState<string | null>(null);
+  const printed = () =>
+    build({ ...defaultFigureOptions, axis, units, tolerance, along, widthMm, tokens: printTokens });
+  const save = async (make: (figure: FigureSpec) => Promise<void> | void) => {
+    try {
+      await make(printed());
+      setFailed(null);
+    } catch (error) {
+      setFailed(`The figure could not be saved: ${error instanceof Error ? error.message : error}.`);
+    }
+  };
+  const svg = async (figure: FigureSpec) =>
+    download(`waneline-${figure.key}.svg`, await figureSvg(figure), "image/svg+xml");
+  const png = async (figure: FigureSpec) =>
+    download(`waneline-${figure.key}.png`, await figurePng(figure, dpi));
+  const csv = (figure: FigureSpec) =>
+    download(`waneline-${figure.key}.csv`, tableText(figure.table), "text/csv");
+  return (
+    <div className="figure-actions">
+      <span>{widthMm}&nbsp;mm</span>
+      <SaveAction name="SVG" run={() => save(svg)} />
+      <SaveAction name="PNG" run={() => save(png)} />
+      <SaveAction name="CSV" run={() => save(csv)} />
+      {failed !== null && <span role="alert">{failed}</span>}
+    </div>
+  );
+}
+
+function SaveAction({ name, run }: { name: string; run: () => Promise<void> }) {
+  return (
+    <button type="button" className="action" onClick={() => void run()}>
+      {name}
+    </button>
+  );
+}

@@ -1,0 +1,126 @@
+import { useCallback, useMemo, useState } from "react";
+import { unitOf } from "../../core/unitText.ts";
+import type { Sentence } from "../../export/sentences/piece.ts";
+import type { FigureOptions, PickedCurve } from "../../figures/figureSpec.ts";
+import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
+import { spectrumFigure } from "../../figures/spectrumFigure.ts";
+import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
+import { pickLetters } from "../page/pickLetters.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
+import { CaseMark } from "./CaseMark.tsx";
+import { ChoiceField } from "./ChoiceField.tsx";
+
+const forms = {
+  compensated: "compensated",
+  kolmogorov: "Kolmogorov form",
+  dimensional: "dimensional",
+} as const;
+type Form = keyof typeof forms;
+
+/** Spectra and correlations of the stations picked on the ruler. */
+export function SpectraSection({
+  cases,
+  stale,
+  sentences,
+  picked,
+  onChange,
+}: {
+  cases: readonly CaseView[];
+  stale: boolean;
+  sentences: readonly Sentence[];
+  picked: readonly PickedStation[];
+  onChange: (change: WorkspaceChange) => void;
+}) {
+  const [form, setForm] = useState<Form>("compensated");
+  const build = useCallback(
+    (shown: readonly CaseView[], options: FigureOptions) =>
+      spectrumFigure(pickedCurves(shown, picked), options, form),
+    [picked, form],
+  );
+  const curves = useMemo(() => pickedCurves(cases, picked), [cases, picked]);
+  const figure: SectionFigure = {
+    name: "Figure 4",
+    title: "Spectra and autocorrelations of the picked stations",
+    widthMm: 178,
+    build,
+    caption: (
+      <>
+        (<i>a</i>) One-sided spectra of the picked stations, {forms[form]}; thin: further downstream. (
+        <i>b</i>) Autocorrelation; ringed: its first zero, the limit of the integral.
+      </>
+    ),
+  };
+  const notes = [
+    {
+      name: "Picked on the ruler",
+      fact: `${curves.length} stations`,
+      body: (
+        <>
+          <PickedList curves={curves} cases={cases} onChange={onChange} />
+          <ChoiceField label="spectra" value={form} choices={forms} onChange={setForm} />
+        </>
+      ),
+    },
+  ];
+  return (
+    <ArgumentSection
+      id="spectra"
+      cases={cases}
+      stale={stale}
+      sentences={sentences}
+      figure={curves.length > 0 ? figure : null}
+      notes={notes}
+    >
+      {curves.length === 0 && (
+        <p className="reason">
+          {cases.some(({ stations }) => stations.some((station) => station.curves !== null))
+            ? "No station is picked. A click on a tick of the ruler, or the space bar on it, picks one."
+            : "A profile holds no records, so there are no spectra."}
+        </p>
+      )}
+    </ArgumentSection>
+  );
+}
+
+function PickedList({
+  curves,
+  cases,
+  onChange,
+}: {
+  curves: readonly (PickedCurve & { readonly caseId: string })[];
+  cases: readonly CaseView[];
+  onChange: (change: WorkspaceChange) => void;
+}) {
+  const unit = unitOf("L", cases[0].of.sheet.units);
+  return (
+    <ul className="picked-list">
+      {curves.map(({ letter, of, station, caseId }) => (
+        <li key={letter}>
+          <i className="sym">{letter}</i> <CaseMark mark={of.mark} /> {of.name},{" "}
+          {withUnit(formatDigits(station.x, 3), unit)}{" "}
+          <button
+            type="button"
+            className="action"
+            aria-label={`Leave out ${of.name}, ${station.x}`}
+            onClick={() => onChange({ kind: "unpick", station: { caseId, x: station.x } })}
+          >
+            leave out
+          </button>
+        </li>
+      ))}
+    </ul>
+  );
+}
+
+/** The picked stations that have curves, with their letters. */
+function pickedCurves(
+  cases: readonly CaseView[],
+  picked: readonly PickedStation[],
+): (PickedCurve & { readonly caseId: string })[] {
+  return pickLetters(picked).flatMap(({ caseId, x, letter }) => {
+    const of = cases.find(({ id }) => id === caseId);
+    const station = of?.stations.find((each) => each.x === x);
+    return of && station?.curves ? [{ of, station, letter, caseId }] : [];
+  });
+}

@@ -1,0 +1,79 @@
+import { useState } from "react";
+import { say } from "../../export/sentences/piece.ts";
+import { sectionOf } from "../page/sectionList.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { CaseMark } from "./CaseMark.tsx";
+import { Finding } from "./Finding.tsx";
+import { SectionFrame } from "./SectionFrame.tsx";
+import { StationTable } from "./StationTable.tsx";
+
+const lead = say`Every number of this page, with its interval and the choices behind it, can be taken along.`;
+
+/** What can be taken from the whole page. */
+export interface PageExports {
+  readonly stations: (view: CaseView) => void;
+  readonly sheets: (view: CaseView) => void;
+  readonly results: () => void;
+}
+
+/** The stations of one case after the other, and the files to take along. */
+export function TableSection({
+  cases,
+  exports,
+  onHover,
+}: {
+  cases: readonly CaseView[];
+  exports: PageExports;
+  onHover: (caseId: string, x: number | null) => void;
+}) {
+  const [chosen, choose] = useState<string | null>(null);
+  const view = cases.find(({ id }) => id === chosen) ?? cases[0];
+  return (
+    <SectionFrame section={sectionOf("table")} notes={[figureNote]}>
+      <Finding sentences={[lead]} />
+      <div className="table-lead">
+        <div className="case-switch">
+          {cases.map(({ id, name, mark }) => (
+            <button
+              type="button"
+              className="action"
+              key={id}
+              aria-pressed={id === view.id}
+              onClick={() => choose(id)}
+            >
+              <CaseMark mark={mark} line={id === view.id} /> {name}
+            </button>
+          ))}
+        </div>
+        <span>grey: outside the fit window · –: no interval</span>
+      </div>
+      <StationTable view={view} onHover={(x) => onHover(view.id, x)} />
+      <div className="exports">
+        <button type="button" className="action" onClick={() => exports.stations(view)}>
+          Stations of {view.name}, CSV
+        </button>
+        <button type="button" className="action" onClick={() => exports.sheets(view)}>
+          Case sheet of {view.name}, JSON
+        </button>
+        <button type="button" className="action" onClick={exports.results}>
+          Results, JSON
+        </button>
+      </div>
+    </SectionFrame>
+  );
+}
+
+const figureNote = {
+  name: "Figures",
+  body: (
+    <>
+      <dl className="choice-list">
+        <dt>widths</dt>
+        <dd>86 and 178 mm</dd>
+        <dt>formats</dt>
+        <dd>SVG, PNG 600 dpi, CSV</dd>
+      </dl>
+      <p>Always in the light colours. The screen shows a figure at 5 px for each millimetre of paper.</p>
+    </>
+  ),
+};

@@ -1,0 +1,68 @@
+import { balanceFigure } from "../../figures/balanceFigure.ts";
+import { isotropyFigure } from "../../figures/isotropyFigure.ts";
+import { scalesFigure } from "../../figures/scalesFigure.ts";
+import type { SectionFigure } from "./ArgumentSection.tsx";
+import type { Note } from "./SectionFrame.tsx";
+
+/** The figures that need nothing but the cases, with their captions. */
+export const isotropyPicture: SectionFigure = {
+  name: "Figure 2",
+  title: "Ratios of the rms velocities along the stream",
+  widthMm: 178,
+  build: isotropyFigure,
+  caption: (
+    <>
+      Ratios of the rms velocities; one in isotropic turbulence. Filled: inside the fit window. Bars: 95 %.
+      Shaded: tolerance.
+    </>
+  ),
+};
+
+export const scalesPicture: SectionFigure = {
+  name: "Figure 3",
+  title: "Length scales and Taylor Reynolds number along the stream",
+  widthMm: 178,
+  build: scalesFigure,
+  caption: (
+    <>
+      (<i>a</i>) Integral, Taylor and Kolmogorov lengths with their power laws; bars smaller than a marker are
+      not drawn. (<i>b</i>) Taylor Reynolds number; lines have the slope that the law implies, (1 − <i>n</i>
+      )/2.
+    </>
+  ),
+};
+
+export const balancePicture: SectionFigure = {
+  name: "Figure 5",
+  title: "Dissipation of the decay over that of the gradients",
+  widthMm: 86,
+  build: balanceFigure,
+  caption: (
+    <>Dissipation that the decay asks for over the one that gradients carry. Bars: 95 %. Shaded: tolerance.</>
+  ),
+};
+
+export const isotropyNotes: readonly Note[] = [
+  {
+    name: "Isotropy",
+    body: (
+      <p>
+        Ratios of one component to another say nothing of the small scales: those are judged by the balance of
+        the dissipation.
+      </p>
+    ),
+  },
+];
+
+export const balanceNotes: readonly Note[] = [
+  {
+    name: "How to read it",
+    body: (
+      <p>
+        One within its interval where gradients are resolved and the flow is homogeneous and stationary. Above
+        one: gradients are lost, to the grid, the filter or the sampling. Below one: noise, or a flow still
+        developing.
+      </p>
+    ),
+  },
+];

@@ -1,0 +1,117 @@
+import { type PlainFailure, ReductionFailure } from "../../core/failure.ts";
+import type { Preview } from "../../core/records.ts";
+import type { Engine, SourceFile } from "../../engine/protocol.ts";
+import type { DropPlan, PlannedCase } from "../../sheet/dropPlan.ts";
+import { planDrop } from "../../sheet/planDrop.ts";
+import type { WorkspaceCase } from "../../sheet/workspace.ts";
+import { heldOf } from "./nextSession.ts";
+import { asSources, type DroppedFile } from "./openDrop.ts";
+import type { PageStore } from "./pageStore.ts";
+import type { Plan } from "./session.ts";
+
+/** No case sheet is longer; a longer JSON file is data, and read as any other file. */
+const longestSheet = 4e6;
+
+/**
+ * A drop from its files to cases in the workspace: a first look at each, then the plan. A drop that comes while
+ * another is worked on waits for its end.
+ */
+export async function runDrop(
+  store: PageStore,
+  engine: Engine,
+  dropped: Promise<DroppedFile[]>,
+): Promise<void> {
+  const files = await dropped;
+  if (files.length === 0) return store.getState().setNotice("The drop held no files.");
+  await untilIdle(store);
+  const { dispatch } = store.getState();
+  dispatch({
+    kind: "offered",
+    files: files.length,
+    bytes: files.reduce((sum, { file }) => sum + file.size, 0),
+  });
+  const sources = await asSources(files);
+  const isSheet = ({ path, file }: DroppedFile) => /\.json$/i.test(path) && file.size <= longestSheet;
+  const sheets = await Promise.all(
+    files.filter(isSheet).map(async ({ path, file }) => ({ name: path, text: await file.text() })),
+  );
+  const sheetNames = new Set(sheets.map(({ name }) => name));
+  let looked = sheets.length;
+  const tell = () => dispatch({ kind: "looked", looked: ++looked });
+  const looks = await Promise.all(
+    sources
+      .filter(({ name }) => !sheetNames.has(name))
+      .map(async (file): Promise<[string, Preview | PlainFailure]> => {
+        const look = await firstLook(engine, file);
+        tell();
+        return [file.name, look];
+      }),
+  );
+  const plan = planDrop(sources, sheets, new Map(looks));
+  const names = heldOf(store.getState().session)?.history.present.cases.map(({ sheet }) => sheet.case) ?? [];
+  dispatch({ kind: "planned", plan: asPlan(plan, sources, looks, names) });
+}
+
+async function firstLook(engine: Engine, file: SourceFile): Promise<Preview | PlainFailure> {
+  try {
+    return await engine.run("preview", { file, settings: {} });
+  } catch (error) {
+    if (error instanceof ReductionFailure) return error.plain();
+    throw error;
+  }
+}
+
+let dropCount = 0;
+
+function asPlan(
+  { cases, leftOut, failures, warnings }: DropPlan,
+  sources: readonly SourceFile[],
+  looks: readonly (readonly [string, Preview | PlainFailure])[],
+  taken: readonly string[],
+): Plan {
+  dropCount++;
+  const byName = new Map(sources.map((source) => [source.name, source]));
+  const used = new Set(cases.flatMap(({ names }) => names));
+  return {
+    cases: cases.map((planned, i) => asCase(planned, `${dropCount}-${i + 1}`, byName, taken)),
+    files: sources.filter(({ name }) => used.has(name)),
+    previews: looks.flatMap(([, look]) => ("code" in look ? [] : [look])),
+    aside: { leftOut, failures, warnings },
+  };
+}
+
+function asCase(
+  { sheet, fromSheet, names }: PlannedCase,
+  id: string,
+  byName: ReadonlyMap<string, SourceFile>,
+  taken: readonly string[],
+): Omit<WorkspaceCase, "mark"> {
+  return {
+    id,
+    sheet: { ...sheet, case: freeName(sheet.case, taken) },
+    fromSheet,
+    sources: names.flatMap((name) => {
+      const source = byName.get(name);
+      return source ? [{ name, bytes: source.bytes, fingerprint: source.fingerprint }] : [];
+    }),
+  };
+}
+
+/** Cases are told apart by their names. */
+function freeName(wanted: string, taken: readonly string[]): string {
+  let name = wanted;
+  for (let i = 2; taken.includes(name); i++) name = `${wanted} (${i})`;
+  return name;
+}
+
+function untilIdle(store: PageStore): Promise<void> {
+  const isIdle = () => !["reading", "reducing"].includes(store.getState().session.kind);
+  if (isIdle()) return Promise.resolve();
+  return new Promise((resolve) => {
+    const stop = store.subscribe(() => {
+      if (!isIdle()) return;
+      stop();
+      resolve();
+    });
+  });
+}
