@@ -1,8 +1,7 @@
 import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
-import type { RawPoint } from "./decayPoints.ts";
-import { fitWindow, windowQuantity } from "./fitWindow.ts";
+import { type FitPoint, fitWindow, windowQuantity } from "./fitWindow.ts";
 import { relativeError } from "./relativeError.ts";
 
 /**
@@ -15,11 +14,10 @@ export function epsilonRoute(
   stations: readonly StationResult[],
   settings: DecaySettings,
 ): DecayResult["epsilon_route"] {
-  const points: RawPoint[] = stations.flatMap((station) => {
+  const points: FitPoint[] = stations.flatMap((station) => {
     const { epsilon_gradient: epsilon } = station;
     if (!isEstimate(epsilon) || !(epsilon.value > 0)) return [];
-    const error = relativeError(epsilon);
-    return [{ station, x: station.x, q: epsilon.value, error, smoothedError: error }];
+    return [{ x: station.x, q: epsilon.value, smoothedError: relativeError(epsilon) }];
   });
   if (points.length === 0) return both(missing("no station carries a dissipation from measured gradients"));
   const fitted = fitWindow(points, { ...settings, x0: null, n: null, residuals: "log" });

@@ -4,7 +4,6 @@ import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts"
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { fQuantile } from "../signal/distributions/fQuantile.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
-import type { RawPoint } from "./decayPoints.ts";
 import { fitPowerLaw, type PowerLawFit } from "./fitPowerLaw.ts";
 import { profileInterval } from "./profileInterval.ts";
 
@@ -23,6 +22,14 @@ export interface WindowFit {
   readonly quantile: number;
 }
 
+/** One station as a fit sees it. */
+export interface FitPoint {
+  readonly x: number;
+  readonly q: number;
+  /** Standard error of ln q; null in all of them: equal weights. */
+  readonly smoothedError: number | null;
+}
+
 /** Why no law could be fitted. */
 export interface Refusal {
   readonly refused: string;
@@ -37,7 +44,7 @@ const oneNumber = chiSquareQuantile(0.95, 1);
  * @param points   stations of the window, in order of x
  * @param settings residuals, what is held, ell
  */
-export function fitWindow(points: readonly RawPoint[], settings: DecaySettings): WindowFit | Refusal {
+export function fitWindow(points: readonly FitPoint[], settings: DecaySettings): WindowFit | Refusal {
   const tooFew = refusalOfCount(points, settings);
   if (tooFew !== null) return { refused: tooFew };
   const errors = points.map((point) => point.smoothedError).filter((error) => error !== null);
@@ -75,7 +82,7 @@ export function fitWindow(points: readonly RawPoint[], settings: DecaySettings):
 }
 
 /** The words of a refusal for too few stations; null where there are enough. */
-function refusalOfCount(points: readonly RawPoint[], { x0, n }: DecaySettings): string | null {
+function refusalOfCount(points: readonly FitPoint[], { x0, n }: DecaySettings): string | null {
   const needed = 4 - (x0 === null ? 0 : 1) - (n === null ? 0 : 1);
   const places = new Set(points.map((point) => point.x)).size;
   if (places >= needed) return null;

@@ -1,3 +1,4 @@
+import { crossing } from "./crossing.ts";
 import type { PowerLawFit } from "./fitPowerLaw.ts";
 import { type CentredLaw, type Held, kappaFloor, kappaLimit } from "./lawProblem.ts";
 import { minimiseLaw } from "./minimiseLaw.ts";
@@ -12,8 +13,6 @@ export interface ProfileEnds {
 
 /** Fine enough for a fit inside a profile: the sum is flat to second order. */
 const innerTolerance = 1e-4;
-/** Ends are found to this share of their distance from the estimate. */
-const endTolerance = 1e-6;
 
 const whys = {
   x0: {
@@ -97,45 +96,3 @@ function pathOf(fit: PowerLawFit, parameter: "n" | "x0" | "A", root: number): Pa
 }
 
 const unbounded = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
-
-/**
- * Where `excess` crosses zero, outward from a point where it is negative; null where it never does.
- * Steps outward grow until the crossing is bracketed, then false position closes on it (Illinois).
- */
-function crossing(
-  excess: (at: number) => number,
-  from: number,
-  step: number,
-  limit: number,
-  excessThere: number,
-): number | null {
-  const beyond = (at: number) => (step > 0 ? at >= limit : at <= limit);
-  let inside = from;
-  let inner = excessThere;
-  let outside = from;
-  let outer = excessThere;
-  for (let tries = 0; outer < 0; tries++) {
-    inside = outside;
-    inner = outer;
-    if (inside === limit || tries > 24) return null;
-    outside = from + step * 1.5 ** tries;
-    if (beyond(outside)) outside = limit;
-    outer = excess(outside);
-  }
-  const fine = Math.abs(outside - from) * endTolerance;
-  for (let round = 0; round < 60 && Math.abs(outside - inside) > fine; round++) {
-    const at = inside - (inner * (outside - inside)) / (outer - inner);
-    const value = excess(at);
-    if (Math.abs(value) < endTolerance * -excessThere) return at;
-    if (value < 0) {
-      inside = at;
-      inner = value;
-      outer *= 0.5;
-    } else {
-      outside = at;
-      outer = value;
-      inner *= 0.5;
-    }
-  }
-  return (inside + outside) / 2;
-}

@@ -1,0 +1,124 @@
+import { crossing } from "../decay/crossing.ts";
+import type { WindowFit } from "../decay/fitWindow.ts";
+import { type CentredLaw, kappaLimit, type LawProblem } from "../decay/lawProblem.ts";
+import { minimiseLaw } from "../decay/minimiseLaw.ts";
+import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts";
+import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
+import { fQuantile } from "../signal/distributions/fQuantile.ts";
+import { fTail } from "../signal/distributions/fTail.ts";
+
+/** One case as the joint fit sees it. */
+export interface JointCase {
+  readonly problem: LawProblem;
+  /** Where the search begins. */
+  readonly law: CentredLaw;
+  /** A number where the virtual origin is held. */
+  readonly x0: number | null;
+  /** Variance of one weighted residual: 1 where errors are known. */
+  readonly variance: number;
+  /** Curvature of half the sum of squares along n. */
+  readonly curvature: number;
+}
+
+/** Laws of several cases with one exponent. */
+export interface JointFit {
+  readonly n: number;
+  readonly laws: readonly CentredLaw[];
+  /** Sum over the cases of squared residuals over their variance. */
+  readonly sum: number;
+}
+
+const innerTolerance = 1e-5;
+const mostSteps = 40;
+
+export function jointCase({ fit, variance }: WindowFit): JointCase {
+  const floor = fit.residualSum > 0 ? variance : 1;
+  const spread = fit.unitCovariance?.[8] ?? 0;
+  return {
+    problem: fit.problem,
+    law: fit.law,
+    x0: fit.held.x0,
+    variance: floor > 0 ? floor : 1,
+    curvature: spread > 0 ? 1 / spread : 0,
+  };
+}
+
+/**
+ * The exponent that serves all cases best, each with its own A and x0: the zero of
+ *     dS/dn = -2 sum over cases and stations of r (dr/dn)/variance, at the best A and x0 for that n
+ * by Newton's method with the curvatures of the free fits, then secants.
+ * @param start n to begin with
+ */
+export function jointFit(cases: readonly JointCase[], start: number): JointFit {
+  const curvature = cases.reduce((sum, { curvature, variance }) => sum + curvature / variance, 0);
+  let now = sloped(cases, start);
+  let before = now;
+  for (let step = 0; step < mostSteps; step++) {
+    const secant = (now.slope - before.slope) / (now.n - before.n);
+    const falls = Number.isFinite(secant) && secant < 0;
+    const move = now.slope / (falls ? -secant : curvature);
+    // one step at most halves or doubles the exponent
+    const next = Math.min(Math.max(now.n + move, now.n / 2), now.n * 2);
+    if (!(Math.abs(next - now.n) > 1e-7 * now.n)) break;
+    before = now;
+    now = sloped(cases, next, now.laws);
+  }
+  return now;
+}
+
+/** Best laws for a given n, and half the fall of the sum as n grows. */
+function sloped(
+  cases: readonly JointCase[],
+  n: number,
+  laws: readonly CentredLaw[] | null = null,
+): JointFit & { slope: number } {
+  let sum = 0;
+  let slope = 0;
+  const found = cases.map(({ problem, law, x0, variance }, at) => {
+    const from = laws?.[at] ?? law;
+    // the slope at the centre hardly changes with n: kappa = b/n
+    const kappa = Math.min(from.b / n, kappaLimit(problem) * (1 - 1e-6));
+    const start = x0 === null ? { ...from, kappa } : from;
+    const minimum = minimiseLaw(problem, start, { lnA: null, x0, n }, innerTolerance);
+    sum += minimum.sum / variance;
+    let product = 0;
+    for (let i = 0; i < problem.count; i++) product += problem.residual[i] * problem.byB[i];
+    slope += (product * minimum.law.kappa) / variance;
+    return minimum.law;
+  });
+  return { n, laws: found, sum, slope };
+}
+
+/** One exponent for two cases against one each. */
+export interface CommonExponent extends JointFit {
+  readonly low: number | null;
+  readonly high: number | null;
+  /** Probability of a larger rise of the sum of squares if both decay alike. */
+  readonly p: number;
+}
+
+/**
+ * Whether one exponent serves both cases: the rise of the sum of squares over that of each with its own,
+ * by chi-square where both know their errors, else by F with the freedom of those whose scatter tells them.
+ * @param fits free fits of the cases, none with n held
+ */
+export function commonExponent(fits: readonly WindowFit[]): CommonExponent {
+  const cases = fits.map(jointCase);
+  const weights = cases.map(({ curvature, variance }) => curvature / variance);
+  const total = weights.reduce((sum, weight) => sum + weight, 0);
+  const start = fits.reduce((sum, { fit }, i) => sum + (weights[i] / total) * fit.n, 0);
+  const joint = jointFit(cases, start);
+  const separate = fits.reduce((sum, { fit }, i) => sum + fit.residualSum / cases[i].variance, 0);
+  const freedom = fits.reduce((sum, { fit, scattered }) => sum + (scattered ? fit.freedom : 0), 0);
+  const rise = Math.max(joint.sum - separate, 0);
+  const drop = freedom === 0 ? chiSquareQuantile(0.95, 1) : fQuantile(0.95, 1, freedom);
+  const root = Math.sqrt(drop);
+  const excess = (n: number) => Math.sqrt(Math.max(sloped(cases, n).sum - joint.sum, 0)) - root;
+  const step = root / Math.sqrt(total);
+  return {
+    ...joint,
+    low: crossing(excess, joint.n, -Math.min(step, joint.n / 4), joint.n / 100, -root),
+    high: crossing(excess, joint.n, step, joint.n * 100, -root),
+    p: freedom === 0 ? chiSquareTail(rise, 1) : fTail(rise, 1, freedom),
+  };
+}

@@ -1,0 +1,168 @@
+import { type ComparedQuantity, comparedQuantities } from "../comparison.ts";
+import { type SeededRandom, seededRandom } from "../signal/seededRandom.ts";
+import { type Alignment, ownLaw } from "./alignment.ts";
+import { type ComparedCase, logSlopes, moveStations } from "./comparedCase.ts";
+import type { ComparedSeries } from "./comparedSeries.ts";
+import { type IntensityLine, intensityLine, placeOfIntensity } from "./intensityLine.ts";
+import { interpolate, meanOver } from "./interpolate.ts";
+import { type Overlay, type RatioCurve, stationsOf } from "./overlay.ts";
+import { spreadOf } from "./spreadOf.ts";
+
+/** Standard errors told by resampling. */
+export interface Resampled {
+  /** Of the mean ln ratio and of ln ratio along its curve; null where a case carries no errors. */
+  readonly ratios: Readonly<Record<ComparedQuantity, { mean: number; curve: number[] } | null>>;
+  /** Of x0_B - x0_A. */
+  readonly distance: number | null;
+  readonly matched: number | null;
+}
+
+const resamples = 800;
+
+/** One case while it is resampled. */
+interface Moving {
+  readonly source: ComparedCase;
+  readonly random: SeededRandom;
+  /** Movement of ln q and of ln epsilon at each fitted station. */
+  readonly ofQ: Float64Array;
+  readonly ofEpsilon: Float64Array;
+  readonly slopes: Float64Array;
+  readonly baseSlopes: Float64Array;
+  /** Coordinates of the stations compared. */
+  readonly s: Float64Array;
+  readonly needsEpsilon: boolean;
+}
+
+/**
+ * Standard errors of all that a comparison gives, from station values drawn anew about the measured ones: each draw
+ * moves ln q at every fitted station, refits both laws, moves all other values by their own errors, and forms the
+ * ratios again at the same places. The draws follow from the names of the cases alone.
+ */
+export function resamplePair(
+  cases: readonly [ComparedCase, ComparedCase],
+  aligned: Alignment,
+  laid: Overlay,
+): Resampled {
+  const seed = seedOf(`${cases[0].name}\n${cases[1].name}`);
+  const moving = [movingCase(cases[0], seed), movingCase(cases[1], seed + 1)];
+  const ratios = comparedQuantities.map((quantity) => ratioSamples(quantity, cases, laid));
+  const distance = new Float64Array(aligned.origins === null ? 0 : resamples);
+  const matched = new Float64Array(typeof laid.matched === "string" ? 0 : resamples);
+  for (let draw = 0; draw < resamples; draw++) {
+    for (const one of moving) moveLaw(one);
+    const origins = aligned.refit();
+    for (const one of moving) moveDissipation(one);
+    if (origins !== null) distance[draw] = origins[1] - origins[0];
+    const lines = moving.map((one, i) => (origins === null ? null : movedLine(one, origins[i])));
+    const [a, b] = lines;
+    if (typeof laid.matched !== "string" && a && b) {
+      const { logarithm } = laid.matched;
+      matched[draw] = placeOfIntensity(b, logarithm) - placeOfIntensity(a, logarithm);
+    }
+    laid.coordinates(0, origins?.[0] ?? 0, lines[0], moving[0].s);
+    laid.coordinates(1, origins?.[1] ?? 0, lines[1], moving[1].s);
+    for (const ratio of ratios) if (ratio !== null) drawRatio(ratio, moving, draw);
+  }
+  const spreads = ratios.map((ratio) =>
+    ratio === null ? null : { mean: spreadOf(ratio.means), curve: ratio.along.map(spreadOf) },
+  );
+  return {
+    ratios: Object.fromEntries(
+      comparedQuantities.map((quantity, i) => [quantity, spreads[i]]),
+    ) as Resampled["ratios"],
+    distance: distance.length > 0 ? spreadOf(distance) : null,
+    matched: matched.length > 0 ? spreadOf(matched) : null,
+  };
+}
+
+/** Hash of a text (FNV-1a), so that a seed follows from the cases' names. */
+function seedOf(text: string): number {
+  let hash = 0x811c9dc5;
+  for (let i = 0; i < text.length; i++) hash = Math.imul(hash ^ text.charCodeAt(i), 0x01000193);
+  return hash >>> 0;
+}
+
+function movingCase(source: ComparedCase, seed: number): Moving {
+  const count = source.law?.x.length ?? 0;
+  const baseSlopes = new Float64Array(count);
+  if (source.law) logSlopes(source.law.problem, source.law.fitted.fit.law, baseSlopes);
+  return {
+    source,
+    random: seededRandom(seed),
+    ofQ: new Float64Array(count),
+    ofEpsilon: new Float64Array(count),
+    slopes: new Float64Array(count),
+    baseSlopes,
+    s: new Float64Array(source.x.length),
+    needsEpsilon: Object.values(source.series).some((one) => typeof one !== "string" && one.byEpsilon !== 0),
+  };
+}
+
+/** Draws ln q anew at the fitted stations. */
+function moveLaw({ source, random, ofQ }: Moving): void {
+  if (source.law === null) return;
+  for (let i = 0; i < ofQ.length; i++) ofQ[i] = source.law.error[i] * random.gaussian();
+  moveStations(source.law, ofQ);
+}
+
+/** How the dissipation of the case's own law moves with it. */
+function moveDissipation({ source, ofEpsilon, slopes, baseSlopes, needsEpsilon }: Moving): void {
+  if (source.law === null || !needsEpsilon) return;
+  logSlopes(source.law.problem, ownLaw(source.law), slopes);
+  for (let i = 0; i < slopes.length; i++) ofEpsilon[i] = slopes[i] - baseSlopes[i];
+}
+
+function movedLine({ source, ofQ }: Moving, x0: number): IntensityLine | null {
+  const { Tu } = source.series;
+  if (typeof Tu === "string") return null;
+  const fitted = Tu.point.map((_, i) => i).filter((i) => Tu.point[i] >= 0);
+  const x = fitted.map((i) => Tu.x[i]);
+  const y = fitted.map((i) => Tu.logarithm[i] + ofQ[Tu.point[i]] / 2);
+  return intensityLine(x, y, x0);
+}
+
+interface RatioSamples {
+  readonly series: readonly { readonly series: ComparedSeries; readonly stations: number[] }[];
+  readonly curve: RatioCurve;
+  readonly means: Float64Array;
+  readonly along: Float64Array[];
+}
+
+function ratioSamples(
+  quantity: ComparedQuantity,
+  cases: readonly [ComparedCase, ComparedCase],
+  { curves }: Overlay,
+): RatioSamples | null {
+  const curve = curves[quantity];
+  if (typeof curve === "string") return null;
+  const series = cases.flatMap((one) => {
+    const series = one.series[quantity];
+    const told = typeof series !== "string" && (series.error !== null || series.byQ + series.byEpsilon !== 0);
+    return told ? [{ series, stations: stationsOf(series, one) }] : [];
+  });
+  if (series.length < 2) return null;
+  const along = Array.from(curve.at, () => new Float64Array(resamples));
+  return { series, curve, means: new Float64Array(resamples), along };
+}
+
+function drawRatio({ series, curve, means, along }: RatioSamples, moving: readonly Moving[], draw: number) {
+  const [a, b] = series.map((one, i) => {
+    const { ofQ, ofEpsilon, s, random } = moving[i];
+    const { logarithm, error, point, byQ, byEpsilon } = one.series;
+    const follows = byQ !== 0 || byEpsilon !== 0;
+    const places = one.stations.map((at) => s[at]);
+    const values = logarithm.map((value, at) =>
+      follows
+        ? value + byQ * ofQ[point[at]] + byEpsilon * ofEpsilon[point[at]]
+        : value + (error?.[at] ?? 0) * random.gaussian(),
+    );
+    const out = new Float64Array(curve.at.length);
+    interpolate(places, values, curve.at, out);
+    return out;
+  });
+  for (let i = 0; i < b.length; i++) {
+    b[i] -= a[i];
+    along[i][draw] = b[i];
+  }
+  means[draw] = meanOver(curve.at, b);
+}
