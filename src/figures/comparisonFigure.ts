@@ -22,6 +22,8 @@ import { escapeText, symbolHtml } from "./symbolHtml.ts";
 import { linearTicks } from "./ticks.ts";
 
 const rowMm = 6.4;
+/** Texts keep clear of the figure's edge. */
+const edge = 0.4;
 /** From this width on the numbers stand beside the bars. */
 const withNumbersFrom = 120;
 const widest: readonly [number, number] = [0.4, 2.5];
@@ -180,11 +182,15 @@ function rowNotes(
   const at = (text: string, x: number, xanchor: "left" | "right", font = numeral) =>
     pageNote(text, x, y, { xanchor, yanchor: "middle", font });
   const names = [
-    ...(wide ? [at(label.name, 0, "left")] : []),
+    ...(wide ? [at(label.name, edge, "left")] : []),
     at(symbolHtml(label.symbol) + over, box.left - 2.4, "right", { ...face, family: symbolFamily }),
   ];
   const { value, low, high } = endsOf(of.ratio);
-  if (value === null) return [...names, ...(wide ? [at("–", box.right + 8.6, "right")] : [])];
+  if (value === null)
+    return [
+      ...names,
+      wide ? at("not compared", widthMm - edge, "right", grey) : at("–", box.right + 2, "left"),
+    ];
   const verdict = of.verdict === "different" ? "<b>different</b>" : (of.verdict ?? "–");
   if (!wide) return [...names, at(verdict, box.right + 2, "left")];
   const decimals = Math.min(decimalsOf({ value, low, high }, 3), 3);
@@ -196,7 +202,7 @@ function rowNotes(
       ? [at(formatRange(low, high, decimals), box.right + 11.6, "left", grey)]
       : []),
     ...(largest === null ? [] : [at(formatNumber(largest, 2), widthMm - 19, "right", grey)]),
-    at(verdict, widthMm, "right"),
+    at(verdict, widthMm - edge, "right"),
   ];
 }
 
@@ -206,11 +212,11 @@ function headNotes({ box }: Panel, widthMm: number, options: FigureOptions): Par
   const at = (text: string, x: number, xanchor: "left" | "right") =>
     pageNote(text, x, box.top + 2.8, { xanchor, yanchor: "middle", font });
   return [
-    at("quantity", 0, "left"),
+    at("quantity", edge, "left"),
     at("ratio", box.right + 10, "right"),
     at("95\u202f%", box.right + 11.6, "left"),
     at("largest", widthMm - 19, "right"),
-    at("verdict", widthMm, "right"),
+    at("verdict", widthMm - edge, "right"),
   ];
 }
 

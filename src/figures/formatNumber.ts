@@ -49,6 +49,12 @@ export function powerOfTen(value: number): number | null {
   return size === 0 || (size >= 1e-3 && size < 1e6) ? null : Math.floor(Math.log10(size));
 }
 
+/** A position: two decimals below ten, more only where four significant digits need them. */
+export function formatPosition(x: number): string {
+  const decimals = (String(Number(x.toPrecision(4))).split(".")[1] ?? "").length;
+  return formatNumber(x, Math.abs(x) < 10 ? Math.max(decimals, 2) : decimals);
+}
+
 /** "p = 0.81", "p < 0.001": probabilities with two digits, never as zero. */
 export function formatProbability(p: number): string {
   if (p < 0.001) return "<\u202f0.001";

@@ -58,24 +58,29 @@ export function legend(rows: readonly LegendRow[], panel: Panel, options: Figure
   return { traces, notes, shapes: [] };
 }
 
+/** Corners first, upper right before all; else the first free place down the right side, the middle, the left. */
 function emptiestCorner(panel: Panel, size: { width: number; height: number }): Box {
   const { box } = panel;
   const places = pointsOf(panel);
   const letter = panel.letter === "" ? null : letterCorner(panel);
-  const right = box.right - 2.4 - size.width;
+  if (letter !== null) places.push([letter.x, letter.y], [letter.x + 3.4, letter.y]);
+  const [left, right] = [box.left + 2.4, box.right - 2.4 - size.width];
   const [upper, lower] = [box.top - 1.8, box.bottom + 2 + size.height];
-  const corners = [
-    { left: right, top: upper },
-    { left: box.left + 2.4, top: letter?.corner === "lower" ? lower + 3.4 : lower },
-    { left: right, top: lower },
-    { left: box.left + 2.4, top: letter?.corner === "upper" ? upper - 3.4 : upper },
-  ].map(({ left, top }): Box => ({ left, right: left + size.width, top, bottom: top - size.height }));
-  const covered = corners.map(
-    (corner) =>
+  const rows = Array.from({ length: 12 }, (_, i) => upper + ((lower - upper) * i) / 11);
+  const candidates = [
+    ...[
+      [right, upper],
+      [left, lower],
+      [right, lower],
+      [left, upper],
+    ],
+    ...[right, (left + right) / 2, left].flatMap((x) => rows.map((y) => [x, y])),
+  ].map(([x, y]): Box => ({ left: x, right: x + size.width, top: y, bottom: y - size.height }));
+  const covered = candidates.map(
+    (one) =>
       places.filter(
-        ([x, y]) =>
-          x > corner.left - 1 && x < corner.right + 1 && y > corner.bottom - 1 && y < corner.top + 1,
+        ([x, y]) => x > one.left - 1.4 && x < one.right + 1.4 && y > one.bottom - 1 && y < one.top + 1,
       ).length,
   );
-  return corners[covered.indexOf(Math.min(...covered))];
+  return candidates[covered.indexOf(Math.min(...covered))];
 }

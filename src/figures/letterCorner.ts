@@ -1,15 +1,32 @@
 import type { Panel } from "./panel.ts";
 import { pointsOf } from "./pointsOf.ts";
 
-const widthMm = 5.5;
-const heightMm = 4.5;
+const widthMm = 6;
+const heightMm = 5;
 
-/** Where a panel's letter stands, left edge and middle in mm: upper left, or lower left where data are in its way. */
-export function letterCorner(panel: Panel): { x: number; y: number; corner: "upper" | "lower" } {
+export interface Corner {
+  /** Left edge and middle of the letter, mm. */
+  readonly x: number;
+  readonly y: number;
+  readonly side: "left" | "right";
+  readonly end: "upper" | "lower";
+}
+
+/** Where a panel's letter stands: upper left, or the first other corner that is free of data. */
+export function letterCorner(panel: Panel): Corner {
   const { box } = panel;
-  const covered = pointsOf(panel).some(
-    ([x, y]) => x >= box.left && x < box.left + widthMm + 1 && y <= box.top && y > box.top - heightMm - 1,
+  const places = pointsOf(panel);
+  const corners = (["left", "right"] as const).flatMap((side) =>
+    (["upper", "lower"] as const).map((end): Corner => {
+      const x = side === "left" ? box.left + 1.6 : box.right - 5.4;
+      return { x, y: end === "upper" ? box.top - 2.8 : box.bottom + 2.8, side, end };
+    }),
   );
-  const x = box.left + 1.6;
-  return covered ? { x, y: box.bottom + 2.8, corner: "lower" } : { x, y: box.top - 2.8, corner: "upper" };
+  const covered = corners.map(
+    ({ x, y }) =>
+      places.filter(
+        ([across, up]) => across > x - 1.6 && across < x - 1.6 + widthMm && Math.abs(up - y) < heightMm / 2,
+      ).length,
+  );
+  return corners[covered.indexOf(Math.min(...covered))];
 }

@@ -59,7 +59,7 @@ function placeAxis(cases: readonly FigureCase[], axis: FigureAxis, options: Figu
   const title = streamwiseTitle(cases, axis, options);
   // Room at the right end for the symbols of the lengths.
   return places.every((place) => place > 0)
-    ? logAxis(logRange(places, 0.11), title)
+    ? logAxis(logRange([...places, 1.22 * Math.max(...places)]), title)
     : linearAxis(linearRange(places, { margin: 0.11 }), title);
 }
 

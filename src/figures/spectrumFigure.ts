@@ -6,7 +6,7 @@ import { placeCells } from "./cells.ts";
 import { correlationPanel } from "./correlationPanel.ts";
 import { drawingOf } from "./drawing.ts";
 import type { FigureOptions, FigureSpec, FigureTable, PickedCurve } from "./figureSpec.ts";
-import { formatDigits, withUnit } from "./formatNumber.ts";
+import { formatPosition, withUnit } from "./formatNumber.ts";
 import { type LegendRow, legend, shortened } from "./legend.ts";
 import { lineWeight } from "./lineWeight.ts";
 import { pageNote } from "./pageNote.ts";
@@ -20,7 +20,7 @@ import { escapeText, symbolHtml } from "./symbolHtml.ts";
 /** Level of the compensated one-sided spectrum in an inertial range: Pope (2000). */
 const plateau = 0.49;
 /** What is drawn of a spectrum's range below its largest value. */
-const depth = { compensated: 3, kolmogorov: 9, dimensional: 9 } as const;
+const depth = { compensated: 2.4, kolmogorov: 9, dimensional: 9 } as const;
 const labels = {
   compensated: ["k1_eta", "E11_compensated"],
   kolmogorov: ["k1_eta", "E11_kolmogorov"],
@@ -66,16 +66,12 @@ function spectraPanel(
     return titleWithUnit(symbolHtml(label.symbol), unitOf(label.dimension, options.units));
   });
   const top = Math.max(...curves.flatMap(({ y }) => y), 0);
-  const values = curves.flatMap(({ y }) => y.filter((value) => value > top / 10 ** depth[form]));
+  const isShown = (value: number) => value > top / 10 ** depth[form];
+  const values = curves.flatMap(({ y }) => y.filter(isShown));
+  const places = curves.flatMap(({ x, y }) => x.filter((_, i) => isShown(y[i])));
   return {
     box,
-    x: logAxis(
-      logRange(
-        curves.flatMap(({ x }) => x),
-        0.03,
-      ),
-      across,
-    ),
+    x: logAxis(logRange(places, 0.03), across),
     y: logAxis(logRange(form === "compensated" ? [...values, 2 * plateau] : values), up),
     traces: curves.map(({ picked, x, y }) =>
       caseLine(x, y, picked.of.mark, options, {
@@ -95,8 +91,8 @@ function plateauLine(panel: Panel, options: FigureOptions): Partial<Decor> {
   return {
     shapes: levelLine(panel, plateau, options),
     notes: [
-      pageNote(`<i>C</i><sub>1</sub> = ${plateau}`, panel.box.left + 1.6, placeY(panel, plateau) + 1.9, {
-        xanchor: "left",
+      pageNote(`<i>C</i><sub>1</sub> = ${plateau}`, panel.box.right - 1.6, placeY(panel, plateau) + 1.9, {
+        xanchor: "right",
         yanchor: "middle",
         font: symbol,
       }),
@@ -108,7 +104,7 @@ function pickedRows(picked: readonly PickedCurve[], options: FigureOptions): Leg
   const unit = options.units === "SI" ? (options.along === "t" ? "s" : "m") : "";
   return picked.map((one) => ({
     mark: one.of.mark,
-    text: `<i>${escapeText(one.letter)}</i>  ${escapeText(shortened(one.of.name))}, ${withUnit(formatDigits(one.station.x, 3), unit)}`,
+    text: `<i>${escapeText(one.letter)}</i>  ${escapeText(shortened(one.of.name))}, ${withUnit(formatPosition(one.station.x), unit)}`,
     marker: false,
     weightPt: lineWeight(one, picked),
   }));
