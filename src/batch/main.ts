@@ -1,19 +1,40 @@
+import process from "node:process";
+import { createThreadEngine } from "../engine/threadEngine.ts";
+import type { BatchArguments } from "./readArguments.ts";
 import { readArguments, usage, WrongArguments } from "./readArguments.ts";
+import { runBatch } from "./runBatch.ts";
 
-process.exitCode = run(process.argv.slice(2));
+// whoever reads our lines may close the pipe before the last one
+process.stderr.on("error", () => {});
+process.exitCode = await run(process.argv.slice(2));
 
-function run(argv: readonly string[]): 0 | 1 | 2 {
+function tell(line: string): void {
+  process.stderr.write(`${line}\n`);
+}
+
+async function run(argv: readonly string[]): Promise<0 | 1 | 2> {
   try {
     const asked = readArguments(argv);
-    if (asked === "help") {
-      process.stdout.write(`${usage}\n`);
-      return 0;
-    }
-    process.stderr.write("This version reads its arguments, but no case sheet yet.\n");
-    return 1;
+    if (asked !== "help") return (await batch(asked)) ? 0 : 1;
+    process.stdout.write(`${usage}\n`);
+    return 0;
   } catch (error) {
-    if (!(error instanceof WrongArguments)) throw error;
-    process.stderr.write(`${error.message}\n\n${usage}\n`);
-    return 2;
+    if (error instanceof WrongArguments) {
+      tell(`${error.message}\n\n${usage}`);
+      return 2;
+    }
+    tell(`The program stopped: ${error instanceof Error ? error.message : String(error)}`);
+    return 1;
+  }
+}
+
+async function batch(asked: BatchArguments): Promise<boolean> {
+  const engine = createThreadEngine(new URL("./thread.js", import.meta.url), asked.jobs);
+  try {
+    // npm runs the command in the project's folder and notes where it was called
+    const folder = process.env.INIT_CWD ?? process.cwd();
+    return await runBatch(asked, { folder, engine, tell, now: () => performance.now() });
+  } finally {
+    engine.close();
   }
 }

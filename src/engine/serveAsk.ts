@@ -1,15 +1,13 @@
 import type { PlainFailure } from "../core/failure.ts";
 import { ReductionFailure } from "../core/failure.ts";
-import type { Ask, Reply, TaskName, Tasks } from "./protocol.ts";
-
-/** An answer with the buffers that are given away with it. */
-export interface Answered {
-  readonly answer: Tasks[TaskName]["answer"];
-  readonly transfer: Transferable[];
-}
+import type { Ask, Reply } from "./protocol.ts";
+import type { Answered } from "./tasks.ts";
 
 /** Does the work of one ask; `progress` takes the bytes read since the last call. */
 export type Answer = (ask: Ask, progress: (bytes: number) => void) => Promise<Answered>;
+
+/** Enough to move a bar, seldom enough not to be felt. */
+const progressBytes = 1 << 18;
 
 /**
  * One ask from its arrival to its one end, for a worker and a thread alike.
@@ -18,11 +16,21 @@ export type Answer = (ask: Ask, progress: (bytes: number) => void) => Promise<An
 export async function serveAsk(
   ask: Ask,
   answer: Answer,
-  post: (reply: Reply, transfer: Transferable[]) => void,
+  post: (reply: Reply, transfer: ArrayBuffer[]) => void,
 ): Promise<void> {
   const { id } = ask;
+  let untold = 0;
+  const tell = (least: number) => {
+    if (untold < least) return;
+    post({ id, kind: "progress", bytes: untold }, []);
+    untold = 0;
+  };
   try {
-    const answered = await answer(ask, (bytes) => post({ id, kind: "progress", bytes }, []));
+    const answered = await answer(ask, (bytes) => {
+      untold += bytes;
+      tell(progressBytes);
+    });
+    tell(1);
     post({ id, kind: "answer", answer: answered.answer }, answered.transfer);
   } catch (error) {
     post({ id, kind: "failed", failure: plainFailure(error, ask) }, []);
