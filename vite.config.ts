@@ -7,12 +7,17 @@ import { defineConfig } from "vitest/config";
 const top = import.meta.dirname;
 const samples = resolve(top, "sample-data");
 
-/** Nothing but the page's own files; the hash is that of the one empty style element Plotly makes. */
+/**
+ * Nothing but the page's own files. The hash of `style-src` is that of the one empty style element Plotly makes;
+ * those of `style-src-attr` are the three style attributes it sets in a figure's text: `font-style:italic`,
+ * `font-size:70%` and `font-weight:bold`. Any other is refused.
+ */
 const contentSecurityPolicy = [
   "default-src 'none'",
   "script-src 'self'",
   "worker-src 'self'",
   "style-src 'self' 'sha256-47DEQpj8HBSa+/TImW+5JCeuQeRkm5NMpJWZG3hSuFU='",
+  "style-src-attr 'unsafe-hashes' 'sha256-r8zR3S6YuWY5tpo2Y0PvZHW5fa+SKLNon9zbEWb5UPA=' 'sha256-S+l+cz1wXqs2B0FcjqqT7NvjwGmhD1UjJswXjlSkj0s=' 'sha256-wkY2X5hecQzbhnFCqvTpwrUJ1f4X8LH5WFjYUzv1wmU='",
   "img-src 'self' data: blob:",
   "font-src 'self' data:",
   "connect-src 'self'",
