@@ -23,7 +23,8 @@ export interface Alignment {
   readonly refit: () => readonly [number, number] | null;
 }
 
-const refitTolerance = 1e-4;
+/** A refit is followed to this share of a standard error. */
+const refitTolerance = 1e-3;
 
 /**
  * The virtual origins two cases are shifted by: those of laws with one common exponent unless that is rejected at 5 %,
@@ -54,7 +55,7 @@ export function alignment(
     { ...jointCase(b.fitted), problem: b.problem, law: lawB },
   ];
   const refit = () => {
-    const { laws } = jointFit(copies, common.n);
+    const { laws } = jointFit(copies, common.n, refitTolerance);
     return [origin(a, laws[0]), origin(b, laws[1])] as const;
   };
   return { align, with: used, common, why, origins: [origin(a, lawA), origin(b, lawB)], refit };

@@ -28,7 +28,8 @@ export interface JointFit {
   readonly sum: number;
 }
 
-const innerTolerance = 1e-5;
+/** The search ends when n moves by less than this share of its standard error. */
+const fine = 1e-6;
 const mostSteps = 40;
 
 export function jointCase({ fit, variance }: WindowFit): JointCase {
@@ -47,11 +48,13 @@ export function jointCase({ fit, variance }: WindowFit): JointCase {
  * The exponent that serves all cases best, each with its own A and x0: the zero of
  *     dS/dn = -2 sum over cases and stations of r (dr/dn)/variance, at the best A and x0 for that n
  * by Newton's method with the curvatures of the free fits, then secants.
- * @param start n to begin with
+ * @param start     n to begin with
+ * @param tolerance the search ends when n moves by less than this share of its standard error
  */
-export function jointFit(cases: readonly JointCase[], start: number): JointFit {
+export function jointFit(cases: readonly JointCase[], start: number, tolerance = fine): JointFit {
   const curvature = cases.reduce((sum, { curvature, variance }) => sum + curvature / variance, 0);
-  let now = sloped(cases, start);
+  const smallest = tolerance / Math.sqrt(curvature);
+  let now = sloped(cases, start, tolerance);
   let before = now;
   for (let step = 0; step < mostSteps; step++) {
     const secant = (now.slope - before.slope) / (now.n - before.n);
@@ -59,9 +62,9 @@ export function jointFit(cases: readonly JointCase[], start: number): JointFit {
     const move = now.slope / (falls ? -secant : curvature);
     // one step at most halves or doubles the exponent
     const next = Math.min(Math.max(now.n + move, now.n / 2), now.n * 2);
-    if (!(Math.abs(next - now.n) > 1e-7 * now.n)) break;
+    if (!(Math.abs(next - now.n) > smallest)) break;
     before = now;
-    now = sloped(cases, next, now.laws);
+    now = sloped(cases, next, tolerance, now.laws);
   }
   return now;
 }
@@ -70,6 +73,7 @@ export function jointFit(cases: readonly JointCase[], start: number): JointFit {
 function sloped(
   cases: readonly JointCase[],
   n: number,
+  tolerance: number,
   laws: readonly CentredLaw[] | null = null,
 ): JointFit & { slope: number } {
   let sum = 0;
@@ -79,7 +83,7 @@ function sloped(
     // the slope at the centre hardly changes with n: kappa = b/n
     const kappa = Math.min(from.b / n, kappaLimit(problem) * (1 - 1e-6));
     const start = x0 === null ? { ...from, kappa } : from;
-    const minimum = minimiseLaw(problem, start, { lnA: null, x0, n }, innerTolerance);
+    const minimum = minimiseLaw(problem, start, { lnA: null, x0, n }, tolerance);
     sum += minimum.sum / variance;
     let product = 0;
     for (let i = 0; i < problem.count; i++) product += problem.residual[i] * problem.byB[i];
@@ -113,7 +117,7 @@ export function commonExponent(fits: readonly WindowFit[]): CommonExponent {
   const rise = Math.max(joint.sum - separate, 0);
   const drop = freedom === 0 ? chiSquareQuantile(0.95, 1) : fQuantile(0.95, 1, freedom);
   const root = Math.sqrt(drop);
-  const excess = (n: number) => Math.sqrt(Math.max(sloped(cases, n).sum - joint.sum, 0)) - root;
+  const excess = (n: number) => Math.sqrt(Math.max(sloped(cases, n, fine).sum - joint.sum, 0)) - root;
   const step = root / Math.sqrt(total);
   return {
     ...joint,

@@ -17,7 +17,7 @@ export interface Resampled {
   readonly matched: number | null;
 }
 
-const resamples = 800;
+const resamples = 500;
 
 /** One case while it is resampled. */
 interface Moving {
@@ -121,11 +121,20 @@ function movedLine({ source, ofQ }: Moving, x0: number): IntensityLine | null {
   return intensityLine(x, y, x0);
 }
 
+/** One side of a ratio while it is resampled, with scratch for each draw. */
+interface MovingSeries {
+  readonly series: ComparedSeries;
+  readonly stations: readonly number[];
+  readonly places: Float64Array;
+  readonly values: Float64Array;
+  readonly out: Float64Array;
+}
+
 interface RatioSamples {
-  readonly series: readonly { readonly series: ComparedSeries; readonly stations: number[] }[];
+  readonly sides: readonly MovingSeries[];
   readonly curve: RatioCurve;
   readonly means: Float64Array;
-  readonly along: Float64Array[];
+  readonly along: readonly Float64Array[];
 }
 
 function ratioSamples(
@@ -135,34 +144,45 @@ function ratioSamples(
 ): RatioSamples | null {
   const curve = curves[quantity];
   if (typeof curve === "string") return null;
-  const series = cases.flatMap((one) => {
+  const sides = cases.flatMap((one) => {
     const series = one.series[quantity];
-    const told = typeof series !== "string" && (series.error !== null || series.byQ + series.byEpsilon !== 0);
-    return told ? [{ series, stations: stationsOf(series, one) }] : [];
+    if (typeof series === "string" || !toldErrors(series)) return [];
+    const scratch = () => new Float64Array(series.x.length);
+    const out = new Float64Array(curve.at.length);
+    return [{ series, stations: stationsOf(series, one), places: scratch(), values: scratch(), out }];
   });
-  if (series.length < 2) return null;
+  if (sides.length < 2) return null;
   const along = Array.from(curve.at, () => new Float64Array(resamples));
-  return { series, curve, means: new Float64Array(resamples), along };
+  return { sides, curve, means: new Float64Array(resamples), along };
 }
 
-function drawRatio({ series, curve, means, along }: RatioSamples, moving: readonly Moving[], draw: number) {
-  const [a, b] = series.map((one, i) => {
-    const { ofQ, ofEpsilon, s, random } = moving[i];
-    const { logarithm, error, point, byQ, byEpsilon } = one.series;
-    const follows = byQ !== 0 || byEpsilon !== 0;
-    const places = one.stations.map((at) => s[at]);
-    const values = logarithm.map((value, at) =>
-      follows
-        ? value + byQ * ofQ[point[at]] + byEpsilon * ofEpsilon[point[at]]
-        : value + (error?.[at] ?? 0) * random.gaussian(),
-    );
-    const out = new Float64Array(curve.at.length);
-    interpolate(places, values, curve.at, out);
-    return out;
-  });
+function toldErrors({ error, byQ, byEpsilon }: ComparedSeries): boolean {
+  return error !== null || byQ !== 0 || byEpsilon !== 0;
+}
+
+function drawRatio({ sides, curve, means, along }: RatioSamples, moving: readonly Moving[], draw: number) {
+  for (let side = 0; side < 2; side++) drawSide(sides[side], moving[side], curve.at);
+  const [a, b] = [sides[0].out, sides[1].out];
   for (let i = 0; i < b.length; i++) {
     b[i] -= a[i];
     along[i][draw] = b[i];
   }
   means[draw] = meanOver(curve.at, b);
+}
+
+function drawSide(
+  { series, stations, places, values, out }: MovingSeries,
+  { ofQ, ofEpsilon, s, random }: Moving,
+  at: Float64Array,
+): void {
+  const { logarithm, error, point, byQ, byEpsilon } = series;
+  const follows = byQ !== 0 || byEpsilon !== 0;
+  for (let i = 0; i < values.length; i++) {
+    places[i] = s[stations[i]];
+    const move = follows
+      ? byQ * ofQ[point[i]] + byEpsilon * ofEpsilon[point[i]]
+      : (error?.[i] ?? 0) * random.gaussian();
+    values[i] = logarithm[i] + move;
+  }
+  interpolate(places, values, at, out);
 }

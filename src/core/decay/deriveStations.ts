@@ -1,8 +1,9 @@
 import type { DecayResult, DecaySettings } from "../decayResult.ts";
-import { isEstimate, missing, type Quantity } from "../quantity.ts";
+import { isEstimate, missing, type Quantity, scaled } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { lawAt, lawVariance } from "./lawBand.ts";
 import { logEstimate, powerProduct } from "./powerProduct.ts";
+import { relativeError } from "./relativeError.ts";
 import { scalesFromDissipation } from "./scalesFromDissipation.ts";
 
 /**
@@ -55,8 +56,10 @@ function dissipationOfDecay(station: StationResult, decay: DecayResult, settings
   const energy = q * (decay.speed ?? 1) ** 2 * (quantity === "uu" ? 3 / 2 : 1);
   const slope = (law.n * energy) / (x - law.x0);
   const ofLaw = logEstimate(slope, Math.sqrt(lawVariance(law, x, 1)), law.freedom ?? null);
-  return settings.along === "t"
-    ? ofLaw
+  if (settings.along === "t" || !isEstimate(station.U)) return ofLaw;
+  // a U without an interval (a short record, a profile) is far better known than the law
+  return relativeError(station.U) === null
+    ? scaled(ofLaw, station.U.value)
     : powerProduct(1, [
         [ofLaw, 1],
         [station.U, 1],
