@@ -75,9 +75,11 @@ function FilledRuler({ column, width, ...props }: FilledProps) {
         />
       </div>
       {stepping && <Stepper {...stepping} scale={spokenScale} onStep={view.step} />}
-      <p className="spoken" aria-live="polite">
-        {view.spoken}
-      </p>
+      {!props.quiet && (
+        <p className="spoken" aria-live="polite">
+          {view.spoken}
+        </p>
+      )}
     </>
   );
 }

@@ -1,3 +1,4 @@
+import { formatNumber } from "../../figures/formatNumber.ts";
 import { type FormattedQuantity, formatScaled } from "../../figures/formatQuantity.ts";
 import type { RulerCase } from "./rulerProps.ts";
 
@@ -8,10 +9,13 @@ export function exponentReading({ n }: Pick<RulerCase, "n">): FormattedQuantity 
 
 /** x0 as it is shown: in multiples of ell where the case has one, else in the unit of x. */
 export function originReading(
-  { x0, length, symbol }: Pick<RulerCase, "x0" | "length" | "symbol">,
+  { x0, length, symbol, originHeld }: Pick<RulerCase, "x0" | "length" | "symbol" | "originHeld">,
   units: string,
 ): FormattedQuantity {
-  return length === null
-    ? formatScaled(x0, { factor: 1, unit: units, digits: 3 })
-    : formatScaled(x0, { factor: 1 / length, unit: symbol, digits: 2 });
+  if (length === null) return formatScaled(x0, { factor: 1, unit: units, digits: 3 });
+  const shown = formatScaled(x0, { factor: 1 / length, unit: symbol, digits: 2 });
+  // A held origin moves by tenths of ell and has no interval to take its decimals from.
+  return originHeld && x0.value !== null && shown.power === null
+    ? { ...shown, value: formatNumber(x0.value / length, 1) }
+    : shown;
 }

@@ -21,7 +21,8 @@ export interface RulerProps {
 
   /**
    * Called once for each case that moves, all with `allCases` true when one drag moves them together.
-   * "drag": live, many a second · "rest": done, one step of undo · "cancel": back to this, as it was before.
+   * "drag": live, many a second · "rest": done, one step of undo · "cancel": what was live is dropped, and this
+   * is what stood before it. Escape after a rest is a rest with the earlier window.
    */
   readonly onWindow: (caseId: string, window: RulerWindow, phase: Phase, allCases: boolean) => void;
   readonly onAxis: (axis: Axis) => void;
@@ -32,6 +33,8 @@ export interface RulerProps {
   readonly onBody?: (x: number, phase: Phase) => void;
   /** Enter on a station: show its row. */
   readonly onShowStation?: (caseId: string, x: number) => void;
+  /** The page has a voice of its own for what a bracket changes: the ruler's live region is left out. */
+  readonly quiet?: boolean;
   /** Absent: no Cancel beside what is being read. */
   readonly onCancelReading?: (caseId: string) => void;
 }

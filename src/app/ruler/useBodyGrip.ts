@@ -18,6 +18,7 @@ export function useBodyGrip({ x, span, perX, onBody, onType }: BodyGrip) {
   const before = useRef(x);
   const latest = useRef(x);
   const keyed = useRef(false);
+  const atFocus = useRef(x);
   const tell = (to: number, phase: Phase) => {
     latest.current = to;
     onBody(to, phase);
@@ -43,7 +44,10 @@ export function useBodyGrip({ x, span, perX, onBody, onType }: BodyGrip) {
     keyed.current = next !== null;
     if (next !== null) tell(next, "drag");
     else if (event.key === "Enter") onType();
-    else tell(before.current, "cancel");
+    else if (x !== atFocus.current) tell(atFocus.current, "rest");
   };
-  return { ...pointer, onKeyDown, onKeyUp: rest, onBlur: rest, onFocus: remember };
+  const onFocus = () => {
+    atFocus.current = x;
+  };
+  return { ...pointer, onKeyDown, onKeyUp: rest, onBlur: rest, onFocus };
 }

@@ -9,6 +9,8 @@ export function useOriginGrip(one: RulerCase, place: OriginPlace, perX: number, 
   const before = useRef<{ from: number; held: number | null }>({ from: place.x0, held: null });
   const keyed = useRef<number | null>(null);
   const last = useRef(place.x0);
+  /** Whether anything has come to rest since the flag was focused, which Escape has to change back. */
+  const changed = useRef(false);
   const remember = () => {
     before.current = { from: place.x0, held: one.originHeld ? place.x0 : null };
     last.current = place.x0;
@@ -17,21 +19,31 @@ export function useOriginGrip(one: RulerCase, place: OriginPlace, perX: number, 
     if (x0 !== last.current) actions.holdOrigin(one.id, x0, "drag");
     last.current = x0;
   };
+  const settle = (x0: number | null) => {
+    changed.current = true;
+    actions.holdOrigin(one.id, x0, "rest");
+  };
   const rest = () => {
-    if (keyed.current !== null) actions.holdOrigin(one.id, keyed.current, "rest");
+    if (keyed.current !== null) settle(keyed.current);
     keyed.current = null;
+  };
+  const back = () => {
+    if (keyed.current !== null) actions.holdOrigin(one.id, before.current.held, "cancel");
+    if (changed.current) actions.holdOrigin(one.id, before.current.held, "rest");
+    keyed.current = null;
+    changed.current = false;
   };
   const { putBack, ...pointer } = usePointerDrag({
     start: remember,
     move: (dx) => hold(originAt(place, before.current.from + dx / perX)),
-    end: () => actions.holdOrigin(one.id, last.current, "rest"),
+    end: () => settle(last.current),
     cancel: () => actions.holdOrigin(one.id, before.current.held, "cancel"),
   });
   const obey = (move: OriginMove) => {
+    if (move.kind === "back") return back();
     keyed.current = move.kind === "hold" ? move.x0 : null;
     if (move.kind === "hold") actions.holdOrigin(one.id, move.x0, "drag");
-    else if (move.kind === "free") actions.holdOrigin(one.id, null, "rest");
-    else actions.holdOrigin(one.id, before.current.held, "cancel");
+    else settle(null);
   };
   const onKeyDown = (event: KeyboardEvent<HTMLElement>) => {
     if (event.ctrlKey || event.metaKey || event.altKey) return;
@@ -40,6 +52,9 @@ export function useOriginGrip(one: RulerCase, place: OriginPlace, perX: number, 
     event.preventDefault();
     if (!putBack(event)) obey(move);
   };
-  const onDoubleClick = () => actions.holdOrigin(one.id, null, "rest");
-  return { ...pointer, onKeyDown, onKeyUp: rest, onBlur: rest, onFocus: remember, onDoubleClick };
+  const onFocus = () => {
+    remember();
+    changed.current = false;
+  };
+  return { ...pointer, onKeyDown, onKeyUp: rest, onBlur: rest, onFocus, onDoubleClick: () => settle(null) };
 }

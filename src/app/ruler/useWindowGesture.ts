@@ -31,6 +31,10 @@ export function windowAsChosen(one: RulerCase): RulerWindow {
   return one.windowChosen === "auto" || one.window === null ? "auto" : one.window;
 }
 
+function sameChoice(one: RulerWindow, other: RulerWindow): boolean {
+  return one === "auto" || other === "auto" ? one === other : sameWindow(one, other);
+}
+
 /** Moves brackets by pointer or key: live while it moves, one change when it rests, all back when cancelled. */
 export function useWindowGesture({ cases, scale, onWindow, rested }: Host) {
   const [gesture, setGesture] = useState<WindowGesture | null>(null);
@@ -90,8 +94,11 @@ export function useWindowGesture({ cases, scale, onWindow, rested }: Host) {
       }
     },
     windowBack: (caseId: string, window: RulerWindow) => {
-      keep(null);
-      onWindow(caseId, window, "cancel", false);
+      const one = cases.find(({ id }) => id === caseId);
+      const stood = live.current?.restore.get(caseId) ?? (one ? windowAsChosen(one) : window);
+      // What is on its way is dropped; what has come to rest since is changed back, as a change of its own.
+      finish(false);
+      if (!sameChoice(stood, window)) onWindow(caseId, window, "rest", false);
       rested(caseId);
     },
   };

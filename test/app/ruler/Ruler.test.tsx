@@ -88,7 +88,16 @@ describe("a bracket moved by key", () => {
     show();
     slider("End of fit window, screen").focus();
     await userEvent.keyboard("{ArrowLeft}{ArrowLeft}{Escape}");
-    expect(spies.onWindow.mock.lastCall).toEqual(["a", "auto", "cancel", false]);
+    expect(spies.onWindow.mock.lastCall).toEqual(["a", "auto", "rest", false]);
+  });
+  it("drops on Escape what a key that is still down was moving", async () => {
+    show();
+    slider("End of fit window, screen").focus();
+    await userEvent.keyboard("{ArrowLeft>}{Escape}");
+    expect(spies.onWindow.mock.calls.map(([, window, phase]) => [window, phase])).toEqual([
+      [[0.3, 1.6], "drag"],
+      ["auto", "cancel"],
+    ]);
   });
   it("is announced once, 400 ms after the last key", async () => {
     vi.useFakeTimers({ shouldAdvanceTime: true });
@@ -170,6 +179,16 @@ describe("the flag", () => {
     expect(spies.onHoldOrigin.mock.lastCall).toEqual(["a", 0.0775, "rest"]);
     await userEvent.keyboard("{Shift>}{ArrowRight}{/Shift}");
     expect(spies.onHoldOrigin.mock.lastCall).toEqual(["a", 0.1025, "rest"]);
+  });
+  it("goes back on Escape to what stood when it was focused: fitted, if it was", async () => {
+    show();
+    slider("Virtual origin, screen").focus();
+    await userEvent.keyboard("{ArrowLeft}{ArrowLeft}{Escape}");
+    expect(spies.onHoldOrigin.mock.lastCall).toEqual(["a", null, "rest"]);
+  });
+  it("reads a held origin to the tenth of M that it moves by", async () => {
+    show([screenCase({ originHeld: true, x0: { value: -0.0175, low: null, high: null } })]);
+    expect(slider("Virtual origin, screen").getAttribute("aria-valuetext")).toContain("held, −0.7 M.");
   });
   it("is freed by a double click", async () => {
     show([screenCase({ originHeld: true })]);
