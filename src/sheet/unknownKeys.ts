@@ -16,9 +16,13 @@ interface Schema {
  * @param value  what was found, valid by the schema
  */
 export function unknownKeys(schema: unknown, value: unknown, path = ""): string[] {
-  const { type, entries, wrapped, item, options } = schema as Schema;
+  const { type, entries, wrapped, item, options, pipe } = schema as Schema;
   if (value === null || typeof value !== "object") return [];
   if (wrapped) return unknownKeys(wrapped, value, path);
+  if (pipe)
+    return pipe
+      .slice(type === "custom" ? 1 : 0)
+      .flatMap((step) => unknownKeys(withoutPipe(step), value, path));
   if (type === "array" && item && Array.isArray(value)) {
     return value.flatMap((each, i) => unknownKeys(item, each, `${path}[${i}]`));
   }
@@ -31,4 +35,10 @@ export function unknownKeys(schema: unknown, value: unknown, path = ""): string[
     const name = path === "" ? key : `${path}.${key}`;
     return Object.hasOwn(entries, key) ? unknownKeys(entries[key], inner, name) : [name];
   });
+}
+
+/** The first step of a pipe carries the whole pipe with it. */
+function withoutPipe(step: Schema): Omit<Schema, "pipe"> {
+  const { pipe: _pipe, ...rest } = step;
+  return rest;
 }
