@@ -1,0 +1,102 @@
+import type { Comparison } from "../../core/comparison.ts";
+import type { DecayResult } from "../../core/decayResult.ts";
+import { estimate } from "../../core/quantity.ts";
+import { formatProbability } from "../../figures/formatNumber.ts";
+import { type Sentence, say } from "./piece.ts";
+import type { SentenceCase } from "./sentenceCase.ts";
+import {
+  caseOf,
+  coordinate,
+  equated,
+  equation,
+  lengthValue,
+  stretch,
+  symbolOf,
+  valueWithInterval,
+} from "./shownValue.ts";
+import { capitalised, chained, counted, reason } from "./words.ts";
+
+/** The law of every case with its intervals and window, the common exponent, and why a law is not given. */
+export function decaySentences(
+  cases: readonly SentenceCase[],
+  comparison: Comparison | null = null,
+): readonly Sentence[] {
+  const fitted = cases.filter(({ decay }) => decay?.law);
+  const laws = fitted.flatMap((of, i) => (of.decay === null ? [] : [lawPart(of, of.decay, i === 0)]));
+  return [
+    ...(laws.length === 0 ? [] : [say`${chained(laws)}.`]),
+    ...(comparison === null ? [] : commonExponent(comparison)),
+    ...cases.filter(({ decay }) => decay !== null && !decay.law).map(noLawSentence),
+  ];
+}
+
+function lawPart(of: SentenceCase, decay: DecayResult, first: boolean): Sentence {
+  const origin = equated(symbolOf(of.along === "t" ? "t0" : "x0"), lengthValue(decay.x0, of));
+  const what = first ? `${quantityWord(decay)} decays ` : "";
+  return say`${first ? "In" : "in"} ${caseOf(of)} ${what}with exponent ${equation(decay.n, "n", of.units)} from a virtual origin ${origin}, fitted over ${coordinate(of)} = ${stretch(decay.window, of)}`;
+}
+
+function quantityWord({ quantity, assumption }: DecayResult): string {
+  const taken = { none: "", axisymmetric: " (axisymmetry assumed)", isotropic: " (isotropy assumed)" }[
+    assumption
+  ];
+  return { k: `the energy${taken}`, uu: "the streamwise variance", q: "the quantity given" }[quantity];
+}
+
+/** "One exponent for both cases, 1.26 (1.21 to 1.31), is not excluded (p = 0.81)." */
+function commonExponent({ common_n: { value, low, high, p }, cases }: Comparison): Sentence[] {
+  if (value === null || p === null) return [];
+  const both = cases.length === 2 ? "both cases" : "all cases";
+  const probability = probabilityText(p);
+  if (p < 0.05)
+    return [
+      say`One exponent for ${both} is excluded by these data in these windows (${probability}): each keeps its own.`,
+    ];
+  const common = estimate(value, low ?? Number.NaN, high ?? Number.NaN);
+  return [
+    say`One exponent for ${both}, ${valueWithInterval(common, "common_n", "SI")}, is not excluded (${probability}).`,
+  ];
+}
+
+/** "p = 0.81", "p < 0.001". */
+export function probabilityText(p: number): Sentence {
+  const text = formatProbability(p);
+  return [
+    { kind: "together", pieces: say`${symbolOf("p")}${text.startsWith("<") ? ` ${text}` : ` = ${text}`}` },
+  ];
+}
+
+/** "No law is given for the simulation: three stations lie in the window, and …" */
+export function noLawSentence(of: SentenceCase): Sentence {
+  const why = of.decay?.n.value === null ? of.decay.n.why : "it has not been fitted yet";
+  return say`No law is given for ${caseOf(of)}: ${reason(why)}.`;
+}
+
+/** Why the window is where it is, and how many stations it holds. */
+export function windowSentence(of: SentenceCase): Sentence {
+  const { decay } = of;
+  if (decay === null) return [];
+  const how = decay.windowChosen === "auto" ? "automatic" : "given by hand";
+  return say`${caseOf(of)}: window ${stretch(decay.window, of)}, ${how}, ${counted(decay.stations, "station")}. ${capitalised(reason(decay.windowReason))}.`;
+}
+
+/** "In screen the Saffman exponent 1.20 is not excluded (p = 0.06); the Loitsyansky exponent …" */
+export function hypothesisSentence(of: SentenceCase): Sentence {
+  const tested = of.decay?.hypotheses.filter(({ p }) => p !== null) ?? [];
+  if (tested.length === 0) return [];
+  const parts = tested.map(({ name, n, p }) => {
+    const verdict = (p ?? 0) < 0.05 ? "is excluded by these data in this window" : "is not excluded";
+    return say`the exponent ${exponentText(n)} (${name}) ${verdict} (${probabilityText(p ?? 0)})`;
+  });
+  return say`In ${caseOf(of)} ${chained(parts)}.`;
+}
+
+/** 6/5, 10/7 and the like as fractions, others with two decimals. */
+export function exponentText(n: number): string {
+  for (let bottom = 1; bottom <= 7; bottom++) {
+    const top = n * bottom;
+    if (Math.abs(top - Math.round(top)) < 1e-9)
+      return bottom === 1 ? `${Math.round(top)}` : `${Math.round(top)}/${bottom}`;
+  }
+  return n.toFixed(2);
+}
