@@ -8,7 +8,18 @@ export const bandsPerDecade = 20;
  * @returns     bin at which band b begins (inclusive); band b ends where band b - 1 begins, band 0 at size/2 + 1.
  *              The last band takes all that is left above bin 0.
  */
-export function bandBorders(size: number): number[] {
+export function bandBorders(size: number): readonly number[] {
+  let borders = known.get(size);
+  if (!borders) {
+    borders = makeBorders(size);
+    known.set(size, borders);
+  }
+  return borders;
+}
+
+const known = new Map<number, readonly number[]>();
+
+function makeBorders(size: number): number[] {
   const nyquist = size / 2;
   const borders: number[] = [];
   for (let band = 1; ; band++) {

@@ -29,7 +29,8 @@ export function openRecord(plan: RecordPlan, origin: RecordOrigin, facts: PilotF
   const history = historyOf(plan);
   const sums = startRecordSums(plan, origin, components);
   const columns = components.map(() => new Float64Array(history + size));
-  const weights = new Float64Array(size);
+  // placed as the samples are, behind the history
+  const weights = new Float64Array(history + size);
   let filled = 0;
   let samples = 0;
   let lowest = Infinity;
@@ -50,9 +51,10 @@ export function openRecord(plan: RecordPlan, origin: RecordOrigin, facts: PilotF
       if (step < 0) throw backwardTime(samples + k, last ?? 0, t[from + k], origin);
       if (last !== null && !isEqualStep(step, plan)) unequal++;
       const half = halfStep(step, plan.step) / plan.step;
-      weights[filled + k] = half;
+      const at = history + filled + k;
+      weights[at] = half;
       // a chunk's last sample was given its second half before the chunk went
-      if (filled + k > 0) weights[filled + k - 1] += half;
+      if (at > history) weights[at - 1] += half;
       last = t[from + k];
     }
   }
@@ -81,7 +83,7 @@ export function openRecord(plan: RecordPlan, origin: RecordOrigin, facts: PilotF
       for (let i = from; i < block.count; ) {
         if (filled === size) {
           if (block.t !== null && last !== null)
-            weights[size - 1] += halfStep(block.t[i] - last, plan.step) / plan.step;
+            weights[history + size - 1] += halfStep(block.t[i] - last, plan.step) / plan.step;
           flush();
         }
         const run = Math.min(size - filled, block.count - i);

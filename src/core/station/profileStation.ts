@@ -9,6 +9,7 @@ import { lateral } from "./stationValues.ts";
 
 type Values = ProfileRow["values"];
 const names: readonly Component[] = ["u", "v", "w"];
+const squares = { u: "uu", v: "vv", w: "ww" } as const;
 const noError = "the profile gives no standard error";
 
 /**
@@ -75,13 +76,13 @@ export function profileStation(
 }
 
 function variance(values: Values, name: Component): number {
-  const rms = values[`${name}_rms`];
-  return values[`${name}${name}`] ?? (rms === undefined ? Number.NaN : rms * rms);
+  const [square, rms] = [values[squares[name]], values[`${name}_rms`]];
+  return square ?? (rms === undefined ? Number.NaN : rms * rms);
 }
 
 function givenQ(values: Values): Quantity {
   if (values.q === undefined) return missing("the profile has no column q");
-  if (values.se === undefined) return bare(values.q, noError);
+  if (values.se === undefined || values.se === 0) return bare(values.q, noError);
   return withError(values.q, { standard: values.se / values.q, freedom: null, scale: "log" });
 }
 

@@ -16,8 +16,9 @@ import type { Component, StationPart } from "./stationPart.ts";
 /** All sums of one record; samples come in chunks whose borders follow from the sample's index alone. */
 export interface RecordSums {
   /**
-   * Takes `count` samples, already about the plan's reference, held at `history` … in every column.
+   * Takes `count` samples, already about the plan's reference, held from index `history` on in every column.
    * @param columns  each with `history` samples before the chunk's first
+   * @param weights  placed alike; null: all weigh 1
    */
   take(columns: readonly Float64Array[], count: number, weights: Float64Array | null): void;
   part(facts: PartFacts): StationPart;

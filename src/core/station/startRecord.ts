@@ -18,16 +18,18 @@ export interface RecordReducer {
   finish(): { part: StationPart } | { again: RecordPlan };
 }
 
+/** Samples of the pilot, which are held in memory. */
+export const pilotSamples = 1 << 20;
+
 export interface RecordOptions {
   /** Time left out at the start, s. */
   readonly startup: number;
   /** The plan of an earlier reading; null: the pilot makes one. */
   readonly plan: RecordPlan | null;
+  /** Samples of the pilot. */
+  readonly pilot: number;
 }
-export const recordDefaults: RecordOptions = { startup: 0, plan: null };
-
-/** Samples of the pilot, which are held in memory. */
-export const pilotSamples = 1 << 20;
+export const recordDefaults: RecordOptions = { startup: 0, plan: null, pilot: pilotSamples };
 
 /**
  * Begins the reduction of one probe's record. Results depend on the samples and on nothing else: in whichever
@@ -42,7 +44,7 @@ export function startRecord(
   settings: ReduceSettings,
   options: Partial<RecordOptions> = {},
 ): RecordReducer {
-  const { startup, plan } = { ...recordDefaults, ...options };
+  const { startup, plan, pilot: length } = { ...recordDefaults, ...options };
   const pilot = openPilot(origin, startup);
   let record: OpenRecord | null = null;
 
@@ -56,7 +58,7 @@ export function startRecord(
     add(block) {
       let from = 0;
       if (record === null) {
-        from = pilot.add(block, plan === null ? pilotSamples : 1);
+        from = pilot.add(block, plan === null ? length : 1);
         if (!pilot.full) return;
         record = begin();
       }

@@ -73,9 +73,20 @@ export function valueQuantity(name: ValueName, all: Replicates, absent: string):
 
 /** A value and the 95 % interval of Student's t on the scale of its error. */
 export function withError(value: number, error: StandardError): Quantity {
-  const reach = studentQuantile(0.975, error.freedom) * error.standard;
+  const reach = quantile(error.freedom) * error.standard;
   if (error.scale === "linear") return estimate(value, value - reach, value + reach, error);
   return estimate(value, value * Math.exp(-reach), value * Math.exp(reach), error);
+}
+
+const quantiles = new Map<number | null, number>();
+
+/** Student's 97.5 % point, found once: whole freedoms are those of every quantity of every station. */
+function quantile(freedom: number | null): number {
+  const known = quantiles.get(freedom);
+  if (known !== undefined) return known;
+  const found = studentQuantile(0.975, freedom);
+  if (freedom === null || Number.isInteger(freedom)) quantiles.set(freedom, found);
+  return found;
 }
 
 /** Errors of independent factors of a product, on the scale of the logarithm; freedom by Welch and Satterthwaite. */
