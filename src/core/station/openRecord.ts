@@ -69,7 +69,7 @@ export function openRecord(plan: RecordPlan, origin: RecordOrigin, facts: PilotF
       for (let k = 0; k < run; k++) target[at + k] = source[from + k] - level;
       if (plan.slope[c] === 0) continue;
       for (let k = 0; k < run; k++) {
-        const time = block.t === null ? facts.start + (samples + k) * plan.step : block.t[from + k];
+        const time = block.t === null ? (samples + k) * plan.step : block.t[from + k];
         target[at + k] -= plan.slope[c] * (time - plan.centre);
       }
     }

@@ -36,17 +36,17 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
   const facts = examineSteps(pilot.t, pilot.count, origin);
   const weighted = facts.unequal > 0;
   const reference = pilot.columns.map((column) => mean(column, pilot.count));
-  const centred = new Float64Array(pilot.count);
   if (!reference.every(Number.isFinite)) throw notFinite(origin);
-  let constant = true;
-  for (let i = 0; i < pilot.count; i++) {
-    centred[i] = u[i] - reference[0];
-    if (u[i] !== u[0]) constant = false;
-  }
-  if (constant) throw constantSignal(u[0], origin);
+  if (isConstant(u, pilot.count)) throw constantSignal(u[0], origin);
   const slope = pilot.columns.map((column, c) =>
     settings.detrend === "linear" ? trend(column, pilot, reference[c], facts.step) : 0,
   );
+  const centre = centreOf(pilot, facts.step);
+  const centred = new Float64Array(pilot.count);
+  for (let i = 0; i < pilot.count; i++) {
+    const time = slope[0] === 0 ? 0 : (pilot.t === null ? i * facts.step : pilot.t[i]) - centre;
+    centred[i] = u[i] - reference[0] - slope[0] * time;
+  }
   const lags = weighted ? { limit: 2, crossing: null, area: 0 } : findLags(centred);
   const segment = segmentSize(settings.segment, pilot.count, lags.area);
   const times = { step: facts.step, weighted, quantum: facts.quantum };
@@ -54,7 +54,7 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
     ...times,
     reference,
     slope,
-    centre: centreOf(pilot, facts.step),
+    centre,
     integralTime: lags.crossing === null ? null : lags.area * facts.step,
     lagLimit: lags.limit,
     lagStride: Math.max(1, lags.limit / mostLags),
@@ -148,6 +148,11 @@ function derivativeStep(
   if (!(rate > 0)) return 1;
   const eta = ((viscosity ** 2 * speed ** 2) / (15 * rate)) ** 0.25;
   return Math.min(Math.max(1, Math.round(eta / (speed * step))), blockSize(u.length) / 2);
+}
+
+function isConstant(x: Float64Array, count: number): boolean {
+  for (let i = 1; i < count; i++) if (x[i] !== x[0]) return false;
+  return true;
 }
 
 function mean(x: Float64Array, count: number): number {

@@ -21,7 +21,7 @@ const longSegment = 50;
 
 /**
  * Mean square of the time derivative of every component, from its Welch spectrum.
- * @returns an entry a component; one whose spectrum shows nothing but noise is left out
+ * @returns an entry a component; none where the spectrum shows nothing but noise
  */
 export function stationGradients(
   record: JoinedRecord,
@@ -30,6 +30,8 @@ export function stationGradients(
 ): ComponentGradient[] {
   if (spectra === null) return [];
   const { size, step } = spectra;
+  // uncorrelated samples are noise up to Nyquist
+  if (times.scale !== null && times.scale < step) return [];
   const scale = (times.scale ?? size * step) / step;
   return record.components.flatMap((name, c) => {
     const density = spectra.density[c];

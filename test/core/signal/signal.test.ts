@@ -182,16 +182,9 @@ describe("Welch spectrum", () => {
   });
   it("keeps its integral when it is brought onto wider bins", () => {
     const fine = gaussian(513).map((value) => value * value);
-    fine[0] = 0;
-    fine[512] = 0;
     const coarse = coarsenDensity(fine, 1024, 256);
-    const inner = (density: Float64Array) => density.slice(1, -1).reduce((sum, value) => sum + value, 0);
-    const ends = coarse[0] + coarse[128];
-    // the end bins are half as wide
-    expectClose(inner(coarse) + ends / 2, inner(fine) / 4, {
-      relative: 0.01,
-      because: "the end bins average one point less",
-    });
+    const sum = (density: Float64Array) => density.reduce((total, value) => total + value, 0);
+    expectClose(4 * sum(coarse), sum(fine), rounding);
   });
 });
 
