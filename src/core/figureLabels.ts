@@ -40,7 +40,7 @@ export const figureLabels: readonly Label[] = [
     percent: true,
   }),
   label("k1", "k_{1}", "streamwise wavenumber", "1/L", "k₁ = 2π f/U"),
-  label("k1_eta", "k_{1}η", "wavenumber in Kolmogorov units", "1", "k₁ η"),
+  label("k1_eta", "k_{1}η", "wavenumber in Kolmogorov units", "1", "k₁ times η, with ε by the route adopted"),
   label("E11", "E_{11}", "one-sided spectrum of u", "L³/T²", "∫ E₁₁ dk₁ from zero to infinity is ⟨u²⟩"),
   label(
     "E11_compensated",

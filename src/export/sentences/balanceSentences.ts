@@ -3,7 +3,7 @@ import { isUsed } from "../../figures/windowOf.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
 import { caseOf, equation, percent, position, symbolOf } from "./shownValue.ts";
-import { countWord, reason } from "./words.ts";
+import { counted, countWord, reason } from "./words.ts";
 
 /** Whether decay and gradients give the same dissipation, case by case. */
 export function balanceSentences(cases: readonly SentenceCase[], tolerance: number): readonly Sentence[] {
@@ -21,9 +21,14 @@ function balanceSentence(of: SentenceCase, tolerance: number): Sentence[] {
   }).length;
   const value = equation(middle.balance, "balance", of.units);
   return [
-    say`In ${caseOf(of)} ${value} at ${position(middle.x, of)}, the middle of the window; its interval holds one at ${countWord(closed)} of ${countWord(there.length)} stations.`,
+    say`In ${caseOf(of)} ${value} at ${position(middle.x, of)}, the middle of the window; its interval holds one at ${shareOf(closed, there.length)}.`,
     ...shortfall(of, middle, tolerance),
   ];
+}
+
+function shareOf(count: number, all: number): string {
+  if (count === all) return all === 1 ? "the one station" : `all ${counted(all, "station")}`;
+  return `${count === 0 ? "none" : countWord(count)} of ${counted(all, "station")}`;
 }
 
 /** What a departure means where the gradients carry clearly less than the decay asks for. */

@@ -2,7 +2,7 @@ import type { StationResult } from "../../core/stationResult.ts";
 import { isUsed } from "../../figures/windowOf.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
-import { caseOf, equation, percent, position, symbolOf } from "./shownValue.ts";
+import { caseOf, percent, position, symbolOf, valueWithInterval } from "./shownValue.ts";
 import { chained, reason } from "./words.ts";
 
 type Ratio = "isotropy_uv" | "isotropy_uw";
@@ -24,7 +24,7 @@ export function isotropySentences(cases: readonly SentenceCase[], tolerance: num
 function ratioPart(of: SentenceCase, key: Ratio, tolerance: number, first: boolean): Sentence {
   const last = lastWith(of, key);
   const where = last === null ? "" : ` at ${position(last.x, of)}`;
-  const value = last === null ? [] : equation(last[key], key, of.units);
+  const value = last === null ? [] : say`${symbolOf(key)} is ${valueWithInterval(last[key], key, of.units)}`;
   const from = settledFrom(of.stations, key, tolerance);
   const within = percent(tolerance);
   const settled =

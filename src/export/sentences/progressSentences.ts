@@ -40,7 +40,15 @@ export function failureSentence(failure: PlainFailure): Sentence {
   ].filter((part) => part !== null);
   const bracket =
     facts.length === 0 ? [] : say` (${facts.flatMap((fact, i) => (i === 0 ? fact : say`, ${fact}`))})`;
-  return say`${{ kind: "verbatim", text: file }}${place.length === 0 ? "" : ` ${place.join(", ")}`}: ${reason(failure.message)}${bracket}. ${failure.remedy}`;
+  return say`${{ kind: "verbatim", text: file }}${place.length === 0 ? "" : ` ${place.join(", ")}`}: ${quoted(reason(failure.message))}${bracket}. ${failure.remedy}`;
+}
+
+/** Text with its quotations of a file (in backticks) set as such. */
+function quoted(text: string): Sentence {
+  return text.split("`").flatMap((part, i): Sentence => {
+    if (part === "") return [];
+    return [{ kind: i % 2 === 1 ? "verbatim" : "text", text: part }];
+  });
 }
 
 /** A flag with its place: "screen, x = 1.60 m: the record is …". */
