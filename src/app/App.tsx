@@ -50,6 +50,10 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
     },
     [work, setNotice],
   );
+  const demo = () => {
+    drop(openDemo());
+    setNotice("The demo is on its way: 24 MB of records from beside this page.");
+  };
   const settings = useMemo(
     () => ({
       ...defaultFigureOptions,
@@ -98,7 +102,7 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
             <EmptyState
               onFiles={() => picker.current?.files()}
               onFolder={() => picker.current?.folder()}
-              onDemo={() => drop(openDemo())}
+              onDemo={demo}
             />
           )}
           {held !== null && live.length > 0 && (

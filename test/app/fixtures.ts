@@ -156,6 +156,8 @@ export function viewOf(stations: readonly StationResult[], change: Partial<CaseV
     mark: 0,
     length: 0.025,
     symbol: "M",
+    units: "SI",
+    along: "x",
     of: workspaceCase,
     reduced: { key: "k", stations, sources: [], flags: [], failures: [], complete: true },
     stations,

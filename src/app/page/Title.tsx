@@ -2,7 +2,7 @@ import { useRef, useState } from "react";
 import { labelOf } from "../../core/catalogue.ts";
 import { isEstimate } from "../../core/quantity.ts";
 import { unitOf } from "../../core/unitText.ts";
-import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
+import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
 import { SymbolText } from "../sections/SymbolText.tsx";
 import { UnitText } from "../sections/UnitText.tsx";
 import type { CaseView } from "../session/caseView.ts";
@@ -111,6 +111,12 @@ function shared(values: readonly (number | null)[]): number | null {
 }
 
 function lengthText(length: number, units: "SI" | "nondimensional"): string {
-  if (units !== "SI") return formatDigits(length, 3);
-  return length < 1 ? withUnit(formatDigits(length * 1000, 3), "mm") : withUnit(formatDigits(length, 3), "m");
+  if (units !== "SI") return plainDigits(length);
+  return length < 1 ? withUnit(plainDigits(length * 1000), "mm") : withUnit(plainDigits(length), "m");
+}
+
+/** At most four digits, none of them an idle zero: a mesh of 25 mm is not 25.0. */
+function plainDigits(value: number): string {
+  const rounded = Number(value.toPrecision(4));
+  return formatNumber(rounded, (String(rounded).split(".")[1] ?? "").length);
 }

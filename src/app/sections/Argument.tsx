@@ -36,7 +36,8 @@ export function Argument({
   const { dispatch, late, setHover } = useStore(store);
   const workspace = held.history.present;
   const comparisons = held.argued?.comparisons ?? noComparisons;
-  const findings = useMemo(() => findingsOf(cases, comparisons), [cases, comparisons]);
+  const { tolerance } = workspace.cases[0].sheet.compare;
+  const findings = useMemo(() => findingsOf(cases, comparisons, tolerance), [cases, comparisons, tolerance]);
   const change = (changed: WorkspaceChange) => dispatch({ kind: "changed", change: changed });
   const exports = pageExports(cases, held);
   const stale = late !== null && cases.some((view) => view.stale);
@@ -75,12 +76,7 @@ export function Argument({
             notes={isotropyNotes}
           />
           <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture} />
-          <SpectraSection
-            {...shared}
-            sentences={findings.spectra}
-            picked={workspace.picked}
-            onChange={change}
-          />
+          <SpectraSection {...shared} picked={workspace.picked} onChange={change} />
           <ArgumentSection
             id="balance"
             {...shared}

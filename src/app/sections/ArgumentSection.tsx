@@ -18,7 +18,7 @@ export interface SectionFigure {
   readonly build: (cases: readonly CaseView[], options: FigureOptions) => FigureSpec;
   readonly caption: ReactNode;
   /** What stands beside a figure of one column. */
-  readonly beside?: ReactNode;
+  readonly beside?: (cases: readonly CaseView[]) => ReactNode;
 }
 
 /** A section of the argument: finding, figure, folds, notes. */
@@ -59,7 +59,7 @@ function Drawn({ figure, cases }: { figure: SectionFigure; cases: readonly CaseV
   ) : (
     <div className="pair">
       {block}
-      <div>{beside}</div>
+      <div className="beside">{beside(cases)}</div>
     </div>
   );
 }

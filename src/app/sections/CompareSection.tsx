@@ -91,7 +91,7 @@ function ComparisonBlock({
           <>
             Ratio of {second} to {first} over the common range, {formatNumber(from, 1)} to{" "}
             {formatNumber(to, 1)} {comparison.align === "x0" ? `${symbol} from the origins` : ""}. Dot and
-            bar: geometric mean, 95 %. Shaded: tolerance. Open dot: undecided.
+            bar: geometric mean, 95 %. Shaded: tolerance. Open dot: undecided.
           </>
         }
       />

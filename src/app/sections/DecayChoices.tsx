@@ -1,11 +1,15 @@
 import { useState } from "react";
+import { labelOf } from "../../core/catalogue.ts";
 import { unitOf } from "../../core/unitText.ts";
-import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import { windowSentence } from "../../export/sentences/decaySentences.ts";
+import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
 import type { SheetFit } from "../../sheet/caseSheet.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ChoiceField } from "./ChoiceField.tsx";
 import { NumberField } from "./NumberField.tsx";
+import { SentenceText } from "./SentenceText.tsx";
+import { SymbolText } from "./SymbolText.tsx";
 
 const quantities = { auto: "automatic", k: "k", uu: "⟨u²⟩", q: "q as given" } as const;
 const residuals = { log: "logarithmic", linear: "linear" } as const;
@@ -27,8 +31,7 @@ export function DecayChoices({
         (view) =>
           view.decay && (
             <p key={view.id}>
-              {cases.length > 1 && `${view.name}: `}
-              {view.decay.windowReason}
+              <SentenceText sentence={windowSentence(view)} />
             </p>
           ),
       )}
@@ -48,7 +51,9 @@ function ChoiceList({ cases }: { cases: readonly CaseView[] }) {
   return (
     <dl className="choice-list">
       <dt>quantity</dt>
-      <dd>{said((fit, view) => (view.decay ? fitted(view) : quantities[fit.quantity]))}</dd>
+      <dd>
+        <FittedQuantities cases={cases} />
+      </dd>
       <dt>residuals</dt>
       <dd>{said((fit) => residuals[fit.residuals])}</dd>
       <dt>weights</dt>
@@ -146,13 +151,20 @@ function Origin() {
   );
 }
 
-function fitted({ decay }: CaseView): string {
-  if (!decay) return "";
-  const speed = decay.speed === null ? "" : `, U ${formatNumber(decay.speed, 2)}`;
-  const assumed = { none: "", axisymmetric: ", axisymmetry assumed", isotropic: ", isotropy assumed" };
-  return (
-    quantities[decay.quantity] + (decay.quantity === "q" ? "" : "/U²") + assumed[decay.assumption] + speed
+const assumed = { none: "", axisymmetric: "axisymmetry assumed", isotropic: "isotropy assumed" } as const;
+
+/** What is fitted, once where the cases agree: k/U², or u alone, and what was taken for granted. */
+function FittedQuantities({ cases }: { cases: readonly CaseView[] }) {
+  const kinds = new Map(
+    cases.flatMap(({ decay }) => (decay ? [[`${decay.quantity} ${decay.assumption}`, decay] as const] : [])),
   );
+  return [...kinds].map(([key, { quantity, assumption }], i) => (
+    <span key={key}>
+      {i > 0 && "; "}
+      <SymbolText runs={labelOf(quantity === "q" ? "q" : `${quantity}/U2`).symbol} />
+      {assumption !== "none" && `, ${assumed[assumption]}`}
+    </span>
+  ));
 }
 
 const held = (value: number | null, unit: string) =>

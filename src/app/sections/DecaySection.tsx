@@ -1,3 +1,4 @@
+import { hypothesisSentence } from "../../export/sentences/decaySentences.ts";
 import type { Sentence } from "../../export/sentences/piece.ts";
 import { decayFigure } from "../../figures/decayFigure.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
@@ -9,6 +10,7 @@ import { FitTable, HypothesisTable } from "./FitTable.tsx";
 import { Fold } from "./Fold.tsx";
 import { NoLaw } from "./NoLaw.tsx";
 import type { Note } from "./SectionFrame.tsx";
+import { SentenceText } from "./SentenceText.tsx";
 
 const figure: SectionFigure = {
   name: "Figure 1",
@@ -18,8 +20,8 @@ const figure: SectionFigure = {
   caption: (
     <>
       (<i>a</i>) Energy against distance from the virtual origin. Filled: inside the fit window; open:
-      outside; the law is thin where it is extended. Below, residuals from the law. Bars: 95 %. (<i>b</i>)
-      Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
+      outside; the law is thin where it is extended. Below, residuals from the law. Bars: 95 %. (<i>b</i>)
+      Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
       <sub>0</sub>; dashed: exponents of the classical hypotheses.
     </>
   ),
@@ -64,6 +66,11 @@ export function DecaySection({
         <Fold name="Fits, other routes, hypotheses">
           <FitTable cases={fitted} />
           <HypothesisTable cases={fitted} />
+          {fitted.map((view) => (
+            <p className="reason serif" key={view.id}>
+              <SentenceText sentence={hypothesisSentence(view)} />
+            </p>
+          ))}
         </Fold>
       )}
     </ArgumentSection>

@@ -1,5 +1,7 @@
 import { failureText, type PlainFailure } from "../../core/failure.ts";
+import { failureSentence } from "../../export/sentences/progressSentences.ts";
 import { Pennant } from "./Pennant.tsx";
+import { SentenceText } from "./SentenceText.tsx";
 
 /** What could not be used: each by its place, the fact, and what can be done. */
 export function FailureList({
@@ -16,15 +18,10 @@ export function FailureList({
         <li className={`failure ${fault ? "fault" : ""}`} key={failureText(failure)}>
           <Pennant />
           <span>
-            {failure.where.file !== undefined && <span className="well">{failure.where.file}</span>}{" "}
-            {failureText({ ...failure, where: withoutFile(failure.where) })}
+            <SentenceText sentence={failureSentence(failure)} />
           </span>
         </li>
       ))}
     </ul>
   );
-}
-
-function withoutFile({ file: _file, ...place }: PlainFailure["where"]): PlainFailure["where"] {
-  return place;
 }

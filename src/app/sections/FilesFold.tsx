@@ -1,5 +1,5 @@
 import type { Preview } from "../../core/records.ts";
-import { formatCount, formatDigits } from "../../figures/formatNumber.ts";
+import { formatCount, formatPosition } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { Fold } from "./Fold.tsx";
 
@@ -63,7 +63,7 @@ function FileRow({ name, view, preview }: { name: string; view: CaseView; previe
       </td>
       <td className="text">{preview ? columnsText(preview) : "–"}</td>
       <td>{preview ? formatCount(Number(preview.estimatedRows.toPrecision(3))) : "–"}</td>
-      <td>{xs.length === 0 ? "–" : xs.length === 1 ? formatDigits(xs[0], 3) : `${xs.length} positions`}</td>
+      <td>{xs.length === 0 ? "–" : xs.length === 1 ? formatPosition(xs[0]) : `${xs.length} positions`}</td>
       <td className="text">{position === null ? "–" : origins[position]}</td>
     </tr>
   );

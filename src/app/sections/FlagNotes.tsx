@@ -1,4 +1,4 @@
-import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
+import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import type { FlagGroup } from "./flagGroups.ts";
 import { Pennant } from "./Pennant.tsx";
@@ -45,6 +45,6 @@ function FlagNote({ group, unit }: { group: FlagGroup; unit: string }) {
 }
 
 function placesText(xs: readonly number[]): string {
-  const texts = xs.map((x) => formatDigits(x, 3));
+  const texts = xs.map((x) => formatPosition(x));
   return texts.length <= 3 ? texts.join(", ") : `${texts[0]} to ${texts[texts.length - 1]}`;
 }

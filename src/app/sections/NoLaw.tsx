@@ -1,5 +1,5 @@
 import { unitOf } from "../../core/unitText.ts";
-import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
+import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
@@ -20,8 +20,8 @@ export function NoLaw({ view, onChange }: { view: CaseView; onChange: (change: W
           className="action"
           onClick={() => onChange({ kind: "set-window", caseId: id, window: [first, last] })}
         >
-          Widen the window to {formatDigits(first, 3)} to{" "}
-          {withUnit(formatDigits(last, 3), unitOf("L", of.sheet.units))}
+          Widen the window to {formatPosition(first)} to{" "}
+          {withUnit(formatPosition(last), unitOf("L", of.sheet.units))}
         </button>
       )}
       {fit.x0 === null && (

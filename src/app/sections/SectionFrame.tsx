@@ -1,5 +1,6 @@
 import type { ReactNode, Ref } from "react";
 import type { SectionName } from "../page/sectionList.ts";
+import { useMediaQuery } from "../page/useTheme.ts";
 import { Fold } from "./Fold.tsx";
 
 /** A heading and what stands under it on the right of a section, or in a fold where there is no right. */
@@ -22,6 +23,7 @@ export function SectionFrame({
   ref?: Ref<HTMLElement>;
   children: ReactNode;
 }) {
+  const wide = useMediaQuery("(min-width: 1400px)");
   return (
     <section className="section row" id={section.id} aria-labelledby={`${section.id}-name`} ref={ref}>
       <h2 className="section-name" id={`${section.id}-name`}>
@@ -30,19 +32,18 @@ export function SectionFrame({
       </h2>
       <div className="section-body">{children}</div>
       <div className="notes">
-        <div className="note-open">
-          {notes.map(({ name, body }) => (
+        {notes.map(({ name, fact, body }) =>
+          wide ? (
             <div className="note" key={name}>
               <h3>{name}</h3>
               {body}
             </div>
-          ))}
-        </div>
-        {notes.map(({ name, fact, body }) => (
-          <Fold key={name} name={name} fact={fact} className="note-fold">
-            {body}
-          </Fold>
-        ))}
+          ) : (
+            <Fold key={name} name={name} fact={fact} className="note-fold">
+              {body}
+            </Fold>
+          ),
+        )}
       </div>
     </section>
   );

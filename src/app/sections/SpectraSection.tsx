@@ -1,8 +1,8 @@
 import { useCallback, useMemo, useState } from "react";
 import { unitOf } from "../../core/unitText.ts";
-import type { Sentence } from "../../export/sentences/piece.ts";
+import { spectrumSentences } from "../../export/sentences/spectrumSentences.ts";
 import type { FigureOptions, PickedCurve } from "../../figures/figureSpec.ts";
-import { formatDigits, withUnit } from "../../figures/formatNumber.ts";
+import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { spectrumFigure } from "../../figures/spectrumFigure.ts";
 import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
 import { pickLetters } from "../page/pickLetters.ts";
@@ -22,13 +22,11 @@ type Form = keyof typeof forms;
 export function SpectraSection({
   cases,
   stale,
-  sentences,
   picked,
   onChange,
 }: {
   cases: readonly CaseView[];
   stale: boolean;
-  sentences: readonly Sentence[];
   picked: readonly PickedStation[];
   onChange: (change: WorkspaceChange) => void;
 }) {
@@ -39,6 +37,7 @@ export function SpectraSection({
     [picked, form],
   );
   const curves = useMemo(() => pickedCurves(cases, picked), [cases, picked]);
+  const sentences = useMemo(() => spectrumSentences(curves), [curves]);
   const figure: SectionFigure = {
     name: "Figure 4",
     title: "Spectra and autocorrelations of the picked stations",
@@ -83,12 +82,18 @@ export function SpectraSection({
   );
 }
 
+/** A picked station with what the sentences and the figure need of its case. */
+interface CurveOfCase extends PickedCurve {
+  readonly caseId: string;
+  readonly of: CaseView;
+}
+
 function PickedList({
   curves,
   cases,
   onChange,
 }: {
-  curves: readonly (PickedCurve & { readonly caseId: string })[];
+  curves: readonly CurveOfCase[];
   cases: readonly CaseView[];
   onChange: (change: WorkspaceChange) => void;
 }) {
@@ -98,7 +103,7 @@ function PickedList({
       {curves.map(({ letter, of, station, caseId }) => (
         <li key={letter}>
           <i className="sym">{letter}</i> <CaseMark mark={of.mark} /> {of.name},{" "}
-          {withUnit(formatDigits(station.x, 3), unit)}{" "}
+          {withUnit(formatPosition(station.x), unit)}{" "}
           <button
             type="button"
             className="action"
@@ -114,10 +119,7 @@ function PickedList({
 }
 
 /** The picked stations that have curves, with their letters. */
-function pickedCurves(
-  cases: readonly CaseView[],
-  picked: readonly PickedStation[],
-): (PickedCurve & { readonly caseId: string })[] {
+function pickedCurves(cases: readonly CaseView[], picked: readonly PickedStation[]): CurveOfCase[] {
   return pickLetters(picked).flatMap(({ caseId, x, letter }) => {
     const of = cases.find(({ id }) => id === caseId);
     const station = of?.stations.find((each) => each.x === x);

@@ -2,6 +2,7 @@ import { balanceFigure } from "../../figures/balanceFigure.ts";
 import { isotropyFigure } from "../../figures/isotropyFigure.ts";
 import { scalesFigure } from "../../figures/scalesFigure.ts";
 import type { SectionFigure } from "./ArgumentSection.tsx";
+import { RouteTable } from "./RouteTable.tsx";
 import type { Note } from "./SectionFrame.tsx";
 
 /** The figures that need nothing but the cases, with their captions. */
@@ -12,7 +13,7 @@ export const isotropyPicture: SectionFigure = {
   build: isotropyFigure,
   caption: (
     <>
-      Ratios of the rms velocities; one in isotropic turbulence. Filled: inside the fit window. Bars: 95 %.
+      Ratios of the rms velocities; one in isotropic turbulence. Filled: inside the fit window. Bars: 95 %.
       Shaded: tolerance.
     </>
   ),
@@ -37,8 +38,9 @@ export const balancePicture: SectionFigure = {
   title: "Dissipation of the decay over that of the gradients",
   widthMm: 86,
   build: balanceFigure,
+  beside: (cases) => <RouteTable cases={cases} />,
   caption: (
-    <>Dissipation that the decay asks for over the one that gradients carry. Bars: 95 %. Shaded: tolerance.</>
+    <>Dissipation that the decay asks for over the one that gradients carry. Bars: 95 %. Shaded: tolerance.</>
   ),
 };
 

@@ -1,5 +1,11 @@
 import type { Comparison } from "../../core/comparison.ts";
-import { type Sentence, say } from "../../export/sentences/piece.ts";
+import { balanceSentences } from "../../export/sentences/balanceSentences.ts";
+import { compareSentences } from "../../export/sentences/compareSentences.ts";
+import { decaySentences } from "../../export/sentences/decaySentences.ts";
+import { isotropySentences } from "../../export/sentences/isotropySentences.ts";
+import type { Sentence } from "../../export/sentences/piece.ts";
+import { recordSentences } from "../../export/sentences/recordSentences.ts";
+import { scaleSentences } from "../../export/sentences/scaleSentences.ts";
 import type { CaseView } from "../session/caseView.ts";
 
 /** The finding of every section, from the results as they are. */
@@ -8,12 +14,38 @@ export interface Findings {
   readonly decay: readonly Sentence[];
   readonly isotropy: readonly Sentence[];
   readonly scales: readonly Sentence[];
-  readonly spectra: readonly Sentence[];
   readonly balance: readonly Sentence[];
   readonly compare: readonly Sentence[];
 }
 
-export function findingsOf(cases: readonly CaseView[], comparisons: readonly Comparison[]): Findings {
-  const x = [say`${String(cases.length)} cases, ${String(comparisons.length)} comparisons.`];
-  return { records: x, decay: x, isotropy: x, scales: x, spectra: x, balance: x, compare: x };
+export function findingsOf(
+  cases: readonly CaseView[],
+  comparisons: readonly Comparison[],
+  tolerance: number,
+): Findings {
+  const reduced = cases.filter((view) => view.stations.length > 0);
+  const files = cases.reduce((sum, view) => sum + view.of.sources.length, 0);
+  return {
+    records: recordSentences(cases, { files, failed: failedFiles(cases) }),
+    decay: decaySentences(reduced, reduced.length === 2 ? (comparisons[0] ?? null) : null),
+    isotropy: isotropySentences(reduced, tolerance),
+    scales: scaleSentences(reduced),
+    balance: balanceSentences(reduced, tolerance),
+    compare: comparisons.flatMap((comparison) => comparedSentences(comparison, reduced)),
+  };
+}
+
+function comparedSentences(comparison: Comparison, cases: readonly CaseView[]): readonly Sentence[] {
+  const [first, second] = comparison.cases.map((name) => cases.find((view) => view.name === name));
+  return first && second ? compareSentences(comparison, [first, second]) : [];
+}
+
+/** Files of which no probe was used. */
+function failedFiles(cases: readonly CaseView[]): number {
+  return cases.reduce((sum, { reduced }) => {
+    if (reduced === null) return sum;
+    const used = new Set(reduced.sources.map(({ name }) => name));
+    const failed = reduced.failures.flatMap(({ where }) => (where.file === undefined ? [] : [where.file]));
+    return sum + new Set(failed.filter((name) => !used.has(name))).size;
+  }, 0);
 }

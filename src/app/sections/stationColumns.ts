@@ -44,13 +44,16 @@ export function stationColumn(
   const label = labelOf(key);
   const { factor, unit } = displayOf(label, units);
   const quantities = stations.map((station) => station[key]);
-  const decimals = columnDecimals(quantities.filter(isEstimate), factor, label.digits);
+  const estimates = quantities.filter(isEstimate);
+  const common = columnDecimals(estimates, factor, label.digits);
+  const decimalsFor = (quantity: Quantity) =>
+    isEstimate(quantity) && spansDecades(estimates) ? ownDecimals(quantity, factor, label.digits) : common;
   const reasons = new Set(quantities.map((quantity) => (isEstimate(quantity) ? null : quantity.why)));
   const [only] = reasons;
   return {
     key,
     unit,
-    cells: quantities.map((quantity) => cell(quantity, factor, decimals)),
+    cells: quantities.map((quantity) => cell(quantity, factor, decimalsFor(quantity))),
     why: reasons.size === 1 && only !== null ? only : null,
   };
 }
@@ -65,13 +68,21 @@ function cell(quantity: Quantity, factor: number, decimals: number): StationCell
   return { value: formatNumber(value * factor, decimals), error, title: `${value} (${interval})` };
 }
 
+/** Values that fall by more than this along the stream are each written with their own decimals. */
+const decades = 100;
+
+function spansDecades(estimates: readonly Estimate[]): boolean {
+  const sizes = estimates.map(({ value }) => Math.abs(value));
+  return Math.max(...sizes) > decades * Math.min(...sizes);
+}
+
+function ownDecimals({ value, low, high }: Estimate, factor: number, digits: number): number {
+  return low === null || high === null
+    ? decimalsForDigits(value * factor, digits)
+    : decimalsOf({ value: value * factor, low: low * factor, high: high * factor }, digits);
+}
+
 function columnDecimals(estimates: readonly Estimate[], factor: number, digits: number): number {
-  const each = estimates
-    .map(({ value, low, high }) =>
-      low === null || high === null
-        ? decimalsForDigits(value * factor, digits)
-        : decimalsOf({ value: value * factor, low: low * factor, high: high * factor }, digits),
-    )
-    .sort((a, b) => a - b);
+  const each = estimates.map((one) => ownDecimals(one, factor, digits)).sort((a, b) => a - b);
   return each.length === 0 ? 0 : each[Math.floor(each.length / 2)];
 }

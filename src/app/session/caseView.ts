@@ -1,11 +1,11 @@
 import type { DecayResult } from "../../core/decayResult.ts";
 import type { StationResult } from "../../core/stationResult.ts";
-import type { FigureCase } from "../../figures/figureSpec.ts";
+import type { SentenceCase } from "../../export/sentences/sentenceCase.ts";
 import type { WorkspaceCase } from "../../sheet/workspace.ts";
 import type { Reduced, Work } from "./session.ts";
 
 /** One case as every part of the page sees it; it keeps its identity while nothing in it changes. */
-export interface CaseView extends FigureCase {
+export interface CaseView extends SentenceCase {
   readonly id: string;
   readonly of: WorkspaceCase;
   readonly reduced: Reduced | null;

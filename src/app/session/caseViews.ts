@@ -73,6 +73,8 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
     mark: of.mark,
     length: sheet.reference.length,
     symbol: sheet.reference.symbol,
+    units: sheet.units,
+    along: sheet.along,
     of,
     reduced,
     work,

@@ -1,8 +1,9 @@
 import { assertNever } from "../../core/failure.ts";
 import { changeWorkspace, emptyWorkspace } from "../../sheet/changeWorkspace.ts";
 import type { Workspace } from "../../sheet/workspace.ts";
+import { firstPicks } from "./firstPicks.ts";
 import { advance, redo, startHistory, undo } from "./history.ts";
-import type { Aside, Held, Offer, Plan, Session, Work } from "./session.ts";
+import type { Aside, Held, Offer, Plan, Reduced, Session, Work } from "./session.ts";
 import type { SessionEvent } from "./sessionEvent.ts";
 
 /**
@@ -26,6 +27,7 @@ export function nextSession(session: Session, event: SessionEvent): Session {
     case "reduced":
       return settled(session, event.caseId, (held) => ({
         ...held,
+        history: withFirstPicks(held, event.caseId, event.reduced),
         reductions: { ...held.reductions, [event.caseId]: event.reduced },
       }));
     case "stopped":
@@ -117,6 +119,14 @@ function settled(session: Session, caseId: string, change: (held: Held) => Held)
   if (ended === undefined) return session;
   const held = change(session.held);
   return Object.keys(work).length === 0 ? { kind: "ready", held } : { kind: "reducing", held, work };
+}
+
+/** A case that comes in for the first time brings two stations for the spectra; that is no step of undo. */
+function withFirstPicks({ history, reductions }: Held, caseId: string, reduced: Reduced): Held["history"] {
+  if (Object.hasOwn(reductions, caseId)) return history;
+  const pick = (workspace: Workspace, x: number) =>
+    changeWorkspace(workspace, { kind: "pick", station: { caseId, x } });
+  return { ...history, present: firstPicks(reduced.stations).reduce(pick, history.present) };
 }
 
 function withHistory(session: Session, change: (held: Held) => Held["history"]): Session {

@@ -24,7 +24,8 @@ export async function runDrop(
   const files = await dropped;
   if (files.length === 0) return store.getState().setNotice("The drop held no files.");
   await untilIdle(store);
-  const { dispatch } = store.getState();
+  const { dispatch, setNotice } = store.getState();
+  setNotice(null);
   dispatch({
     kind: "offered",
     files: files.length,

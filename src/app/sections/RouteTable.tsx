@@ -1,0 +1,74 @@
+import { labelOf } from "../../core/catalogue.ts";
+import type { Quantity } from "../../core/quantity.ts";
+import type { StationResult } from "../../core/stationResult.ts";
+import { unitOf } from "../../core/unitText.ts";
+import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { CaseMark } from "./CaseMark.tsx";
+import { Definition } from "./Definition.tsx";
+import { QuantityCells } from "./QuantityText.tsx";
+import { SymbolText } from "./SymbolText.tsx";
+import { UnitText } from "./UnitText.tsx";
+
+const routes: readonly { readonly name: string; readonly of: (station: StationResult) => Quantity }[] = [
+  { name: "gradients", of: (station) => station.epsilon_gradient },
+  { name: "decay", of: (station) => station.epsilon_decay },
+  { name: "inertial range", of: (station) => station.epsilon_inertial },
+  { name: "second order, bound", of: (station) => station.routes["epsilon_second-order"] },
+  { name: "third order, bound", of: (station) => station.routes["epsilon_third-order"] },
+  { name: "adopted", of: (station) => station.epsilon },
+];
+
+/** The dissipation at one station of each case by every route, or the reason why a route has none. */
+export function RouteTable({ cases }: { cases: readonly CaseView[] }) {
+  const shown = cases.flatMap((view) => {
+    const station = middleStation(view);
+    return station ? [{ view, station }] : [];
+  });
+  if (shown.length === 0) return null;
+  const { units } = shown[0].view;
+  return shown.map(({ view, station }) => (
+    <table className="data route-table" key={view.id}>
+      <thead>
+        <tr>
+          <th scope="col">
+            <Definition of="epsilon">
+              <SymbolText runs={labelOf("epsilon").symbol} />
+              {units === "SI" && (
+                <>
+                  {" "}
+                  (<UnitText unit={unitOf("L²/T³", units)} />)
+                </>
+              )}
+            </Definition>{" "}
+            at {withUnit(formatPosition(station.x), unitOf(view.along === "t" ? "T" : "L", units))}
+          </th>
+          <th scope="colgroup" colSpan={2}>
+            <CaseMark mark={view.mark} /> {view.name}
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {routes.map(({ name, of }) => {
+          const quantity = of(station);
+          return (
+            quantity && (
+              <tr key={name}>
+                <th scope="row">{name}</th>
+                <QuantityCells quantity={quantity} label="epsilon" units={units} />
+              </tr>
+            )
+          );
+        })}
+      </tbody>
+    </table>
+  ));
+}
+
+/** The middle station of the window: away from the near field and from the noise at the end. */
+function middleStation({ stations, decay }: CaseView): StationResult | undefined {
+  const used = stations.filter(
+    ({ x }) => decay?.points.some((point) => point.used && point.x === x) ?? false,
+  );
+  return used[Math.floor(used.length / 2)];
+}
