@@ -114,11 +114,17 @@ function nearest(above: readonly Line[], { width }: Dialect): Line | undefined {
 function misfit(line: Line, dialect: Dialect): boolean {
   if (line.comment) return false;
   const row = withoutEnd(line.row);
-  return row.every((field) => !isNumber(field, dialect)) && knownRoles(row) > 1;
+  return row.every((field) => !isNumber(field, dialect)) && namesColumns(row);
+}
+
+/** True of names that are clearly meant as a heading: two or more, and half of them the trade's. */
+export function namesColumns(names: readonly string[]): boolean {
+  const known = knownRoles(names);
+  return known > 1 && 2 * known >= names.length;
 }
 
 /** How many of some names are columns of the trade. */
-export function knownRoles(names: readonly string[]): number {
+function knownRoles(names: readonly string[]): number {
   const { roles, clashes } = recogniseColumns(names.map(parseHeading), null);
   return roles.filter((role) => role !== null).length + clashes.length;
 }

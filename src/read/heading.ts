@@ -12,7 +12,7 @@ export interface Heading {
 
 const bracketed = /^(.+?)[\s_/]*(\[([^[\]]*)\]|\(([^()]*)\))$/;
 const spoken = /^(.+?)\s*(?:\/|,|\bin\b)\s*(\S.*)$/;
-const appended = /^([A-Za-z][\w']*?)_(mm|cm|m|s|ms|us|mps|m_s|cm_s|mm_s)$/;
+const appended = /^([A-Za-z][\w']*?)_([cm]?m2?_s[23]?|mm|cm|m|s|ms|us|mps)$/;
 
 /**
  * A heading and the unit in it: `u [m/s]`, `u (m/s)`, `u / m/s`, `t in ms`, `x_mm`.
@@ -33,7 +33,7 @@ export function parseHeading(field: string): Heading {
     const unit = words[2]
       .trim()
       .replace(/^\((.*)\)$/, "$1")
-      .replace(/^([cm]?m)_s$/, "$1/s");
+      .replace(/^([cm]?m2?)_(s[23]?)$/, "$1/$2");
     if (unitOf(unit)) return { text, name: words[1].trim(), unit };
   }
   return { text, name: text, unit: null };

@@ -6,7 +6,7 @@ type Decimal = NonNullable<ReadSettings["decimal"]>;
  * The number a field of a file stands for, exactly as Number() would give it; NaN where it is none.
  * Refused although Number() takes them: nothing at all, other bases, infinity.
  * Taken although Number() does not: a decimal comma where the file has one, and what Fortran writes:
- * D for E, and no letter at all before an exponent of three digits (`3.14-114`).
+ * D for E, and no letter at all before a negative exponent of three digits (`3.14-114`).
  * @param text    the field, blanks around it allowed
  * @param decimal the file's decimal sign; the other one makes a field no number
  */
@@ -24,7 +24,7 @@ const blank = 32;
 const nine = 57;
 const plain = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
 const fortran = /^([+-]?(?:\d+\.?\d*|\.\d+))[dD]([+-]?\d+)$/;
-const letterless = /^([+-]?(?:\d+\.\d*|\.\d+))([+-]\d{3})$/;
+const letterless = /^([+-]?\d*\.\d+)(-\d{3})$/;
 
 function carefully(text: string): number {
   const token = text.trim().replace("\u2212", "-");

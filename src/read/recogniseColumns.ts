@@ -61,7 +61,8 @@ export function recogniseColumns(headings: readonly Heading[], layout: Layout | 
   const asProfile = assigned(headings, "profile");
   const asSeries = assigned(headings, "series");
   const has = (role: Role) => asProfile.roles.includes(role);
-  const energy = has("q") && !(asSeries.roles.includes("t") && asSeries.roles.includes("u"));
+  const energy =
+    has("q") && (has("x") || has("t")) && !(asSeries.roles.includes("t") && asSeries.roles.includes("u"));
   return reduced.some(has) || energy ? asProfile : asSeries;
 }
 

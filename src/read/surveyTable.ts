@@ -1,7 +1,7 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { ReadSettings } from "../core/records.ts";
 import { commentText } from "./commentLine.ts";
-import { findHeading, knownRoles } from "./findHeading.ts";
+import { findHeading, namesColumns } from "./findHeading.ts";
 import type { Heading } from "./heading.ts";
 import type { Head } from "./readHead.ts";
 import { type Dialect, recogniseDialect, withoutEnd } from "./recogniseDialect.ts";
@@ -42,6 +42,9 @@ export function surveyTable(head: Head, settings: FormSettings): TableForm {
   const near = dialects.filter(({ share }) => share > dialects[0].share - 0.02);
   const found = near.map((dialect) => ({ dialect, ...findHeading(head, dialect, settings.heading) }));
   const best = found.find(({ heading }) => heading !== null) ?? found[0];
+  if (best.heading === null && !best.mismatch && settings.heading === null && best.dialect.share < 0.5) {
+    throw withoutNumbers(head);
+  }
   if (settings.decimal === null) refuseCommaForBoth(head, best.dialect, written);
   if (best.mismatch && best.heading === null) throw mismatch(head, best.mismatch, best.dialect);
   return formOf(head, best.dialect, best.heading, best.firstLine);
@@ -115,7 +118,7 @@ function wordsForNumbers(head: Head): ReductionFailure | null {
     line.trim() === "" || commentText(line, null) !== null ? [] : [{ line, at: i + 1 }],
   );
   for (const separator of [",", ";", "\t", " "] as const) {
-    const heading = written.findIndex(({ line }) => knownRoles(splitRows(line, separator)[0]) > 1);
+    const heading = written.findIndex(({ line }) => namesColumns(splitRows(line, separator)[0]));
     const row = heading < 0 ? undefined : written[heading + 1];
     if (row) return noNumber(head.file, splitRows(row.line, separator)[0][0], row.at);
   }

@@ -68,17 +68,18 @@ describe("a field of a file", () => {
     [".196937d-02", 0.00196937],
     ["3.14-114", 3.14e-114],
     ["5.68713-304", 5.68713e-304],
-    ["-1.5+100", -1.5e100],
+    ["-1.5-100", -1.5e-100],
   ])("is a number when it is %j", (text, value) => expect(parseNumber(text, ".")).toBe(value));
   it("with a point is no number where the decimal sign is a comma: it may part thousands", () => {
     expect(parseNumber("1.234", ",")).toBeNaN();
     expect(parseNumber("1.234,5", ",")).toBeNaN();
   });
   it("that could be a date or a sum is no number", () => {
-    for (const text of ["2024-01", "12-05", "1.5-3", "3.14-1140"]) expect(parseNumber(text, ".")).toBeNaN();
+    for (const text of ["2024-01", "12-05", "1.5-3", "3.14-1140", "3.14+114", "3.-114"])
+      expect(parseNumber(text, ".")).toBeNaN();
   });
 });
 
 function fortran(text: string): number {
-  return Number(text.trim().replace(/(\.\d*)([+-]\d{3})$/, "$1e$2"));
+  return Number(text.trim().replace(/(\.\d+)(-\d{3})$/, "$1e$2"));
 }

@@ -110,6 +110,8 @@ describe("a unit in a heading", () => {
     ["time, s", "time", "s"],
     ["x_mm", "x", "mm"],
     ["u_m_s", "u", "m/s"],
+    ["uu_m2_s2", "uu", "m2/s2"],
+    ["eps_cm2_s3", "eps", "cm2/s3"],
     ["u [furlong]", "u", "furlong"],
     ["u (probe 1)", "u (probe 1)", null],
     ["u_rms", "u_rms", null],
