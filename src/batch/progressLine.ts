@@ -24,7 +24,7 @@ export function progressLine(write: (line: string) => void, now: () => number): 
     told = now();
     // a file that failed leaves bytes unread: the end is told by the files
     const share = bytes === 0 || complete ? 100 : Math.min(99, Math.floor((100 * bytesDone) / bytes));
-    write(`${filesDone} of ${files} files reduced, ${share} % of ${megabytes(bytes)} MB`);
+    write(`${filesDone} of ${files} files done, ${share} % of ${megabytes(bytes)} MB`);
   }
   return {
     expect(moreFiles, moreBytes) {

@@ -24,7 +24,7 @@ export interface Answered {
 }
 
 /** Bytes of columns that one worker keeps. */
-export const columnBudget = 1 << 27;
+export const columnBudget = 1 << 26;
 
 /**
  * Everything a worker can be asked, answered.
