@@ -4,6 +4,7 @@ import type { FigureSpec } from "../../figures/figureSpec.ts";
 import { dropDraw, queueDraw } from "./drawQueue.ts";
 import { loadPlotly } from "./loadPlotly.ts";
 import { plotConfig } from "./plotConfig.ts";
+import { readyFonts } from "./readyFonts.ts";
 import { useNearView } from "./useNearView.ts";
 
 /** Figures away from the screen are drawn when nothing has changed for this long, ms. */
@@ -29,7 +30,7 @@ export function Plot({ figure, label, onReady }: PlotProps) {
     let live = true;
     const draw = async () => {
       try {
-        const Plotly = await loadPlotly();
+        const [Plotly] = await Promise.all([loadPlotly(), readyFonts()]);
         if (!live || !element.isConnected) return;
         await Plotly.react(element, [...figure.traces] as Data[], figure.layout, plotConfig);
         drawn.current = figure;

@@ -4,6 +4,7 @@ import { embeddedFonts } from "./embeddedFonts.ts";
 import { loadPlotly } from "./loadPlotly.ts";
 import { plotConfig } from "./plotConfig.ts";
 import { withResolution } from "./pngResolution.ts";
+import { readyFonts } from "./readyFonts.ts";
 
 const mmPerInch = 25.4;
 
@@ -12,7 +13,7 @@ const mmPerInch = 25.4;
  * @param spec made with the print tokens: the file has a white ground whatever the page's colours
  */
 export async function figureSvg(spec: FigureSpec): Promise<string> {
-  const Plotly = await loadPlotly();
+  const [Plotly] = await Promise.all([loadPlotly(), readyFonts()]);
   const { width = 0, height = 0 } = spec.layout;
   const figure = {
     data: [...spec.traces] as Data[],
