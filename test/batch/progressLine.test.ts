@@ -21,7 +21,7 @@ describe("the progress of the batch", () => {
     line.read(1);
     line.fileDone();
     line.fileDone();
-    expect(lines).toEqual(["0 of 2 files done, 50 % of 2.0 MB", "2 of 2 files reduced, 100 % of 2.0 MB"]);
+    expect(lines).toEqual(["0 of 2 files done, 50 % of 2.0 MB", "2 of 2 files done, 100 % of 2.0 MB"]);
   });
 
   it("does not promise the whole before the last file is done", () => {
