@@ -25,6 +25,10 @@ export const fewestSamples = 64;
 const mostLags = 8192;
 const chunk = 4096;
 const firstLook = 1 << 17;
+/** Segments in a record of which some hundred are a group: 50 groups, a leak of a twentieth. */
+const longRecord = 200;
+/** Integral times in a short segment. */
+const shortSegment = 2;
 
 /**
  * What a record's pilot decides for all of it: step, lags, segments, blocks.
@@ -59,6 +63,7 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
     lagLimit: lags.limit,
     lagStride: Math.max(1, lags.limit / mostLags),
     segment,
+    bandSegment: bandSize(segment, pilot.count, lags.area),
     blockSamples: blockSize(pilot.count),
     derivativeStep: weighted
       ? 1
@@ -75,12 +80,14 @@ export function replan(
 ): RecordPlan {
   const steps = integralTime / plan.step;
   const limit = Math.min(powerAbove(8 * steps), powerBelow(samples / 2));
+  const segment = segmentSize(settings.segment, samples, steps);
   return {
     ...plan,
     integralTime,
     lagLimit: limit,
     lagStride: Math.max(1, limit / mostLags),
-    segment: segmentSize(settings.segment, samples, steps),
+    segment,
+    bandSegment: bandSize(segment, samples, steps),
   };
 }
 
@@ -122,6 +129,15 @@ function doubleLags(u: Float64Array, limit: number, most: number) {
 function segmentSize(wanted: number | null, count: number, integralSteps: number): number {
   if (wanted !== null) return Math.min(powerAbove(wanted), powerBelow(count));
   return Math.min(Math.max(powerAbove(50 * integralSteps), 256), powerBelow(count / 4));
+}
+
+/**
+ * Samples a short segment. It must be short against a group of the jackknife, or one group's gradient leaks into
+ * the next and the error comes out too small; where the long segments are that, they serve.
+ */
+function bandSize(segment: number, count: number, integralSteps: number): number {
+  if (count >= longRecord * segment) return segment;
+  return Math.min(segment, Math.max(64, powerAbove(shortSegment * integralSteps)));
 }
 
 /** Half the base of the difference behind the derivative skewness, in samples: nearest the Kolmogorov length. */

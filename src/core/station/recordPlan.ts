@@ -25,6 +25,8 @@ export interface RecordPlan {
   readonly lagStride: number;
   /** Samples in a segment of the Welch spectrum; a power of two. */
   readonly segment: number;
+  /** Samples in the short segments that tell how the gradient varies along the record; a power of two. */
+  readonly bandSegment: number;
   /** Samples in the smallest block, 64 · 2^m. */
   readonly blockSamples: number;
   /** Samples either side in the central difference behind the derivative skewness. */

@@ -126,7 +126,7 @@ function startSpectral(plan: RecordPlan, components: number) {
   const lags = each(() => startLagProducts(plan.lagLimit, plan.blockSamples, plan.lagStride));
   const products = each(() => additiveSeries(count));
   const edges = each(() => startEdges(plan.lagLimit, plan.lagStride));
-  const bands = startBandSums(Math.min(plan.segment, Math.max(plan.blockSamples, 256)), components);
+  const bands = startBandSums(plan.bandSegment, components);
   const long = bands.size === plan.segment ? null : each(() => startWelch(plan.segment));
   const series = [...products, bands.counts, ...bands.sums];
   const tables = (
