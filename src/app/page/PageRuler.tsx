@@ -43,7 +43,7 @@ export function PageRuler({
   const sheet = workspace?.cases[0]?.sheet;
   return (
     <Ruler
-      cases={lanes(cases, late !== null)}
+      cases={lanes(cases, late !== null, heldOf(session)?.previews ?? noPreviews)}
       axis={workspace?.axis ?? "x"}
       units={sheet ? unitOf(sheet.along === "t" ? "T" : "L", sheet.units) : "m"}
       along={sheet?.along ?? "x"}
@@ -64,6 +64,8 @@ export function PageRuler({
     />
   );
 }
+
+const noPreviews = [] as const;
 
 function showStation(caseId: string, x: number): void {
   const row = document.querySelector<HTMLElement>(`[data-station="${CSS.escape(`${caseId} ${x}`)}"]`);

@@ -1,4 +1,5 @@
 import { isEstimate, missing } from "../../core/quantity.ts";
+import type { Preview } from "../../core/records.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import { lawTuFactor } from "../ruler/lawTuFactor.ts";
 import type { LaneState, RulerCase, RulerStation } from "../ruler/rulerProps.ts";
@@ -9,25 +10,29 @@ import type { CaseView } from "../session/caseView.ts";
 const wellSampled = 1000;
 
 /** Lanes of the ruler from the views of the cases; a view that did not change gives the same lane again. */
-export function createRulerCases(): (cases: readonly CaseView[], late: boolean) => readonly RulerCase[] {
+export function createRulerCases(): (
+  cases: readonly CaseView[],
+  late: boolean,
+  previews: readonly Preview[],
+) => readonly RulerCase[] {
   const kept = new WeakMap<CaseView, { late: boolean; lane: RulerCase }>();
-  return (cases, late) =>
+  return (cases, late, previews) =>
     cases.map((view) => {
       const known = kept.get(view);
       if (known?.late === (late && view.stale)) return known.lane;
-      const lane = laneOf(view, late);
+      const lane = laneOf(view, late, previews);
       kept.set(view, { late: late && view.stale, lane });
       return lane;
     });
 }
 
-function laneOf(view: CaseView, late: boolean): RulerCase {
+function laneOf(view: CaseView, late: boolean, previews: readonly Preview[]): RulerCase {
   const { decay, stations, of } = view;
   return {
     id: view.id,
     name: view.name,
     mark: view.mark,
-    stations: stations.length > 0 ? stations.map(stationOf) : waitingStations(view),
+    stations: stations.length > 0 ? stations.map(stationOf) : waitingStations(view, previews),
     law: decay?.law ?? null,
     lawTu: decay === null ? null : lawTuFactor(decay, meanSpeed(view)),
     window: decay === null || decay.points.length === 0 ? null : decay.window,
@@ -50,9 +55,12 @@ function stationOf(station: StationResult): RulerStation {
   return { ...base, quality: times === null || times >= wellSampled ? "well" : "fair" };
 }
 
-/** Positions that the sheet gives are known before a file is read. */
-function waitingStations({ of }: CaseView): RulerStation[] {
-  const xs = of.sheet.files.map((file) => file.x).filter((x) => x !== null);
+/** Positions that the sheet, a name or a comment gives are known before a file is reduced. */
+function waitingStations({ of }: CaseView, previews: readonly Preview[]): RulerStation[] {
+  const byName = new Map(previews.map(({ file, position }) => [file, position.x]));
+  const xs = of.sheet.files
+    .map(({ x }, i) => x ?? byName.get(of.sources[i]?.name ?? "") ?? null)
+    .filter((x) => x !== null);
   return [...new Set(xs)].sort((a, b) => a - b).map((x) => ({ x, Tu: null, quality: "waiting" }));
 }
 

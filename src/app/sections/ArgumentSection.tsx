@@ -54,10 +54,10 @@ function Drawn({ figure, cases }: { figure: SectionFigure; cases: readonly CaseV
   const { name, title, widthMm, build, caption, beside } = figure;
   const draw = useCallback((options: FigureOptions) => build(cases, options), [build, cases]);
   const block = <FigureBlock name={name} title={title} widthMm={widthMm} build={draw} caption={caption} />;
-  return beside === undefined ? (
-    block
-  ) : (
-    <div className="pair">
+  if (beside === undefined) return block;
+  // one column of print holds the numbers of two cases; more stand under the figure
+  return (
+    <div className={cases.length <= 2 ? "pair" : undefined}>
       {block}
       <div className="beside">{beside(cases)}</div>
     </div>

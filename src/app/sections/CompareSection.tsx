@@ -28,7 +28,7 @@ export function CompareSection({
 }: {
   cases: readonly CaseView[];
   stale: boolean;
-  sentences: readonly Sentence[];
+  sentences: readonly (readonly Sentence[])[];
   comparisons: readonly Comparison[];
   settings: CompareSettings;
   onChange: (change: WorkspaceChange) => void;
@@ -42,18 +42,14 @@ export function CompareSection({
   ];
   return (
     <SectionFrame section={sectionOf("compare")} notes={cases.length > 1 ? notes : []}>
-      {cases.length < 2 ? (
-        <p className="finding serif">A second case is needed for a comparison. Drop one, or add its files.</p>
-      ) : (
-        <Finding sentences={sentences} stale={stale} />
+      {cases.length < 2 && (
+        <p className="finding serif">A second case is needed for a comparison: drop one, or add its files.</p>
       )}
       {comparisons.map((comparison, i) => (
-        <ComparisonBlock
-          key={comparison.cases.join(" ")}
-          comparison={comparison}
-          symbol={cases[0].symbol}
-          number={firstFigure + i}
-        />
+        <div className="comparison" key={comparison.cases.join(" ")}>
+          <Finding sentences={sentences[i] ?? []} stale={stale} />
+          <ComparisonBlock comparison={comparison} symbol={cases[0].symbol} number={firstFigure + i} />
+        </div>
       ))}
     </SectionFrame>
   );
@@ -73,12 +69,7 @@ function ComparisonBlock({
     [comparison, symbol],
   );
   const [first, second] = comparison.cases;
-  if (comparison.overlap === null)
-    return (
-      <p className="reason">
-        {second} against {first}: {comparison.why ?? "there is no common range"}.
-      </p>
-    );
+  if (comparison.overlap === null) return null;
   const [from, to] = comparison.overlap;
   return (
     <>

@@ -2,6 +2,7 @@ import { labelOf } from "../../core/catalogue.ts";
 import { type ComparedQuantity, type Comparison, comparedQuantities } from "../../core/comparison.ts";
 import { formatScaled } from "../../figures/formatQuantity.ts";
 import { Definition } from "./Definition.tsx";
+import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 
 /** Ratios of two cases over their common range, with what they come to at the chosen tolerance. */
@@ -46,7 +47,7 @@ function RatioRow({ comparison, of }: { comparison: Comparison; of: ComparedQuan
       </td>
       {ratio.value === null ? (
         <td className="why" colSpan={4}>
-          {ratio.why}
+          <RichText text={ratio.why} />
         </td>
       ) : (
         <>

@@ -2,6 +2,7 @@ import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import type { FlagGroup } from "./flagGroups.ts";
 import { Pennant } from "./Pennant.tsx";
+import { RichText } from "./RichText.tsx";
 
 /** So many doubts are read beside the sentence; the others wait in a fold. */
 const shownAtOnce = 4;
@@ -38,7 +39,7 @@ function FlagNote({ group, unit }: { group: FlagGroup; unit: string }) {
             , <i className="sym">x</i> = {withUnit(placesText(xs), unit)}
           </>
         )}
-        {xs.length > 3 && ` (${xs.length} stations)`}: {text}
+        {xs.length > 3 && ` (${xs.length} stations)`}: <RichText text={text} />
       </span>
     </p>
   );

@@ -3,6 +3,7 @@ import type { Quantity } from "../../core/quantity.ts";
 import type { Units } from "../../core/unitText.ts";
 import { raisedDigits, thinSpace, withUnit } from "../../figures/formatNumber.ts";
 import { type FormattedQuantity, formatQuantity, formatScaled } from "../../figures/formatQuantity.ts";
+import { RichText } from "./RichText.tsx";
 
 /** How a quantity is to be shown: by its label, or in multiples of a length. */
 export interface Manner {
@@ -30,7 +31,7 @@ export function QuantityCells({ quantity, ...manner }: { quantity: Quantity } & 
   if (quantity.value === null)
     return (
       <td className="why" colSpan={2}>
-        {shown.why}
+        <RichText text={quantity.why} />
       </td>
     );
   return (

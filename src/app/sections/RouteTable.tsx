@@ -10,13 +10,16 @@ import { QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { UnitText } from "./UnitText.tsx";
 
-const routes: readonly { readonly name: string; readonly of: (station: StationResult) => Quantity }[] = [
+const routes: readonly {
+  readonly name: string;
+  readonly of: (station: StationResult) => Quantity | undefined;
+}[] = [
+  { name: "adopted", of: (station) => station.epsilon },
   { name: "gradients", of: (station) => station.epsilon_gradient },
   { name: "decay", of: (station) => station.epsilon_decay },
   { name: "inertial range", of: (station) => station.epsilon_inertial },
   { name: "second order, bound", of: (station) => station.routes["epsilon_second-order"] },
   { name: "third order, bound", of: (station) => station.routes["epsilon_third-order"] },
-  { name: "adopted", of: (station) => station.epsilon },
 ];
 
 /** The dissipation at one station of each case by every route, or the reason why a route has none. */
@@ -27,42 +30,55 @@ export function RouteTable({ cases }: { cases: readonly CaseView[] }) {
   });
   if (shown.length === 0) return null;
   const { units } = shown[0].view;
-  return shown.map(({ view, station }) => (
-    <table className="data route-table" key={view.id}>
-      <thead>
-        <tr>
-          <th scope="col">
-            <Definition of="epsilon">
-              <SymbolText runs={labelOf("epsilon").symbol} />
-              {units === "SI" && (
-                <>
-                  {" "}
-                  (<UnitText unit={unitOf("L²/T³", units)} />)
-                </>
-              )}
-            </Definition>{" "}
-            at {withUnit(formatPosition(station.x), unitOf(view.along === "t" ? "T" : "L", units))}
-          </th>
-          <th scope="colgroup" colSpan={2}>
-            <CaseMark mark={view.mark} /> {view.name}
-          </th>
-        </tr>
-      </thead>
-      <tbody>
-        {routes.map(({ name, of }) => {
-          const quantity = of(station);
-          return (
-            quantity && (
+  return (
+    <div className="table-scroll">
+      <table className="data route-table">
+        <thead>
+          <tr>
+            <th scope="col">
+              <Definition of="epsilon">
+                <SymbolText runs={labelOf("epsilon").symbol} />
+                {units === "SI" && (
+                  <>
+                    {" "}
+                    (<UnitText unit={unitOf("L²/T³", units)} />)
+                  </>
+                )}
+              </Definition>
+            </th>
+            {shown.map(({ view, station }) => (
+              <th scope="colgroup" colSpan={2} key={view.id}>
+                <CaseMark mark={view.mark} /> {view.name}, {placeOf(view, station)}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {routes
+            .filter(({ of }) => shown.some(({ station }) => of(station) !== undefined))
+            .map(({ name, of }) => (
               <tr key={name}>
                 <th scope="row">{name}</th>
-                <QuantityCells quantity={quantity} label="epsilon" units={units} />
+                {shown.map(({ view, station }) => (
+                  <QuantityCells
+                    key={view.id}
+                    quantity={of(station) ?? notTried}
+                    label="epsilon"
+                    units={units}
+                  />
+                ))}
               </tr>
-            )
-          );
-        })}
-      </tbody>
-    </table>
-  ));
+            ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+const notTried: Quantity = { value: null, why: "needs a record" };
+
+function placeOf({ along, units }: CaseView, { x }: StationResult): string {
+  return withUnit(formatPosition(x), unitOf(along === "t" ? "T" : "L", units));
 }
 
 /** The middle station of the window: away from the near field and from the noise at the end. */

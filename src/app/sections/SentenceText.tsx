@@ -1,5 +1,6 @@
 import type { Piece, Sentence } from "../../export/sentences/piece.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 
 /** A sentence as the page sets it: values in weight 600, intervals in grey, each case behind its marker. */
@@ -13,7 +14,7 @@ export function SentenceText({ sentence }: { sentence: Sentence }) {
 function PieceText({ piece }: { piece: Piece }) {
   switch (piece.kind) {
     case "text":
-      return piece.text;
+      return <RichText text={piece.text} />;
     case "strong":
       return <strong>{piece.text}</strong>;
     case "interval":

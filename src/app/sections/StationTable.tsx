@@ -5,6 +5,7 @@ import { unitOf } from "../../core/unitText.ts";
 import { decimalsForDigits, formatNumber } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { Definition } from "./Definition.tsx";
+import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.ts";
 import { UnitText } from "./UnitText.tsx";
@@ -101,7 +102,7 @@ function Gaps({ columns }: { columns: readonly StationColumn[] }) {
           <SymbolText runs={labelOf(column.key).symbol} />
         </span>
       ))}
-      : {why}.
+      : <RichText text={why} />.
     </p>
   ));
 }

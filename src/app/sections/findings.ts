@@ -15,7 +15,8 @@ export interface Findings {
   readonly isotropy: readonly Sentence[];
   readonly scales: readonly Sentence[];
   readonly balance: readonly Sentence[];
-  readonly compare: readonly Sentence[];
+  /** One finding for each comparison. */
+  readonly compare: readonly (readonly Sentence[])[];
 }
 
 export function findingsOf(
@@ -31,7 +32,7 @@ export function findingsOf(
     isotropy: isotropySentences(reduced, tolerance),
     scales: scaleSentences(reduced),
     balance: balanceSentences(reduced, tolerance),
-    compare: comparisons.flatMap((comparison) => comparedSentences(comparison, reduced)),
+    compare: comparisons.map((comparison) => comparedSentences(comparison, reduced)),
   };
 }
 
