@@ -7,7 +7,7 @@ import { caseMark } from "./caseMark.ts";
 import { dashOf, drawingOf } from "./drawing.ts";
 import type { FigureCase, FigureOptions } from "./figureSpec.ts";
 import { jointRegion, type Region } from "./jointRegion.ts";
-import { shortened } from "./legend.ts";
+import { fewCases, shortened } from "./legend.ts";
 import { pageNote } from "./pageNote.ts";
 import { isInside, uprightLine } from "./pageShapes.ts";
 import { type Box, type Decor, linearAxis, type Panel, placeX, placeY } from "./panel.ts";
@@ -162,6 +162,8 @@ function caseNotes(
   options: FigureOptions,
 ) {
   const { numeral } = drawingOf(options);
+  // Many names would hide the regions; the legend of the other panel has them too.
+  if (fitted.length > fewCases) return [];
   return fitted.flatMap(({ name }, i) => {
     const { n, x0 } = outlines[i];
     if (n.length === 0) return [];

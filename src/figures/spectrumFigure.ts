@@ -104,7 +104,8 @@ function pickedRows(picked: readonly PickedCurve[], options: FigureOptions): Leg
   const unit = options.units === "SI" ? (options.along === "t" ? "s" : "m") : "";
   return picked.map((one) => ({
     mark: one.of.mark,
-    text: `<i>${escapeText(one.letter)}</i>  ${escapeText(shortened(one.of.name))}, ${withUnit(formatPosition(one.station.x), unit)}`,
+    text: `${escapeText(shortened(one.of.name))}, ${withUnit(formatPosition(one.station.x), unit)}`,
+    letter: escapeText(one.letter),
     marker: false,
     weightPt: lineWeight(one, picked),
   }));

@@ -131,6 +131,12 @@ describe("the figure of the decay", () => {
     const residuals = table.rows.map((row) => Number(row[table.heading.indexOf("residual_percent")]));
     expect(Math.max(...residuals.map(Math.abs))).toBeLessThan(1e-9);
   });
+  it("fills every marker of a case that has no fit window yet", () => {
+    const unfitted = madePair.map((of) => ({ ...of, decay: null }));
+    const [first] = markers(isotropyFigure(unfitted, options), "screen");
+    const fills = first.marker?.color as string[];
+    expect(fills.filter((fill) => fill === lightTokens.paper)).toHaveLength(1); // the one without an interval
+  });
   it("stands on x where a case has no law, without a strip of residuals", () => {
     const lawless = madePair.map((of) => ({ ...of, decay: of.decay && { ...of.decay, law: null } }));
     const plain = decayFigure(lawless, { ...options, widthMm: 86 });
