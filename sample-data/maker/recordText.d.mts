@@ -1,0 +1,3 @@
+import type { SynthesisedRecord } from "./synthesise.d.mts";
+
+export function simulatedText(record: SynthesisedRecord, probe: { x: number; step: number }): string;
