@@ -37,6 +37,11 @@ export function blockRow(series: BlockSeries, block: number): Float64Array {
   return series.data.subarray(block * series.width, (block + 1) * series.width);
 }
 
+/** The rows of the blocks begun, in an array of their own. */
+export function trimmed(series: BlockSeries, rows: number): Float64Array {
+  return series.data.slice(0, rows * series.width);
+}
+
 /**
  * Up to 127 blocks; when a 128th would begin, pairs are merged and the size doubles. Borders depend on nothing
  * but the count of samples, so that any way of handing the samples in gives the same blocks.

@@ -1,7 +1,7 @@
 import type { Flag } from "../flag.ts";
 import type { ReduceSettings } from "../stationResult.ts";
-import type { ClosedRecord, OpenRecord } from "./openRecord.ts";
 import { replan } from "./planRecord.ts";
+import type { ClosedRecord, RecordChunks } from "./recordChunks.ts";
 import { recordCorrelation } from "./recordCorrelation.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import type { StationPart } from "./stationPart.ts";
@@ -15,7 +15,7 @@ const allowedChange = 0.25;
  * A second reading is always the last.
  */
 export function settle(
-  record: OpenRecord,
+  record: RecordChunks,
   second: boolean,
   settings: ReduceSettings,
 ): { part: StationPart } | { again: RecordPlan } {
@@ -49,7 +49,7 @@ function integralTimeOf(part: StationPart): number | null {
   return at === null ? null : (area / correlation[0]) * part.lags.stride * part.step;
 }
 
-function recordFlags({ plan, facts }: OpenRecord, closed: ClosedRecord): Flag[] {
+function recordFlags({ plan, facts }: RecordChunks, closed: ClosedRecord): Flag[] {
   const flags: Flag[] = [];
   if (facts.skipped > 0) {
     flags.push({

@@ -1,7 +1,7 @@
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
-import { openPilot } from "./openPilot.ts";
-import { type OpenRecord, openRecord } from "./openRecord.ts";
+import { PilotBuffer } from "./pilotBuffer.ts";
+import { RecordChunks } from "./recordChunks.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { settle } from "./settleRecord.ts";
 import type { StationPart } from "./stationPart.ts";
@@ -45,11 +45,12 @@ export function startRecord(
   options: Partial<RecordOptions> = {},
 ): RecordReducer {
   const { startup, plan, pilot: length } = { ...recordDefaults, ...options };
-  const pilot = openPilot(origin, startup);
-  let record: OpenRecord | null = null;
+  const pilot = new PilotBuffer(origin, startup);
+  const held = plan === null ? length : 1;
+  let record: RecordChunks | null = null;
 
-  function begin(): OpenRecord {
-    const opened = openRecord(plan ?? pilot.plan(settings), origin, pilot.facts());
+  function begin(): RecordChunks {
+    const opened = new RecordChunks(plan ?? pilot.plan(settings), origin, pilot.facts());
     opened.add(pilot.block(), 0);
     pilot.release();
     return opened;
@@ -58,8 +59,8 @@ export function startRecord(
     add(block) {
       let from = 0;
       if (record === null) {
-        from = pilot.add(block, plan === null ? length : 1);
-        if (!pilot.full) return;
+        from = pilot.add(block, held);
+        if (!pilot.holds(held)) return;
         record = begin();
       }
       record.add(block, from);
