@@ -107,18 +107,17 @@ function caseTraces(of: FigureCase, { inner, outer }: Regions, options: FigureOp
           } as Partial<Data>,
         ];
   const best = bestFit(of);
-  const cross = outer === null ? heldBars(of, options) : [];
   const [n, x0] = [best.n[0], best.x0[0]];
   return [
     ...outline(outer, 0.14),
     ...outline(inner, 0.22),
-    ...cross,
+    ...intervalBars(of, options),
     loneMarker({ x: n, y: x0 }, of.mark, options, 1.8),
   ];
 }
 
-/** Where n or x0 was held there is no region: the interval of the free one is a line. */
-function heldBars(of: FigureCase, options: FigureOptions): Partial<Data>[] {
+/** The adopted intervals of n and x0 as thin bars: they may reach further than the region of this one window. */
+function intervalBars(of: FigureCase, options: FigureOptions): Partial<Data>[] {
   const best = bestFit(of);
   const bars = { weightPt: 0.6, dashed: false };
   const [n, x0] = [ends(of.decay, "n"), ends(of.decay, "x0")];

@@ -15,13 +15,19 @@ function balanceSentence(of: SentenceCase, tolerance: number): Sentence[] {
   const there = inside.filter(({ balance }) => balance.value !== null);
   if (there.length === 0) return missingBalance(of, inside[0] ?? of.stations[0]);
   const middle = there[Math.floor(there.length / 2)];
-  const closed = there.filter(({ balance }) => {
-    if (balance.value === null || balance.low === null || balance.high === null) return false;
-    return balance.low <= 1 && balance.high >= 1;
-  }).length;
+  const known = there.flatMap(({ balance }) =>
+    balance.value === null || balance.low === null || balance.high === null
+      ? []
+      : [balance.low <= 1 && balance.high >= 1],
+  );
+  const closed = known.filter(Boolean).length;
+  const verdict =
+    known.length === 0
+      ? "no interval can be given"
+      : `its interval holds one at ${shareOf(closed, known.length)}`;
   const value = equation(middle.balance, "balance", of.units);
   return [
-    say`In ${caseOf(of)} ${value} at ${position(middle.x, of)}, the middle of the window; its interval holds one at ${shareOf(closed, there.length)}.`,
+    say`In ${caseOf(of)} ${value} at ${position(middle.x, of)}, the middle of the window; ${verdict}.`,
     ...shortfall(of, middle, tolerance),
   ];
 }

@@ -36,19 +36,28 @@ function inertialSentences(drawn: readonly PickedStation[]): Sentence[] {
     const why = epsilon_inertial.value === null ? reason(epsilon_inertial.why) : "";
     reasons.set(why, [...(reasons.get(why) ?? []), one]);
   }
-  const all = reasons.size === 1 && claimed.length === 0;
-  return [
-    ...(claimed.length === 0
+  const claims =
+    claimed.length === 0
       ? []
       : [
           say`An inertial range is claimed at ${letters(claimed)}; its dissipation stands in the table of routes.`,
-        ]),
-    ...[...reasons].map(([why, some]) =>
-      all
-        ? say`No inertial range is claimed: ${why}.`
-        : say`No inertial range is claimed at ${letters(some)}: ${why}.`,
-    ),
+        ];
+  const [only] = reasons.keys();
+  if (reasons.size === 1 && claimed.length === 0) return [say`No inertial range is claimed: ${only}.`];
+  const clause = sharedClause([...reasons.keys()]);
+  if (clause !== null && claimed.length === 0)
+    return [say`No inertial range is claimed at any of them; in ${symbolOf("Re_lambda")} ${clause}.`];
+  return [
+    ...claims,
+    ...[...reasons].map(([why, some]) => say`No inertial range is claimed at ${letters(some)}: ${why}.`),
   ];
+}
+
+/** What follows the number in reasons that differ by their Reynolds number alone; null where they differ otherwise. */
+function sharedClause(whys: readonly string[]): string | null {
+  const clauses = new Set(whys.map((why) => /^Re_\S+ is [\d.]+: (.*)$/.exec(why)?.[1] ?? why));
+  const [first] = clauses;
+  return clauses.size === 1 && first !== whys[0] ? first : null;
 }
 
 /** Where the spectra have no unit of dissipation. */

@@ -134,7 +134,29 @@ describe("the sentences of scales and spectra", () => {
   });
 });
 
+describe("the sentence of the spectra", () => {
+  it("gives once what several stations lack", () => {
+    const picked = ["a", "b"].map((letter, i) => ({
+      of: screen,
+      station: {
+        ...screen.stations[5 + i],
+        epsilon_inertial: missing(`Re_lambda is ${56 + i}.4: an inertial range needs more than 100`),
+      },
+      letter,
+    }));
+    expect(read(spectrumSentences(picked))).toContain(
+      "No inertial range is claimed at any of them; in Re_λ an inertial range needs more than 100.",
+    );
+  });
+});
+
 describe("the sentence of the balance", () => {
+  it("does not count a station without an interval as open", () => {
+    const bare = change(screen, () => ({
+      balance: { value: 0.97, low: null, high: null, why_low: "a profile", why_high: "a profile" },
+    }));
+    expect(read(balanceSentences([bare], 0.1))).toContain("no interval can be given.");
+  });
   it("says at how many stations the interval holds one", () => {
     expect(read(balanceSentences([screen], 0.1))).toContain("its interval holds one at all 12 stations.");
   });
