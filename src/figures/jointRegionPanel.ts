@@ -173,7 +173,7 @@ function caseNotes(
     const top = placeY(panel, Math.max(...x0));
     const bottom = placeY(panel, Math.min(...x0));
     const place = fits
-      ? { x: right, y: top + (bottom - top) * 0.3, xanchor: "left" as const }
+      ? { x: right, y: top + (bottom - top) * 0.08, xanchor: "left" as const }
       : {
           x: placeX(panel, (2 * low + high) / 3) - 3,
           y: top + (bottom - top) * 0.62,
