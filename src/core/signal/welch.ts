@@ -24,19 +24,15 @@ export function startWelch(
 ): WelchSums {
   const window = hannWindow(size);
   const fourier = realFourier(size);
-  const held = new Float64Array(size);
-  const windowed = new Float64Array(size);
+  const [held, windowed] = [new Float64Array(size), new Float64Array(size)];
   const power = new Float64Array(size / 2 + 1);
   const edges = new Float64Array(2);
-  let filled = 0;
-  let segments = 0;
+  let [filled, segments] = [0, 0];
 
   function take(): void {
     for (let n = 0; n < size; n++) windowed[n] = held[n] * window[n];
     const transform = fourier.forward(windowed);
-    for (let f = 0, i = 0; f < power.length; f++, i += 2) {
-      power[f] += transform[i] * transform[i] + transform[i + 1] * transform[i + 1];
-    }
+    addPower(power, transform);
     edges[0] += transform[0];
     edges[1] += transform[2];
     onSegment((segments * size) / 2 + size / 2, transform);
@@ -61,4 +57,11 @@ export function startWelch(
       }
     },
   };
+}
+
+/** sum += |X|², bin by bin. */
+function addPower(sum: Float64Array, transform: Float64Array): void {
+  for (let f = 0, i = 0; f < sum.length; f++, i += 2) {
+    sum[f] += transform[i] * transform[i] + transform[i + 1] * transform[i + 1];
+  }
 }

@@ -12,6 +12,8 @@ export interface PilotFacts {
   readonly start: number;
   /** Samples left out as start-up. */
   readonly skipped: number;
+  /** Samples of the pilot. */
+  readonly held: number;
 }
 
 const smallest = 1 << 14;
@@ -75,7 +77,7 @@ export class PilotBuffer {
     const skipped = this.seen - this.count;
     const t = this.times();
     const start = t !== null && this.count > 0 ? t[0] : skipped * (this.origin.step ?? 0);
-    return { components: this.components, start, skipped };
+    return { components: this.components, start, skipped, held: this.count };
   }
 
   release(): void {

@@ -29,49 +29,55 @@ export function profileStation(
 ): StationResult {
   checkRow(row);
   const { values } = row;
-  const [uu, vv, ww] = names.map((name) => variance(values, name));
-  const components = names.filter((_, i) => !Number.isNaN([uu, vv, ww][i]));
-  const U = values.U ?? Number.NaN;
-  const [v2, w2] = lateral(uu, vv, ww);
-  const k = (uu + v2 + w2) / 2;
-  const of = (value: number, why: string): Quantity =>
-    Number.isFinite(value) ? bare(value, noError) : missing(why);
+  const squared = names.map((name) => variance(values, name));
+  const components = names.filter((_, i) => !Number.isNaN(squared[i]));
   const none = missing("a profile holds no time series");
-  const scales = profileScales(values, uu, settings);
-  const Uref = settings.referenceSpeed ?? U;
+  const scales = profileScales(values, squared[0], settings);
+  const { lambda } = scales;
   return {
     x: row.x,
     samples: 0,
     duration: null,
-    U: of(U, "the profile has no column U"),
-    uu: of(uu, "the profile has no column uu or u_rms"),
-    vv: of(vv, "the profile has no column vv or v_rms"),
-    ww: of(ww, "the profile has no column ww or w_rms"),
-    uv: of(values.uv ?? Number.NaN, "the profile has no column uv"),
-    uw: missing("a profile holds no uw"),
-    vw: missing("a profile holds no vw"),
-    k: of(k, "the profile has no column uu or u_rms"),
-    Tu: of(
-      Math.sqrt((2 * k) / 3) / Uref,
-      Number.isNaN(uu) ? "the profile has no column uu or u_rms" : "neither U nor a reference speed is given",
-    ),
-    isotropy_uv: of(Math.sqrt(uu / vv), "u and v are not both given"),
-    isotropy_uw: of(Math.sqrt(uu / ww), "u and w are not both given"),
-    T_int: of((values.L ?? Number.NaN) / U, "the profile has no columns L and U"),
+    ...profileMoments(values, squared, settings),
     ...scales,
     epsilon_decay: missing("it follows from the decay law"),
     epsilon_inertial: none,
     S_dudx: none,
     balance: missing("it follows from the decay law"),
     q: givenQ(values),
-    routes: {
-      lambda_f: isEstimate(scales.lambda) ? bare(Math.SQRT2 * scales.lambda.value, noError) : scales.lambda,
-    },
+    routes: { lambda_f: isEstimate(lambda) ? bare(Math.SQRT2 * lambda.value, noError) : lambda },
     flags: profileFlags(components, settings),
     sources: source === null ? [] : [source],
     curves: null,
     blocks: null,
     facts: { ...emptyFacts, components },
+  };
+}
+
+function given(value: number, why: string): Quantity {
+  return Number.isFinite(value) ? bare(value, noError) : missing(why);
+}
+
+/** Means and stresses as given, and k, Tu and the ratios from them. */
+function profileMoments(values: Values, [uu, vv, ww]: readonly number[], settings: ReduceSettings) {
+  const U = values.U ?? Number.NaN;
+  const [v2, w2] = lateral(uu, vv, ww);
+  const k = (uu + v2 + w2) / 2;
+  const noUu = "the profile has no column uu or u_rms";
+  const Tu = Math.sqrt((2 * k) / 3) / (settings.referenceSpeed ?? U);
+  return {
+    U: given(U, "the profile has no column U"),
+    uu: given(uu, noUu),
+    vv: given(vv, "the profile has no column vv or v_rms"),
+    ww: given(ww, "the profile has no column ww or w_rms"),
+    uv: given(values.uv ?? Number.NaN, "the profile has no column uv"),
+    uw: missing("a profile holds no uw"),
+    vw: missing("a profile holds no vw"),
+    k: given(k, noUu),
+    Tu: given(Tu, Number.isNaN(uu) ? noUu : "neither U nor a reference speed is given"),
+    isotropy_uv: given(Math.sqrt(uu / vv), "u and v are not both given"),
+    isotropy_uw: given(Math.sqrt(uu / ww), "u and w are not both given"),
+    T_int: given((values.L ?? Number.NaN) / U, "the profile has no columns L and U"),
   };
 }
 
@@ -100,19 +106,17 @@ function profileScales(values: Values, uu: number, settings: ReduceSettings) {
     settings.kinematicViscosity === null
       ? "no kinematic viscosity is given"
       : "the profile has no column lambda or epsilon: it follows from the decay law";
-  const of = (value: number, reason: string): Quantity =>
-    Number.isFinite(value) ? bare(value, noError) : missing(reason);
   const noLength = "the profile has no column L";
   return {
-    L11: of(L11, noLength),
-    lambda: of(lambda, why),
-    gradient: of(gradient, "the profile has no column lambda"),
-    epsilon: of(epsilon, why),
-    epsilon_gradient: of(epsilonGradient, Number.isNaN(nu) ? why : "the profile has no column lambda"),
-    eta: of((nu ** 3 / epsilon) ** 0.25, why),
-    Re_lambda: of((rms * lambda) / nu, why),
-    Re_L: of((rms * L11) / nu, Number.isNaN(L11) ? noLength : why),
-    C_epsilon: of((epsilon * L11) / rms ** 3, Number.isNaN(L11) ? noLength : why),
+    L11: given(L11, noLength),
+    lambda: given(lambda, why),
+    gradient: given(gradient, "the profile has no column lambda"),
+    epsilon: given(epsilon, why),
+    epsilon_gradient: given(epsilonGradient, Number.isNaN(nu) ? why : "the profile has no column lambda"),
+    eta: given((nu ** 3 / epsilon) ** 0.25, why),
+    Re_lambda: given((rms * lambda) / nu, why),
+    Re_L: given((rms * L11) / nu, Number.isNaN(L11) ? noLength : why),
+    C_epsilon: given((epsilon * L11) / rms ** 3, Number.isNaN(L11) ? noLength : why),
   };
 }
 

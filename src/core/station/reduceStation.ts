@@ -146,6 +146,25 @@ function adopted(
   };
 }
 
+/** Values that stand among the routes under their own name. */
+const kept = [
+  "lambda_f",
+  "gradient_u",
+  "gradient_v",
+  "gradient_w",
+  "gradient_difference2",
+  "gradient_difference4",
+  "epsilon_u-gradient",
+  "skewness_u",
+  "skewness_v",
+  "skewness_w",
+  "flatness_u",
+  "flatness_v",
+  "flatness_w",
+  "K_v",
+  "K_w",
+] as const;
+
 function routes(
   material: StationMaterial,
   values: Record<ValueName, Quantity>,
@@ -156,23 +175,6 @@ function routes(
     `T_int_${name}`,
     scaleQuantity(time, sampling),
   ]);
-  const kept = [
-    "lambda_f",
-    "gradient_u",
-    "gradient_v",
-    "gradient_w",
-    "gradient_difference2",
-    "gradient_difference4",
-    "epsilon_u-gradient",
-    "skewness_u",
-    "skewness_v",
-    "skewness_w",
-    "flatness_u",
-    "flatness_v",
-    "flatness_w",
-    "K_v",
-    "K_w",
-  ] as const;
   return {
     ...Object.fromEntries(scales),
     L_v: lateralLength("v", material),

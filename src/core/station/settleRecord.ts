@@ -1,8 +1,9 @@
 import type { Flag } from "../flag.ts";
+import { jointLayout, pairIndex } from "../signal/jointMoments.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import { replan } from "./planRecord.ts";
 import type { ClosedRecord, RecordChunks } from "./recordChunks.ts";
-import { recordCorrelation } from "./recordCorrelation.ts";
+import { recordCorrelation, wholeMoments } from "./recordCorrelation.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import type { StationPart } from "./stationPart.ts";
 import { zeroCrossing } from "./zeroCrossing.ts";
@@ -27,8 +28,11 @@ export function settle(
     lowestSpeed: closed.lowestSpeed,
     flags: recordFlags(record, closed),
   });
-  if (second) return { part };
+  // a record that is its own pilot has nothing to differ from
+  if (second || closed.samples === facts.held) return { part };
   if (closed.unequal > 0 && !plan.weighted) return { again: { ...plan, weighted: true, derivativeStep: 1 } };
+  const slope = settings.detrend === "linear" ? wholeSlope(part) : plan.slope;
+  if (part.lags !== null && leansOtherwise(part, slope)) return { again: { ...plan, slope } };
   const time = integralTimeOf(part);
   const changed = time !== null && (plan.integralTime === null || differs(time, plan.integralTime));
   const lost = time === null && plan.integralTime !== null && part.lags !== null;
@@ -36,6 +40,35 @@ export function settle(
   // a correlation that no longer crosses zero is looked for four times as far
   const wanted = time ?? 4 * (plan.integralTime ?? plan.step);
   return { again: { ...replan(plan, closed.samples, wanted, settings), pilotTime: plan.integralTime } };
+}
+
+/** Slope of the whole record: that of the plan, and what the means of its blocks still show. */
+function wholeSlope(part: StationPart): number[] {
+  const { plan, blocks } = part;
+  const width = blocks.fields.length;
+  const middle = (part.samples - 1) / 2;
+  return plan.slope.map((slope, c) => {
+    let product = 0;
+    let square = 0;
+    for (let row = 0, before = 0; row < blocks.rows; row++) {
+      const count = blocks.data[row * width];
+      const time = before + (count - 1) / 2 - middle;
+      product += count * time * blocks.data[row * width + 1 + c];
+      square += count * time * time;
+      before += count;
+    }
+    return square > 0 ? slope + product / (square * part.step) : slope;
+  });
+}
+
+/** Whether another trend would change the record: by more than a hundredth of u' from end to end. */
+function leansOtherwise(part: StationPart, slope: readonly number[]): boolean {
+  const layout = jointLayout(part.components.length);
+  const whole = wholeMoments(part);
+  return slope.some((value, c) => {
+    const variance = whole[layout.second + pairIndex(layout.sequences, c, c)] / whole[0];
+    return Math.abs(value - part.plan.slope[c]) * part.duration > 0.01 * Math.sqrt(variance);
+  });
 }
 
 function differs(time: number, other: number): boolean {

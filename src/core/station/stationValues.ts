@@ -84,20 +84,14 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
   const rms = Math.sqrt(uu);
   const lambda = rms / Math.sqrt(gu);
   return {
-    U,
-    uu,
-    vv,
-    ww,
+    ...{ U, uu, vv, ww, k },
     uv: co("u", "v"),
     uw: co("u", "w"),
     vw: co("v", "w"),
-    k,
     Tu: Math.sqrt((2 * k) / 3) / (context.referenceSpeed ?? U),
     isotropy_uv: Math.sqrt(uu / vv),
     isotropy_uw: Math.sqrt(uu / ww),
-    gradient_u: gu,
-    gradient_v: gv,
-    gradient_w: gw,
+    ...{ gradient_u: gu, gradient_v: gv, gradient_w: gw },
     ...differences(sums, context, U * U * factor[0]),
     "epsilon_u-gradient": 15 * nu * gu,
     epsilon_gradient: epsilon,

@@ -177,6 +177,22 @@ describe("what is no record", () => {
   });
 });
 
+describe("a linear trend of a record longer than its pilot", () => {
+  it("is found in the whole of it, by a second reading", () => {
+    const u = exponential(5 * pilot, 10, 21).map((value, i) => 8 + value + (i / pilot) ** 2 / 5);
+    const linear = { ...settings, detrend: "linear" } as const;
+    const first = startRecord(origin, linear, { pilot });
+    first.add(blockOf({ u }));
+    const end = first.finish();
+    if (!("again" in end)) throw new Error("no second reading was asked for");
+    // least squares of s²/5 over 0 … 5 has slope 1 a pilot
+    expectClose(end.again.slope[0], 1 / (pilot * 1e-3), {
+      relative: 0.03,
+      because: "the noise has a slope too",
+    });
+  });
+});
+
 describe("a record whose beginning does not stand for the whole", () => {
   const quick = exponential(pilot, 10, 5);
   const slow = exponential(3 * pilot, 60, 6);
