@@ -1,9 +1,12 @@
 import { body, mesh, viscosity } from "./scenario.mjs";
 
+/** A profile has no errors by which to find where the law begins: its sheet says so. */
+const fitWindow = (flow) => [flow.windowStart, flow.x[flow.x.length - 1]];
+
 /**
  * The case sheet of one flow. The records are frozen turbulence carried past the probe, so nothing is to be
  * corrected for Taylor's hypothesis.
- * @param {{ name: string, kind: string }} flow
+ * @param {{ name: string, kind: string, windowStart: number, x: number[] }} flow
  * @param {"series" | "profile"} layout
  * @param {string} path its files, relative to the sheet; the files themselves tell their position
  */
@@ -16,7 +19,7 @@ export function caseSheet(flow, layout, path) {
     reference: { length: mesh, symbol: "M", speed: null },
     layout,
     files: [{ path }],
-    ...(layout === "series" ? { reduce: { taylorCorrection: false } } : {}),
+    ...(layout === "series" ? { reduce: { taylorCorrection: false } } : { fit: { window: fitWindow(flow) } }),
     body,
   };
 }

@@ -4,6 +4,7 @@ import { reduceStation } from "../../src/core/station/reduceStation.ts";
 import type { StationResult } from "../../src/core/stationResult.ts";
 import { memoryColumnStore } from "../../src/engine/columnStore.ts";
 import { reduceFile } from "../../src/engine/reduceFile.ts";
+import { reduceProfile } from "../../src/engine/reduceProfile.ts";
 import { fileSource } from "../../src/engine/threadFile.ts";
 import type { CaseSheet } from "../../src/sheet/caseSheet.ts";
 import { readCaseSheet } from "../../src/sheet/readCaseSheet.ts";
@@ -13,7 +14,7 @@ import { sheetFiles } from "../../src/sheet/sheetFiles.ts";
 
 export const sampleFolder = resolve(import.meta.dirname, "../../sample-data");
 
-/** A case of the sample data in series, read and reduced as the program does it, one file after another. */
+/** A case of the sample data, read and reduced as the program does it, one file after another. */
 export async function reduceSheet(name: string): Promise<{ sheet: CaseSheet; stations: StationResult[] }> {
   const { sheet } = readCaseSheet(readFileSync(join(sampleFolder, name), "utf8"), name);
   const { files, names } = sheetFiles(sheet, name, csvFiles(sampleFolder));
@@ -25,8 +26,12 @@ export async function reduceSheet(name: string): Promise<{ sheet: CaseSheet; sta
     const source = fileSource(names[i], path, bytes);
     const content = { name: names[i], bytes, fingerprint: names[i], content: { path } };
     const ask = { file: content, read: readSettings(sheet, file), reduce };
-    const { parts } = await reduceFile(source, ask, memoryColumnStore(1 << 27), () => {});
-    stations.push(reduceStation(parts, reduce));
+    if (sheet.layout === "profile") {
+      stations.push(...(await reduceProfile(source, ask, () => {})).stations);
+    } else {
+      const { parts } = await reduceFile(source, ask, memoryColumnStore(1 << 27), () => {});
+      stations.push(reduceStation(parts, reduce));
+    }
   }
   return { sheet, stations: stations.sort((a, b) => a.x - b.x) };
 }

@@ -57,6 +57,17 @@ function against(value: Quantity, expected: number, place: string, key: Key): He
   return { place, key, holds, distance: Math.abs(departure) / standard };
 }
 
+function expectHeld({ n, x0 }: DecayResult, expected: CaseTruth): void {
+  for (const [quantity, value] of [
+    [n, expected.n],
+    [x0, expected.x0],
+  ] as const) {
+    if (quantity.value === null) throw new Error(`no law was fitted: ${quantity.why}`);
+    expect(quantity.low ?? Number.NEGATIVE_INFINITY).toBeLessThan(value);
+    expect(quantity.high ?? Number.POSITIVE_INFINITY).toBeGreaterThan(value);
+  }
+}
+
 describe.each(["screen", "simulation"])("the sample case %s", (name) => {
   const expected = truth.cases.find((each) => each.case === name) as CaseTruth;
   let stations: StationResult[] = [];
@@ -91,15 +102,7 @@ describe.each(["screen", "simulation"])("the sample case %s", (name) => {
   });
 
   it("decays with its exponent from its virtual origin, within their intervals", () => {
-    for (const [quantity, value] of [
-      [decay.n, expected.n],
-      [decay.x0, expected.x0],
-    ] as const) {
-      expect(quantity.value).not.toBeNull();
-      if (quantity.value === null) continue;
-      expect(quantity.low ?? Number.NEGATIVE_INFINITY).toBeLessThan(value);
-      expect(quantity.high ?? Number.POSITIVE_INFINITY).toBeGreaterThan(value);
-    }
+    expectHeld(decay, expected);
   });
 
   it("is fitted from about where its near field ends", () => {
@@ -108,4 +111,12 @@ describe.each(["screen", "simulation"])("the sample case %s", (name) => {
     expect(decay.window[0]).toBeGreaterThanOrEqual(earliest);
     expect(decay.window[1]).toBe(places.at(-1));
   });
+});
+
+it("the profile of the second inflow decays with its exponent from its virtual origin", async () => {
+  const expected = truth.cases.find((each) => each.case === "second-inflow") as CaseTruth;
+  const { sheet, stations } = await reduceSheet("second-inflow.json");
+  const decay = fitDecay(stations, decaySettings(sheet));
+  expect(decay.window[0]).toBe(expected.windowStart);
+  expectHeld(decay, expected);
 });
