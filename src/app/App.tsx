@@ -1,24 +1,21 @@
 import { useCallback, useMemo, useRef } from "react";
 import { useStore } from "zustand";
-import { defaultFigureOptions } from "../figures/figureSpec.ts";
-import { darkTokens, lightTokens } from "../figures/tokens.ts";
+import { axisActions } from "./page/axisActions.ts";
 import { DropVeil } from "./page/DropVeil.tsx";
 import { FilePicker, type Picker } from "./page/FilePicker.tsx";
-import { FigureSettings, screenScale } from "./page/figureSettings.ts";
+import { FigureSettings } from "./page/figureSettings.ts";
 import { Head } from "./page/Head.tsx";
 import { headActions } from "./page/headActions.ts";
+import { Notice } from "./page/Notice.tsx";
 import { PageRuler } from "./page/PageRuler.tsx";
 import { RestedCases } from "./page/restedCases.ts";
 import { sectionList } from "./page/sectionList.ts";
+import { useCaseViews } from "./page/useCaseViews.ts";
 import { useHeadHeight } from "./page/useHeadHeight.ts";
+import { useScreenFigures } from "./page/useScreenFigures.ts";
 import { useMediaQuery, useTheme } from "./page/useTheme.ts";
 import { useUndoKeys } from "./page/useUndoKeys.ts";
-import { useWindowWidth } from "./page/useWindowWidth.ts";
-import { Argument } from "./sections/Argument.tsx";
-import { EmptyState } from "./sections/EmptyState.tsx";
-import { FailedState } from "./sections/FailedState.tsx";
-import { LookingState } from "./sections/ReadingState.tsx";
-import { createCaseViews } from "./session/caseViews.ts";
+import { PageBody } from "./sections/PageBody.tsx";
 import { heldOf } from "./session/nextSession.ts";
 import { openDemo } from "./session/openDemo.ts";
 import type { DroppedFile } from "./session/openDrop.ts";
@@ -27,87 +24,41 @@ import type { PageWork } from "./session/pageWork.ts";
 
 /** The page: head with the ruler, then the argument, or what stands in its place while there is none. */
 export function App({ store, work }: { store: PageStore; work: PageWork }) {
-  const { session, drafts, notice, dispatch, setNotice } = useStore(store);
+  const { session, notice, dispatch, setNotice } = useStore(store);
   const [mode, toggleMode] = useTheme();
   const narrow = useMediaQuery("(max-width: 959px)");
-  const width = useWindowWidth();
-  const liveViews = useMemo(createCaseViews, []);
-  const restedViews = useMemo(createCaseViews, []);
-  const rested = restedViews(session, noDrafts);
-  const live = drafts.length === 0 ? rested : liveViews(session, drafts);
+  const { live, rested } = useCaseViews(store);
   const held = heldOf(session);
+  const axis = held?.history.present.axis ?? "x";
+  const settings = useScreenFigures(held, mode, narrow);
   const head = useRef<HTMLElement>(null);
   const picker = useRef<Picker>(null);
   useHeadHeight(head);
   useUndoKeys(dispatch);
-
-  const drop = useCallback(
-    (files: Promise<DroppedFile[]>) => {
-      setNotice(null);
-      work
-        .drop(files)
-        .catch((error: unknown) => setNotice(error instanceof Error ? error.message : String(error)));
-    },
-    [work, setNotice],
-  );
+  const drop = useDrop(work, setNotice);
+  const there = live.length > 0;
+  const sections = useMemo(() => sectionList.map((section) => ({ ...section, there })), [there]);
   const demo = () => {
     drop(openDemo());
     setNotice("The demo is on its way: 24 MB of records from beside this page.");
   };
-  const settings = useMemo(
-    () => ({
-      ...defaultFigureOptions,
-      ...screenScale(width, narrow),
-      tokens: mode === "dark" ? darkTokens : lightTokens,
-      axis: held?.history.present.axis ?? "x",
-      units: held?.history.present.cases[0]?.sheet.units ?? "SI",
-      along: held?.history.present.cases[0]?.sheet.along ?? "x",
-      tolerance: held?.history.present.cases[0]?.sheet.compare.tolerance ?? 0.1,
-    }),
-    [width, narrow, mode, held?.history.present],
-  );
-  const actions = headActions({ held, mode, picker, dispatch, toggleMode });
-  const there = live.length > 0;
   return (
     <FigureSettings value={settings}>
       <RestedCases value={rested}>
         <a className="skip" href="#top">
           To the page
         </a>
-        <Head ref={head} sections={sectionList.map((section) => ({ ...section, there }))} actions={actions}>
+        <Head
+          ref={head}
+          sections={sections}
+          actions={headActions({ held, mode, picker, dispatch, toggleMode })}
+          more={axisActions(live, axis, dispatch)}
+        >
           <PageRuler store={store} cases={live} work={work} />
         </Head>
         <main id="top" tabIndex={-1}>
-          {notice !== null && (
-            <p className="notice row" role="alert">
-              <span />
-              <span>
-                {notice}{" "}
-                <button type="button" className="action" onClick={() => setNotice(null)}>
-                  Close
-                </button>
-              </span>
-            </p>
-          )}
-          {session.kind === "reading" && (
-            <div className="row page-top">
-              <div />
-              <div>
-                <LookingState offer={session.offer} />
-              </div>
-            </div>
-          )}
-          {session.kind === "failed" && <FailedState aside={session.aside} />}
-          {(session.kind === "empty" || session.kind === "failed") && (
-            <EmptyState
-              onFiles={() => picker.current?.files()}
-              onFolder={() => picker.current?.folder()}
-              onDemo={demo}
-            />
-          )}
-          {held !== null && live.length > 0 && (
-            <Argument store={store} work={work} held={held} cases={live} narrow={narrow} />
-          )}
+          {notice !== null && <Notice text={notice} onClose={() => setNotice(null)} />}
+          <PageBody store={store} work={work} cases={live} narrow={narrow} picker={picker} onDemo={demo} />
         </main>
         <FilePicker ref={picker} onChoice={(files) => drop(Promise.resolve(files))} />
         <DropVeil more={there} onDrop={drop} />
@@ -116,4 +67,15 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
   );
 }
 
-const noDrafts = [] as const;
+/** Hands files to the work; what goes wrong on the way is said at the top of the page. */
+function useDrop(work: PageWork, setNotice: (text: string | null) => void) {
+  return useCallback(
+    (files: Promise<DroppedFile[]>) => {
+      setNotice(null);
+      work
+        .drop(files)
+        .catch((error: unknown) => setNotice(error instanceof Error ? error.message : String(error)));
+    },
+    [work, setNotice],
+  );
+}

@@ -9,6 +9,7 @@ import "./styles/tokens.css";
 import "./styles/base.css";
 import "./styles/head.css";
 import "./styles/section.css";
+import "./styles/parts.css";
 import "./styles/table.css";
 import "./styles/controls.css";
 import "./styles/states.css";

@@ -14,11 +14,14 @@ export interface HeadAction {
 export function Head({
   sections,
   actions,
+  more,
   ref,
   children,
 }: {
   sections: readonly (SectionName & { readonly there: boolean })[];
   actions: readonly HeadAction[];
+  /** What a wide head shows elsewhere: only in the narrow head's menu. */
+  more: readonly HeadAction[];
   ref: Ref<HTMLElement>;
   children: ReactNode;
 }) {
@@ -54,7 +57,11 @@ export function Head({
       {menu !== "none" && (
         // biome-ignore lint/a11y/useKeyWithClickEvents lint/a11y/noStaticElementInteractions: closes behind the link or button that was used, by pointer or by key
         <div className="narrow-panel" onClick={() => setMenu("none")}>
-          {menu === "sections" ? <SectionIndex sections={sections} /> : <Actions actions={actions} />}
+          {menu === "sections" ? (
+            <SectionIndex sections={sections} />
+          ) : (
+            <Actions actions={[...more, ...actions]} />
+          )}
         </div>
       )}
       {children}
@@ -65,11 +72,20 @@ export function Head({
 function SectionIndex({ sections }: { sections: readonly (SectionName & { readonly there: boolean })[] }) {
   return (
     <nav className="index" aria-label="Sections">
-      {sections.map(({ id, number, short, there }) => (
-        <a key={id} {...(there ? { href: `#${id}` } : { "aria-disabled": true })}>
-          <i>{number}</i> {short}
-        </a>
-      ))}
+      {sections.map(({ id, number, short, there }) => {
+        const name = (
+          <>
+            <i>{number}</i> {short}
+          </>
+        );
+        return there ? (
+          <a key={id} href={`#${id}`}>
+            {name}
+          </a>
+        ) : (
+          <span key={id}>{name}</span>
+        );
+      })}
     </nav>
   );
 }

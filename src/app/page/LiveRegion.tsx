@@ -7,7 +7,10 @@ export const restBeforeSpeech = 400;
 export function LiveRegion({ text }: { text: string }) {
   const [spoken, speak] = useState("");
   useEffect(() => {
-    const timer = setTimeout(() => speak(text), restBeforeSpeech);
+    const timer = setTimeout(() => {
+      // the ruler speaks for itself: two voices at once are none
+      if (!document.activeElement?.closest(".ruler")) speak(text);
+    }, restBeforeSpeech);
     return () => clearTimeout(timer);
   }, [text]);
   return (

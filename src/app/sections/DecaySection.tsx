@@ -1,4 +1,3 @@
-import { hypothesisSentence } from "../../export/sentences/decaySentences.ts";
 import type { Sentence } from "../../export/sentences/piece.ts";
 import { decayFigure } from "../../figures/decayFigure.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
@@ -10,7 +9,6 @@ import { FitTable, HypothesisTable } from "./FitTable.tsx";
 import { Fold } from "./Fold.tsx";
 import { NoLaw } from "./NoLaw.tsx";
 import type { Note } from "./SectionFrame.tsx";
-import { SentenceText } from "./SentenceText.tsx";
 
 const figure: SectionFigure = {
   name: "Figure 1",
@@ -66,11 +64,6 @@ export function DecaySection({
         <Fold name="Fits, other routes, hypotheses">
           <FitTable cases={fitted} />
           <HypothesisTable cases={fitted} />
-          {fitted.map((view) => (
-            <p className="reason serif" key={view.id}>
-              <SentenceText sentence={hypothesisSentence(view)} />
-            </p>
-          ))}
         </Fold>
       )}
     </ArgumentSection>

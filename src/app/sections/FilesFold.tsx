@@ -61,7 +61,7 @@ function FileRow({ name, view, preview }: { name: string; view: CaseView; previe
       <td>
         <span className="well">{name}</span>
       </td>
-      <td className="text">{preview ? columnsText(preview) : "–"}</td>
+      <td className="text wrap">{preview ? columnsText(preview) : "–"}</td>
       <td>{preview ? formatCount(Number(preview.estimatedRows.toPrecision(3))) : "–"}</td>
       <td>{xs.length === 0 ? "–" : xs.length === 1 ? formatPosition(xs[0]) : `${xs.length} positions`}</td>
       <td className="text">{position === null ? "–" : origins[position]}</td>

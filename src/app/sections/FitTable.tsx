@@ -1,6 +1,7 @@
 import { labelOf, type Run } from "../../core/catalogue.ts";
 import type { DecayResult } from "../../core/decayResult.ts";
 import type { Quantity } from "../../core/quantity.ts";
+import { exponentText } from "../../export/sentences/decaySentences.ts";
 import { formatDigits, formatProbability } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
@@ -34,7 +35,7 @@ export function FitTable({ cases }: { cases: readonly CaseView[] }) {
   const fitted = cases.flatMap((view) => (view.decay ? [{ view, decay: view.decay }] : []));
   return (
     <div className="table-scroll">
-      <table className="data fit-table">
+      <table className="data dense">
         <CaseHeads cases={fitted.map(({ view }) => view)} first="Fit" />
         <tbody>
           {lines.map(({ name, label, of, inLengths }) => (
@@ -80,22 +81,37 @@ export function HypothesisTable({ cases }: { cases: readonly CaseView[] }) {
   const names = fitted[0]?.decay.hypotheses ?? [];
   return (
     <div className="table-scroll">
-      <table className="data fit-table">
-        <CaseHeads cases={fitted.map(({ view }) => view)} first="Exponent held at, p" />
+      <table className="data dense">
+        <CaseHeads cases={fitted.map(({ view }) => view)} first="Exponent held at" />
         <tbody>
           {names.map(({ name, n }) => (
-            <PlainLine
-              key={name}
-              name={`${formatDigits(n, 3)}  ${name}`}
-              texts={fitted.map(({ decay }) => {
-                const p = decay.hypotheses.find((each) => each.name === name)?.p ?? null;
-                return p === null ? "–" : formatProbability(p);
-              })}
-            />
+            <tr key={name}>
+              <th scope="row" className="text">
+                {exponentText(n)} {name}
+              </th>
+              {fitted.map(({ view, decay }) => (
+                <HypothesisCells
+                  key={view.id}
+                  p={decay.hypotheses.find((each) => each.name === name)?.p ?? null}
+                />
+              ))}
+            </tr>
           ))}
         </tbody>
       </table>
     </div>
+  );
+}
+
+/** Below this probability the data exclude an exponent; above it nothing is confirmed. */
+const level = 0.05;
+
+function HypothesisCells({ p }: { p: number | null }) {
+  return (
+    <>
+      <td>{p === null ? "–" : formatProbability(p)}</td>
+      <td className="pm">{p === null ? "" : p < level ? "excluded" : "not excluded"}</td>
+    </>
   );
 }
 

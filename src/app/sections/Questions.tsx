@@ -36,6 +36,24 @@ export function Questions({
       </h3>
       <p className="ask">{askText(view, missing.length)}</p>
       <SheetFields view={view} onChange={onChange} />
+      {view.reduced?.failures.some(({ code }) => code === "no-time") && (
+        <div className="fields positions">
+          <NumberField
+            label="time between samples"
+            unit={unitOf("T", view.of.sheet.units)}
+            above={0}
+            open
+            value={view.of.sheet.read.step}
+            onChange={(step) =>
+              onChange({
+                kind: "edit-sheet",
+                caseId: view.id,
+                edit: { read: { ...view.of.sheet.read, step } },
+              })
+            }
+          />
+        </div>
+      )}
       {missing.length > 0 && (
         <div className="fields positions">
           {missing.map((name) => (
@@ -148,12 +166,13 @@ function missingPositions({ reduced }: CaseView): string[] {
     .map((failure) => failure.where.file ?? "");
 }
 
-function askText({ of }: CaseView, positions: number): string {
+function askText({ of, reduced }: CaseView, positions: number): string {
   const open = [
     of.sheet.kinematicViscosity === null ? "scales and dissipation need a viscosity" : null,
     of.sheet.reference.length === null
       ? "distances are given in metres until a reference length is typed"
       : null,
+    reduced?.failures.some(({ code }) => code === "no-time") ? "records without times need the step" : null,
     positions > 0 ? `${positions === 1 ? "one file names" : `${positions} files name`} no position` : null,
   ].filter((each) => each !== null);
   if (open.length === 0)

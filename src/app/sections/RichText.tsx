@@ -12,6 +12,7 @@ const keys = [
   "lambda",
   "L11",
   "eta",
+  "x0",
 ] as const;
 const named = new RegExp(`(?<![\\w/])(${keys.join("|")})(?!\\w)`, "g");
 

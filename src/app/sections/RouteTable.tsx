@@ -32,7 +32,7 @@ export function RouteTable({ cases }: { cases: readonly CaseView[] }) {
   const { units } = shown[0].view;
   return (
     <div className="table-scroll">
-      <table className="data route-table">
+      <table className="data dense">
         <thead>
           <tr>
             <th scope="col">

@@ -1,0 +1,109 @@
+import { act, fireEvent, render, screen } from "@testing-library/react";
+import { beforeEach, describe, expect, it, vi } from "vitest";
+import { App } from "../../../src/app/App.tsx";
+import { fitKey } from "../../../src/app/session/caseViews.ts";
+import { createPageStore } from "../../../src/app/session/pageStore.ts";
+import type { PageWork } from "../../../src/app/session/pageWork.ts";
+import { decaySettings } from "../../../src/sheet/decaySettings.ts";
+import { decayOf, sheet, stationAt, workspaceCase } from "../fixtures.ts";
+
+const work: PageWork = { drop: vi.fn(async () => {}), cancel: vi.fn(), resume: vi.fn(), close: vi.fn() };
+
+beforeEach(() => {
+  localStorage.clear();
+  document.documentElement.removeAttribute("data-theme");
+});
+
+/** A page with one case, reduced and argued. */
+function loadedPage() {
+  const store = createPageStore();
+  const stations = [0.2, 0.3, 0.4, 0.8, 1.6].map((x) => stationAt(x));
+  const reduced = { key: "k", stations, sources: [], flags: [], failures: [], complete: true };
+  const work = { key: "k", files: 1, filesDone: 0, bytes: 1, bytesDone: 0 };
+  const { dispatch } = store.getState();
+  const { mark: _, ...added } = workspaceCase;
+  dispatch({ kind: "offered", files: 1, bytes: 1 });
+  dispatch({
+    kind: "planned",
+    plan: { cases: [added], files: [], previews: [], aside: { leftOut: [], failures: [], warnings: [] } },
+  });
+  dispatch({ kind: "started", caseId: "case-1", work });
+  dispatch({ kind: "reduced", caseId: "case-1", reduced });
+  dispatch({
+    kind: "argued",
+    argued: {
+      key: "a",
+      keys: { "case-1": fitKey(reduced, decaySettings(sheet)) },
+      cases: { "case-1": { stations, decay: decayOf(stations) } },
+      comparisons: [],
+    },
+  });
+  return store;
+}
+
+describe("the page", () => {
+  it("opens empty: what to drop, and the demo one click away", () => {
+    render(<App store={createPageStore()} work={work} />);
+    expect(screen.getByRole("heading", { level: 1 }).textContent).toMatch(/^Drop the velocity records/);
+    expect(screen.getByRole("button", { name: "Open the demo" })).toBeDefined();
+  });
+
+  it("states the law of a loaded case in a sentence with its interval", () => {
+    render(<App store={loadedPage()} work={work} />);
+    const finding = document.querySelector("#decay .finding")?.textContent;
+    expect(finding).toContain("n = 1.25");
+    expect(finding).toContain("(1.20 to 1.31)");
+  });
+
+  it("opens every section of the argument, in its order, under a heading", () => {
+    render(<App store={loadedPage()} work={work} />);
+    const headings = screen.getAllByRole("heading", { level: 2 }).map(({ textContent }) => textContent);
+    expect(headings).toEqual([
+      "1Records",
+      "2Intensity and decay",
+      "3Isotropy",
+      "4Length scales",
+      "5Spectra and correlations",
+      "6Dissipation balance",
+      "7Side by side",
+      "8Table and export",
+    ]);
+  });
+
+  it("takes a change back with Control Z and makes it again with Shift", () => {
+    const store = loadedPage();
+    render(<App store={store} work={work} />);
+    const title = () => screen.getByRole("heading", { level: 1 }).textContent;
+    act(() =>
+      store.getState().dispatch({ kind: "changed", change: { kind: "set-title", title: "Two inflows" } }),
+    );
+    expect(title()).toBe("Two inflows");
+    fireEvent.keyDown(window, { key: "z", ctrlKey: true });
+    expect(title()).toBe("Decay along the stream: screen");
+    fireEvent.keyDown(window, { key: "Z", ctrlKey: true, shiftKey: true });
+    expect(title()).toBe("Two inflows");
+  });
+
+  it("turns dark when asked to, and keeps the choice for the next visit", () => {
+    render(<App store={createPageStore()} work={work} />);
+    fireEvent.click(screen.getByRole("button", { name: "Dark" }));
+    expect(document.documentElement.dataset.theme).toBe("dark");
+    expect(localStorage.getItem("waneline-mode")).toBe("dark");
+  });
+
+  it("asks a case without a sheet for its viscosity, and enters the answer into its sheet", () => {
+    const store = loadedPage();
+    const { dispatch } = store.getState();
+    dispatch({
+      kind: "changed",
+      change: { kind: "edit-sheet", caseId: "case-1", edit: { kinematicViscosity: null } },
+    });
+    render(<App store={store} work={work} />);
+    const field = screen.getByLabelText(/kinematic viscosity/);
+    fireEvent.change(field, { target: { value: "1.5e-5" } });
+    fireEvent.blur(field);
+    const { session } = store.getState();
+    if (session.kind !== "ready") throw new Error(`session is ${session.kind}`);
+    expect(session.held.history.present.cases[0].sheet.kinematicViscosity).toBe(1.5e-5);
+  });
+});
