@@ -1,4 +1,3 @@
-import { ReductionFailure } from "../failure.ts";
 import type { RecordOrigin } from "../records.ts";
 import { mostBlocks } from "../signal/blockList.ts";
 import { startLagProducts } from "../signal/lagProducts.ts";
@@ -8,6 +7,7 @@ import type { ReduceSettings } from "../stationResult.ts";
 import { examineSteps } from "./examineSteps.ts";
 import { meanSquareRate, windowShare } from "./meanSquareRate.ts";
 import { noiseFloor, scaleBin } from "./noiseFloor.ts";
+import { constantSignal, notFinite, tooFew } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { zeroCrossing } from "./zeroCrossing.ts";
 
@@ -20,7 +20,7 @@ export interface Pilot {
 }
 
 /** Fewest samples from which anything is reduced. */
-export const fewestSamples = 64;
+const fewestSamples = 64;
 /** Most lags kept per block and component: what bounds the memory of a record. */
 const mostLags = 8192;
 const chunk = 4096;
@@ -35,7 +35,7 @@ const shortSegment = 2;
  * @throws too-few-samples, constant-signal, no-time, backward-time
  */
 export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceSettings): RecordPlan {
-  if (pilot.count < fewestSamples) throw tooFew(pilot.count, origin);
+  if (pilot.count < fewestSamples) throw tooFew(pilot.count, fewestSamples, origin);
   const u = pilot.columns[0];
   const facts = examineSteps(pilot.t, pilot.count, origin);
   const weighted = facts.unequal > 0;
@@ -204,41 +204,4 @@ function powerAbove(value: number): number {
 
 function powerBelow(value: number): number {
   return 2 ** Math.max(1, Math.floor(Math.log2(Math.max(value, 2)) + 1e-12));
-}
-
-function tooFew(count: number, origin: RecordOrigin): ReductionFailure {
-  return new ReductionFailure(
-    "too-few-samples",
-    {
-      message: "the record is too short to be reduced",
-      found: count === 1 ? "1 sample" : `${count} samples`,
-      expected: `${fewestSamples} or more`,
-      remedy: "Leave the file out, or give a longer record.",
-    },
-    { file: origin.file },
-  );
-}
-
-/** A velocity that is no finite number: the reader lets none through, so it overflowed or was built in. */
-export function notFinite(origin: RecordOrigin): ReductionFailure {
-  return new ReductionFailure(
-    "not-a-number",
-    {
-      message: "a velocity is not a finite number",
-      remedy: "Name the tokens that mean a missing value, or leave the lines out.",
-    },
-    { file: origin.file },
-  );
-}
-
-function constantSignal(value: number, origin: RecordOrigin): ReductionFailure {
-  return new ReductionFailure(
-    "constant-signal",
-    {
-      message: "u does not change over the whole record",
-      found: `${value} in every sample`,
-      remedy: "Check which column is taken as u, and whether the probe was recording.",
-    },
-    { file: origin.file },
-  );
 }

@@ -12,7 +12,7 @@ import { fillJoint, type JointLayout, jointLayout } from "../signal/jointMoments
 import { mergeJoint } from "../signal/mergeJoint.ts";
 import { blockFields, differenceFields } from "./blockFields.ts";
 import { addDifferences } from "./differenceSums.ts";
-import { notFinite } from "./planRecord.ts";
+import { notFinite } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { SpectralSums } from "./spectralSums.ts";
 import type { Component, StationPart } from "./stationPart.ts";

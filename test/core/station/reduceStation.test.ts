@@ -171,6 +171,25 @@ describe("a station in other units", () => {
   });
 });
 
+describe("a station in blocks of another size", () => {
+  it("has the same values: only their errors are formed over other groups", () => {
+    const part = partOf(record);
+    const coarse = partOf(record, {
+      record: { plan: { ...part.plan, blockSamples: 16 * part.plan.blockSamples } },
+    });
+    const [found, base] = [coarse, part].map((one) => reduceStation([one], settings));
+    for (const [name, quantity] of quantitiesOf(base)) {
+      const other = new Map(quantitiesOf(found)).get(name);
+      if (!isEstimate(quantity)) continue;
+      expectClose(other?.value, quantity.value, {
+        relative: 1e-9,
+        absolute: 1e-12,
+        because: `rounding, ${name}`,
+      });
+    }
+  });
+});
+
 describe("several records at one x", () => {
   const parts = [1, 2, 3].map((i) =>
     partOf(smoothRecord(12_000, 40 * i), { origin: { file: "long.csv", y: 0.1 * i } }),
