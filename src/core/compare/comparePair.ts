@@ -76,9 +76,11 @@ function ratioOf(
     0,
   );
   const end = (side: 1 | -1) =>
-    Array.from(curve.logarithm, (value, i) =>
-      spread === null ? null : Math.exp(value + side * normal * spread.curve[i]),
-    );
+    Array.from(curve.logarithm, (value, i) => {
+      const standard = spread?.curve[i] ?? null;
+      const at = standard === null ? Number.NaN : Math.exp(value + side * normal * standard);
+      return Number.isFinite(at) ? at : null;
+    });
   return {
     ratio: spread === null ? bare(Math.exp(curve.mean), noErrors) : logNormal(curve.mean, spread.mean),
     largest: bare(Math.exp(largest), notTested),
@@ -107,10 +109,13 @@ function extraDistance(
   { distance }: Resampled,
   cases: Parameters<typeof alignment>[0],
 ): Quantity {
-  if (origins === null || distance === null) return missing(why ?? "a case has no virtual origin");
+  if (origins === null) return missing(why ?? "a case has no virtual origin");
   const value = origins[1] - origins[0];
   const bothHeld = cases.every(({ law }) => law !== null && law.fitted.fit.held.x0 !== null);
-  return bothHeld ? bare(value, "both origins are held, not fitted") : linearNormal(value, distance);
+  if (bothHeld) return bare(value, "both origins are held, not fitted");
+  return distance === null
+    ? bare(value, "the refits do not settle on an origin")
+    : linearNormal(value, distance);
 }
 
 function matchedDistance({ matched }: Overlay, resampled: Resampled): Quantity {

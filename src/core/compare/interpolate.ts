@@ -13,7 +13,9 @@ export function interpolate(
   let piece = 0;
   for (let i = 0; i < at.length; i++) {
     while (piece < s.length - 2 && s[piece + 1] < at[i]) piece++;
-    const share = (at[i] - s[piece]) / (s[piece + 1] - s[piece]);
+    const width = s[piece + 1] - s[piece];
+    // two stations at one place: the first of them
+    const share = width > 0 ? (at[i] - s[piece]) / width : 0;
     out[i] = y[piece] + share * (y[piece + 1] - y[piece]);
   }
 }

@@ -34,6 +34,12 @@ export interface MatchedIntensity {
   readonly distance: number;
 }
 
+/**
+ * Lays two cases over one another: s = ln((x - x0)/ell), x, or -ln Tu on the line of each case's intensity.
+ * The ratios are formed by straight interpolation in s on the range both cover; nothing is carried beyond it.
+ * @param aligned origins of both
+ * @param inputs  the same cases, for their reference lengths
+ */
 export function overlay(
   cases: readonly [ComparedCase, ComparedCase],
   { align, origins, why }: Alignment,
@@ -51,12 +57,12 @@ export function overlay(
       else out[i] = line.slope * Math.log(x[i] - x0) - line.level;
     }
   };
-  const shown = align === "x" ? (s: number) => s : align === "x0" ? Math.exp : (s: number) => Math.exp(-s);
+  const shown = shownFrom(align);
   const lines = linesOf(cases, origins);
   const matched = matchedIntensity(cases, lines);
   const base = { matched, coordinates, shown };
   const refused = refusal(align, origins, why, lines);
-  if (refused !== null) return { ...base, overlap: null, why: refused, curves: everyQuantity(refused) };
+  if (refused !== null) return { ...base, overlap: null, why: refused, curves: everyQuantity(() => refused) };
   const s = cases.map(({ x }, at) => {
     const out = new Float64Array(x.length);
     coordinates(at === 0 ? 0 : 1, origins?.[at] ?? 0, lines[at], out);
@@ -66,18 +72,20 @@ export function overlay(
   const high = Math.min(...s.map((own) => own[own.length - 1] ?? Number.NEGATIVE_INFINITY));
   if (!(high > low)) {
     const apart = "the ranges of the two cases do not overlap";
-    return { ...base, overlap: null, why: apart, curves: everyQuantity(apart) };
+    return { ...base, overlap: null, why: apart, curves: everyQuantity(() => apart) };
   }
-  const curves = Object.fromEntries(
-    comparedQuantities.map((quantity) => [
-      quantity,
-      align === "Tu" && quantity === "Tu"
-        ? "the cases are laid over one another at equal Tu"
-        : curve([cases[0].series[quantity], cases[1].series[quantity]], cases, s, low, high),
-    ]),
-  ) as Overlay["curves"];
+  const curves = everyQuantity((quantity) =>
+    align === "Tu" && quantity === "Tu"
+      ? "the cases are laid over one another at equal Tu"
+      : curve([cases[0].series[quantity], cases[1].series[quantity]], cases, s, low, high),
+  );
   const ends = [shown(low), shown(high)].sort((a, b) => a - b);
   return { ...base, overlap: [ends[0], ends[1]], why: null, curves };
+}
+
+function shownFrom(align: Alignment["align"]): Overlay["shown"] {
+  if (align === "x") return (s) => s;
+  return align === "x0" ? Math.exp : (s) => Math.exp(-s);
 }
 
 function refusal(
@@ -93,11 +101,10 @@ function refusal(
     : null;
 }
 
-const everyQuantity = (why: string) =>
-  Object.fromEntries(comparedQuantities.map((quantity) => [quantity, why])) as Record<
-    ComparedQuantity,
-    string
-  >;
+function everyQuantity(of: (quantity: ComparedQuantity) => RatioCurve | string): Overlay["curves"] {
+  const entries = comparedQuantities.map((quantity) => [quantity, of(quantity)]);
+  return Object.fromEntries(entries) as Overlay["curves"];
+}
 
 /** Index of each station of a series among the stations compared. */
 export function stationsOf(series: ComparedSeries, { x }: ComparedCase): number[] {

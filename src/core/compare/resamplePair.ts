@@ -8,10 +8,15 @@ import { interpolate, meanOver } from "./interpolate.ts";
 import { type Overlay, type RatioCurve, stationsOf } from "./overlay.ts";
 import { spreadOf } from "./spreadOf.ts";
 
+export interface RatioSpread {
+  readonly mean: number;
+  readonly curve: readonly (number | null)[];
+}
+
 /** Standard errors told by resampling. */
 export interface Resampled {
   /** Of the mean ln ratio and of ln ratio along its curve; null where a case carries no errors. */
-  readonly ratios: Readonly<Record<ComparedQuantity, { mean: number; curve: number[] } | null>>;
+  readonly ratios: Readonly<Record<ComparedQuantity, RatioSpread | null>>;
   /** Of x0_B - x0_A. */
   readonly distance: number | null;
   readonly matched: number | null;
@@ -63,9 +68,10 @@ export function resamplePair(
     laid.coordinates(1, origins?.[1] ?? 0, lines[1], moving[1].s);
     for (const ratio of ratios) if (ratio !== null) drawRatio(ratio, moving, draw);
   }
-  const spreads = ratios.map((ratio) =>
-    ratio === null ? null : { mean: spreadOf(ratio.means), curve: ratio.along.map(spreadOf) },
-  );
+  const spreads = ratios.map((ratio): RatioSpread | null => {
+    const mean = ratio === null ? null : spreadOf(ratio.means);
+    return ratio === null || mean === null ? null : { mean, curve: ratio.along.map(spreadOf) };
+  });
   return {
     ratios: Object.fromEntries(
       comparedQuantities.map((quantity, i) => [quantity, spreads[i]]),

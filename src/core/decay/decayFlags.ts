@@ -46,10 +46,10 @@ function aboutData(
           ? "Not all stations carry a sampling error: all weigh alike, and the scatter alone makes the intervals."
           : "All stations weigh alike: nothing tells an automatic window which of them leave the law.",
     });
-  const speeds = used.flatMap(({ U }) => (isEstimate(U) ? [U.value] : []));
+  const speeds = used.flatMap(({ U }) => (isEstimate(U) && U.value > 0 ? [U.value] : []));
   if (speeds.length > 1 && settings.along === "x") {
     const mean = speeds.reduce((sum, speed) => sum + speed, 0) / speeds.length;
-    const share = (Math.max(...speeds) - Math.min(...speeds)) / Math.abs(mean);
+    const share = (Math.max(...speeds) - Math.min(...speeds)) / mean;
     if (share > steadySpeed)
       flags.push({
         code: "u-varies",
@@ -104,7 +104,10 @@ function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string
 
 /** Had the origin been held elsewhere: dn/dx0 = -n/(x_c - x0), x_c the geometric centre of the window. */
 function heldOrigin(n: number, first: number, last: number): Flag {
-  const slope = -n / Math.sqrt(first * last);
+  const centre = Math.sqrt(first) * Math.sqrt(last);
+  const slope = -n / centre;
+  if (!Number.isFinite(slope))
+    return { code: "held-origin", text: "The origin is held at the first station." };
   return {
     code: "held-origin",
     text: `The origin is held: were it held farther downstream by one unit of x, n would change by ${slope.toPrecision(2)}.`,

@@ -35,22 +35,25 @@ function levelOfHeldA(problem: LawProblem, law: CentredLaw, lnA: number): number
   return lnA + (law.b / law.kappa) * Math.log(law.kappa * problem.length);
 }
 
+/** b of the law whose A is held, log residuals: a line through one point. */
+function slopeOfHeldA({ count, y, w, g, length }: LawProblem, { kappa }: CentredLaw, lnA: number): number {
+  const shift = Math.log(kappa * length);
+  let top = 0;
+  let bottom = 0;
+  for (let i = 0; i < count; i++) {
+    const h = kappa * g[i] - shift;
+    const weight = w[i] * w[i];
+    top -= weight * h * (y[i] - lnA);
+    bottom += weight * h * h;
+  }
+  return (top / bottom) * kappa;
+}
+
 /** Log residuals: c and b (as far as free) by weighted linear least squares in g. */
 function solveLine(problem: LawProblem, law: CentredLaw, held: Held): void {
   const { count, y, w, g } = problem;
   if (held.lnA !== null) {
-    if (held.n === null) {
-      const shift = Math.log(law.kappa * problem.length);
-      let top = 0;
-      let bottom = 0;
-      for (let i = 0; i < count; i++) {
-        const h = law.kappa * g[i] - shift;
-        const weight = w[i] * w[i];
-        top -= weight * h * (y[i] - held.lnA);
-        bottom += weight * h * h;
-      }
-      law.b = (top / bottom) * law.kappa;
-    }
+    if (held.n === null) law.b = slopeOfHeldA(problem, law, held.lnA);
     law.c = levelOfHeldA(problem, law, held.lnA);
     return;
   }

@@ -62,12 +62,8 @@ export function fitPowerLaw(data: PowerLawData, options: Partial<PowerLawOptions
   const start = choice.start
     ? lawAbout(problem, held.x0 ?? choice.start.x0, held.n ?? choice.start.n)
     : firstGuess(problem, data, choice, held);
-  const { law, sum, iterations, converged, exponential } = minimiseLaw(
-    problem,
-    start,
-    held,
-    choice.tolerance,
-  );
+  const minimum = minimiseLaw(problem, start, held, choice.tolerance);
+  const { law, sum, iterations, converged, exponential } = minimum;
   evaluateLaw(problem, law, held);
   const parameters = 1 + (held.x0 === null ? 1 : 0) + (held.n === null ? 1 : 0);
   const freedom = problem.count - parameters;

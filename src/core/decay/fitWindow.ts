@@ -65,7 +65,7 @@ export function fitWindow(points: readonly FitPoint[], settings: DecaySettings):
     return {
       refused: "the stations in the window fall like an exponential: no finite virtual origin fits best",
     };
-  if (!fit.converged || fit.covariance === null)
+  if (!fit.converged || !isSound(fit))
     return { refused: "the stations in the window do not tell A, n and x0 apart" };
   if (!(fit.n > 0)) return { refused: "the quantity does not fall along the window" };
   const p = fit.errorsKnown ? chiSquareTail(fit.residualSum, fit.freedom) : null;
@@ -79,6 +79,13 @@ export function fitWindow(points: readonly FitPoint[], settings: DecaySettings):
     drop: scattered ? variance * fQuantile(0.95, 1, fit.freedom) : oneNumber,
     quantile: studentQuantile(0.975, scattered ? fit.freedom : null),
   };
+}
+
+/** Whether A, n, x0 and their covariance can all be written down. */
+function isSound({ A, n, x0, residualSum, unitCovariance }: PowerLawFit): boolean {
+  return (
+    A > 0 && unitCovariance !== null && [A, n, x0, residualSum, ...unitCovariance].every(Number.isFinite)
+  );
 }
 
 /** The words of a refusal for too few stations; null where there are enough. */

@@ -1,5 +1,5 @@
 import type { PowerLaw } from "../decayResult.ts";
-import { estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
+import { bare, estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { relativeError } from "./relativeError.ts";
@@ -37,6 +37,7 @@ export function growthExponent(x: readonly number[], lengths: readonly Quantity[
   const shifted = lineFrom(law.x0 - step);
   const byOrigin = shifted === null ? 0 : (line.slope - shifted.slope) / step;
   const standard = Math.sqrt(variance * line.varianceOfSlope + byOrigin ** 2 * law.covariance[4]);
+  if (!Number.isFinite(standard)) return bare(line.slope, "these stations stand too close together");
   const freedom = known ? null : line.freedom;
   const reach = studentQuantile(0.975, freedom) * standard;
   return estimate(line.slope, line.slope - reach, line.slope + reach, { standard, freedom, scale: "linear" });

@@ -90,27 +90,10 @@ export function lawProblem(data: PowerLawData, options: PowerLawOptions): LawPro
   const count = data.x.length;
   assert(count > 1 && data.q.length === count, "a law needs two stations or more, each with its q");
   const linear = options.residuals === "linear";
-  // one buffer for all arrays: a refit is short enough for each allocation to show
-  const buffer = new ArrayBuffer(8 * (8 * count + 15));
-  let used = 0;
-  const array = (size = count) => {
-    const view = new Float64Array(buffer, 8 * used, size);
-    used += size;
-    return view;
-  };
-  const d = array();
-  const y = array();
-  const w = array();
-  let first = Number.POSITIVE_INFINITY;
-  let last = Number.NEGATIVE_INFINITY;
-  let sum = 0;
-  for (let i = 0; i < count; i++) {
-    sum += data.x[i];
-    first = Math.min(first, data.x[i]);
-    last = Math.max(last, data.x[i]);
-  }
+  const { centre, first, last } = placesOf(data.x);
   assert(last > first, "all stations of a law stand at one x");
-  const centre = sum / count;
+  const arrays = arraysOf(count);
+  const { d, y, w } = arrays;
   let magnitude = 0;
   for (let i = 0; i < count; i++) {
     const q = data.q[i];
@@ -126,11 +109,37 @@ export function lawProblem(data: PowerLawData, options: PowerLawOptions): LawPro
     centre,
     first,
     span: last - first,
-    d,
-    y,
-    w,
     errorsKnown: data.error !== null,
     magnitude,
+    ...arrays,
+  };
+}
+
+function placesOf(x: ArrayLike<number>): { centre: number; first: number; last: number } {
+  let first = Number.POSITIVE_INFINITY;
+  let last = Number.NEGATIVE_INFINITY;
+  let sum = 0;
+  for (let i = 0; i < x.length; i++) {
+    sum += x[i];
+    first = Math.min(first, x[i]);
+    last = Math.max(last, x[i]);
+  }
+  return { centre: sum / x.length, first, last };
+}
+
+/** All arrays of a problem in one buffer: a refit is short enough for each allocation to show. */
+function arraysOf(count: number) {
+  const buffer = new ArrayBuffer(8 * (8 * count + 15));
+  let used = 0;
+  const array = (size = count) => {
+    const view = new Float64Array(buffer, 8 * used, size);
+    used += size;
+    return view;
+  };
+  return {
+    d: array(),
+    y: array(),
+    w: array(),
     g: array(),
     residual: array(),
     byC: array(),

@@ -8,14 +8,10 @@ import type { CentredLaw, Held, LawProblem } from "./lawProblem.ts";
  */
 export function normalMatrix(problem: LawProblem, law: CentredLaw, held: Held): void {
   const { byC, byB, byKappa, residual, count, matrix, gradient } = problem;
-  const { b, kappa } = law;
   const freeC = held.lnA === null;
   const freeB = held.n === null;
   const freeKappa = held.x0 === null;
-  const shift = freeC ? 0 : Math.log(kappa * problem.length);
-  const levelByB = freeC ? 0 : shift / kappa;
-  const levelByKappa = freeC ? 0 : (b / kappa ** 2) * (freeB ? 1 - shift : 1);
-  const slopeByKappa = held.n ?? 0;
+  const { levelByB, levelByKappa, slopeByKappa } = ties(problem, law, held);
   let cc = 0;
   let cb = 0;
   let ck = 0;
@@ -49,4 +45,13 @@ export function normalMatrix(problem: LawProblem, law: CentredLaw, held: Held): 
   gradient[0] = rc;
   gradient[1] = rb;
   gradient[2] = rk;
+}
+
+/** How c and b move with what is left free where A or n is held. */
+function ties({ length }: LawProblem, { b, kappa }: CentredLaw, { lnA, n }: Held) {
+  const slopeByKappa = n ?? 0;
+  if (lnA === null) return { levelByB: 0, levelByKappa: 0, slopeByKappa };
+  const shift = Math.log(kappa * length);
+  const levelByKappa = (b / kappa ** 2) * (n === null ? 1 - shift : 1);
+  return { levelByB: shift / kappa, levelByKappa, slopeByKappa };
 }

@@ -43,13 +43,20 @@ export function profileInterval(fit: PowerLawFit, parameter: "n" | "x0" | "A", d
   const excess = (at: number) => Math.sqrt(Math.max(path.sum(at) - fit.residualSum, 0)) - Math.sqrt(drop);
   const below = crossing(excess, path.centre, -path.step, path.low, -Math.sqrt(drop));
   const above = crossing(excess, path.centre, path.step, path.high, -Math.sqrt(drop));
-  const [low, high] = path.falling ? [above, below] : [below, above];
+  const [low, high] = (path.falling ? [above, below] : [below, above]).map((at) =>
+    at === null ? null : representable(path.value(at), parameter),
+  );
   return {
-    low: low === null ? null : path.value(low),
-    high: high === null ? null : path.value(high),
+    low,
+    high,
     ...(low === null ? { why_low: whys[parameter].low } : {}),
     ...(high === null ? { why_high: whys[parameter].high } : {}),
   };
+}
+
+/** An end of A that over- or underflows is no end. */
+function representable(value: number, parameter: "n" | "x0" | "A"): number | null {
+  return Number.isFinite(value) && (parameter !== "A" || value > 0) ? value : null;
 }
 
 /** A coordinate in which the root of the profile is nearly straight, with its range. */

@@ -34,7 +34,8 @@ export function smoothErrors(stations: readonly StationError[]): number[] | null
       return Math.log((error ?? 1) * Math.sqrt(duration ?? 1)) + lift;
     }),
   );
-  return stations.map(({ x, duration }) => Math.exp(line(along(x))) / Math.sqrt(duration ?? 1));
+  const smoothed = stations.map(({ x, duration }) => Math.exp(line(along(x))) / Math.sqrt(duration ?? 1));
+  return smoothed.every((error) => error > 0 && Number.isFinite(error)) ? smoothed : null;
 }
 
 function straight(x: readonly number[], y: readonly number[]): (at: number) => number {
