@@ -2,6 +2,7 @@ import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type FitPoint, fitWindow, windowQuantity } from "./fitWindow.ts";
+import { unresolvedGradients } from "./lambdaRoute.ts";
 import { relativeError } from "./relativeError.ts";
 
 /**
@@ -14,6 +15,7 @@ export function epsilonRoute(
   stations: readonly StationResult[],
   settings: DecaySettings,
 ): DecayResult["epsilon_route"] {
+  if (settings.kind === "les") return both(unresolvedGradients);
   const points: FitPoint[] = stations.flatMap((station) => {
     const { epsilon_gradient: epsilon } = station;
     if (!isEstimate(epsilon) || !(epsilon.value > 0)) return [];

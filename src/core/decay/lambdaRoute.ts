@@ -24,6 +24,7 @@ const rounds = 3;
 export function lambdaRoute(stations: readonly StationResult[], settings: DecaySettings): Route {
   const { kinematicViscosity: nu } = settings;
   if (nu === null) return both(missing("no kinematic viscosity is given"));
+  if (settings.kind === "les") return both(unresolvedGradients);
   const what = decayQuantity(stations, "k");
   const points = stations.flatMap((station) => {
     const k = decayValue(station, what);
@@ -51,6 +52,11 @@ export function lambdaRoute(stations: readonly StationResult[], settings: DecayS
   const quantile = studentQuantile(0.975, known ? null : line.freedom);
   return { n: exponent(line, (10 * nu) / U, quantile, variance), x0: zero(line, quantile, variance) };
 }
+
+/** A filtered spectrum loses a share of the gradients that changes along the stream: the line would be confidently wrong. */
+export const unresolvedGradients = missing(
+  "the resolved gradients of a large-eddy simulation do not carry all of the dissipation",
+);
 
 const both = (quantity: Quantity): Route => ({ n: quantity, x0: quantity });
 

@@ -14,8 +14,8 @@ export function settledFrom(values: readonly Quantity[], tolerance: number): num
   const known = values.flatMap((value, at) => (isEstimate(value) ? [{ ...value, at }] : []));
   if (known.length <= lastStations) return null;
   const last = known.slice(-lastStations).reduce((sum, { value }) => sum + value / lastStations, 0);
-  const contradicts = known.findLast(
+  const contradicting = known.filter(
     ({ value, low, high }) => (low ?? value) > last + tolerance || (high ?? value) < last - tolerance,
   );
-  return contradicts === undefined ? 0 : contradicts.at + 1;
+  return contradicting.length === 0 ? 0 : contradicting[contradicting.length - 1].at + 1;
 }

@@ -185,6 +185,12 @@ describe("the Lambda² line", () => {
     expectClose(lambda_route.n.value, law.n, { relative: 1e-9, because: "Lambda² is exactly straight" });
     expectClose(lambda_route.x0.value, law.x0, { relative: 1e-9, because: "Lambda² is exactly straight" });
   });
+  it("is refused for a large-eddy simulation, and so is the epsilon law: its gradients are filtered", () => {
+    const decay = fitDecay(lawStations(law, xs, 0.01), { ...settings, kind: "les" });
+    for (const route of [decay.lambda_route, decay.epsilon_route])
+      for (const quantity of [route.n, route.x0])
+        expect(quantity).toMatchObject({ value: null, why: expect.stringContaining("large-eddy") });
+  });
   it("is refused without viscosity and without a dissipation of its own", () => {
     const stations = lawStations(law, xs, 0.01);
     const { lambda_route } = fitDecay(stations, { ...settings, kinematicViscosity: null });
