@@ -26,7 +26,7 @@ import type { PageWork } from "./session/pageWork.ts";
 export function App({ store, work }: { store: PageStore; work: PageWork }) {
   const { session, notice, dispatch, setNotice } = useStore(store);
   const [mode, toggleMode] = useTheme();
-  const narrow = useMediaQuery("(max-width: 959px)");
+  const narrow = useMediaQuery("screen and (max-width: 959px)");
   const { live, rested } = useCaseViews(store);
   const held = heldOf(session);
   const axis = held?.history.present.axis ?? "x";
@@ -52,6 +52,7 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
           ref={head}
           sections={sections}
           actions={headActions({ held, mode, picker, dispatch, toggleMode })}
+          lanes={live.length}
           more={axisActions(live, axis, dispatch)}
         >
           <PageRuler store={store} cases={live} work={work} />

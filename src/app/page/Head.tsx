@@ -1,4 +1,5 @@
 import { type ReactNode, type Ref, useState } from "react";
+import { withVariables } from "../ruler/withVariables.ts";
 import type { SectionName } from "./sectionList.ts";
 import { WordMark } from "./WordMark.tsx";
 
@@ -15,6 +16,7 @@ export function Head({
   sections,
   actions,
   more,
+  lanes,
   ref,
   children,
 }: {
@@ -22,13 +24,15 @@ export function Head({
   actions: readonly HeadAction[];
   /** What a wide head shows elsewhere: only in the narrow head's menu. */
   more: readonly HeadAction[];
+  /** Lanes of the ruler: a narrow head scrolls its bar and their readings away. */
+  lanes: number;
   ref: Ref<HTMLElement>;
   children: ReactNode;
 }) {
   const [menu, setMenu] = useState<"none" | "sections" | "more">("none");
   const toggle = (name: "sections" | "more") => setMenu(menu === name ? "none" : name);
   return (
-    <header className="head" ref={ref}>
+    <header className="head" ref={ref} style={withVariables({ "--lanes": lanes })}>
       <div className="bar">
         <WordMark />
         <SectionIndex sections={sections} />

@@ -101,7 +101,8 @@ function Grounds({ cases }: { cases: readonly CaseView[] }) {
     <>
       {facts.flatMap((fact, i) => (i === 0 ? [fact] : [", ", fact]))}
       {facts.length > 0 && ". "}
-      {words[cases.length] ?? cases.length} case{cases.length === 1 ? "" : "s"}, {stations} stations.
+      {words[cases.length] ?? cases.length} case{cases.length === 1 ? "" : "s"}, {stations} station
+      {stations === 1 ? "" : "s"}.
     </>
   );
 }

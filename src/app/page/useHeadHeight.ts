@@ -6,7 +6,10 @@ export function useHeadHeight(head: RefObject<HTMLElement | null>): void {
     const element = head.current;
     if (!element || typeof ResizeObserver === "undefined") return;
     const observer = new ResizeObserver(() => {
-      document.documentElement.style.setProperty("--head-height", `${element.offsetHeight}px`);
+      document.documentElement.style.setProperty(
+        "--head-height",
+        `${element.offsetHeight + Math.min(0, Number.parseFloat(getComputedStyle(element).top) || 0)}px`,
+      );
     });
     observer.observe(element);
     return () => observer.disconnect();

@@ -4,16 +4,18 @@ import { formatScaled } from "../../figures/formatQuantity.ts";
 import { Definition } from "./Definition.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
+import { TableScroll } from "./TableScroll.tsx";
 
 /** Ratios of two cases over their common range, with what they come to at the chosen tolerance. */
 export function CompareTable({ comparison }: { comparison: Comparison }) {
   return (
-    <div className="table-scroll">
+    <TableScroll label="Ratios">
       <table className="data">
         <thead>
           <tr>
-            <th scope="col">Quantity</th>
-            <th scope="col" className="text" />
+            <th scope="colgroup" colSpan={2} className="text">
+              Quantity
+            </th>
             <th scope="colgroup" colSpan={2}>
               Ratio, 95{"\u202f"}%
             </th>
@@ -27,7 +29,7 @@ export function CompareTable({ comparison }: { comparison: Comparison }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </TableScroll>
   );
 }
 

@@ -2,6 +2,7 @@ import type { Preview } from "../../core/records.ts";
 import { formatCount, formatPosition } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { Fold } from "./Fold.tsx";
+import { TableScroll } from "./TableScroll.tsx";
 
 const origins = {
   sheet: "case sheet",
@@ -17,7 +18,7 @@ export function FilesFold({ cases, previews }: { cases: readonly CaseView[]; pre
   const byName = new Map(previews.map((preview) => [preview.file, preview]));
   return (
     <Fold name="Files, columns, units, positions" fact={`${formatCount(count)} files`}>
-      <div className="table-scroll">
+      <TableScroll label="Files">
         <table className="data">
           <thead>
             <tr>
@@ -47,7 +48,7 @@ export function FilesFold({ cases, previews }: { cases: readonly CaseView[]; pre
             )}
           </tbody>
         </table>
-      </div>
+      </TableScroll>
     </Fold>
   );
 }

@@ -8,6 +8,7 @@ import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
 import { QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
+import { TableScroll } from "./TableScroll.tsx";
 
 interface Line {
   readonly name: string;
@@ -34,7 +35,7 @@ const lines: readonly Line[] = [
 export function FitTable({ cases }: { cases: readonly CaseView[] }) {
   const fitted = cases.flatMap((view) => (view.decay ? [{ view, decay: view.decay }] : []));
   return (
-    <div className="table-scroll">
+    <TableScroll label="Fits">
       <table className="data dense">
         <CaseHeads cases={fitted.map(({ view }) => view)} first="Fit" />
         <tbody>
@@ -71,7 +72,7 @@ export function FitTable({ cases }: { cases: readonly CaseView[] }) {
           />
         </tbody>
       </table>
-    </div>
+    </TableScroll>
   );
 }
 
@@ -80,7 +81,7 @@ export function HypothesisTable({ cases }: { cases: readonly CaseView[] }) {
   const fitted = cases.flatMap((view) => (view.decay ? [{ view, decay: view.decay }] : []));
   const names = fitted[0]?.decay.hypotheses ?? [];
   return (
-    <div className="table-scroll">
+    <TableScroll label="Hypotheses">
       <table className="data dense">
         <CaseHeads cases={fitted.map(({ view }) => view)} first="Exponent held at" />
         <tbody>
@@ -99,7 +100,7 @@ export function HypothesisTable({ cases }: { cases: readonly CaseView[] }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </TableScroll>
   );
 }
 

@@ -1,14 +1,16 @@
-import type { RefObject } from "react";
+import { lazy, type RefObject, Suspense } from "react";
 import { useStore } from "zustand";
 import type { Picker } from "../page/FilePicker.tsx";
 import type { CaseView } from "../session/caseView.ts";
 import { heldOf } from "../session/nextSession.ts";
 import type { PageStore } from "../session/pageStore.ts";
 import type { PageWork } from "../session/pageWork.ts";
-import { Argument } from "./Argument.tsx";
 import { EmptyState } from "./EmptyState.tsx";
 import { FailedState } from "./FailedState.tsx";
 import { LookingState } from "./ReadingState.tsx";
+
+/** Fetched while the first files are read: an empty page needs none of it. */
+const Argument = lazy(async () => ({ default: (await import("./Argument.tsx")).Argument }));
 
 /** What stands under the head in each state of the session. */
 export function PageBody({
@@ -47,7 +49,9 @@ export function PageBody({
         />
       )}
       {held !== null && cases.length > 0 && (
-        <Argument store={store} work={work} held={held} cases={cases} narrow={narrow} />
+        <Suspense>
+          <Argument store={store} work={work} held={held} cases={cases} narrow={narrow} />
+        </Suspense>
       )}
     </>
   );

@@ -8,6 +8,7 @@ import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
 import { SymbolText } from "./SymbolText.tsx";
+import { TableScroll } from "./TableScroll.tsx";
 
 /** What was read, a row for each case; on a narrow screen a list that says the same. */
 export function RecordsTable({ cases, narrow }: { cases: readonly CaseView[]; narrow: boolean }) {
@@ -17,7 +18,7 @@ export function RecordsTable({ cases, narrow }: { cases: readonly CaseView[]; na
 function WideTable({ cases }: { cases: readonly CaseView[] }) {
   const units = cases[0].of.sheet.units;
   return (
-    <div className="table-scroll">
+    <TableScroll label="Cases">
       <table className="data">
         <thead>
           <tr>
@@ -64,7 +65,7 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </TableScroll>
   );
 }
 
@@ -81,7 +82,7 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
           <li key={view.id}>
             <CaseMark mark={view.mark} line />
             <span>
-              <b>{view.name}</b>, {layoutOf(view)}, {view.stations.length} stations,{" "}
+              <b>{view.name}</b>, {layoutOf(view)}, {stationsText(view.stations.length)},{" "}
               <span className="nowrap">{withUnit(xs, unitOf("L", units))}</span>
               <br />
               <SymbolText runs={labelOf("U").symbol} /> = {withUnit(speedOf(view), unitOf("L/T", units))}
@@ -140,6 +141,8 @@ function speedOf({ stations }: CaseView): string {
   if (speeds.length === 0) return "–";
   return formatDigits(speeds.reduce((sum, speed) => sum + speed.value, 0) / speeds.length, 3);
 }
+
+const stationsText = (count: number) => `${count} station${count === 1 ? "" : "s"}`;
 
 const facts = (stations: readonly StationResult[], key: "integralTimes" | "k1max_eta") =>
   stations.map((station) => station.facts[key]).filter((value) => value !== null);

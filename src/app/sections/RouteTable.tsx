@@ -8,6 +8,7 @@ import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
 import { QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
+import { TableScroll } from "./TableScroll.tsx";
 import { UnitText } from "./UnitText.tsx";
 
 const routes: readonly {
@@ -31,7 +32,7 @@ export function RouteTable({ cases }: { cases: readonly CaseView[] }) {
   if (shown.length === 0) return null;
   const { units } = shown[0].view;
   return (
-    <div className="table-scroll">
+    <TableScroll label="Dissipation by route">
       <table className="data dense">
         <thead>
           <tr>
@@ -71,7 +72,7 @@ export function RouteTable({ cases }: { cases: readonly CaseView[] }) {
             ))}
         </tbody>
       </table>
-    </div>
+    </TableScroll>
   );
 }
 

@@ -23,7 +23,7 @@ export function SectionFrame({
   ref?: Ref<HTMLElement>;
   children: ReactNode;
 }) {
-  const wide = useMediaQuery("(min-width: 1400px)");
+  const wide = useMediaQuery("print, (min-width: 1400px)");
   return (
     <section className="section row" id={section.id} aria-labelledby={`${section.id}-name`} ref={ref}>
       <h2 className="section-name" id={`${section.id}-name`}>

@@ -8,6 +8,7 @@ import { Definition } from "./Definition.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.ts";
+import { TableScroll } from "./TableScroll.tsx";
 import { UnitText } from "./UnitText.tsx";
 
 /** Every station of one case with its intervals; a row points at its tick on the ruler. */
@@ -19,7 +20,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
   const distances = distancesOf(view);
   return (
     <>
-      <div className="table-scroll">
+      <TableScroll label="Stations">
         <table className="data stations-table">
           <thead>
             <tr>
@@ -56,7 +57,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
             ))}
           </tbody>
         </table>
-      </div>
+      </TableScroll>
       <Gaps columns={columns} />
     </>
   );

@@ -2,7 +2,6 @@ import { type PlainFailure, ReductionFailure } from "../../core/failure.ts";
 import type { Preview } from "../../core/records.ts";
 import type { Engine, SourceFile } from "../../engine/protocol.ts";
 import type { DropPlan, PlannedCase } from "../../sheet/dropPlan.ts";
-import { planDrop } from "../../sheet/planDrop.ts";
 import type { WorkspaceCase } from "../../sheet/workspace.ts";
 import { heldOf } from "./nextSession.ts";
 import { asSources, type DroppedFile } from "./openDrop.ts";
@@ -31,6 +30,8 @@ export async function runDrop(
     files: files.length,
     bytes: files.reduce((sum, { file }) => sum + file.size, 0),
   });
+  // a sheet's schema is needed at a drop and not before
+  const planning = import("../../sheet/planDrop.ts");
   const sources = await asSources(files);
   const isSheet = ({ path, file }: DroppedFile) => /\.json$/i.test(path) && file.size <= longestSheet;
   const sheets = await Promise.all(
@@ -48,6 +49,7 @@ export async function runDrop(
         return [file.name, look];
       }),
   );
+  const { planDrop } = await planning;
   const plan = planDrop(sources, sheets, new Map(looks));
   const names = heldOf(store.getState().session)?.history.present.cases.map(({ sheet }) => sheet.case) ?? [];
   dispatch({ kind: "planned", plan: asPlan(plan, sources, looks, names) });

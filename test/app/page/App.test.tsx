@@ -41,6 +41,12 @@ function loadedPage() {
   return store;
 }
 
+/** The argument is a part of its own, fetched when it is first needed. */
+async function open(store: ReturnType<typeof createPageStore>): Promise<void> {
+  render(<App store={store} work={work} />);
+  await vi.waitFor(() => expect(document.querySelector("#decay")).not.toBeNull(), { timeout: 10_000 });
+}
+
 describe("the page", () => {
   it("opens empty: what to drop, and the demo one click away", () => {
     render(<App store={createPageStore()} work={work} />);
@@ -48,15 +54,15 @@ describe("the page", () => {
     expect(screen.getByRole("button", { name: "Open the demo" })).toBeDefined();
   });
 
-  it("states the law of a loaded case in a sentence with its interval", () => {
-    render(<App store={loadedPage()} work={work} />);
+  it("states the law of a loaded case in a sentence with its interval", async () => {
+    await open(loadedPage());
     const finding = document.querySelector("#decay .finding")?.textContent;
     expect(finding).toContain("n = 1.25");
     expect(finding).toContain("(1.20 to 1.31)");
   });
 
-  it("opens every section of the argument, in its order, under a heading", () => {
-    render(<App store={loadedPage()} work={work} />);
+  it("opens every section of the argument, in its order, under a heading", async () => {
+    await open(loadedPage());
     const headings = screen.getAllByRole("heading", { level: 2 }).map(({ textContent }) => textContent);
     expect(headings).toEqual([
       "1Records",
@@ -70,9 +76,9 @@ describe("the page", () => {
     ]);
   });
 
-  it("takes a change back with Control Z and makes it again with Shift", () => {
+  it("takes a change back with Control Z and makes it again with Shift", async () => {
     const store = loadedPage();
-    render(<App store={store} work={work} />);
+    await open(store);
     const title = () => screen.getByRole("heading", { level: 1 }).textContent;
     act(() =>
       store.getState().dispatch({ kind: "changed", change: { kind: "set-title", title: "Two inflows" } }),
@@ -91,14 +97,14 @@ describe("the page", () => {
     expect(localStorage.getItem("waneline-mode")).toBe("dark");
   });
 
-  it("asks a case without a sheet for its viscosity, and enters the answer into its sheet", () => {
+  it("asks a case without a sheet for its viscosity, and enters the answer into its sheet", async () => {
     const store = loadedPage();
     const { dispatch } = store.getState();
     dispatch({
       kind: "changed",
       change: { kind: "edit-sheet", caseId: "case-1", edit: { kinematicViscosity: null } },
     });
-    render(<App store={store} work={work} />);
+    await open(store);
     const field = screen.getByLabelText(/kinematic viscosity/);
     fireEvent.change(field, { target: { value: "1.5e-5" } });
     fireEvent.blur(field);
