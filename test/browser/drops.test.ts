@@ -68,7 +68,7 @@ describe("folders dropped without a sheet", () => {
     await dropFiles(open.page, bad);
     await settled(open.page);
     const text = await open.page.locator("main").innerText();
-    for (const { path } of bad) expect(text).toContain(path.split("/")[1]);
+    for (const { path } of bad) expect(text, path).toContain(path.split("/")[1]);
     expect(text).toContain("6.1.4");
     expect(text).toMatch(/line[\s  ]3/);
     expect(text).not.toMatch(/\bat .*\.(js|ts):\d+/);

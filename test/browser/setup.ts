@@ -16,6 +16,8 @@ export default async function setup(project: TestProject) {
   // An application build, whatever mode the tests themselves run in.
   process.env.NODE_ENV = "production";
   await build({ configFile: "vite.config.ts", mode: "production", logLevel: "warn" });
+  // The batch of the same sources: the page's numbers are held against it.
+  await build({ configFile: "vite.config.ts", mode: "batch", logLevel: "warn" });
   const server = await preview({
     configFile: "vite.config.ts",
     mode: "production",
