@@ -1,8 +1,9 @@
 import type { NoiseRule } from "./noiseFloor.ts";
+import { tailMoment } from "./spectrumTail.ts";
 
 /**
- * Mean square of the time derivative from a spectrum, noise subtracted and cut by its rule,
- *     <(du/dt)²> = ∫ (2πf)² (E - floor) df
+ * Mean square of the time derivative from a spectrum, noise subtracted, cut by its rule, and the tail added,
+ *     <(du/dt)²> = ∫ (2πf)² (E - floor) df up to the cut + ∫ (2πf)² tail df beyond it
  * @param density one-sided density, bins 0 … size/2
  * @param size    samples a segment
  * @param step    time between samples, s; > 0
@@ -13,6 +14,7 @@ export function meanSquareRate(density: Float64Array, size: number, step: number
   const end = Math.min(rule.cutBin, density.length);
   let sum = 0;
   for (let f = 1; f < end; f++) sum += f * f * (density[f] - rule.floor);
+  if (rule.tail !== null) sum += tailMoment(rule.tail);
   const width = 1 / (size * step);
   return (2 * Math.PI * width) ** 2 * sum * width;
 }

@@ -1,6 +1,8 @@
+import { logSlope } from "../signal/logSlope.ts";
 import { bandBorders } from "./bandBorders.ts";
+import { type SpectrumTail, spectrumTail, tailMoment } from "./spectrumTail.ts";
 
-/** How a spectrum ends: where the integral of k² E is cut, and what is subtracted below the cut. */
+/** How a spectrum ends: what is subtracted, where the integral of k² E is cut, and what goes on beyond. */
 export interface NoiseRule {
   /** Level of the noise, in the unit of E; 0: none was seen. */
   readonly floor: number;
@@ -8,32 +10,48 @@ export interface NoiseRule {
   readonly cut: number;
   /** First bin that is left out; size/2 + 1 where none is. */
   readonly cutBin: number;
-  /** Estimated share of ∫k²E dk that lies beyond the cut; 0 without a cut. */
+  /** What stands for the spectrum beyond the cut; null without a cut, or where none could be fitted. */
+  readonly tail: SpectrumTail | null;
+  /** Share of ∫k²E dk that lies beyond the cut, by the tail; 0 without a cut, 1 where no tail could be fitted. */
   readonly shareBeyond: number;
   /** Log-log slope over the top third of the spectrum. */
   readonly slope: number;
 }
 
+/** A floor is looked for over these shares of the spectrum at its top, the widest that is flat decides. */
+const tops = [1 / 3, 1 / 6, 1 / 12];
+/** A log-log slope above this is a floor: turbulence falls faster at any wavenumber that matters to the gradient. */
+const flat = -1;
+/** The cut: the first band below so many floors. */
+const multiple = 2;
+
 /**
- * Noise floor of a spectrum: where the log-log slope over the top third of the wavenumbers is above -1, the mean
- * there is the floor. The spectrum is cut at the first band below which k L11 > 3 and E < 2 floor.
+ * Noise floor of a spectrum. Where the log-log slope over the top third of the wavenumbers is above -1, the mean
+ * there is the floor; a floor that shows at the very end only is found over the top sixth or twelfth. The spectrum
+ * is cut at the first band below which k L11 > 3 and E < 2 floor: beyond it the floor's own scatter, weighed with
+ * k², would outweigh the signal. What was cut off is added back as an exponential fitted to the octave below the
+ * cut (see spectrumTail), for at strong noise it is a tenth of the gradient.
  * @param density  one-sided spectrum, bins 0 … size/2
  * @param size     samples a segment
  * @param scaleBin bin at which k L11 = 3: a spectrum is not cut in its energetic range
+ * @param shift    bands by which the cut is moved, upward in wavenumber if positive: for its sensitivity
  * @returns        the rule; without a floor nothing is cut
  */
-export function noiseFloor(density: Float64Array, size: number, scaleBin: number): NoiseRule {
-  const top = Math.max(1, Math.ceil(size / 3));
-  const slope = logSlope(density, top, size / 2);
-  const none = { floor: 0, cut: 0, cutBin: size / 2 + 1, shareBeyond: 0, slope };
-  if (!(slope > -1)) return none;
-  const floor = meanOf(density, top, size / 2 + 1);
+export function noiseFloor(density: Float64Array, size: number, scaleBin: number, shift = 0): NoiseRule {
+  const half = size / 2;
+  const from = (share: number) => Math.max(1, Math.ceil(half * (1 - share)));
+  const slope = logSlope(density, from(tops[0]), half);
+  const none = { floor: 0, cut: 0, cutBin: half + 1, tail: null, shareBeyond: 0, slope };
+  const top = tops.find((share) => logSlope(density, from(share), half) > flat);
+  if (top === undefined) return none;
+  const floor = meanOf(density, from(top), half + 1);
   const borders = bandBorders(size);
   for (let band = borders.length - 1; band >= 0; band--) {
-    const from = borders[band];
-    const to = band === 0 ? size / 2 + 1 : borders[band - 1];
-    if (to <= from || from < scaleBin || meanOf(density, from, to) >= 2 * floor) continue;
-    return { floor, cut: band + 1, cutBin: from, shareBeyond: share(density, floor, from), slope };
+    const to = band === 0 ? half + 1 : borders[band - 1];
+    if (to <= borders[band] || borders[band] < scaleBin) continue;
+    if (meanOf(density, borders[band], to) >= multiple * floor) continue;
+    const cut = Math.min(Math.max(band + 1 - shift, 1), borders.length - 1);
+    return { floor, slope, ...ended(density, floor, size, cut) };
   }
   return { ...none, floor };
 }
@@ -43,58 +61,18 @@ export function scaleBin(segment: number, integralSteps: number): number {
   return (3 * segment) / (2 * Math.PI * Math.max(integralSteps, 1e-3));
 }
 
+function ended(density: Float64Array, floor: number, size: number, cut: number) {
+  const cutBin = bandBorders(size)[cut - 1];
+  const tail = spectrumTail(density, floor, size, cut);
+  let below = 0;
+  for (let f = 1; f < cutBin; f++) below += f * f * (density[f] - floor);
+  const beyond = tail === null ? 0 : tailMoment(tail);
+  const shareBeyond = tail === null || !(below > 0) ? 1 : beyond / (below + beyond);
+  return { cut, cutBin, tail, shareBeyond };
+}
+
 function meanOf(density: Float64Array, from: number, to: number): number {
   let sum = 0;
   for (let f = from; f < to; f++) sum += density[f];
   return to > from ? sum / (to - from) : 0;
-}
-
-/** Slope of ln E against ln k by least squares, every bin weighing as its share of the logarithm. */
-function logSlope(density: Float64Array, from: number, to: number): number {
-  let weight = 0;
-  let sx = 0;
-  let sy = 0;
-  let sxx = 0;
-  let sxy = 0;
-  for (let f = from; f <= to; f++) {
-    if (!(density[f] > 0)) continue;
-    const w = 1 / f;
-    const x = Math.log(f);
-    const y = Math.log(density[f]);
-    weight += w;
-    sx += w * x;
-    sy += w * y;
-    sxx += w * x * x;
-    sxy += w * x * y;
-  }
-  const spread = weight * sxx - sx * sx;
-  return spread > 0 ? (weight * sxy - sx * sy) / spread : -Infinity;
-}
-
-/** Share of ∫k²E dk beyond the cut: an exponential fitted to E - floor over the octave below it. */
-function share(density: Float64Array, floor: number, cut: number): number {
-  let below = 0;
-  for (let f = 1; f < cut; f++) below += f * f * (density[f] - floor);
-  let n = 0;
-  let sx = 0;
-  let sy = 0;
-  let sxx = 0;
-  let sxy = 0;
-  for (let f = Math.max(1, Math.floor(cut / 2)); f < cut; f++) {
-    const level = density[f] - floor;
-    if (!(level > 0)) continue;
-    n++;
-    sx += f;
-    sy += Math.log(level);
-    sxx += f * f;
-    sxy += f * Math.log(level);
-  }
-  const spread = n * sxx - sx * sx;
-  if (!(spread > 0) || !(below > 0)) return 1;
-  const rate = -(n * sxy - sx * sy) / spread;
-  if (!(rate > 0)) return 1;
-  const level = Math.exp((sy + rate * sx) / n - rate * cut);
-  // ∫ f² e^(-rate (f - cut)) df from the cut to infinity
-  const beyond = level * (cut ** 2 / rate + (2 * cut) / rate ** 2 + 2 / rate ** 3);
-  return beyond / (below + beyond);
 }

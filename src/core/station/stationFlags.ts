@@ -96,7 +96,7 @@ function spectrumFlags({ gradients, spectra, settings }: StationMaterial, facts:
   const cut = gradients.find(({ rule }) => rule.cut > 0);
   if (cut !== undefined) {
     const percent = (100 * cut.rule.shareBeyond).toPrecision(2);
-    const text = `The spectrum of ${cut.name} ends in noise: it is cut there, and some ${percent} % of the gradient lie beyond.`;
+    const text = `The spectrum of ${cut.name} ends in noise: it is cut there, and some ${percent} % of the gradient, added from an exponential, lie beyond.`;
     flags.push({ code: "noise-floor", text, value: cut.rule.shareBeyond });
   }
   const rising = gradients.find(({ rule }) => spectra !== null && rule.slope > risingSlope(spectra));

@@ -1,7 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { isotropicRecord } from "../../../sample-data/maker/synthesise.mjs";
 import { isEstimate } from "../../../src/core/quantity.ts";
-import { seededRandom } from "../../../src/core/signal/seededRandom.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
 import { expectClose } from "../../support/expectClose.ts";
 import { stationOf } from "./records.ts";
@@ -49,30 +48,6 @@ describe("records of Pope's model spectrum, 300 integral times long", () => {
     expectClose(mean, 0, {
       absolute: allowed,
       because: "two to three standard errors of the mean of 100 seeds",
-    });
-  });
-});
-
-describe("noise under a record of Pope's model spectrum, sampled every half eta", () => {
-  const spacing = 0.5;
-  const step = (spacing * eta) / flow.U;
-  const { u, v, w, truth } = recordOf(7, spacing, 1 << 17);
-  const clean = stationOf({ u, v, w }, {}, { step });
-  const random = seededRandom(99);
-  const noisy = (level: number) => {
-    const noise = () => level * Math.sqrt(truth.uu) * random.gaussian();
-    return stationOf(
-      { u: u.map((x) => x + noise()), v: v.map((x) => x + noise()), w: w.map((x) => x + noise()) },
-      {},
-      { step },
-    );
-  };
-  it.each([0.005, 0.02])("of %d u' changes lambda by less than 3 %", (level) => {
-    const station = noisy(level);
-    expect(station.flags.map(({ code }) => code)).toContain("noise-floor");
-    expectClose(station.lambda.value, clean.lambda.value ?? 0, {
-      relative: 0.03,
-      because: "what lies beyond the cut is not added: twice this in the gradient",
     });
   });
 });
