@@ -54,7 +54,7 @@ export const simulation = {
 };
 
 export const secondInflow = {
-  name: "second-inflow",
+  name: "simulation-2",
   kind: "les",
   law: lawThrough(0.0302, { U: 6, n: 1.22, x0: -6 * mesh }),
   windowStart: 0.25,

@@ -39,7 +39,7 @@ export function planDrop(
   const texts = new Set(sheets.map(({ name }) => name));
   const names = files.map(({ name }) => name).filter((name) => !texts.has(name));
   const claimed = new Set<string>();
-  const ordered = [...sheets].sort((a, b) => naturalOrder(a.name, b.name));
+  const ordered = [...sheets].sort((a, b) => naturalOrder(withoutEnding(a.name), withoutEnding(b.name)));
   for (const sheet of ordered) planSheet(sheet, names, previews, plan, claimed);
   const settled = new Set([...claimed].map(topOf));
   for (const [folder, members] of byTop(names.filter((name) => !claimed.has(name)))) {
@@ -49,6 +49,9 @@ export function planDrop(
   }
   return { ...plan, cases: named(plan.cases, plan.warnings) };
 }
+
+/** "a.json" stands before "a-2.json", as its folder does: the full stop would sort behind the hyphen. */
+const withoutEnding = (name: string) => name.replace(/\.[^./]*$/, "");
 
 interface Draft {
   readonly cases: PlannedCase[];

@@ -114,8 +114,8 @@ describe.each(["screen", "simulation"])("the sample case %s", (name) => {
 });
 
 it("the profile of the second inflow decays with its exponent from its virtual origin", async () => {
-  const expected = truth.cases.find((each) => each.case === "second-inflow") as CaseTruth;
-  const { sheet, stations } = await reduceSheet("second-inflow.json");
+  const expected = truth.cases.find((each) => each.case === "simulation-2") as CaseTruth;
+  const { sheet, stations } = await reduceSheet("simulation-2.json");
   const decay = fitDecay(stations, decaySettings(sheet));
   expect(decay.window[0]).toBe(expected.windowStart);
   expectHeld(decay, expected);
