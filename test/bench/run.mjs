@@ -1,5 +1,6 @@
 // Benches: node test/bench/run.mjs [name ...]. Each is a file NAME.bench.mjs beside this one that exports
-// `title` and `run(tools)`; without a name those run that export `byDefault = true`.
+// `title` and `run(tools)`; without a name those run that export `byDefault = true`. decayCoverage is asked for as
+// decay-coverage.
 import { readdirSync } from "node:fs";
 import { cpus, loadavg } from "node:os";
 import { join } from "node:path";
@@ -7,10 +8,13 @@ import { buildBundle } from "./buildBundle.mjs";
 import { measured, table } from "./report.mjs";
 
 const here = import.meta.dirname;
-const known = readdirSync(here)
-  .filter((file) => file.endsWith(".bench.mjs"))
-  .map((file) => file.slice(0, -".bench.mjs".length))
-  .sort();
+const files = new Map(
+  readdirSync(here)
+    .filter((file) => file.endsWith(".bench.mjs"))
+    .sort()
+    .map((file) => [kebab(file.slice(0, -".bench.mjs".length)), file]),
+);
+const known = [...files.keys()];
 const asked = process.argv.slice(2).filter((word) => word !== "--");
 const unknown = asked.filter((name) => !known.includes(name));
 if (unknown.length > 0) {
@@ -31,8 +35,12 @@ const load = loadavg()[0] / cpus().length;
 if (load > 0.5)
   console.log(`This machine is busy (load ${load.toFixed(1)} a core): times and ratios are rough.`);
 for (const name of asked.length > 0 ? asked : known) {
-  const bench = await import(`./${name}.bench.mjs`);
+  const bench = await import(`./${files.get(name)}`);
   if (asked.length === 0 && !bench.byDefault) continue;
   console.log(`\n${bench.title}\n`);
   await bench.run(tools);
+}
+
+function kebab(name) {
+  return name.replace(/[A-Z]/g, (letter) => `-${letter.toLowerCase()}`);
 }

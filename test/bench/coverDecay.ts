@@ -1,0 +1,129 @@
+// How often the 95 % intervals of a decay law hold the truth, over synthetic profiles: node bundle.mjs ASK
+// ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "excesses"}, {"kind": "refits",
+// "profiles", "rounds"} or {"kind": "profiles", "profiles"}. Prints one line of JSON.
+import { fitDecay } from "../../src/core/decay/fitDecay.ts";
+import { fitPowerLaw } from "../../src/core/decay/fitPowerLaw.ts";
+import { fitWindow, windowQuantity } from "../../src/core/decay/fitWindow.ts";
+import { isEstimate, type Quantity } from "../../src/core/quantity.ts";
+import { seededRandom } from "../../src/core/signal/seededRandom.ts";
+import { known, plainSettings, spacedFrom, stationAt } from "../support/lawStations.ts";
+
+/** One cell of the table: scatter of ln q, (x_last - x0)/(x_first - x0), stations, and whether the fit knows the scatter. */
+interface Cell {
+  scatter: number;
+  span: number;
+  stations: number;
+  known: boolean;
+}
+
+interface Tally {
+  profiles: number;
+  refused: number;
+  n: number;
+  x0: number;
+  /** Profiles in which a side of either interval is open. */
+  open: number;
+}
+
+const truth = { n: 1.25, x0: 3, A: 0.06 };
+const law = (x: number) => truth.A * (x - truth.x0) ** -truth.n;
+
+function holds(quantity: Quantity, value: number): boolean {
+  if (!isEstimate(quantity)) return false;
+  const { low, high } = quantity;
+  return (low ?? Number.NEGATIVE_INFINITY) <= value && value <= (high ?? Number.POSITIVE_INFINITY);
+}
+
+const isOpen = (quantity: Quantity) =>
+  isEstimate(quantity) && (quantity.low === null || quantity.high === null);
+
+function add(tally: Tally, n: Quantity, x0: Quantity): void {
+  if (holds(n, truth.n)) tally.n++;
+  if (holds(x0, truth.x0)) tally.x0++;
+  if (isOpen(n) || isOpen(x0)) tally.open++;
+}
+
+const startTally = (profiles: number): Tally => ({ profiles, refused: 0, n: 0, x0: 0, open: 0 });
+
+/** A profile whose stations fall like an exponential has no law, and then no interval that could hold anything. */
+function coverCell({ scatter, span, stations, known: told }: Cell, profiles: number, seed: number): Tally {
+  const random = seededRandom(seed);
+  const xs = spacedFrom(truth.x0, truth.x0 + 10, truth.x0 + 10 * span, stations);
+  const tally = startTally(profiles);
+  for (let profile = 0; profile < profiles; profile++) {
+    const points = xs.map((x) => {
+      const q = law(x) * Math.exp(scatter * random.gaussian());
+      return { x, q, smoothedError: told ? scatter : null };
+    });
+    const fitted = fitWindow(points, plainSettings);
+    if ("refused" in fitted) tally.refused++;
+    else add(tally, windowQuantity(fitted, "n"), windowQuantity(fitted, "x0"));
+  }
+  return tally;
+}
+
+/** Automatic windows where a near field exceeds the law by a share at x = 6 that dies out over six lengths. */
+function coverWindows(excess: number, profiles: number, seed: number) {
+  const random = seededRandom(seed);
+  const xs = spacedFrom(0, 6, 100, 16);
+  const error = 0.005;
+  const [given, union] = [startTally(profiles), startTally(profiles)];
+  let begins = 0;
+  for (let profile = 0; profile < profiles; profile++) {
+    const stations = xs.map((x) => {
+      const q = law(x) * (1 + excess * Math.exp(-(x - 6) / 6)) * Math.exp(error * random.gaussian());
+      return stationAt(x, { q: known(q, error) });
+    });
+    const decay = fitDecay(stations, plainSettings);
+    begins += decay.window[0] / profiles;
+    add(given, decay.given_window.n, decay.given_window.x0);
+    add(union, decay.n, decay.x0);
+  }
+  return { excess, begins, given, union };
+}
+
+/** Profiles for the timing, the same that the script beside reads; both start every refit from the first one's law. */
+function timedProfiles(profiles: number) {
+  const random = seededRandom(30);
+  const x = spacedFrom(truth.x0, truth.x0 + 10, truth.x0 + 100, 30);
+  const qs = Array.from({ length: profiles }, () =>
+    x.map((at) => law(at) * Math.exp(0.02 * random.gaussian())),
+  );
+  const { A, n, x0 } = fitPowerLaw({ x, q: qs[0], error: x.map(() => 0.02) });
+  return { x, qs, error: 0.02, start: { A, n, x0 } };
+}
+
+/** CPU milliseconds that all refits took in each round, and the mean n and x0 they gave. */
+function timeRefits(profiles: number, rounds: number) {
+  const { x, qs, error, start: law } = timedProfiles(profiles);
+  const errors = x.map(() => error);
+  const times: number[] = [];
+  let mean = { n: 0, x0: 0 };
+  for (let round = 0; round < rounds; round++) {
+    const start = process.cpuUsage();
+    const fits = qs.map((q) => {
+      const { n, x0 } = fitPowerLaw({ x, q, error: errors }, { start: law });
+      return { n, x0 };
+    });
+    const { user, system } = process.cpuUsage(start);
+    times.push((user + system) / 1000);
+    const meanOf = (key: "n" | "x0") => fits.reduce((sum, fit) => sum + fit[key] / profiles, 0);
+    mean = { n: meanOf("n"), x0: meanOf("x0") };
+  }
+  return { times, mean };
+}
+
+type Request =
+  | { kind: "cells"; profiles: number; cells: Cell[]; seeds: number[] }
+  | { kind: "windows"; profiles: number; excesses: number[] }
+  | { kind: "profiles"; profiles: number }
+  | { kind: "refits"; profiles: number; rounds: number };
+
+function answer(ask: Request): unknown {
+  if (ask.kind === "cells") return ask.cells.map((cell, i) => coverCell(cell, ask.profiles, ask.seeds[i]));
+  if (ask.kind === "windows")
+    return ask.excesses.map((excess, i) => coverWindows(excess, ask.profiles, 7 + i));
+  return ask.kind === "profiles" ? timedProfiles(ask.profiles) : timeRefits(ask.profiles, ask.rounds);
+}
+
+console.log(JSON.stringify(answer(JSON.parse(process.argv[2]))));
