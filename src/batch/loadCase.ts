@@ -43,7 +43,9 @@ export function loadCase(path: string, folder: string): LoadedCase {
     files: entries.map((entry) => sourceFile(home, entry.path)),
     warnings,
     failures: matched.flatMap(({ pattern, paths }, i) =>
-      paths.length === 0 ? [notFound(path, pattern, i)] : [],
+      paths.length > 0
+        ? []
+        : [taken(home, pattern) ? namedTwice(path, pattern, i) : notFound(path, pattern, i)],
     ),
   };
 }
@@ -78,7 +80,22 @@ function notFound(sheet: string, pattern: string, i: number): PlainFailure {
     code: "missing-file",
     message: many ? "No file answers to this path" : "The file is not there",
     found: pattern,
-    remedy: "Mend the path; it is relative to the sheet, and a file counts for the first path that names it.",
+    remedy: "Mend the path; it is relative to the sheet.",
+    where: { file: sheet, key: `files[${i}].path` },
+  };
+}
+
+/** Files answer to a path, but an earlier one of the sheet has all of them. */
+function taken(home: string, pattern: string): boolean {
+  return candidateFiles(home, pattern).length > 0;
+}
+
+function namedTwice(sheet: string, pattern: string, i: number): PlainFailure {
+  return {
+    code: "duplicate-file",
+    message: "An earlier path of the sheet names this file already, and the first holds",
+    found: pattern,
+    remedy: "Leave one of the two out; put the path of a single file before one with *.",
     where: { file: sheet, key: `files[${i}].path` },
   };
 }

@@ -1,5 +1,5 @@
-import { mkdirSync, renameSync, rmSync, writeFileSync } from "node:fs";
-import { join, resolve } from "node:path";
+import { mkdirSync, renameSync, rmSync, statSync, writeFileSync } from "node:fs";
+import { dirname, join, resolve } from "node:path";
 import { WrongArguments } from "./readArguments.ts";
 
 /** The folder that results go to. */
@@ -22,7 +22,7 @@ export function openOutput(folder: string, names: readonly string[], inputs: rea
   if (clash !== undefined)
     throw new WrongArguments(`--out ${folder}: ${clash} there is an input and would be written over`);
   try {
-    mkdirSync(folder, { recursive: true });
+    makeFolder(folder);
     const trial = join(folder, `.waneline-${process.pid}`);
     writeFileSync(trial, "");
     rmSync(trial);
@@ -30,6 +30,11 @@ export function openOutput(folder: string, names: readonly string[], inputs: rea
     const code = error instanceof Error && "code" in error ? String(error.code) : "unknown";
     throw new WrongArguments(`--out ${folder}: the folder cannot be made or written to (${code})`);
   }
+  const folderThere = names.find((name) => isFolder(join(folder, name)));
+  if (folderThere !== undefined)
+    throw new WrongArguments(
+      `--out ${folder}: ${folderThere} there is a folder, and a file of that name is to be written`,
+    );
   return {
     write(name, text) {
       const path = join(folder, name);
@@ -37,4 +42,19 @@ export function openOutput(folder: string, names: readonly string[], inputs: rea
       renameSync(`${path}.part`, path);
     },
   };
+}
+
+/** One folder after the other: Node's own recursion does not end where a file system denies that a folder exists. */
+function makeFolder(folder: string): void {
+  if (isFolder(folder)) return;
+  if (dirname(folder) !== folder) makeFolder(dirname(folder));
+  try {
+    mkdirSync(folder);
+  } catch (error) {
+    if (!isFolder(folder)) throw error; // another run may have made it in the meantime
+  }
+}
+
+function isFolder(path: string): boolean {
+  return statSync(path, { throwIfNoEntry: false })?.isDirectory() ?? false;
 }

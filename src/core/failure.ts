@@ -16,10 +16,12 @@ export const failureCodes = [
   "ambiguous-columns",
   "unequal-steps",
   "backward-time",
+  "different-points",
   "missing-file",
   "sheet-not-json",
   "sheet-invalid",
   "duplicate-case",
+  "duplicate-file",
   "cancelled",
   "crashed",
 ] as const;

@@ -24,9 +24,13 @@ export function readCaseSheet(text: string, file: string): ReadSheet {
   if (!result.success) throw invalid(result.issues, file);
   const sheet = result.output as CaseSheet;
   if (sheet.along === "t" && sheet.layout !== "profile") throw alongTime(file);
+  if (sheet.layout === "lines") throw linesNotRead(file);
   const warnings = unknownKeys(caseSheetSchema, value).map(
     (key) => `${file}: key ${key} is not known and was not used`,
   );
+  const placed = sheet.layout === "profile" ? sheet.files.findIndex(({ x }) => x !== null) : -1;
+  if (placed >= 0)
+    warnings.push(`${file}: key files[${placed}].x was not used, since each row of a profile has its own`);
   return { sheet, warnings };
 }
 
@@ -39,6 +43,7 @@ export function parseJson(text: string, file: string): unknown {
   try {
     return JSON.parse(plain);
   } catch {
+    if (plain.includes("\0")) throw notUtf8(file);
     const { line, column, found } = jsonFault(plain);
     throw new ReductionFailure(
       "sheet-not-json",
@@ -64,22 +69,27 @@ function invalid(issues: readonly v.BaseIssue<unknown>[], file: string): Reducti
       message: `${absent ? "A key is missing from the case sheet" : "A value in the case sheet cannot be used"}${also}`,
       found: absent ? "nothing" : shown(first.input),
       expected: absent && first.message.startsWith("Invalid key") ? "a value" : first.message,
-      remedy: absent ? `Add ${key} to the sheet.` : `Mend ${key} in the sheet.`,
+      remedy: absent ? `Add ${key} to the sheet.` : `Mend ${key === whole ? "it" : key} in the sheet.`,
     },
     { file, key },
   );
 }
+
+const whole = "(the whole sheet)";
 
 /** `files[2].path`, as it would be written. */
 function keyOf(issue: v.BaseIssue<unknown>): string {
   const parts = (issue.path ?? []).map(({ key }) =>
     typeof key === "number" ? `[${key}]` : `.${String(key)}`,
   );
-  return parts.join("").replace(/^\./, "") || "(the whole sheet)";
+  return parts.join("").replace(/^\./, "") || whole;
 }
 
+/** One level of it: what is nested a hundred thousand deep cannot be written out. */
 function shown(value: unknown): string {
-  const text = JSON.stringify(value) ?? String(value);
+  if (typeof value === "number") return String(value); // 1e999 is a number in JSON, and infinite
+  const nested = (inner: unknown) => inner !== value && inner instanceof Object;
+  const text = JSON.stringify(value, (_, inner: unknown) => (nested(inner) ? "…" : inner)) ?? String(value);
   return text.length > 60 ? `${text.slice(0, 60)}…` : text;
 }
 
@@ -93,5 +103,31 @@ function alongTime(file: string): ReductionFailure {
       remedy: "Mend along or layout in the sheet.",
     },
     { file, key: "along" },
+  );
+}
+
+/** The format has line samples, and nothing here reads them: taken for time series, their numbers would be wrong. */
+function linesNotRead(file: string): ReductionFailure {
+  return new ReductionFailure(
+    "sheet-invalid",
+    {
+      message: "Line samples are not read yet",
+      found: '"lines"',
+      expected: 'layout "series" or "profile"',
+      remedy: "Reduce the lines to statistics and give these as a profile, or give time series of probes.",
+    },
+    { file, key: "layout" },
+  );
+}
+
+function notUtf8(file: string): ReductionFailure {
+  return new ReductionFailure(
+    "sheet-not-json",
+    {
+      message: "The case sheet is not UTF-8 text",
+      found: "zero bytes, as in UTF-16 or a binary file",
+      remedy: "Save the sheet as UTF-8.",
+    },
+    { file },
   );
 }

@@ -221,6 +221,15 @@ describe("bad input", () => {
     expect(results("twice").cases).toHaveLength(1);
   }, 60_000);
 
+  it("of a file that two paths name is told as that, and the first holds", () => {
+    const files = [{ path: fileOf(0.8), x: 3 }, { path: `./${fileOf(0.8)}` }];
+    write("tiny/double.json", { case: "double", layout: "series", files });
+    const done = batch.run(["tiny/double.json", "--out", "double"], top);
+    expect(done.code).toBe(1);
+    expect(done.stderr).toMatch(/files\[1\]\.path.*names this file already/);
+    expect(results("double").cases[0].sources.map(({ x }: { x: number }) => x)).toEqual([3]);
+  }, 60_000);
+
   it("that leaves no station still gives a results file that says so", () => {
     write("none/sheet.json", { case: "none", layout: "series", files: [{ path: "gone.csv", x: 1 }] });
     const done = batch.run(["none/sheet.json", "--out", "none-out"], top);
@@ -237,12 +246,28 @@ describe("wrong arguments", () => {
     [["tiny/sheet.json"], /--out/],
     [["tiny/sheet.json", "--out", "x", "--fast"], /--fast/],
     [["tiny/sheet.json", "--out", "tiny/sheet.json"], /--out/],
+    [["tiny/sheet.json", "--out", "tiny/sheet.json/deeper"], /--out/],
+    [["tiny/sheet.json", "--out", "x", "--jobs", "0"], /--jobs/],
   ])("end with 2 and the usage: %j", (args, words) => {
     const done = batch.run(args, top);
     expect(done.code).toBe(2);
     expect(done.stderr).toMatch(words);
     expect(done.stderr).toMatch(/SHEET\.json/);
     expectPlainWords(done);
+  });
+
+  it.runIf(existsSync("/proc/self"))("are told where the file system denies that a folder exists", () => {
+    const done = batch.run(["tiny/sheet.json", "--out", "/proc/waneline/x"], top);
+    expect(done.code).toBe(2);
+    expect(done.stderr).toMatch(/--out/);
+  });
+
+  it("are told before the work where a folder stands in the place of a result", () => {
+    mkdirSync(join(top, "held/results.json"), { recursive: true });
+    const done = batch.run(["tiny/sheet.json", "--out", "held"], top);
+    expect(done.code).toBe(2);
+    expect(done.stderr).toMatch(/results\.json/);
+    expect(readdirSync(join(top, "held"))).toEqual(["results.json"]);
   });
 
   it("never let an input be overwritten", () => {
