@@ -16,9 +16,13 @@ export async function openDemo(page: Page): Promise<void> {
 /** Until every case is reduced and compared. */
 export async function settled(page: Page): Promise<void> {
   await page.getByRole("button", { name: "Results, JSON" }).waitFor({ timeout: 90_000 });
-  await page.waitForFunction(() => document.querySelector('main [aria-busy="true"]') === null, undefined, {
-    timeout: 90_000,
-  });
+  await page.waitForFunction(
+    () => document.querySelector('.reducing, main [aria-busy="true"]') === null,
+    undefined,
+    {
+      timeout: 90_000,
+    },
+  );
 }
 
 /** The text of what a click downloads. */
