@@ -55,13 +55,22 @@ function stationOf(station: StationResult): RulerStation {
   return { ...base, quality: times === null || times >= wellSampled ? "well" : "fair" };
 }
 
-/** Positions that the sheet, a name or a comment gives are known before a file is reduced. */
-function waitingStations({ of }: CaseView, previews: readonly Preview[]): RulerStation[] {
+/**
+ * Positions that the sheet, a name or a comment gives are known before a file is reduced. A station is read when
+ * every file that stands there is.
+ */
+function waitingStations({ of, work }: CaseView, previews: readonly Preview[]): RulerStation[] {
   const byName = new Map(previews.map(({ file, position }) => [file, position.x]));
-  const xs = of.sheet.files
-    .map(({ x }, i) => x ?? byName.get(of.sources[i]?.name ?? "") ?? null)
-    .filter((x) => x !== null);
-  return [...new Set(xs)].sort((a, b) => a - b).map((x) => ({ x, Tu: null, quality: "waiting" }));
+  const done = new Set(work?.done);
+  const read = new Map<number, boolean>();
+  for (const [i, file] of of.sheet.files.entries()) {
+    const name = of.sources[i]?.name ?? "";
+    const x = file.x ?? byName.get(name) ?? null;
+    if (x !== null) read.set(x, (read.get(x) ?? true) && done.has(name));
+  }
+  return [...read]
+    .sort(([a], [b]) => a - b)
+    .map(([x, isRead]) => ({ x, Tu: null, quality: isRead ? "read" : "waiting" }));
 }
 
 function stateOf({ work, stale, decay, stations }: CaseView, late: boolean): LaneState {

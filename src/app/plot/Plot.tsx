@@ -42,8 +42,16 @@ export function Plot({ figure, label, onReady }: PlotProps) {
     };
     const timer = near ? undefined : setTimeout(() => queueDraw(element, draw), restMs);
     if (near) queueDraw(element, draw);
+    // paper has no scrolling: what was not drawn yet is drawn before the page is set
+    const print = () => {
+      clearTimeout(timer);
+      dropDraw(element);
+      void draw();
+    };
+    window.addEventListener("beforeprint", print);
     return () => {
       live = false;
+      window.removeEventListener("beforeprint", print);
       clearTimeout(timer);
       dropDraw(element);
     };

@@ -1,9 +1,10 @@
 import { useRef, useState } from "react";
 import { formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import { positionDecimals } from "../../figures/positionDecimals.ts";
 import { BodyField } from "./BodyField.tsx";
 import type { Phase, RulerBody } from "./rulerProps.ts";
 import type { LaneMap } from "./rulerScale.ts";
-import { placeDecimals, type SpokenScale, spokenPlace } from "./spokenText.ts";
+import { type SpokenScale, spokenPlace } from "./spokenText.ts";
 import { useBodyGrip } from "./useBodyGrip.ts";
 
 interface BodyMarkProps {
@@ -19,7 +20,7 @@ export function BodyMark({ body, map, width, scale, onBody }: BodyMarkProps) {
   const px = map.at + map.perX * body.x;
   if (px < 0 || px > width) return null;
   const size = Math.max(7, (body.chord ?? 0) * map.perX);
-  const shown = { ...scale, decimals: Math.max(scale.decimals, placeDecimals([body.x])) };
+  const shown = { ...scale, decimals: Math.max(scale.decimals, positionDecimals([body.x])) };
   const label = { px: px + size / 2 + 5, text: withUnit(formatNumber(body.x, shown.decimals), scale.units) };
   return (
     <>

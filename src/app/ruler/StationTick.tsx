@@ -4,8 +4,9 @@ import type { RulerStation } from "./rulerProps.ts";
 /** A station's tick: as long as its Tu; thin where fairly sampled, hollow without an interval, small while unread. */
 export function StationTick({ station, px, height }: { station: RulerStation; px: number; height: number }) {
   const { quality } = station;
-  if (quality === "waiting") {
-    return <rect className="ruler-tick waiting" x={px - 1.5} y={height / 2 - 4} width={3} height={8} />;
+
+  if (quality === "waiting" || quality === "read") {
+    return <rect className={`ruler-tick ${quality}`} x={px - 1.5} y={height / 2 - 4} width={3} height={8} />;
   }
   const length = tickLength(station.Tu, height);
   if (quality === "none") {

@@ -70,8 +70,8 @@ export interface RulerStation {
   readonly x: number;
   /** A fraction, 0.06 for 6 %; null where it is not known. */
   readonly Tu: number | null;
-  /** well: 1000 integral times or more · fair: 200 to 1000 · none: no interval · waiting: not yet read. */
-  readonly quality: "well" | "fair" | "none" | "waiting";
+  /** well: 1000 integral times or more · fair: 200 to 1000 · none: no interval · waiting: not yet read · read: its file is in. */
+  readonly quality: "well" | "fair" | "none" | "waiting" | "read";
   /** Why there is no interval, one clause without a stop: "record too short". */
   readonly why?: string;
 }

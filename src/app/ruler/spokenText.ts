@@ -28,15 +28,6 @@ export function spokenPlace(x: number, { units, decimals }: SpokenScale): string
   return units === "" ? number : `${number} ${spokenUnit(units)}`;
 }
 
-/** Decimals that write every station exactly, four at most. */
-export function placeDecimals(xs: readonly number[]): number {
-  for (const decimals of [0, 1, 2, 3]) {
-    const exact = (x: number) => Math.abs(Number(x.toFixed(decimals)) - x) <= 1e-6 * Math.abs(x);
-    if (xs.every(exact)) return decimals;
-  }
-  return 4;
-}
-
 /** "Start of fit window, screen". */
 export function bracketName(edge: Edge, caseName: string): string {
   return `${edge === "start" ? "Start" : "End"} of fit window, ${caseName}`;
@@ -65,6 +56,7 @@ export function stationName(station: RulerStation, letter: string | null, scale:
   const place = `Station ${spokenPlace(station.x, scale)}`;
   const picked = letter === null ? "" : `, picked as ${letter}`;
   if (station.quality === "waiting") return `${place}${picked}, not yet read.`;
+  if (station.quality === "read") return `${place}${picked}, read.`;
   if (station.quality === "none")
     return `${place}${picked}, no interval: ${station.why ?? "not determined"}.`;
   const Tu =

@@ -1,11 +1,12 @@
 import { useMemo, useState } from "react";
+import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { Axis } from "../../sheet/workspace.ts";
 import { axisChoices } from "./axisChoices.ts";
 import { laneHeight } from "./laneHeight.ts";
 import type { RulerCase, RulerProps } from "./rulerProps.ts";
 import { type RulerScale, rulerScale } from "./rulerScale.ts";
 import type { Edge, StationWindow } from "./snapWindow.ts";
-import { lawSpoken, placeDecimals } from "./spokenText.ts";
+import { lawSpoken } from "./spokenText.ts";
 import { useLaneActions } from "./useLaneActions.ts";
 import { useMedia } from "./useMedia.ts";
 import { useSlide } from "./useSlide.ts";
@@ -52,7 +53,7 @@ function useAxis({ cases, units, along = "x", axis: wanted }: RulerProps) {
   const choices = useMemo(() => axisChoices(cases, units, along), [cases, units, along]);
   const axis: Axis = choices.some((choice) => choice.axis === wanted) ? wanted : "x";
   const decimals = useMemo(
-    () => placeDecimals(cases.flatMap(({ stations }) => stations.map(({ x }) => x))),
+    () => positionDecimals(cases.flatMap(({ stations }) => stations.map(({ x }) => x))),
     [cases],
   );
   return { choices, axis, decimals };

@@ -18,9 +18,10 @@ const figure: SectionFigure = {
   caption: (
     <>
       (<i>a</i>) Energy against distance from the virtual origin. Filled: inside the fit window; open:
-      outside; the law is thin where it is extended. Below, residuals from the law. Bars: 95 %. (<i>b</i>)
-      Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
-      <sub>0</sub>; dashed: exponents of the classical hypotheses.
+      outside; the law is thin where it is extended. Below, residuals from the law; an open arrowhead stands
+      for one beyond the strip. Bars: 95 %. (<i>b</i>) Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
+      <sub>0</sub> in the chosen window; bars: their adopted 95 % intervals, for an automatic window the union
+      over later starts; dashed: exponents of the classical hypotheses.
     </>
   ),
 };

@@ -4,6 +4,7 @@ import { isEstimate } from "../../core/quantity.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatCount, formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
@@ -51,12 +52,7 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
               </th>
               <td className="text">{layoutOf(view)}</td>
               <td>{view.stations.length}</td>
-              <td>
-                {rangeOf(
-                  view.stations.map((station) => station.x),
-                  2,
-                )}
-              </td>
+              <td>{placesOf(view)}</td>
               <td>{speedOf(view)}</td>
               <td>{lengthsOf(view)}</td>
               <td>{resolutionOf(view)}</td>
@@ -74,10 +70,7 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
     <ul className="records-list">
       {cases.map((view) => {
         const { units } = view.of.sheet;
-        const xs = rangeOf(
-          view.stations.map((station) => station.x),
-          2,
-        );
+        const xs = placesOf(view);
         return (
           <li key={view.id}>
             <CaseMark mark={view.mark} line />
@@ -130,6 +123,11 @@ function rangeOf(values: readonly number[], decimals: number): string {
   const text = (value: number) =>
     Math.abs(value) >= 1000 ? formatCount(roundTo(value, 2)) : formatNumber(value, decimals);
   return text(low) === text(high) ? text(low) : `${text(low)} to ${text(high)}`;
+}
+
+function placesOf({ stations }: CaseView): string {
+  const xs = stations.map((station) => station.x);
+  return rangeOf(xs, positionDecimals(xs));
 }
 
 function roundTo(value: number, digits: number): number {

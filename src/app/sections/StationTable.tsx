@@ -2,7 +2,8 @@ import { labelOf } from "../../core/catalogue.ts";
 import { isEstimate } from "../../core/quantity.ts";
 import { withReference } from "../../core/symbolRuns.ts";
 import { unitOf } from "../../core/unitText.ts";
-import { decimalsForDigits, formatNumber } from "../../figures/formatNumber.ts";
+import { formatNumber } from "../../figures/formatNumber.ts";
+import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { Definition } from "./Definition.tsx";
 import { RichText } from "./RichText.tsx";
@@ -110,13 +111,6 @@ function Gaps({ columns }: { columns: readonly StationColumn[] }) {
 
 function isUsed({ decay }: CaseView, x: number): boolean {
   return decay?.points.some((point) => point.x === x && point.used) ?? true;
-}
-
-/** Decimals that tell neighbouring stations apart. */
-function positionDecimals(xs: readonly number[]): number {
-  const steps = xs.slice(1).map((x, i) => Math.abs(x - xs[i]));
-  const least = Math.min(...steps.filter((step) => step > 0), Math.abs(xs.at(-1) ?? 1) || 1);
-  return Math.min(decimalsForDigits(least, 1), 6);
 }
 
 function distancesOf({ stations, decay, length }: CaseView): string[] | null {

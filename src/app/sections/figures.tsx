@@ -26,9 +26,10 @@ export const scalesPicture: SectionFigure = {
   build: scalesFigure,
   caption: (
     <>
-      (<i>a</i>) Integral, Taylor and Kolmogorov lengths with their power laws; bars smaller than a marker are
-      not drawn. (<i>b</i>) Taylor Reynolds number; lines have the slope that the law implies, (1 − <i>n</i>
-      )/2.
+      (<i>a</i>) Integral, Taylor and Kolmogorov lengths; bars smaller than a marker are not drawn. (<i>b</i>)
+      Taylor Reynolds number. Lines, where the axis starts at the origin, have the slopes that <i>n</i> and a
+      constant <i>C</i>
+      <sub className="sym">ε</sub> imply; only their height is fitted.
     </>
   ),
 };

@@ -105,10 +105,10 @@ function withWork(session: Session, caseId: string, work: Work): Session {
 
 function progressed(
   session: Session,
-  { caseId, filesDone, bytesDone }: Extract<SessionEvent, { kind: "progressed" }>,
+  { caseId, filesDone, bytesDone, done }: Extract<SessionEvent, { kind: "progressed" }>,
 ): Session {
   if (session.kind !== "reducing" || !Object.hasOwn(session.work, caseId)) return session;
-  const work = { ...session.work[caseId], filesDone, bytesDone };
+  const work = { ...session.work[caseId], filesDone, bytesDone, ...(done ? { done } : {}) };
   return { ...session, work: { ...session.work, [caseId]: work } };
 }
 

@@ -24,15 +24,15 @@ export async function reduceInto(
   const work = { key, files: files.length, filesDone: 0, bytes, bytesDone: 0 };
   dispatch({ kind: "started", caseId: of.id, work });
   const done: SourceFile[] = [];
-  const progress = progressOf(store, of.id);
+  const progress = progressOf(store, of.id, done);
   const whole = { sheet: of.sheet, files };
   try {
     const reduced = await run(engine, cache, whole, {
       signal,
-      onProgress: (more) => progress(0, more),
+      onProgress: (more) => progress(more),
       onFile: (file) => {
         done.push(file);
-        progress(1, 0);
+        progress(0);
       },
     });
     dispatch({ kind: "reduced", caseId: of.id, reduced: { key, ...reduced, complete: true } });
@@ -74,15 +74,16 @@ function onlyThose({ sheet, files }: CaseFiles, done: readonly SourceFile[]): Ca
   };
 }
 
-function progressOf(store: PageStore, caseId: string): (files: number, bytes: number) => void {
-  let [filesDone, bytesDone, told] = [0, 0, 0];
-  return (files, bytes) => {
-    filesDone += files;
+/** Tells of bytes now and then, and of every file that is done at once. */
+function progressOf(store: PageStore, caseId: string, done: readonly SourceFile[]): (bytes: number) => void {
+  let [bytesDone, told, toldFiles] = [0, 0, 0];
+  return (bytes) => {
     bytesDone += bytes;
     const now = performance.now();
-    if (files === 0 && now - told < pause) return;
-    told = now;
-    store.getState().dispatch({ kind: "progressed", caseId, filesDone, bytesDone });
+    if (done.length === toldFiles && now - told < pause) return;
+    [told, toldFiles] = [now, done.length];
+    const progress = { filesDone: done.length, bytesDone, done: done.map(({ name }) => name) };
+    store.getState().dispatch({ kind: "progressed", caseId, ...progress });
   };
 }
 

@@ -76,6 +76,8 @@ export interface Work {
   readonly key: string;
   readonly files: number;
   readonly filesDone: number;
+  /** Names of the files that are done, in the order of their ends. */
+  readonly done?: readonly string[];
   readonly bytes: number;
   readonly bytesDone: number;
 }

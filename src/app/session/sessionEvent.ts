@@ -13,6 +13,7 @@ export type SessionEvent =
       readonly kind: "progressed";
       readonly caseId: string;
       readonly filesDone: number;
+      readonly done?: readonly string[];
       readonly bytesDone: number;
     }
   | { readonly kind: "reduced"; readonly caseId: string; readonly reduced: Reduced }
