@@ -4,6 +4,7 @@ import { label } from "./label.ts";
 const milli = { milli: true } as const;
 const two = { digits: 2 } as const;
 const byDifferences = "mean square of (∂u/∂x) by central differences, without the cut of the noise";
+const expected = "what central differences make of the spectrum of u, noise taken out";
 
 /** Every estimator beside the adopted one: the keys of `routes`. */
 export const routeLabels: readonly Label[] = [
@@ -30,11 +31,27 @@ export const routeLabels: readonly Label[] = [
     'T_{"model"}',
     "model spectrum",
     "T",
-    "integral time of the model spectrum fitted to E₁₁",
+    "von Kármán’s (1948) form E ∝ (1 + (1.339 k₁L)²)^(−5/6), fitted to E₁₁ at k₁L < π",
     milli,
   ),
   label("L_v", "L_{v}", "transverse scale, v", "L", "U ∫ ρ_v dτ up to the first zero of ρ_u", milli),
   label("L_w", "L_{w}", "transverse scale, w", "L", "U ∫ ρ_w dτ up to the first zero of ρ_u", milli),
+  label(
+    "L_v_ratio",
+    "2 L_{v}/L_{u}",
+    "twice the transverse scale of v",
+    "1",
+    "2 L_v/L_u, one if isotropic",
+    two,
+  ),
+  label(
+    "L_w_ratio",
+    "2 L_{w}/L_{u}",
+    "twice the transverse scale of w",
+    "1",
+    "2 L_w/L_u, one if isotropic",
+    two,
+  ),
   label("lambda_f", "λ_{f}", "longitudinal Taylor microscale", "L", "λ_f = √2 λ_g", milli),
   label(
     "lambda_gradient",
@@ -76,6 +93,20 @@ export const routeLabels: readonly Label[] = [
     "1/T²",
     `${byDifferences}, fourth order`,
   ),
+  label(
+    "gradient_difference2_expected",
+    '⟨(∂u/∂x)^{2}⟩_{"2nd, expected"}',
+    "second-order differences, expected",
+    "1/T²",
+    `${expected}, second order`,
+  ),
+  label(
+    "gradient_difference4_expected",
+    '⟨(∂u/∂x)^{2}⟩_{"4th, expected"}',
+    "fourth-order differences, expected",
+    "1/T²",
+    `${expected}, fourth order`,
+  ),
   label("epsilon_u-gradient", "ε_{u}", "gradient of u alone", "L²/T³", "ε = 15 ν ⟨(∂u/∂x)²⟩"),
   label(
     "epsilon_all-gradients",
@@ -106,4 +137,12 @@ export const routeLabels: readonly Label[] = [
   label("flatness_w", "F_{w}", "flatness of w", "1", "⟨w⁴⟩/w′⁴, 3 for a Gaussian"),
   label("K_v", "K_{v}", "small-scale isotropy, v", "1", "2⟨(∂u/∂x)²⟩/⟨(∂v/∂x)²⟩, one if isotropic"),
   label("K_w", "K_{w}", "small-scale isotropy, w", "1", "2⟨(∂u/∂x)²⟩/⟨(∂w/∂x)²⟩, one if isotropic"),
+  label("rho_uv", "ρ_{uv}", "correlation coefficient of u and v", "1", "⟨uv⟩/(u′v′)", two),
+  label("rho_uw", "ρ_{uw}", "correlation coefficient of u and w", "1", "⟨uw⟩/(u′w′)", two),
+  label("rho_vw", "ρ_{vw}", "correlation coefficient of v and w", "1", "⟨vw⟩/(v′w′)", two),
+  label("anisotropy_xi", "ξ", "third invariant of anisotropy", "1", "6 ξ³ = b_ij b_jk b_ki", two),
+  label("anisotropy_eta", 'η_{"b"}', "second invariant of anisotropy", "1", "6 η² = b_ij b_ij", two),
+  label("barycentric_1", "C_{1}", "weight of one component", "1", "λ₁ − λ₂, eigenvalues of b_ij", two),
+  label("barycentric_2", "C_{2}", "weight of two components", "1", "2 (λ₂ − λ₃), eigenvalues of b_ij", two),
+  label("barycentric_3", "C_{3}", "weight of three components", "1", "3 λ₃ + 1, one if isotropic", two),
 ];

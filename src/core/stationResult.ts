@@ -73,10 +73,39 @@ export interface StationFacts {
   readonly noiseFloor: number | null;
   readonly shareBeyondCutoff: number | null;
   readonly taylorFactor: number | null;
+  /** The same for the gradients of u, v and w. */
+  readonly taylorFactors?: readonly number[];
+  /** Largest relative change of lambda by moving the cut a twentieth of a decade; null without a cut. */
+  readonly cutoffSensitivity?: number | null;
+  /** Largest over smallest integral time of the routes that give one; null with fewer than two. */
+  readonly integralScaleSpread?: number | null;
+  /** Which route the adopted dissipation takes, and why. */
+  readonly dissipationReason?: string;
   readonly k1max_eta: number | null;
   readonly lagLimit: number | null;
   readonly tauStar: number | null;
   readonly components: readonly ("u" | "v" | "w")[];
+  /** Layout "lines" alone. */
+  readonly lines?: LineFacts;
+}
+
+/** How a station on lines was sampled. Its step, lags and integral time are lengths over U. */
+export interface LineFacts {
+  readonly along: "x" | "y" | "z";
+  readonly points: number;
+  /** Null where the points are not equally spaced. */
+  readonly spacing: number | null;
+  /** Null for lines along x. */
+  readonly length: number | null;
+  readonly periodic: boolean;
+  /** Parallel lines of one snapshot. */
+  readonly parallel: number;
+  readonly snapshots: number;
+  readonly independentSnapshots: number;
+  /** Independent snapshots times length/(2 L11), times parallel lines that are far enough apart. */
+  readonly independentSamples: number;
+  /** Correlation of point values between neighbouring snapshots. */
+  readonly snapshotCorrelation: number | null;
 }
 
 /** Curves of one station, for figures; all arrays are plain doubles and transferred, not copied. */
@@ -141,6 +170,8 @@ export const routeNames = [
   "T_int_model",
   "L_v",
   "L_w",
+  "L_v_ratio",
+  "L_w_ratio",
   "lambda_f",
   "lambda_gradient",
   "eta_gradient",
@@ -150,6 +181,8 @@ export const routeNames = [
   "gradient_w",
   "gradient_difference2",
   "gradient_difference4",
+  "gradient_difference2_expected",
+  "gradient_difference4_expected",
   "epsilon_u-gradient",
   "epsilon_all-gradients",
   "epsilon_second-order",
@@ -162,4 +195,12 @@ export const routeNames = [
   "flatness_w",
   "K_v",
   "K_w",
+  "rho_uv",
+  "rho_uw",
+  "rho_vw",
+  "anisotropy_xi",
+  "anisotropy_eta",
+  "barycentric_1",
+  "barycentric_2",
+  "barycentric_3",
 ] as const;

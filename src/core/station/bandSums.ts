@@ -9,8 +9,11 @@ export interface BandSums {
   readonly counts: BlockSeries;
   readonly sums: readonly BlockSeries[];
   /** A Welch accumulator a component; each tells the block that holds its segment's middle. */
-  open(blocks: BlockList): WelchSums[];
+  open(blocks: BlockList, listen: SegmentListener): WelchSums[];
 }
+
+/** Told of every segment's transform, component by component. */
+export type SegmentListener = (component: number, transform: Float64Array) => void;
 
 /**
  * @param size        samples a segment, a power of two
@@ -40,9 +43,12 @@ export function startBandSums(size: number, components: number): BandSums {
     size,
     counts,
     sums,
-    open: (blocks) =>
+    open: (blocks, listen) =>
       sums.map((_, c) =>
-        startWelch(size, (middle, transform) => take(c, Math.floor(middle / blocks.size), transform)),
+        startWelch(size, (middle, transform) => {
+          take(c, Math.floor(middle / blocks.size), transform);
+          listen(c, transform);
+        }),
       ),
   };
 }

@@ -1,6 +1,7 @@
 import type { ReduceSettings } from "../stationResult.ts";
 import type { JoinedCorrelation } from "./joinCorrelations.ts";
 import type { JoinedSpectra } from "./joinSpectra.ts";
+import { modelScale } from "./modelScale.ts";
 import { zeroCrossing } from "./zeroCrossing.ts";
 
 /** Integral time of u by each route; a number in s, or the reason why there is none. */
@@ -18,6 +19,7 @@ export interface IntegralTimes {
  *     one-over-e     the lag where ρ = 1/e
  *     exponential    ρ = e^(-τ/T) fitted to ρ > 0.2, through ρ(0) = 1
  *     low-frequency  E(0)/(4 uu), E one-sided, from ln E linear in f² on 0 < f < 0.12/T
+ *     model          von Karman's form of E11 fitted to the energetic range (see modelScale)
  * @param correlation  of the station; null: unequal steps
  * @param spectra      of the station, or null
  * @param adopted      route that the user chose
@@ -42,12 +44,14 @@ export function integralTimes(
     "one-over-e": oneOverE(rho, step),
     exponential: exponentialTime(rho, step),
     "low-frequency": lowFrequency(spectra, variance, area * step),
-    model: "the fit of a model spectrum is not part of this version",
+    model: spectra === null ? noSegment : modelScale(spectra, area * step),
   };
   const chosen = routes[adopted];
   const scale = typeof chosen === "number" ? chosen : at === null ? null : area * step;
   return { routes, tauStar: at === null ? null : at * step, scale };
 }
+
+const noSegment = "the record is shorter than a segment of the spectrum";
 
 function allRoutes(why: string): IntegralTimes["routes"] {
   return {
@@ -82,7 +86,7 @@ function exponentialTime(rho: Float64Array, step: number): number | string {
 }
 
 function lowFrequency(spectra: JoinedSpectra | null, variance: number, scale: number): number | string {
-  if (spectra === null) return "the record is shorter than a segment of the spectrum";
+  if (spectra === null) return noSegment;
   const { density, size, step, segments } = spectra;
   const end = (0.12 / scale) * size * step;
   // the mean of ln of a chi-square over its freedom is some 1/freedom below 0

@@ -90,7 +90,12 @@ export class RecordSums {
       step: plan.step,
       start: facts.start,
     };
-    const tables = this.spectral?.tables(rows) ?? { lags: null, spectrum: null, bands: null };
+    const tables = this.spectral?.tables(rows) ?? {
+      lags: null,
+      spectrum: null,
+      bands: null,
+      increments: null,
+    };
     return {
       origin: this.origin,
       components,

@@ -1,5 +1,7 @@
 import { additiveSeries, type BlockList, type BlockSeries, blockRow, trimmed } from "../signal/blockList.ts";
+import { type CrossPower, startCrossPower } from "../signal/crossPower.ts";
 import { type EdgeSums, startEdges } from "../signal/edgeSums.ts";
+import { type IncrementSums, incrementLags, startIncrements } from "../signal/incrementSums.ts";
 import { type LagProducts, startLagProducts } from "../signal/lagProducts.ts";
 import { startWelch, type WelchSums } from "../signal/welch.ts";
 import { type BandSums, startBandSums } from "./bandSums.ts";
@@ -15,6 +17,10 @@ export class SpectralSums {
   private readonly products: readonly BlockSeries[];
   private readonly edges: readonly EdgeSums[];
   private readonly bands: BandSums;
+  private readonly increments: IncrementSums;
+  private readonly incrementRows: BlockSeries;
+  /** Of u and v; null without v. */
+  private readonly cross: CrossPower | null;
   private long: readonly WelchSums[] = [];
   private short: readonly WelchSums[] = [];
 
@@ -25,14 +31,20 @@ export class SpectralSums {
     this.products = each(() => additiveSeries(plan.lagLimit / plan.lagStride));
     this.edges = each(() => startEdges(plan.lagLimit, plan.lagStride));
     this.bands = startBandSums(plan.bandSegment, components);
-    this.series = [...this.products, this.bands.counts, ...this.bands.sums];
+    this.increments = startIncrements(structureLags(plan));
+    this.incrementRows = additiveSeries(3 * this.increments.lags.length);
+    this.cross = components > 1 ? startCrossPower(plan.segment) : null;
+    this.series = [...this.products, this.bands.counts, ...this.bands.sums, this.incrementRows];
   }
 
   /** Short segments belong to the block of their middle; where one length serves both, a segment is transformed once. */
   open(blocks: BlockList): void {
     const { segment, bandSegment } = this.plan;
-    this.short = this.bands.open(blocks);
-    this.long = bandSegment === segment ? this.short : this.lags.map(() => startWelch(segment));
+    const shared = bandSegment === segment;
+    this.short = this.bands.open(blocks, shared ? this.pair : () => {});
+    this.long = shared
+      ? this.short
+      : this.lags.map((_, c) => startWelch(segment, (_middle, transform) => this.pair(c, transform)));
   }
 
   take(columns: readonly Float64Array[], from: number, to: number, block: number): void {
@@ -43,9 +55,16 @@ export class SpectralSums {
       this.long[c].add(columns[c], from, to);
       if (this.short !== this.long) this.short[c].add(columns[c], from, to);
     }
+    this.increments.add(blockRow(this.incrementRows, block), columns[0], from, to);
   }
 
-  tables(rows: number): Pick<StationPart, "lags" | "spectrum" | "bands"> {
+  /** The transforms of u wait for those of v: a chunk may hold several segments. */
+  private readonly pair = (component: number, transform: Float64Array): void => {
+    if (component === 0) this.cross?.first(transform);
+    if (component === 1) this.cross?.second(transform);
+  };
+
+  tables(rows: number): Pick<StationPart, "lags" | "spectrum" | "bands" | "increments"> {
     const { plan, bands, long } = this;
     return {
       lags: {
@@ -59,6 +78,7 @@ export class SpectralSums {
         size: plan.segment,
         segments: long[0].segments,
         power: long.map((one) => one.power),
+        cross: this.cross?.power ?? null,
         edges: long.map((one) => one.edges),
       },
       bands: {
@@ -67,6 +87,13 @@ export class SpectralSums {
         segments: trimmed(bands.counts, rows),
         sums: bands.sums.map((one) => trimmed(one, rows)),
       },
+      increments: { lags: this.increments.lags, sums: trimmed(this.incrementRows, rows) },
     };
   }
+}
+
+/** Lags of the structure functions: from a hundredth of the integral time up to it. */
+function structureLags({ integralTime, step, lagLimit }: RecordPlan): number[] {
+  const scale = integralTime === null ? lagLimit / 8 : integralTime / step;
+  return incrementLags(Math.max(1, scale / 100), Math.min(scale, lagLimit));
 }

@@ -1,4 +1,5 @@
 import { blockRates } from "./blockRates.ts";
+import { type DifferenceRates, differenceRates } from "./differenceRates.ts";
 import type { IntegralTimes } from "./integralTimes.ts";
 import type { JoinedRecord } from "./joinParts.ts";
 import type { JoinedSpectra } from "./joinSpectra.ts";
@@ -14,6 +15,10 @@ export interface ComponentGradient {
   readonly rate: number;
   /** A number a row: weight × <(du/dt)²>. */
   readonly rows: Float64Array;
+  /** What central differences of that spectrum, without its noise, would give. */
+  readonly differences: DifferenceRates;
+  /** Largest relative change of the rate by moving the cut one band down or up; null without a cut. */
+  readonly sensitivity: number | null;
 }
 
 /** Segments shorter than this are corrected for what the window adds. */
@@ -40,7 +45,13 @@ export function stationGradients(
     const added = size < longSegment * scale ? windowShare(variance(record, squares), size, step) : 0;
     const rate = meanSquareRate(density, size, step, rule) - added;
     if (!(rate > 0)) return [];
-    return [{ name, rule, rate, rows: blockRates(record, name, rule, rate, squares) }];
+    const differences = differenceRates(density, size, step, rule);
+    const moved = (shift: number) =>
+      meanSquareRate(density, size, step, noiseFloor(density, size, scaleBin(size, scale), shift)) - added;
+    const sensitivity =
+      rule.cut === 0 ? null : Math.max(...[-1, 1].map((shift) => Math.abs(moved(shift) / rate - 1)));
+    const rows = blockRates(record, name, rule, rate, squares);
+    return [{ name, rule, rate, rows, differences, sensitivity }];
   });
 }
 

@@ -25,6 +25,8 @@ export interface StationPart {
   readonly lags: LagTable | null;
   readonly spectrum: SpectrumSums | null;
   readonly bands: BandTable | null;
+  /** Increments of u; left out of parts that were made without. */
+  readonly increments?: IncrementTable | null;
   readonly flags: readonly Flag[];
 }
 
@@ -47,6 +49,8 @@ export interface SpectrumSums {
   readonly segments: number;
   /** Per component: Σ |X_f|² over the segments, f = 0 … size/2. */
   readonly power: readonly Float64Array[];
+  /** Σ Re(X_f conj Y_f) of u and v; null without v, left out of parts that were made without. */
+  readonly cross?: Float64Array | null;
   /** Per component: Σ Re X_0 and Σ Re X_1, all that a change of the mean alters. */
   readonly edges: readonly Float64Array[];
 }
@@ -60,6 +64,14 @@ export interface BandTable {
   readonly segments: Float64Array;
   /** Per component, blocks × count. */
   readonly sums: readonly Float64Array[];
+}
+
+/** Increments u(t) - u(t - lag) by block. */
+export interface IncrementTable {
+  /** In samples, ascending. */
+  readonly lags: readonly number[];
+  /** Blocks × lags × 3: number, Σ d² and Σ d³. */
+  readonly sums: Float64Array;
 }
 
 /** Every buffer of a part or a result, so that it crosses to another thread without being copied. */

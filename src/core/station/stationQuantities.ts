@@ -9,7 +9,7 @@ import type { Sampling } from "./sampling.ts";
 import { joinedError, type Replicates, valueError, valueQuantity, withError } from "./stationErrors.ts";
 import type { ComponentGradient } from "./stationGradients.ts";
 import { type ValueName, valueScales } from "./stationValues.ts";
-import { dissipationFromStructure } from "./structureDissipation.ts";
+import type { StructureSums } from "./structureSums.ts";
 import { areaUpTo } from "./zeroCrossing.ts";
 
 /** What the quantities of a station are made from. */
@@ -19,6 +19,7 @@ export interface StationMaterial {
   readonly spectra: JoinedSpectra | null;
   readonly times: IntegralTimes;
   readonly gradients: readonly ComponentGradient[];
+  readonly structure: StructureSums | null;
   readonly sampling: Sampling;
   readonly all: Replicates;
   readonly settings: ReduceSettings;
@@ -31,23 +32,29 @@ export function valueQuantities(material: StationMaterial): Record<ValueName, Qu
   return Object.fromEntries(entries);
 }
 
-const needsViscosity = /epsilon|eta$|Re_|lambda_gradient/;
-const needsSpectrum = /gradient|epsilon|lambda|eta|S_dudx|K_/;
-const lateralOf = /^(?:isotropy_u|skewness_|flatness_|gradient_|K_)?([vw])$|^u?([vw])w?$|^([vw])\3$/;
+const structural = /^epsilon_(?:second|third)-order$/;
+const needsViscosity = /^epsilon|^eta$|Re_|_epsilon/;
+const needsSpectrum = /gradient|^epsilon|lambda|^eta$|S_dudx|^K_|_epsilon/;
+const ofTensor = /^(?:anisotropy|barycentric)|vw$/;
+const lateralOf =
+  /^(?:isotropy_u|skewness_|flatness_|gradient_|K_|rho_u)?([vw])$|^u?([vw])w?$|^([vw])\3$|^L_([vw])_ratio$/;
 
 /** Why a value is not to be had from these sums. */
-function absence(name: ValueName, { record, settings, spectra, all }: StationMaterial): string {
-  const found = lateralOf.exec(name);
-  const letters = name === "vw" ? ["v", "w"] : [found?.[1] ?? found?.[2] ?? found?.[3] ?? "u"];
+function absence(name: ValueName, material: StationMaterial): string {
+  const { record, settings, spectra, all, times, structure } = material;
+  const letters = ofTensor.test(name) ? ["v", "w"] : [lateralOf.exec(name)?.slice(1).find(Boolean) ?? "u"];
   const lacking = letters.find((letter) => !record.components.some((own) => own === letter));
   if (lacking !== undefined) return `${lacking} was not measured`;
-  if (needsViscosity.test(name) && settings.kinematicViscosity === null)
+  if (needsViscosity.test(name) && !structural.test(name) && settings.kinematicViscosity === null)
     return "no kinematic viscosity is given";
   if (!(all.whole.U > 0))
     return "the mean velocity is not positive, so time is not to be turned into distance";
   if (needsSpectrum.test(name) && spectra === null)
     return "the time steps are unequal, and a spectrum needs equal ones";
+  if (structural.test(name) && structure === null)
+    return "no lag lies between the Taylor and the integral scale";
   if (needsSpectrum.test(name)) return "the spectrum shows nothing above its noise floor";
+  if (name.endsWith("_ratio") && times.tauStar === null) return "the correlation of u does not fall to zero";
   return "the fluctuation is zero";
 }
 
@@ -88,29 +95,16 @@ export function lateralLength(
   return scaleQuantity(record.means[0] * area, sampling);
 }
 
-/** Dissipation by the routes that are no function of the blocks' sums: values without an interval. */
-export function otherDissipation(material: StationMaterial, values: Record<ValueName, Quantity>) {
-  const { record, spectra, correlation, times, all } = material;
+/** Dissipation from the inertial range, which is no function of the blocks' sums: a value without an interval. */
+export function inertialDissipation({ record, spectra, all }: StationMaterial): Quantity {
   const U = record.means[0];
-  const lambda = values.lambda.value;
-  const unequal = missing("the time steps are unequal, and a spectrum needs equal ones");
-  if (spectra === null || correlation === null || !(U > 0)) return { inertial: unequal, second: unequal };
+  if (spectra === null || !(U > 0))
+    return missing("the time steps are unequal, and a spectrum needs equal ones");
   const unit = (2 * Math.PI) / (U * spectra.size * spectra.step);
   const k1 = Float64Array.from({ length: spectra.size / 2 }, (_, i) => (i + 1) * unit);
   const E11 = spectra.density[0].subarray(1).map((value) => (value * U) / (2 * Math.PI));
-  const inertial = dissipationFromInertialRange(k1, E11, all.whole.Re_lambda);
-  const bound =
-    lambda === null || times.scale === null
-      ? null
-      : dissipationFromStructure(correlation, lambda / U, times.scale, U);
-  return {
-    inertial:
-      typeof inertial === "string"
-        ? missing(inertial)
-        : bare(inertial, "the fitted range gives no error of its own"),
-    second:
-      bound === null
-        ? missing("no lag lies between the Taylor and the integral scale")
-        : bare(bound, "a lower bound of the dissipation"),
-  };
+  const found = dissipationFromInertialRange(k1, E11, all.whole.Re_lambda);
+  return typeof found === "string"
+    ? missing(found)
+    : bare(found, "the fitted range gives no error of its own");
 }

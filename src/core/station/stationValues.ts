@@ -1,4 +1,6 @@
+import { anisotropy } from "./anisotropy.ts";
 import type { Component } from "./stationPart.ts";
+import { dissipationFromStructure } from "./structureDissipation.ts";
 
 /** What a station's sums are turned into numbers with. */
 export interface ValueContext {
@@ -11,6 +13,8 @@ export interface ValueContext {
   readonly viscosity: number | null;
   readonly referenceSpeed: number | null;
   readonly taylorCorrection: boolean;
+  /** Lags of the structure functions, s; null where there are none. */
+  readonly structure: { readonly second: number; readonly third: number } | null;
 }
 
 /**
@@ -49,6 +53,18 @@ export const valueScales = {
   flatness_w: "log",
   K_v: "log",
   K_w: "log",
+  rho_uv: "linear",
+  rho_uw: "linear",
+  rho_vw: "linear",
+  anisotropy_xi: "linear",
+  anisotropy_eta: "linear",
+  barycentric_1: "linear",
+  barycentric_2: "linear",
+  barycentric_3: "linear",
+  L_v_ratio: "linear",
+  L_w_ratio: "linear",
+  "epsilon_second-order": "log",
+  "epsilon_third-order": "linear",
   /** C_epsilon/T_int and Re_L/T_int: the integral time's own error is added to theirs. */
   C_epsilon_over_T: "log",
   Re_L_over_T: "log",
@@ -85,9 +101,7 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
   const lambda = rms / Math.sqrt(gu);
   return {
     ...{ U, uu, vv, ww, k },
-    uv: co("u", "v"),
-    uw: co("u", "w"),
-    vw: co("v", "w"),
+    ...stresses(co),
     Tu: Math.sqrt((2 * k) / 3) / (context.referenceSpeed ?? U),
     isotropy_uv: Math.sqrt(uu / vv),
     isotropy_uw: Math.sqrt(uu / ww),
@@ -102,8 +116,29 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
     ...shapes(sum, { u: uu, v: vv, w: ww }),
     K_v: (2 * gu) / gv,
     K_w: (2 * gu) / gw,
+    L_v_ratio: (2 * sum("area_v") * uu) / (sum("area_u") * vv),
+    L_w_ratio: (2 * sum("area_w") * uu) / (sum("area_u") * ww),
+    ...dissipationFromStructure(sums, context, U),
     C_epsilon_over_T: (epsilon * U) / rms ** 3,
     Re_L_over_T: (rms * U) / nu,
+  };
+}
+
+/** Shear stresses, their coefficients, and where the tensor stands between its limits. */
+function stresses(co: (a: Component, b: Component) => number) {
+  const [uu, vv, ww] = [co("u", "u"), co("v", "v"), co("w", "w")];
+  const [uv, uw, vw] = [co("u", "v"), co("u", "w"), co("v", "w")];
+  const { xi, eta, weights } = anisotropy(uu, vv, ww, uv, uw, vw);
+  return {
+    ...{ uv, uw, vw },
+    rho_uv: uv / Math.sqrt(uu * vv),
+    rho_uw: uw / Math.sqrt(uu * ww),
+    rho_vw: vw / Math.sqrt(vv * ww),
+    anisotropy_xi: xi,
+    anisotropy_eta: eta,
+    barycentric_1: weights[0],
+    barycentric_2: weights[1],
+    barycentric_3: weights[2],
   };
 }
 
