@@ -1,3 +1,4 @@
+import type { Place } from "../core/failure.ts";
 import { ReductionFailure } from "../core/failure.ts";
 import type { RecordOrigin, VelocityBlock } from "../core/records.ts";
 import type { RecordPlan } from "../core/station/recordPlan.ts";
@@ -5,7 +6,7 @@ import type { RecordReducer } from "../core/station/startRecord.ts";
 import { pilotSamples, startRecord } from "../core/station/startRecord.ts";
 import type { StationPart } from "../core/station/stationPart.ts";
 import type { ByteSource } from "../read/byteSource.ts";
-import type { ReadSummary, RecordSink } from "../read/readRecords.ts";
+import type { ReadSummary, RecordPlace, RecordSink } from "../read/readRecords.ts";
 import { readRecords } from "../read/readRecords.ts";
 import type { ColumnStore } from "./columnStore.ts";
 import type { FileReduction, ReduceAsk } from "./protocol.ts";
@@ -21,8 +22,8 @@ interface Probe {
 const leastRowBytes = 8;
 
 /**
- * One file of records, read and reduced in one pass. Probes whose pilot did not stand for the whole are read once
- * more with their new plans: from the column store where all columns are there, else from the file.
+ * One file of records, read and reduced in one pass. Probes whose pilot did not stand for the whole, or whose time
+ * ran back into what was summed, are read once more with their new plans: from the column store where all columns are there, else from the file.
  * A probe that cannot be reduced is left out and told; the others of its file go on.
  * @param onBytes bytes read since the last call, in the first pass
  * @throws what reading throws, and the failure of the probes where none could be reduced
@@ -48,24 +49,25 @@ export async function reduceFile(
   );
   kept?.close();
   for (const probe of first) close(probe);
-  const probes = first.some(({ end }) => end && "again" in end) ? await readOnceMore() : first;
+  let probes = first;
+  while (probes.some(({ end }) => end && "again" in end)) probes = await readOnceMore(probes);
   columns.drop(key);
   return fileReduction(file.name, probes, summary);
 
-  async function readOnceMore(): Promise<Probe[]> {
+  async function readOnceMore(before: readonly Probe[]): Promise<Probe[]> {
     const second: Probe[] = [];
     // a probe that has ended hears nothing more: only those with a new plan are reduced again
     const sink = sinkOf(second, (origin, i) => {
-      const known = first.at(i);
+      const known = before.at(i);
       if (!known) throw changed(file.name);
       return known.end && "again" in known.end ? start(origin, known.end.again) : known;
     });
     const stored = columns.read(key);
     if (stored) {
-      const takers = first.map(({ origin }) => sink.record(origin));
+      const takers = before.map(({ origin }) => sink.record(origin));
       for await (const { record, block } of stored) takers[record].add(block);
     } else await readRecords(source, read, sink);
-    if (second.length !== first.length) throw changed(file.name);
+    if (second.length !== before.length) throw changed(file.name);
     for (const probe of second) close(probe);
     return second;
   }
@@ -75,7 +77,9 @@ export async function reduceFile(
 function fileReduction(file: string, probes: readonly Probe[], summary: ReadSummary): FileReduction {
   const parts = probes.flatMap(({ end }) => (end && "part" in end ? [end.part] : []));
   const failures = probes.flatMap(({ end, origin }) =>
-    end && "failed" in end ? [placed(end.failed, file, probes.length > 1 ? origin : null)] : [],
+    end && "failed" in end
+      ? [placed(end.failed.at(lineOf(end.failed, origin, summary)), file, probes.length > 1 ? origin : null)]
+      : [],
   );
   if (parts.length === 0) throw failures[0] ?? nothingLeft(file);
   const one = probes.length === 1;
@@ -123,6 +127,28 @@ function guarded(probe: Probe, work: () => void): void {
   } catch (error) {
     if (!(error instanceof ReductionFailure)) throw error;
     probe.end = { failed: error };
+  }
+}
+
+/** The line and column that a record's failure is about, as far as it has one. */
+function lineOf(failure: ReductionFailure, probe: RecordOrigin, { places }: ReadSummary): Place {
+  const place = places.find(({ origin }) => origin === probe);
+  if (!place) return {};
+  const at = (line: number | null, column: RecordPlace["uColumn"]): Place => ({
+    ...(line === null ? {} : { line }),
+    ...(column === null ? {} : { column }),
+  });
+  switch (failure.code) {
+    case "constant-signal":
+      return at(place.firstLine, place.uColumn);
+    case "too-few-samples":
+      return at(place.lastLine, null);
+    case "backward-time":
+      return at(place.backwardLine, place.timeColumn);
+    case "no-time":
+      return at(place.firstLine, place.timeColumn);
+    default:
+      return {};
   }
 }
 

@@ -1,5 +1,5 @@
 import type { RecordOrigin, Role } from "../core/records.ts";
-import type { BlockSink, RecordSink } from "./readRecords.ts";
+import type { BlockSink, RecordPlace, RecordSink } from "./readRecords.ts";
 import type { TakenColumn } from "./takeColumns.ts";
 
 /** Samples in a block, and in all blocks of a file together, more or less: many probes get small ones. */
@@ -10,6 +10,7 @@ const allBlocks = 2 ** 18;
 /** Collects the samples of one probe and hands them on when full. Its arrays are made once and used again. */
 export class ProbeBuffer {
   private readonly from: readonly { values: Float64Array; at: number }[];
+  private readonly timeValues: Float64Array | null;
   private readonly block: {
     t: Float64Array | null;
     u: Float64Array;
@@ -23,10 +24,14 @@ export class ProbeBuffer {
   private start = Number.NaN;
   private running: boolean;
   private sink: BlockSink | null = null;
+  private lastTime = Number.NEGATIVE_INFINITY;
+  private firstLine = 0;
+  private lastLine = 0;
+  private backwardLine: number | null = null;
 
   /** @param before probes of this file that have a buffer already */
   constructor(
-    columns: readonly TakenColumn[],
+    private readonly columns: readonly TakenColumn[],
     private readonly startup: number,
     private readonly origin: RecordOrigin,
     private readonly records: RecordSink,
@@ -41,13 +46,17 @@ export class ProbeBuffer {
       return values ? [{ values, at: find(role) }] : [];
     });
     this.timeAt = find("t");
+    this.timeValues = this.block.t;
     this.running = !(startup > 0);
   }
 
-  add(row: Float64Array): void {
+  add(row: Float64Array, line: number): void {
     if (!this.running && !this.hasStarted(row)) return;
     const { from, count } = this;
     for (let i = 0; i < from.length; i++) from[i].values[count] = row[from[i].at];
+    if (this.firstLine === 0) this.firstLine = line;
+    this.lastLine = line;
+    if (this.timeValues !== null) this.watchTime(this.timeValues[count], line);
     this.count = count + 1;
     if (this.count === this.capacity) this.flush();
   }
@@ -57,6 +66,21 @@ export class ProbeBuffer {
     this.sink ??= this.records.record(this.origin);
     this.sink.add({ count: this.count, ...this.block });
     this.count = 0;
+  }
+
+  /** Where in the file its samples stand, for what goes wrong later. */
+  get place(): RecordPlace {
+    const { columns, origin, firstLine, lastLine, backwardLine } = this;
+    const column = (role: Role) => {
+      const at = columns.find((each) => each.role === role);
+      return at === undefined ? null : at.index + 1;
+    };
+    return { origin, firstLine, lastLine, backwardLine, timeColumn: column("t"), uColumn: column("u") };
+  }
+
+  private watchTime(time: number, line: number): void {
+    if (time < this.lastTime) this.backwardLine ??= line;
+    this.lastTime = time;
   }
 
   /** False where the record ended before its start-up did. */

@@ -1,7 +1,7 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { ReadSettings, RecordOrigin, Role } from "../core/records.ts";
 import { ProbeBuffer } from "./probeBuffer.ts";
-import type { RecordSink } from "./readRecords.ts";
+import type { RecordPlace, RecordSink } from "./readRecords.ts";
 import { tidyLength } from "./recognisePosition.ts";
 import type { TakenColumn } from "./takeColumns.ts";
 
@@ -44,7 +44,7 @@ export class ProbeRouter {
       this.current = next && same(next, x, y, z) ? next : this.lookUp(x, y, z, line);
       if (last) last.next = this.current;
     }
-    this.current?.buffer.add(values);
+    this.current?.buffer.add(values, line);
   }
 
   /**
@@ -68,6 +68,10 @@ export class ProbeRouter {
       },
       { file: this.origin.file },
     );
+  }
+
+  places(): RecordPlace[] {
+    return [...this.probes.values()].map(({ buffer }) => buffer.place);
   }
 
   /** The positions that were met, in order of x. */

@@ -2,8 +2,9 @@ import { ReductionFailure } from "../core/failure.ts";
 import type { Flag } from "../core/flag.ts";
 import type { ProfileRow, ReadSettings, SourceNote } from "../core/records.ts";
 import type { ByteSource } from "./byteSource.ts";
+import { headingList } from "./headingList.ts";
 import { readHead } from "./readHead.ts";
-import { withoutRows, withoutVelocity } from "./readRecords.ts";
+import { withoutRows } from "./readRecords.ts";
 import { readRows } from "./readRows.ts";
 import { tidyLength } from "./recognisePosition.ts";
 import { surveyTable, type TableForm } from "./surveyTable.ts";
@@ -34,7 +35,7 @@ export async function readProfile(
   if (place === undefined) throw withoutCoordinate(form, along);
   const values = all.filter(({ role }) => !coordinates.has(role));
   if (values.every(({ role }) => role === "U" || role === "se")) {
-    throw withoutVelocity(form, "No variance, rms value or decaying quantity was recognised");
+    throw withoutStatistics(form);
   }
   const columns = [place, ...values];
   const plan = { columns, sparse: columns.map((_, i) => i > 0), missing: settings.missing };
@@ -54,12 +55,25 @@ export async function readProfile(
 
 const coordinates: ReadonlySet<string> = new Set(["x", "y", "z", "t", "u", "v", "w"]);
 
+function withoutStatistics(form: TableForm): ReductionFailure {
+  return new ReductionFailure(
+    "no-velocity",
+    {
+      message: "No variance, rms value or decaying quantity was recognised",
+      found: headingList(form),
+      expected: "a column uu, u_rms or q",
+      remedy: "Say under columns in the sheet which column is which, or leave the file out.",
+    },
+    { file: form.file, line: form.headingLine || form.firstLine },
+  );
+}
+
 function withoutCoordinate(form: TableForm, along: "x" | "t"): ReductionFailure {
   return new ReductionFailure(
     "no-position",
     {
       message: `The profile has no ${along} column`,
-      found: form.headings.map(({ text }, i) => text || `column ${i + 1}`).join(", "),
+      found: headingList(form),
       expected: along === "x" ? "a column x (or t, with along set to t)" : "a column t",
       remedy: `Name the column under columns.${along} in the sheet.`,
     },

@@ -2,6 +2,7 @@ import { ReductionFailure } from "../core/failure.ts";
 import type { Flag } from "../core/flag.ts";
 import type { ReadSettings, RecordOrigin, SourceNote, VelocityBlock } from "../core/records.ts";
 import type { ByteSource } from "./byteSource.ts";
+import { headingList } from "./headingList.ts";
 import { ProbeRouter } from "./probeRouter.ts";
 import { readHead } from "./readHead.ts";
 import { readRows } from "./readRows.ts";
@@ -19,6 +20,17 @@ export interface BlockSink {
 export interface RecordSink {
   record(origin: RecordOrigin): BlockSink;
 }
+/** Where in its file a record's samples stand: lines and columns, 1-based. */
+export interface RecordPlace {
+  /** The very object that the sink was given. */
+  readonly origin: RecordOrigin;
+  readonly firstLine: number;
+  readonly lastLine: number;
+  /** The first sample that is earlier than the one before it; null: there is none. */
+  readonly backwardLine: number | null;
+  readonly timeColumn: number | null;
+  readonly uColumn: number | null;
+}
 export interface ReadSummary {
   /** One for each position of the file. */
   readonly sources: SourceNote[];
@@ -26,6 +38,7 @@ export interface ReadSummary {
   readonly rows: number;
   /** Lines between the rows that held none. */
   readonly leftOut: number;
+  readonly places: readonly RecordPlace[];
 }
 
 /**
@@ -61,7 +74,13 @@ export async function readRecords(
     x,
     position: origin.position,
   }));
-  return { sources, flags: tallyFlags(tally), rows: tally.rows, leftOut: tally.leftOutCount };
+  return {
+    sources,
+    flags: tallyFlags(tally),
+    rows: tally.rows,
+    leftOut: tally.leftOutCount,
+    places: router.places(),
+  };
 }
 
 /** Where the file's probes stand and what their step is, as far as all of them share it. */
@@ -81,12 +100,12 @@ function originOf(form: TableForm, columns: readonly TakenColumn[], settings: Re
 
 const headingsOf = (form: TableForm) =>
   form.headingLine > 0
-    ? `the headings ${form.headings.map(({ text }) => text).join(", ")}`
+    ? `the headings ${headingList(form)}`
     : `${form.width} ${form.width === 1 ? "column" : "columns"} without headings`;
 const headingPlace = (form: TableForm) => ({ file: form.file, line: form.headingLine || form.firstLine });
 
-/** Also for profiles and previews: a table in which nothing was recognised. */
-export function withoutVelocity(form: TableForm, message = "No velocity was recognised"): ReductionFailure {
+/** A table in which nothing was recognised. */
+function withoutVelocity(form: TableForm, message = "No velocity was recognised"): ReductionFailure {
   return new ReductionFailure(
     "no-velocity",
     {

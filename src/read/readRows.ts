@@ -2,7 +2,7 @@ import type { ReadSettings } from "../core/records.ts";
 import type { ByteSource } from "./byteSource.ts";
 import { commentText } from "./commentLine.ts";
 import { parseNumber } from "./parseNumber.ts";
-import { badField, missingField, raggedRow } from "./rowFailures.ts";
+import { badField, missingField, raggedRow, tooLarge } from "./rowFailures.ts";
 import { splitRows } from "./splitRows.ts";
 import type { TableForm } from "./surveyTable.ts";
 import type { TakenColumn } from "./takeColumns.ts";
@@ -25,6 +25,9 @@ export interface RowTally {
   /** 1-based; null where the last row is whole. */
   readonly cutLine: number | null;
 }
+
+/** Nothing that was measured is as large; the fourth power of what is smaller is still a number. */
+const largest = 1e60;
 
 /** Enough lines left out to list; the rest is only counted. */
 const listed = 100;
@@ -93,7 +96,11 @@ class RowReader {
     const { columns } = this.plan;
     for (let i = 0; i < columns.length; i++) {
       const value = parseNumber(fields[columns[i].index], this.form.decimal);
-      if (Number.isNaN(value) || (this.noNumber.length > 0 && this.noNumber.includes(value))) return false;
+      if (
+        !(value < largest && value > -largest) ||
+        (this.noNumber.length > 0 && this.noNumber.includes(value))
+      )
+        return false;
       this.values[i] = (value * columns[i].times) / columns[i].per;
     }
     return true;
@@ -139,6 +146,7 @@ class RowReader {
       const gap = this.noValue.has(fields[index].trim().toLowerCase()) || this.noNumber.includes(value);
       if (gap && !sparse[i]) return missingField(this.form, columns[i], fields[index], line);
       if (!gap && Number.isNaN(value)) return badField(this.form, columns[i], fields[index], line);
+      if (!gap && Math.abs(value) >= largest) return tooLarge(this.form, columns[i], fields[index], line);
       this.values[i] = gap ? Number.NaN : inCaseUnit(value, columns[i]);
     }
     return null;

@@ -69,8 +69,9 @@ export function recogniseColumns(headings: readonly Heading[], layout: Layout | 
 function assigned(headings: readonly Heading[], layout: Layout): RecognisedColumns {
   const roles: (Role | null)[] = headings.map(() => null);
   const clashes: { role: Role; columns: number[] }[] = [];
-  const names = headings.map(({ name }) => plainName(name));
-  const probes = severalProbes(names);
+  const written = headings.map(({ name }) => plainName(name));
+  const probes = severalProbes(written);
+  const names = countedFromOne(written);
   for (const [role, spellings] of Object.entries(layout === "profile" ? profile : series)) {
     const known = spellings.split(" ");
     const ranks = headings.map(({ name }, i) => rank(name, names[i], role, known));
@@ -102,6 +103,18 @@ function plainName(name: string): string {
     .replace(/\u00b2/g, "2")
     .replace(/[<>\u27e8\u27e9{}\\|\s_\-^.:]/g, "")
     .toLowerCase();
+}
+
+/** `U:0 U:1 U:2` are components of one vector, as `u1 u2 u3` are: counted from 0, they would be taken one off. */
+function countedFromOne(names: readonly string[]): readonly string[] {
+  let even = names;
+  for (const base of ["u", "umean", "vel", "velocity", "points", "coordinates"]) {
+    if (![`${base}0`, `${base}1`].every((name) => names.includes(name)) || names.includes(`${base}3`))
+      continue;
+    const one = /^[uv]/.test(base) ? "u" : "x";
+    even = even.map((name) => [0, 1, 2].reduce((now, i) => (name === base + i ? one + (i + 1) : now), name));
+  }
+  return even;
 }
 
 /** Columns `u1 u2 v1 v2`: several probes side by side, which one role each cannot describe. */

@@ -55,7 +55,7 @@ function tried(lines: readonly string[], separator: Separator, decimal: "." | ",
   }
   const numbers = counts.reduce((sum, count) => sum + count, 0);
   const share = rows.length === 0 ? 0 : numbers / (width * rows.length);
-  return { separator, decimal, width, share, numeric: counts.map((count) => 2 * count > regular.length) };
+  return { separator, decimal, width, share, numeric: counts.map((count) => 2 * count >= regular.length) };
 }
 
 /** A row without the empty fields that separators at its end make. */

@@ -1,5 +1,6 @@
 import type { PositionSource, ReadSettings } from "../core/records.ts";
 import { inCaseUnit, unitOf } from "./unitFactors.ts";
+import { valueOfWritten, writtenNumber } from "./writtenNumber.ts";
 
 /** A position that was found outside the columns, in the unit of the case. */
 export interface FoundPosition {
@@ -15,14 +16,15 @@ export interface FoundPosition {
 
 const number = "[+-]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][+-]?\\d+)?";
 const spoken = new RegExp(
-  `(?:^|[\\s,;(])((?:x|x[ _-]?pos(?:ition)?|pos(?:ition)?|station|x[ _-]?probe|probe[ _-]?x)\\s*[=:]\\s*(${number})\\s*` +
+  "(?:^|[\\s,;(])((?:x|x[ _-]?pos(?:ition)?|pos(?:ition)?|(station)|x[ _-]?probe|probe[ _-]?x)" +
+    `\\s*(?:[[(]([^\\])]+)[\\])]\\s*)?[=:]\\s*(${writtenNumber})\\s*` +
     "(?:\\[([^\\]]+)\\]|([a-zA-Z\u00b5\u03bc]+)(?![\\w/]))?)",
   "i",
 );
 const across = (axis: string) =>
-  new RegExp(`(?:^|[\\s,;(])${axis}\\s*[=:]\\s*(${number})\\s*([a-z\u00b5\u03bc]+(?![\\w/]))?`, "i");
+  new RegExp(`(?:^|[\\s,;(])${axis}\\s*[=:]\\s*(${writtenNumber})\\s*([a-z\u00b5\u03bc]+(?![\\w/]))?`, "i");
 const three = new RegExp(
-  `(?:position|probe|point|location|coordinates?|xyz|x,\\s*y,\\s*z)[^\\d+.-]*(${number})[\\s,;]+(${number})[\\s,;]+(${number})`,
+  `(?:position|probe|point|location|coordinates?|xyz|x,\\s*y,\\s*z)[^\\d+.-]*(${number})[\\s,;]+(${number})[\\s,;]+(${number})(?![\\d.]|[\\s,;]+[\\d.])`,
   "i",
 );
 /** x, not part of a word, then digits at once or after = _ or a blank; `0p2` is 0.2. */
@@ -59,13 +61,16 @@ function fromComment(comment: string, units: ReadSettings["units"]): FoundPositi
   }
   const found = spoken.exec(comment);
   if (!found) return null;
-  const x = placed(Number(found[2]), found[3] ?? found[4], units);
+  const [, matched, counted, before, digits, inside, after] = found;
+  const unit = before ?? inside ?? after;
+  if (counted !== undefined && unit === undefined && /^\d+$/.test(digits)) return null; // the third, or at 3 m?
+  const x = placed(valueOfWritten(digits), unit, units);
   if (x === null) return null;
   const [y, z] = ["y", "z"].map((axis) => {
     const [, value, unit] = across(axis).exec(comment) ?? [];
-    return value === undefined ? null : placed(Number(value), unit, units);
+    return value === undefined ? null : placed(valueOfWritten(value), unit, units);
   });
-  return { x, y, z, source: "comment", matched: found[1].trim(), rule: "a comment line" };
+  return { x, y, z, source: "comment", matched: matched.trim(), rule: "a comment line" };
 }
 
 function fromName(part: string, units: ReadSettings["units"]): FoundPosition | null {
@@ -86,7 +91,8 @@ function fromName(part: string, units: ReadSettings["units"]): FoundPosition | n
   return { x: tidyLength(value / 1000), ...place, rule: "after x in the name, in mm" };
 }
 
-function placed(value: number, text: string | undefined, units: ReadSettings["units"]): number | null {
+function placed(value: number | null, text: string | undefined, units: ReadSettings["units"]): number | null {
+  if (value === null) return null;
   if (text === undefined) return value;
   const unit = unitOf(text);
   if (unit?.kind !== "length") return unit === null ? value : null;

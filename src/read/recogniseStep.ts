@@ -1,14 +1,17 @@
 import type { ReadSettings } from "../core/records.ts";
 import { inCaseUnit, unitOf, unscaled } from "./unitFactors.ts";
+import { valueOfWritten, writtenNumber } from "./writtenNumber.ts";
 
-const number = "([+-]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][+-]?\\d+)?)";
-const unit = "\\s*(?:\\[([^\\]]+)\\]|([a-zA-Z\u00b5\u03bc]+))?";
+/** `= 20 kHz`, `[kHz] = 20`, `(kHz): 20`; a table writes its own separator in place of the sign. */
+const told =
+  "\\s*(?:[[(]([^\\])]+)[\\])]\\s*)?[=:;\\t]\\s*" +
+  `(${writtenNumber})\\s*(?:\\[([^\\]]+)\\]|([a-zA-Z\u00b5\u03bc]+))?`;
 const step = new RegExp(
-  `(?:^|[\\s,;(])(?:dt|delta[ _]?t|\u0394t|(?:time|sampling)?[ _]?step|sampling (?:interval|period))\\s*[=:]\\s*${number}${unit}`,
+  `(?:^|[\\s,;(])(?:dt|delta[ _]?t|\u0394t|(?:time|sampling)?[ _]?step|sampling (?:interval|period))${told}`,
   "i",
 );
 const rate = new RegExp(
-  `(?:^|[\\s,;(])(?:f_?s|f_?samp\\w*|(?:sampling|sample|acquisition|scan)[ _]?(?:rate|frequency)|rate)\\s*[=:]\\s*${number}${unit}`,
+  `(?:^|[\\s,;(])(?:f_?s|f_?samp\\w*|(?:sampling|sample|acquisition|scan)[ _]?(?:rate|frequency)|rate)${told}`,
   "i",
 );
 
@@ -19,8 +22,8 @@ const rate = new RegExp(
  */
 export function recogniseStep(comments: readonly string[], units: ReadSettings["units"]): number | null {
   for (const comment of comments) {
-    const told = fromTold(step.exec(comment), "time", units);
-    if (told !== null) return told;
+    const time = fromTold(step.exec(comment), "time", units);
+    if (time !== null) return time;
     const frequency = fromTold(rate.exec(comment), "rate", units);
     if (frequency !== null) return 1 / frequency;
   }
@@ -33,8 +36,8 @@ function fromTold(
   units: ReadSettings["units"],
 ): number | null {
   if (!found) return null;
-  const known = unitOf(found[2] ?? found[3] ?? "");
+  const known = unitOf(found[1] ?? found[3] ?? found[4] ?? "");
   const scale = known?.kind === kind && units === "SI" ? known.scale : unscaled;
-  const value = inCaseUnit(Number(found[1]), scale);
-  return value > 0 ? value : null;
+  const value = valueOfWritten(found[2]);
+  return value !== null && value > 0 ? inCaseUnit(value, scale) : null;
 }

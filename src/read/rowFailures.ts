@@ -21,6 +21,26 @@ export function badField(
   );
 }
 
+/** A number beyond all measurement: most often what a program writes for "no value". */
+export function tooLarge(
+  form: TableForm,
+  column: TakenColumn,
+  found: string,
+  line: number,
+): ReductionFailure {
+  return new ReductionFailure(
+    "not-a-number",
+    {
+      message: "The number is too large to be a measurement",
+      found: shown(found),
+      expected: `a number for ${column.role} below 1e60`,
+      remedy:
+        "Mend the line or leave it out; if it stands for no value, name it under read.missing in the sheet.",
+    },
+    { file: form.file, line, column: column.index + 1 },
+  );
+}
+
 /** A field without a value: nothing, `NaN`, or what the sheet calls missing. */
 export function missingField(
   form: TableForm,

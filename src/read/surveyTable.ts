@@ -104,7 +104,10 @@ function mismatch(head: Head, at: { line: number; names: number }, dialect: Dial
     "ambiguous-columns",
     {
       message: "The heading does not fit the rows",
-      found: `${at.names} names above rows of ${dialect.width} columns`,
+      found:
+        at.names === dialect.width
+          ? "numbers in place of names"
+          : `${at.names} names above rows of ${dialect.width} columns`,
       expected: "one name for each column",
       remedy: "Mend the heading, or say which line is the heading and which columns are meant.",
     },
@@ -141,7 +144,8 @@ function noNumber(file: string, found: string, line: number): ReductionFailure {
 /** No number anywhere: a heading without rows, or something else altogether. */
 function withoutNumbers(head: Head): ReductionFailure {
   const written = head.lines.filter((line) => line.trim() !== "");
-  const named = written.length <= 2 || written.every((line) => commentText(line, null) !== null);
+  const table = !/^\s*[{[<]/.test(written[0] ?? ""); // JSON or a page of the web
+  const named = (table && written.length <= 2) || written.every((line) => commentText(line, null) !== null);
   const facts = named
     ? { message: "The file has a heading and no rows", found: written.at(-1)?.slice(0, 80) ?? "nothing" }
     : { message: "No line of numbers was found", found: written[0].slice(0, 80) };

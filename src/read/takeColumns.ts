@@ -1,6 +1,7 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { ColumnChoice, Layout, ReadSettings, Role } from "../core/records.ts";
 import type { Heading } from "./heading.ts";
+import { headingList } from "./headingList.ts";
 import { recogniseColumns } from "./recogniseColumns.ts";
 import type { TableForm } from "./surveyTable.ts";
 import { caseUnit, roleKind, type Scale, unitOf, unscaled } from "./unitFactors.ts";
@@ -81,7 +82,7 @@ function columnOf(form: TableForm, role: Role, from: string | number): number {
         at.map((i) => i + 1),
       );
   }
-  const names = form.headings.map(({ text }) => text).join(", ");
+  const names = headingList(form);
   throw noSuchColumn(form, role, `"${from}"`, form.headingLine > 0 ? names : "a file without headings");
 }
 

@@ -99,6 +99,26 @@ describe("a file of several probes", () => {
 });
 
 describe("a file without a usable probe", () => {
+  const rising = (samples: number, time: (i: number) => number) =>
+    Array.from({ length: samples }, (_, i) => `${((i * 7) % 11) + 5},${time(i)}`).join("\n# pause\n");
+
+  it.each([
+    [
+      "constant.csv",
+      `w,t,u\n${Array.from({ length: 200 }, (_, i) => `0,${i},5`).join("\n")}\n`,
+      "constant-signal",
+      { line: 2, column: 3 },
+    ],
+    ["one.csv", "t,u,v,w\n0,5.9,0.1,0.1\n", "too-few-samples", { line: 2 }],
+    ["short.csv", "t,u\n0,1\n# pause\n1,2\n", "too-few-samples", { line: 4 }],
+    ["same.csv", `u,t\n${rising(100, () => 3)}\n`, "no-time", { line: 2, column: 2 }],
+  ])("says where: %s", async (name, text, code, place) => {
+    await expect(reduced(fileOf(name, text).source)).rejects.toMatchObject({
+      code,
+      where: { file: name, ...place },
+    });
+  });
+
   it.each([
     [
       "constant.csv",

@@ -23,6 +23,20 @@ describe("a bad record is refused by its code and place", () => {
       { line: 1 },
     ],
     ["binary bytes", "PK\u0003\u0004\0\0\0\b\0", "not-a-record", {}],
+    ["JSON that is no table", '{"a": 1}', "not-a-record", { line: 1 }],
+    [
+      "a number beyond all measurement",
+      `t,u,v,w\n${good}0.3,1e300,0,0\n${good}`,
+      "not-a-number",
+      { line: 5, column: 2 },
+    ],
+    [
+      "a line of numbers called the heading",
+      `t,u,v,w\n${good}`,
+      "ambiguous-columns",
+      { line: 3 },
+      { heading: 3 },
+    ],
     ["no velocity", `t,p,T,rho\n${good}`, "no-velocity", { line: 1 }],
     ["v and w without u", `t,v,w,p\n${good}`, "no-velocity", { line: 1 }],
     ["a word for a number", `t,u,v,w\n${good}0.3,six,0,0\n${good}`, "not-a-number", { line: 5, column: 2 }],
@@ -91,6 +105,12 @@ describe("a bad record is refused by its code and place", () => {
     const failure = await fails("x,t,u\n0.1,0,6\n0.1,1,6\n0.2,0,6\n", { x: 0.1 });
     expect([failure.code, failure.where.line, failure.where.column]).toEqual(["ambiguous-columns", 4, 1]);
   });
+  it("and a heading of eighty names is told by its first few", async () => {
+    const names = Array.from({ length: 80 }, (_, i) => `p${i}`);
+    const row = names.map((_, i) => i).join(",");
+    const failure = await fails(`${names.join(",")}\n${row}\n${row}\n`);
+    expect(failure.found).toBe("the headings p0, p1, p2, p3, p4, p5, p6, p7 and 72 more");
+  });
   it("and what was found is shown as it stands in the file", async () => {
     const failure = await fails("t;u\n0,0;6,0\n0,1;6,1,4\n0,2;6,1\n");
     expect(failure.found).toBe("6,1,4");
@@ -100,7 +120,16 @@ describe("a bad record is refused by its code and place", () => {
 describe("a bad profile is refused by its code and place", () => {
   const profile = (text: string) =>
     failureOf(readProfile(sourceOf("p.csv", text), { ...plainSettings, layout: "profile" }));
+  it("asks for what a profile holds, not for a velocity in time", async () => {
+    expect((await profile("x,U\n0.1,6\n0.2,6\n")).expected).toBe("a column uu, u_rms or q");
+  });
   it.each([
+    [
+      "a number beyond all measurement",
+      "x,u_rms\n0.1,1e200\n0.2,1\n",
+      "not-a-number",
+      { line: 2, column: 2 },
+    ],
     ["no coordinate", "U,uu\n6,0.3\n6,0.2\n", "no-position", { line: 1 }],
     ["no statistics", "x,U\n0.1,6\n0.2,6\n", "no-velocity", { line: 1 }],
     ["a word", "x,U,uu\n0.1,6,0.3\n0.2,6,little\n", "not-a-number", { line: 3, column: 3 }],

@@ -35,6 +35,14 @@ describe("headings of a time series", () => {
       ["t", "u", "v", "w"],
     ],
     [
+      ["Time", "U:0", "U:1", "U:2", "Points:0", "Points:1", "Points:2"],
+      ["t", "u", "v", "w", "x", "y", "z"],
+    ],
+    [
+      ["t", "u0", "u1"],
+      ["t", "u", "v"],
+    ],
+    [
       ["t", "u1", "v1", "w1"],
       ["t", "u", "v", "w"],
     ],
@@ -56,6 +64,7 @@ describe("headings of a time series", () => {
   });
   it("that fit two columns alike are left to the user", () => {
     expect(seen("t", "u", "u", "v").clashes).toEqual([{ role: "u", columns: [2, 3] }]);
+    expect(seen("u0", "u1", "u2", "u3").roles).toEqual([null, null, null, null]);
     expect(seen("u1", "u2", "v1", "v2").roles).toEqual([null, null, null, null]);
   });
 });

@@ -40,7 +40,20 @@ describe("a position in a comment line", () => {
     ["X: 20 cm, y: 0", 0.2],
     ["hot wire, x = 0.2 m", 0.2],
     ["x = 0.2, U = 6", 0.2],
-    ["x [mm] = 200", null],
+    ["x [mm] = 200", 0.2],
+    ["x (cm): 20", 0.2],
+    ["x [V] = 200", null],
+    ["x = 0,2", 0.2],
+    ["x = 0,200 m; y = 0,1", 0.2],
+    ["x = 1,200", null], // 1.2 or 1200
+    ["x = 0.2,0.3,0.4", null],
+    ["x = 1.2.3", null],
+    ["position: 0,2 0,0 0,0", 0.2],
+    ["probe at (0.2,0.01,0)", 0.2],
+    ["probe 12 0.2 0.01 0", null], // which of the four is x?
+    ["station = 3", null], // the third, or at 3 m?
+    ["station = 3 m", 3],
+    ["station = 0.3", 0.3],
     ["position = 2e-1", 0.2],
     ["x = 200 [mm]", 0.2],
     ["probe at (0.2, 0.01, 0)", 0.2],
