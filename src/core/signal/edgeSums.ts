@@ -3,6 +3,10 @@ export interface EdgeSums {
   add(x: Float64Array, from: number, to: number): void;
   heads(): Float64Array;
   tails(): Float64Array;
+  /** Pairs of samples l apart, for l = 0, stride, … */
+  pairs(): Float64Array;
+  /** What follows forms no pairs with what came before: its edges are added to those before. */
+  restart(): void;
 }
 
 /**
@@ -15,6 +19,17 @@ export function startEdges(limit: number, stride: number): EdgeSums {
   const first = new Float64Array(limit);
   const recent = new Float64Array(limit);
   let count = 0;
+  const lags = limit / stride;
+  const before = {
+    heads: new Float64Array(lags),
+    tails: new Float64Array(lags),
+    pairs: new Float64Array(lags),
+  };
+
+  const heads = () => runningSums(limit, stride, (l) => (l < count ? first[l] : 0));
+  const tails = () => runningSums(limit, stride, (l) => (l < count ? recent[(count - 1 - l) % limit] : 0));
+  const pairs = () => Float64Array.from({ length: lags }, (_, i) => Math.max(0, count - i * stride));
+  const sumOf = (a: Float64Array, b: Float64Array) => a.map((value, l) => value + b[l]);
 
   return {
     add(x, from, to) {
@@ -23,8 +38,15 @@ export function startEdges(limit: number, stride: number): EdgeSums {
       for (let i = Math.max(from, to - limit); i < to; i++) recent[(count + i - from) % limit] = x[i];
       count += to - from;
     },
-    heads: () => runningSums(limit, stride, (l) => (l < count ? first[l] : 0)),
-    tails: () => runningSums(limit, stride, (l) => (l < count ? recent[(count - 1 - l) % limit] : 0)),
+    heads: () => sumOf(before.heads, heads()),
+    tails: () => sumOf(before.tails, tails()),
+    pairs: () => sumOf(before.pairs, pairs()),
+    restart() {
+      before.heads = sumOf(before.heads, heads());
+      before.tails = sumOf(before.tails, tails());
+      before.pairs = sumOf(before.pairs, pairs());
+      count = 0;
+    },
   };
 }
 

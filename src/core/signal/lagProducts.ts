@@ -2,10 +2,15 @@ import { realFourier } from "./realFourier.ts";
 
 /** Sums of products x_i x_(i-l), l = 0 … limit - 1, of a sequence that arrives in chunks. */
 export interface LagProducts {
-  /** Takes the next samples: a whole chunk, or a shorter one at the very end. */
-  add(x: Float64Array, from: number, to: number): void;
+  /**
+   * Takes the next samples: a whole chunk, or a shorter one at the very end or beside a restart.
+   * @param place  where in its chunk the first of them stands
+   */
+  add(x: Float64Array, from: number, to: number, place?: number): void;
   /** Adds what was summed since the last call to `row`, every stride-th lag, and starts afresh. */
   flush(row: Float64Array): void;
+  /** What follows has no products with what came before. */
+  restart(): void;
 }
 
 /**
@@ -29,11 +34,12 @@ export function startLagProducts(limit: number, chunk: number, stride: number): 
   let newest = 0;
 
   return {
-    add(x, from, to) {
-      for (let start = from; start < to; start += size) {
-        const end = Math.min(start + size, to);
-        padded.fill(0, end - start, size);
-        padded.set(x.subarray(start, end));
+    add(x, from, to, place = 0) {
+      for (let start = from, at = place % size; start < to; at = 0) {
+        const end = Math.min(start + size - at, to);
+        padded.fill(0, 0, size);
+        padded.set(x.subarray(start, end), at);
+        start = end;
         newest = (newest + parts) % (parts + 1);
         past[newest].set(fourier.forward(padded).subarray(0, bins));
         for (let p = 0; p < parts; p++) {
@@ -51,6 +57,9 @@ export function startLagProducts(limit: number, chunk: number, stride: number): 
         const first = (stride - ((p * size) % stride)) % stride;
         for (let l = first; l < size; l += stride) row[(p * size + l) / stride] += lags[l];
       }
+    },
+    restart() {
+      for (const transform of past) transform.fill(0);
     },
   };
 }

@@ -10,6 +10,8 @@ export interface WelchSums {
   readonly segments: number;
   /** Takes samples from index `from` to `to` - 1. */
   add(x: Float64Array, from: number, to: number): void;
+  /** What follows shares no segment with what came before. */
+  restart(): void;
 }
 
 /**
@@ -27,7 +29,7 @@ export function startWelch(
   const [held, windowed] = [new Float64Array(size), new Float64Array(size)];
   const power = new Float64Array(size / 2 + 1);
   const edges = new Float64Array(2);
-  let [filled, segments] = [0, 0];
+  let [filled, segments, seen] = [0, 0, 0];
 
   function take(): void {
     for (let n = 0; n < size; n++) windowed[n] = held[n] * window[n];
@@ -35,7 +37,7 @@ export function startWelch(
     addPower(power, transform);
     edges[0] += transform[0];
     edges[1] += transform[2];
-    onSegment((segments * size) / 2 + size / 2, transform);
+    onSegment(seen - size / 2, transform);
     segments++;
     held.copyWithin(0, size / 2);
     filled = size / 2;
@@ -53,8 +55,12 @@ export function startWelch(
         held.set(x.subarray(start, start + count), filled);
         filled += count;
         start += count;
+        seen += count;
         if (filled === size) take();
       }
+    },
+    restart() {
+      filled = 0;
     },
   };
 }

@@ -1,80 +1,124 @@
 import { ReductionFailure } from "../failure.ts";
 import type { RecordOrigin } from "../records.ts";
+import { roundedStep } from "./roundedTimes.ts";
 import { gapSteps, isEqualStep, printQuantum } from "./stepRule.ts";
 
 export interface StepFacts {
   /** Mean step where the steps are equal, median where not, s. */
   readonly step: number;
   readonly quantum: number;
-  /** Steps that differ from the record's. */
+  /** The stamps have too few digits, and agree with a constant step all the same. */
+  readonly rounded: boolean;
+  /** Steps that differ from the record's; gaps are not among them. */
   readonly unequal: number;
+  /** The longest stretch without a gap: its first sample, and the one after its last. */
+  readonly longest: readonly [number, number];
 }
 
 const probe = 4096;
 
 /**
  * Time between samples, from the stamps of a pilot. Stamps rounded to few digits still give the step to all
- * digits: it is then the mean one, over the whole pilot.
+ * digits: it is then that of the straight line through them.
  * @param t       time stamps, s, ascending; null: the origin's step holds
  * @param count   stamps, ≥ 2
  * @param origin  where the record came from
  * @returns       step, last printed digit, and how many steps are unequal
- * @throws no-time, backward-time
+ * @throws no-time
  */
 export function examineSteps(t: Float64Array | null, count: number, origin: RecordOrigin): StepFacts {
+  const whole = [0, count] as const;
   if (t === null) {
-    if (origin.step !== null && origin.step > 0) return { step: origin.step, quantum: 0, unequal: 0 };
-    throw new ReductionFailure(
-      "no-time",
-      {
-        message: "the record has no time column and no time step was given",
-        remedy: "Name the time column, or give the time between samples.",
-      },
-      { file: origin.file },
-    );
+    if (origin.step === null || !(origin.step > 0)) throw withoutStep(origin);
+    return { step: origin.step, quantum: 0, rounded: false, unequal: 0, longest: whole };
   }
-  for (let i = 1; i < count; i++) if (t[i] < t[i - 1]) throw backwardTime(i, t[i - 1], t[i], origin);
-  const quantum = Math.max(
-    printQuantum(t, 0, Math.min(probe, count)),
-    printQuantum(t, Math.max(0, count - probe), count),
-  );
   const mean = (t[count - 1] - t[0]) / (count - 1);
   if (!(mean > 0)) throw sameTime(origin);
-  if (countUnequal(t, count, mean, quantum) === 0) return { step: mean, quantum, unequal: 0 };
+  const quantum = quantumOf(t, count);
+  if (countUnequal(t, count, mean) === 0) {
+    return { step: mean, quantum, rounded: false, unequal: 0, longest: whole };
+  }
   const median = medianStep(t, count);
-  const step = median > 0 ? median : mean;
-  return { step, quantum, unequal: countUnequal(t, count, step, quantum) };
+  const longest = longestStretch(t, count, gapSteps * median);
+  const rounded = roundedStep(t, ...longest, quantum);
+  if (rounded !== null) return { step: rounded, quantum, rounded: true, unequal: 0, longest };
+  const step = meanWithin(t, count, gapSteps * median);
+  if (countUnequal(t, count, step) === 0) return { step, quantum, rounded: false, unequal: 0, longest };
+  const usual = meanNear(t, count, median);
+  return { step: usual, quantum, rounded: false, unequal: countUnequal(t, count, usual), longest };
 }
 
-/** Steps between two samples that are not the record's; gaps are among them. */
-function countUnequal(t: Float64Array, count: number, step: number, quantum: number): number {
+function quantumOf(t: Float64Array, count: number): number {
+  const ends = [
+    printQuantum(t, 0, Math.min(probe, count)),
+    printQuantum(t, Math.max(0, count - probe), count),
+  ];
+  // a digit is that of all stamps: the finer of the two ends decides, and none at either end is none at all
+  return Math.min(...ends);
+}
+
+/** Steps between two samples that are not the record's, gaps left aside. */
+function countUnequal(t: Float64Array, count: number, step: number): number {
   let unequal = 0;
-  const rule = { step, quantum };
-  for (let i = 1; i < count; i++) if (!isEqualStep(t[i] - t[i - 1], rule)) unequal++;
+  const rule = { step, quantum: 0, rounded: false };
+  for (let i = 1; i < count; i++) {
+    const own = t[i] - t[i - 1];
+    if (own <= gapSteps * step && !isEqualStep(own, rule)) unequal++;
+  }
   return unequal;
 }
 
-function medianStep(t: Float64Array, count: number): number {
-  const steps = new Float64Array(count - 1);
-  for (let i = 1; i < count; i++) steps[i - 1] = t[i] - t[i - 1];
-  steps.sort();
-  return steps[Math.floor((count - 2) / 2)];
+/** Mean of the steps that are no gap. */
+function meanWithin(t: Float64Array, count: number, gap: number): number {
+  let sum = 0;
+  let steps = 0;
+  for (let i = 1; i < count; i++) {
+    const step = t[i] - t[i - 1];
+    if (step > gap) continue;
+    sum += step;
+    steps++;
+  }
+  return sum / steps;
 }
 
-/** Time that runs backward: most often a restart whose older branch was kept. */
-export function backwardTime(
-  sample: number,
-  before: number,
-  after: number,
-  origin: RecordOrigin,
-): ReductionFailure {
+/** Mean of the steps that are the median one: their rounding adds up over a record. */
+function meanNear(t: Float64Array, count: number, median: number): number {
+  const rule = { step: median, quantum: 0 };
+  let sum = 0;
+  let steps = 0;
+  for (let i = 1; i < count; i++) {
+    if (!isEqualStep(t[i] - t[i - 1], rule)) continue;
+    sum += t[i] - t[i - 1];
+    steps++;
+  }
+  return sum / steps;
+}
+
+function longestStretch(t: Float64Array, count: number, gap: number): readonly [number, number] {
+  let best: readonly [number, number] = [0, 0];
+  let from = 0;
+  for (let i = 1; i <= count; i++) {
+    if (i < count && t[i] - t[i - 1] <= gap) continue;
+    if (i - from > best[1] - best[0]) best = [from, i];
+    from = i;
+  }
+  return best;
+}
+
+/** Median of the steps that are longer than none. */
+function medianStep(t: Float64Array, count: number): number {
+  const steps = new Float64Array(count - 1);
+  let held = 0;
+  for (let i = 1; i < count; i++) if (t[i] > t[i - 1]) steps[held++] = t[i] - t[i - 1];
+  return steps.subarray(0, held).sort()[Math.floor((held - 1) / 2)];
+}
+
+function withoutStep(origin: RecordOrigin): ReductionFailure {
   return new ReductionFailure(
-    "backward-time",
+    "no-time",
     {
-      message: `time runs backward at sample ${sample + 1}`,
-      found: `${after} after ${before}`,
-      expected: "ascending times",
-      remedy: "Leave out the samples that a restart wrote twice, or give each run a file of its own.",
+      message: "the record has no time column and no time step was given",
+      remedy: "Name the time column, or give the time between samples.",
     },
     { file: origin.file },
   );
@@ -89,9 +133,4 @@ function sameTime(origin: RecordOrigin): ReductionFailure {
     },
     { file: origin.file },
   );
-}
-
-/** Length of time a sample stands for on one of its sides: none across a gap, where the record is cut. */
-export function halfStep(step: number, usual: number): number {
-  return step > gapSteps * usual ? 0 : step / 2;
 }

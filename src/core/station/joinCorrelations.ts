@@ -42,10 +42,22 @@ function covariance(
     const every = stride / part.lags.stride;
     for (let l = 0; l < count; l++) {
       sum[l] += own[l * every];
-      pairs[l] += unbiased ? Math.max(1, part.samples - l * stride) : part.samples;
+      pairs[l] += divisor(part, l * every, unbiased);
     }
   }
   return sum.map((value, l) => value / pairs[l]);
+}
+
+/**
+ * What a sum of lag products is divided by: its pairs, or with the biased estimate N, and where the record is in
+ * pieces so much less as pairs are lost between them.
+ */
+function divisor({ samples, lags }: StationPart, l: number, unbiased: boolean): number {
+  const lag = l * (lags?.stride ?? 1);
+  const count = lags?.pairs?.[0] ?? samples;
+  const pairs = Math.max(1, lags?.pairs?.[l] ?? samples - lag);
+  if (unbiased) return pairs;
+  return lags?.pairs === undefined ? count : (count * pairs) / Math.max(1, count - lag);
 }
 
 /**

@@ -1,8 +1,11 @@
-import { assert } from "../failure.ts";
+import { assert, ReductionFailure } from "../failure.ts";
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
+import { type BranchCut, cutTolerance } from "./branchCuts.ts";
 import { borrowColumn, returnColumn } from "./columnStore.ts";
+import { examineSteps } from "./examineSteps.ts";
 import { planRecord } from "./planRecord.ts";
+import { backwardTime, tooFew } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import type { Component } from "./stationPart.ts";
 
@@ -14,12 +17,20 @@ export interface PilotFacts {
   readonly skipped: number;
   /** Samples of the pilot. */
   readonly held: number;
+  readonly cuts: readonly BranchCut[];
+  /** Samples that were sent once more under the same time. */
+  readonly repeated: number;
 }
 
 const smallest = 1 << 14;
 const names: readonly Component[] = ["u", "v", "w"];
+/** Steps before a restart that tell how long one is. */
+const recent = 1000;
 
-/** The first samples of a record, held until they have decided how the rest is treated. */
+/**
+ * The first samples of a record, held until they have decided how the rest is treated. Where time runs backward,
+ * the samples that the newer run overtakes are dropped at once.
+ */
 export class PilotBuffer {
   private readonly origin: RecordOrigin;
   private readonly startup: number;
@@ -28,8 +39,14 @@ export class PilotBuffer {
   private components: readonly Component[] = ["u"];
   private timed = false;
   private count = 0;
+  /** Samples taken from the file. */
   private seen = 0;
+  private skipped = 0;
   private firstTime = 0;
+  private readonly cuts: BranchCut[] = [];
+  private repeated = 0;
+  /** Stamps alike are one sample sent twice; null: not known yet, for they may be rounded. */
+  private oneSample: boolean | null = null;
 
   /** @param startup  time left out at the start, s */
   constructor(origin: RecordOrigin, startup: number) {
@@ -38,28 +55,52 @@ export class PilotBuffer {
   }
 
   /** Takes samples until it holds `limit`; returns the index in the block of the first it left. */
-  add(block: VelocityBlock, limit: number): number {
-    const from = this.skip(block);
-    if (from >= block.count) return from;
-    if (this.count === 0) this.open(block);
-    const to = Math.min(block.count, from + limit - this.count);
-    this.grow(this.count + to - from);
-    this.sources(block).forEach((source, c) => {
-      this.columns[c].set(source.subarray(from, to), this.count);
-    });
-    this.count += to - from;
-    this.seen += to - from;
-    return to;
+  add(block: VelocityBlock, from: number, limit: number): number {
+    let i = this.skip(block, from);
+    if (i >= block.count) return i;
+    if (this.columns.length === 0) this.open(block);
+    while (i < block.count && this.count < limit) {
+      const to = this.endOfRun(block.t, i, Math.min(block.count, i + limit - this.count));
+      this.copy(block, i, to);
+      this.seen += to - i;
+      i = to;
+    }
+    return i;
   }
 
   holds(limit: number): boolean {
     return this.count >= limit;
   }
 
+  /** Stamps alike are looked at: rounded ones stay, of samples that were sent twice the newer does. */
+  settle(): void {
+    const t = this.times();
+    if (t === null || this.oneSample !== null || !hasEqual(t, this.count)) return;
+    // one time in all of them is no time at all, which the plan refuses
+    if (!(t[this.count - 1] > t[0])) return;
+    this.oneSample = !examineSteps(t, this.count, this.origin).rounded;
+    if (!this.oneSample) return;
+    let kept = 0;
+    for (let i = 0; i < this.count; i++) {
+      if (i + 1 < this.count && t[i + 1] === t[i]) continue;
+      for (const column of this.columns) column[kept] = column[i];
+      kept++;
+    }
+    this.repeated += this.count - kept;
+    this.count = kept;
+  }
+
   /** @throws too-few-samples, constant-signal, no-time, backward-time, not-a-number */
   plan(settings: ReduceSettings): RecordPlan {
     const columns = this.columns.slice(0, this.components.length);
-    return planRecord({ count: this.count, t: this.times(), columns }, this.origin, settings);
+    try {
+      return planRecord({ count: this.count, t: this.times(), columns }, this.origin, settings);
+    } catch (error) {
+      const [first] = this.cuts;
+      const short = error instanceof ReductionFailure && error.code === "too-few-samples";
+      if (!short || first === undefined) throw error;
+      throw backwardTime(first, this.count, this.origin);
+    }
   }
 
   block(): VelocityBlock {
@@ -74,10 +115,17 @@ export class PilotBuffer {
   }
 
   facts(): PilotFacts {
-    const skipped = this.seen - this.count;
     const t = this.times();
-    const start = t !== null && this.count > 0 ? t[0] : skipped * (this.origin.step ?? 0);
-    return { components: this.components, start, skipped, held: this.count };
+    const { components, skipped, count, cuts, repeated } = this;
+    if (count === 0) throw tooFew(0, 1, this.origin);
+    return {
+      components,
+      start: t === null ? skipped * (this.origin.step ?? 0) : t[0],
+      skipped,
+      held: count,
+      cuts,
+      repeated,
+    };
   }
 
   release(): void {
@@ -86,15 +134,52 @@ export class PilotBuffer {
   }
 
   /** Index of the first sample of the block that is not start-up. */
-  private skip(block: VelocityBlock): number {
+  private skip(block: VelocityBlock, from: number): number {
     if (this.seen === 0 && block.count > 0) this.firstTime = block.t === null ? 0 : block.t[0];
-    if (this.count > 0 || !(this.startup > 0)) return 0;
+    if (this.count > 0 || !(this.startup > 0)) return from;
     const step = this.origin.step ?? 0;
     const end = this.firstTime + this.startup;
-    let i = 0;
-    while (i < block.count && (block.t === null ? (this.seen + i) * step : block.t[i]) < end) i++;
-    this.seen += i;
+    let i = from;
+    while (i < block.count && (block.t === null ? this.seen * step : block.t[i]) < end) {
+      i++;
+      this.seen++;
+      this.skipped++;
+    }
     return i;
+  }
+
+  /** Samples in order of time from `from` on, after those held; where it goes back, the older run is cut. */
+  private endOfRun(t: Float64Array | null, from: number, most: number): number {
+    const held = this.times();
+    if (t === null || held === null) return most;
+    if (this.count > 0) {
+      const last = held[this.count - 1];
+      if (t[from] < last) this.cut(held, t[from]);
+      else if (t[from] === last && this.oneSample) this.drop(1);
+    }
+    let to = from + 1;
+    while (to < most && (t[to] > t[to - 1] || (t[to] === t[to - 1] && !this.oneSample))) to++;
+    return to;
+  }
+
+  private cut(held: Float64Array, time: number): void {
+    const bound = time - cutTolerance * recentStep(held, this.count);
+    const before = this.count;
+    while (this.count > 0 && held[this.count - 1] > bound) this.count--;
+    this.cuts.push({ sample: this.seen, time, dropped: before - this.count });
+  }
+
+  private drop(samples: number): void {
+    this.count -= samples;
+    this.repeated += samples;
+  }
+
+  private copy(block: VelocityBlock, from: number, to: number): void {
+    this.grow(this.count + to - from);
+    this.sources(block).forEach((source, c) => {
+      this.columns[c].set(source.subarray(from, to), this.count);
+    });
+    this.count += to - from;
   }
 
   private open(block: VelocityBlock): void {
@@ -115,7 +200,7 @@ export class PilotBuffer {
   }
 
   private times(): Float64Array | null {
-    return this.timed ? this.columns[this.components.length] : null;
+    return this.timed ? (this.columns[this.components.length] ?? null) : null;
   }
 
   /** The block's arrays in the order of the columns. */
@@ -126,4 +211,16 @@ export class PilotBuffer {
       return array;
     });
   }
+}
+
+function hasEqual(t: Float64Array, count: number): boolean {
+  for (let i = 1; i < count; i++) if (t[i] === t[i - 1]) return true;
+  return false;
+}
+
+/** Median of the last steps that are longer than none. */
+function recentStep(t: Float64Array, count: number): number {
+  const steps: number[] = [];
+  for (let i = Math.max(1, count - recent); i < count; i++) if (t[i] > t[i - 1]) steps.push(t[i] - t[i - 1]);
+  return steps.sort((a, b) => a - b)[steps.length >> 1] ?? 0;
 }

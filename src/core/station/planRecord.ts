@@ -32,13 +32,14 @@ const shortSegment = 2;
 
 /**
  * What a record's pilot decides for all of it: step, lags, segments, blocks.
- * @throws too-few-samples, constant-signal, no-time, backward-time
+ * @throws too-few-samples, constant-signal, no-time
  */
 export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceSettings): RecordPlan {
   if (pilot.count < fewestSamples) throw tooFew(pilot.count, fewestSamples, origin);
   const u = pilot.columns[0];
   const facts = examineSteps(pilot.t, pilot.count, origin);
   const weighted = facts.unequal > 0;
+  const [from, to] = facts.longest;
   const reference = pilot.columns.map((column) => mean(column, pilot.count));
   if (!reference.every(Number.isFinite)) throw notFinite(origin);
   if (isConstant(u, pilot.count)) throw constantSignal(u[0], origin);
@@ -51,9 +52,11 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
     const time = slope[0] === 0 ? 0 : (pilot.t === null ? i * facts.step : pilot.t[i]) - centre;
     centred[i] = u[i] - reference[0] - slope[0] * time;
   }
-  const lags = weighted ? { limit: 2, crossing: null, area: 0 } : findLags(centred);
-  const segment = segmentSize(settings.segment, pilot.count, lags.area);
-  const times = { step: facts.step, weighted, quantum: facts.quantum };
+  // over unequal steps these are guesses, which the whole record is held against
+  const unbroken = centred.subarray(from, to);
+  const lags = findLags(unbroken);
+  const segment = segmentSize(settings.segment, unbroken.length, lags.area);
+  const times = { step: facts.step, weighted, quantum: facts.quantum, rounded: facts.rounded };
   return {
     ...times,
     reference,
@@ -65,9 +68,7 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
     segment,
     bandSegment: bandSize(segment, pilot.count, lags.area),
     blockSamples: blockSize(pilot.count),
-    derivativeStep: weighted
-      ? 1
-      : derivativeStep(centred, reference[0], facts.step, segment, lags.area, settings),
+    derivativeStep: derivativeStep(unbroken, reference[0], facts.step, segment, lags.area, settings),
   };
 }
 

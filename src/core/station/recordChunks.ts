@@ -1,10 +1,16 @@
 import { assert } from "../failure.ts";
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
-import { backwardTime, halfStep } from "./examineSteps.ts";
+import type { BranchCut } from "./branchCuts.ts";
+import { EvenSteps } from "./evenSteps.ts";
 import type { PilotFacts } from "./pilotBuffer.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { historyOf, RecordSums } from "./recordSums.ts";
-import { isEqualStep } from "./stepRule.ts";
+import { ResamplingResponse } from "./resamplingResponse.ts";
+import { gapSteps, isEqualStep } from "./stepRule.ts";
+import { WeightedMoments } from "./weightedMoments.ts";
+
+/** Stamps closer than this share of a step are one. */
+const sameStamp = 1e-6;
 
 /** What a record turned out to be, once its last sample was taken. */
 export interface ClosedRecord {
@@ -14,108 +20,203 @@ export interface ClosedRecord {
   readonly lowestSpeed: number;
   /** Steps that are not the plan's. */
   readonly unequal: number;
+  readonly gaps: number;
+  /** Time that the gaps took. */
+  readonly lost: number;
+  readonly repeated: number;
+  /** Restarts past the pilot: what they overtook is among the sums, and the record has to be read once more. */
+  readonly cuts: readonly BranchCut[];
+  readonly response: ResamplingResponse;
 }
 
 /**
  * A record past its pilot: samples are gathered, about the plan's reference, into chunks of the smallest block's
- * size, counted from the record's start, and summed chunk by chunk. A chunk goes when the next sample is there:
- * its last sample's weight needs the step that follows it.
+ * size, counted from the record's start, and summed chunk by chunk. Unequal steps are made equal first, and the
+ * moments taken from the samples as they were. At a gap or a restart a new piece begins.
  */
 export class RecordChunks {
   readonly plan: RecordPlan;
   readonly facts: PilotFacts;
-  private readonly origin: RecordOrigin;
   private readonly sums: RecordSums;
   private readonly size: number;
   private readonly history: number;
   private readonly columns: Float64Array[];
-  /** Placed as the samples are, behind the history. */
-  private readonly weights: Float64Array;
+  private readonly response: ResamplingResponse;
+  /** Both null where the steps are equal. */
+  private readonly even: EvenSteps | null;
+  private readonly moments: WeightedMoments | null;
+  private readonly sample: number[];
+  private readonly cuts: BranchCut[] = [];
+  private seams: number[] = [];
   private filled = 0;
   private samples = 0;
   private lowest = Infinity;
   private unequal = 0;
+  private gaps = 0;
+  private lost = 0;
+  private repeated = 0;
   private last: number | null = null;
 
   constructor(plan: RecordPlan, origin: RecordOrigin, facts: PilotFacts) {
     this.plan = plan;
-    this.origin = origin;
     this.facts = facts;
     this.size = plan.blockSamples;
     this.history = historyOf(plan);
     this.sums = new RecordSums(plan, origin, facts.components);
     this.columns = facts.components.map(() => new Float64Array(this.history + this.size));
-    this.weights = new Float64Array(this.history + this.size);
+    this.sample = facts.components.map(() => 0);
+    this.response = new ResamplingResponse(plan.step);
+    const count = facts.components.length;
+    this.moments = plan.weighted ? new WeightedMoments(plan.step, count) : null;
+    this.even = plan.weighted
+      ? new EvenSteps(plan.step, count, this.response, (columns, made) => this.gather(columns, 0, made))
+      : null;
   }
 
-  /** @throws backward-time, not-a-number */
-  add(block: VelocityBlock, from: number): void {
+  /**
+   * @param raw  index of the block's first sample, counted over all samples of the file
+   * @throws not-a-number
+   */
+  add(block: VelocityBlock, from: number, raw: number): void {
     for (let i = from; i < block.count; ) {
-      if (this.filled === this.size) {
-        if (block.t !== null) this.weights[this.history + this.size - 1] += this.half(block.t[i]);
-        this.flush();
+      if (block.t !== null && this.isRepeated(block.t[i])) {
+        this.replace(block, i++);
+        continue;
       }
-      const run = Math.min(this.size - this.filled, block.count - i);
-      if (block.t !== null) this.watch(block.t, i, run);
-      this.copy(block, i, run);
-      this.filled += run;
-      this.samples += run;
-      i += run;
+      if (block.t !== null) this.step(block.t[i], raw + i);
+      const to = this.endOfRun(block.t, i, block.count);
+      this.take(block, i, to);
+      i = to;
     }
   }
 
   close(): ClosedRecord {
+    this.even?.end();
     this.flush();
-    const { plan, last, facts, samples } = this;
-    const duration = plan.weighted && last !== null ? last - facts.start : samples * plan.step;
-    return { sums: this.sums, samples, duration, lowestSpeed: this.lowest, unequal: this.unequal };
+    const { plan, samples, sums, unequal, gaps, lost, repeated, cuts, response, last, facts } = this;
+    const duration = plan.weighted && last !== null ? last - facts.start - lost : samples * plan.step;
+    const counted = { samples, duration, unequal, gaps, lost, repeated, cuts };
+    return { sums, ...counted, lowestSpeed: this.lowest, response };
+  }
+
+  private isRepeated(time: number): boolean {
+    const { last, plan } = this;
+    return last !== null && !plan.rounded && time >= last && time - last <= sameStamp * plan.step;
+  }
+
+  /** Whether the step to this time is the record's, a gap, or one back. */
+  private step(time: number, raw: number): void {
+    const { last, plan } = this;
+    this.last = time;
+    if (last === null) return;
+    if (time < last) {
+      this.cuts.push({ sample: raw, time, dropped: 0 });
+      this.seam();
+    } else if (time - last > gapSteps * plan.step) {
+      this.gaps++;
+      this.lost += time - last;
+      this.seam();
+    } else if (!isEqualStep(time - last, plan)) this.unequal++;
+  }
+
+  /** Index after the last sample that follows by the record's own step. */
+  private endOfRun(t: Float64Array | null, from: number, count: number): number {
+    if (t === null) return count;
+    const { plan } = this;
+    let to = from + 1;
+    // one comparison a sample in a record without blemish
+    while (to < count && (t[to] > t[to - 1] || plan.rounded) && isEqualStep(t[to] - t[to - 1], plan)) to++;
+    this.last = t[to - 1];
+    return to;
+  }
+
+  private seam(): void {
+    if (this.even !== null) {
+      this.even.end();
+      this.moments?.end();
+    }
+    if (this.filled === this.size) this.flush();
+    this.seams.push(this.filled);
+  }
+
+  private take(block: VelocityBlock, from: number, to: number): void {
+    for (let i = from; i < to; i++) if (block.u[i] < this.lowest) this.lowest = block.u[i];
+    if (this.even === null) this.gather(this.arrays(block), from, to, block.t);
+    else if (block.t !== null) {
+      for (let i = from; i < to; i++) {
+        this.read(block, i);
+        this.even.add(block.t[i], this.sample);
+        this.moments?.add(block.t[i], this.sample);
+      }
+    }
+    this.samples += to - from;
+  }
+
+  /** The newer of two samples under one time stands for both. */
+  private replace(block: VelocityBlock, i: number): void {
+    this.repeated++;
+    this.read(block, i);
+    if (block.u[i] < this.lowest) this.lowest = block.u[i];
+    this.even?.replace(this.sample);
+    this.moments?.replace(this.sample);
+    if (this.even !== null) return;
+    // a chunk goes when the next sample is there, so that the last one is always at hand
+    this.columns.forEach((column, c) => {
+      column[this.history + this.filled - 1] = this.sample[c];
+    });
+  }
+
+  /** One sample about the reference and the trend. */
+  private read(block: VelocityBlock, i: number): void {
+    const { plan, sample } = this;
+    this.arrays(block).forEach((source, c) => {
+      const time = block.t === null ? 0 : block.t[i] - plan.centre;
+      sample[c] = source[i] - plan.reference[c] - plan.slope[c] * time;
+    });
+  }
+
+  private arrays(block: VelocityBlock): Float64Array[] {
+    return this.facts.components.map((name) => {
+      const source = block[name];
+      assert(source !== null, "all blocks of a record have the same columns");
+      return source;
+    });
+  }
+
+  /** Equally spaced samples into chunks; those made from unequal steps are about the reference already. */
+  private gather(
+    sources: readonly Float64Array[],
+    from: number,
+    to: number,
+    t: Float64Array | null = null,
+  ): void {
+    const { columns, history, plan } = this;
+    for (let i = from; i < to; ) {
+      if (this.filled === this.size) this.flush();
+      const run = Math.min(this.size - this.filled, to - i);
+      const at = history + this.filled;
+      for (let c = 0; c < columns.length; c++) {
+        const [source, target] = [sources[c], columns[c]];
+        const level = this.even === null ? plan.reference[c] : 0;
+        for (let k = 0; k < run; k++) target[at + k] = source[i + k] - level;
+        if (plan.slope[c] === 0 || this.even !== null) continue;
+        for (let k = 0; k < run; k++) {
+          const time = t === null ? (this.samples + i - from + k) * plan.step : t[i + k];
+          target[at + k] -= plan.slope[c] * (time - plan.centre);
+        }
+      }
+      this.filled += run;
+      i += run;
+    }
   }
 
   private flush(): void {
     if (this.filled === 0) return;
-    this.sums.take(this.columns, this.filled, this.plan.weighted ? this.weights : null);
-    for (const column of this.columns) column.copyWithin(0, this.filled, this.filled + this.history);
+    const { columns, filled, seams } = this;
+    const moments = this.moments?.upTo(filled) ?? null;
+    this.sums.take({ columns, count: filled, seams, moments });
+    for (const column of columns) column.copyWithin(0, filled, filled + this.history);
     this.filled = 0;
-  }
-
-  /** Half of the step from the last sample to this time, in steps of the record. */
-  private half(time: number): number {
-    return this.last === null ? 0 : halfStep(time - this.last, this.plan.step) / this.plan.step;
-  }
-
-  /** Checks the steps of a run and shares each between the two samples it joins. */
-  private watch(t: Float64Array, from: number, run: number): void {
-    for (let k = 0; k < run; k++) {
-      const time = t[from + k];
-      const { last } = this;
-      if (last !== null) {
-        if (time < last) throw backwardTime(this.samples + k, last, time, this.origin);
-        if (!isEqualStep(time - last, this.plan)) this.unequal++;
-      }
-      const at = this.history + this.filled + k;
-      const half = this.half(time);
-      this.weights[at] = half;
-      // a chunk's last sample was given its second half before the chunk went
-      if (at > this.history) this.weights[at - 1] += half;
-      this.last = time;
-    }
-  }
-
-  private copy(block: VelocityBlock, from: number, run: number): void {
-    const { plan, facts, columns, history, filled } = this;
-    for (let c = 0; c < columns.length; c++) {
-      const source = block[facts.components[c]];
-      assert(source !== null, "all blocks of a record have the same columns");
-      const target = columns[c];
-      const at = history + filled;
-      const level = plan.reference[c];
-      for (let k = 0; k < run; k++) target[at + k] = source[from + k] - level;
-      if (plan.slope[c] === 0) continue;
-      for (let k = 0; k < run; k++) {
-        const time = block.t === null ? (this.samples + k) * plan.step : block.t[from + k];
-        target[at + k] -= plan.slope[c] * (time - plan.centre);
-      }
-    }
-    for (let k = 0; k < run; k++) if (block.u[from + k] < this.lowest) this.lowest = block.u[from + k];
+    this.seams = [];
   }
 }

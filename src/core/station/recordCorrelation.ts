@@ -15,7 +15,7 @@ export function wholeMoments(part: Pick<StationPart, "blocks" | "components">): 
 
 /**
  * Lag products of a whole part about its own mean, exactly,
- *     R_l = Σ x_i x_(i-l) - d (2 S - head_l - tail_l) + (N - l) d²,   S = N d
+ *     R_l = Σ x_i x_(i-l) - d (2 S - head_l - tail_l) + (pairs at l) d²,   S = Σ x
  * with x about the plan's reference and d what is left of the mean.
  * @param part       a part with lag products
  * @param component  index of the component
@@ -28,14 +28,14 @@ export function recordCorrelation(part: StationPart, component: number): Float64
   const rest = wholeMoments(part)[1 + component];
   const heads = lags.heads[component];
   const tails = lags.tails[component];
-  const sum = part.samples * rest;
+  const sum = lags.totals?.[component] ?? part.samples * rest;
   const correlation = new Float64Array(lags.count);
   for (let row = 0; row < part.blocks.rows; row++) {
     const offset = row * lags.count;
     for (let l = 0; l < lags.count; l++) correlation[l] += products[offset + l];
   }
   for (let l = 0; l < lags.count; l++) {
-    const pairs = part.samples - l * lags.stride;
+    const pairs = lags.pairs?.[l] ?? part.samples - l * lags.stride;
     correlation[l] += pairs * rest * rest - rest * (2 * sum - heads[l] - tails[l]);
   }
   return correlation;

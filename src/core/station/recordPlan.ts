@@ -1,3 +1,5 @@
+import type { BranchCut } from "./branchCuts.ts";
+
 /**
  * What the pilot (a record's first 2^20 samples, or all of it) decides for the whole record.
  * A plan is plain data: a record that has to be read once more is read with the plan it came back with.
@@ -5,10 +7,16 @@
 export interface RecordPlan {
   /** Time between samples: their mean where the steps are equal, their median where not; > 0. */
   readonly step: number;
-  /** The steps are unequal: moments are weighted with the trapezoid rule, and there is no spectrum. */
+  /** The steps are unequal: moments are weighted with the trapezoid rule, all else comes from equal steps made by splines. */
   readonly weighted: boolean;
   /** Last digit the time stamps are printed with; 0 where none was found. */
   readonly quantum: number;
+  /** The stamps have too few digits and agree with a constant step: samples are counted, not timed. */
+  readonly rounded?: boolean;
+  /** Restarts that reach back in time, for another reading: what they overtook is left out. */
+  readonly cuts?: readonly BranchCut[];
+  /** It was made for the whole record: a reading with it is the last. */
+  readonly last?: boolean;
   /** Mean of u, v, w in the pilot, subtracted from every sample before anything is summed. */
   readonly reference: readonly number[];
   /** Slope of u, v, w in time about `centre`, subtracted too; zero unless a linear trend is removed. */

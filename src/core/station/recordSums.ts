@@ -18,10 +18,23 @@ import { SpectralSums } from "./spectralSums.ts";
 import type { Component, StationPart } from "./stationPart.ts";
 
 export interface PartFacts {
+  /** Samples of the record: with unequal steps another count than that of the equal ones made from them. */
+  readonly samples: number;
   readonly start: number;
   readonly duration: number;
   readonly lowestSpeed: number;
   readonly flags: readonly Flag[];
+}
+
+/** A chunk of equally spaced samples about the plan's reference. */
+export interface Chunk {
+  /** A column a component, the first sample at index `history`, those before it in front. */
+  readonly columns: readonly Float64Array[];
+  readonly count: number;
+  /** Where in the chunk pieces begin that have nothing to do with what came before. */
+  readonly seams: readonly number[];
+  /** Joint moments, where they are not those of the chunk's own samples. */
+  readonly moments: Float64Array | null;
 }
 
 /** Samples before a chunk that its differences reach back to. */
@@ -39,9 +52,11 @@ export class RecordSums {
   private readonly chunkRow: Float64Array;
   private readonly moments: BlockSeries;
   private readonly blocks: BlockList;
-  /** Null where the steps are unequal. */
-  private readonly spectral: SpectralSums | null;
-  private samples = 0;
+  private readonly spectral: SpectralSums;
+  /** Samples since the last seam, as far as differences care. */
+  private known = 0;
+  /** Σ of the equally spaced samples. */
+  private readonly totals: number[];
 
   constructor(plan: RecordPlan, origin: RecordOrigin, components: readonly Component[]) {
     this.plan = plan;
@@ -51,36 +66,56 @@ export class RecordSums {
     this.history = historyOf(plan);
     this.chunkRow = new Float64Array(this.layout.length);
     this.moments = momentSeries(components.length);
-    this.spectral = plan.weighted ? null : new SpectralSums(plan, components.length);
-    this.blocks = startBlocks(plan.blockSamples, [this.moments, ...(this.spectral?.series ?? [])]);
-    this.spectral?.open(this.blocks);
+    this.totals = components.map(() => 0);
+    this.spectral = new SpectralSums(plan, components.length);
+    this.blocks = startBlocks(plan.blockSamples, [this.moments, ...this.spectral.series]);
+    this.spectral.open(this.blocks);
   }
 
-  /**
-   * Takes `count` samples, already about the plan's reference, held from index `history` on in every column.
-   * @param columns  each with `history` samples before the chunk's first
-   * @param weights  placed alike; null: all weigh 1
-   * @throws not-a-number
-   */
-  take(columns: readonly Float64Array[], count: number, weights: Float64Array | null): void {
-    const { layout, history, chunkRow, plan } = this;
-    const to = history + count;
+  /** @throws not-a-number */
+  take(chunk: Chunk): void {
+    const { layout, history, chunkRow } = this;
+    const { columns, count, moments } = chunk;
     this.blocks.begin(count);
-    fillJoint(chunkRow, layout, columns, history, to, weights);
+    if (moments === null) fillJoint(chunkRow, layout, columns, history, history + count, null);
+    else chunkRow.set(moments);
     if (!chunkRow.every(Number.isFinite)) throw notFinite(this.origin);
     const row = blockRow(this.moments, this.blocks.current);
     mergeJoint(row, chunkRow, layout);
-    if (this.spectral !== null) {
-      const known = Math.min(this.samples, history);
-      const differences = row.subarray(layout.length);
-      addDifferences(differences, columns[0], history, to, known, plan.derivativeStep, plan.step);
-      this.spectral.take(columns, history, to, this.blocks.current);
+    if (moments !== null) this.addTotals(columns, count);
+    let from = 0;
+    for (const seam of [...chunk.seams, count]) {
+      if (seam > from) this.takeRun(columns, from, seam, row);
+      if (seam < count || chunk.seams.includes(seam)) this.restart();
+      from = seam;
     }
-    this.samples += count;
+  }
+
+  /** Samples from one seam to the next. */
+  private takeRun(columns: readonly Float64Array[], from: number, to: number, row: Float64Array): void {
+    const { history, plan, layout } = this;
+    const differences = row.subarray(layout.length);
+    const [first, end] = [history + from, history + to];
+    addDifferences(differences, columns[0], first, end, this.known, plan.derivativeStep, plan.step);
+    this.spectral.take(columns, first, end, this.blocks.current, from);
+    this.known = Math.min(this.known + to - from, history);
+  }
+
+  private restart(): void {
+    this.known = 0;
+    this.spectral.restart();
+  }
+
+  private addTotals(columns: readonly Float64Array[], count: number): void {
+    columns.forEach((column, c) => {
+      let sum = 0;
+      for (let i = this.history; i < this.history + count; i++) sum += column[i];
+      this.totals[c] += sum;
+    });
   }
 
   part(facts: PartFacts): StationPart {
-    const { plan, components, samples, blocks } = this;
+    const { plan, components, blocks } = this;
     const { rows } = blocks;
     const table = {
       fields: blockFields(components),
@@ -90,16 +125,10 @@ export class RecordSums {
       step: plan.step,
       start: facts.start,
     };
-    const tables = this.spectral?.tables(rows) ?? {
-      lags: null,
-      spectrum: null,
-      bands: null,
-      increments: null,
-    };
+    const tables = this.spectral.tables(rows, plan.weighted ? this.totals : null);
     return {
       origin: this.origin,
       components,
-      samples,
       step: plan.step,
       ...facts,
       plan,

@@ -1,45 +1,72 @@
 import type { Flag } from "../flag.ts";
 import { jointLayout, pairIndex } from "../signal/jointMoments.ts";
 import type { ReduceSettings } from "../stationResult.ts";
+import type { BranchCut } from "./branchCuts.ts";
 import { replan } from "./planRecord.ts";
 import type { ClosedRecord, RecordChunks } from "./recordChunks.ts";
 import { recordCorrelation, wholeMoments } from "./recordCorrelation.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import type { StationPart } from "./stationPart.ts";
+import { timeFlags } from "./timeFlags.ts";
 import { zeroCrossing } from "./zeroCrossing.ts";
 
 /** The integral time of the whole record may differ by so much from the pilot's. */
 const allowedChange = 0.25;
 
+/** What is known of a record that is read once more. */
+export interface Reading {
+  /** Its plan is the whole record's: there is no other reading after it. */
+  readonly last: boolean;
+  /** Restarts, and what each of them overtook. */
+  readonly cuts: readonly BranchCut[];
+}
+
 /**
- * Closes a record: the part, or the plan for a second reading where the pilot did not stand for the whole.
- * A second reading is always the last.
+ * Closes a record: the part, or the plan for another reading. There is one where time ran back into what had been
+ * summed already, so that the restarts are known; and a last one where the pilot did not stand for the whole.
  */
 export function settle(
   record: RecordChunks,
-  second: boolean,
+  { last, cuts }: Reading,
   settings: ReduceSettings,
 ): { part: StationPart } | { again: RecordPlan } {
   const { plan, facts } = record;
   const closed = record.close();
-  const part = closed.sums.part({
+  const sums = closed.sums.part({
     start: facts.start,
+    samples: closed.samples,
     duration: closed.duration,
     lowestSpeed: closed.lowestSpeed,
-    flags: recordFlags(record, closed),
+    flags: [],
   });
+  const all = [...cuts, ...facts.cuts];
+  const part = { ...sums, flags: recordFlags(record, closed, all, sums) };
   // a record that is its own pilot has nothing to differ from
-  if (second || closed.samples === facts.held) return { part };
-  if (closed.unequal > 0 && !plan.weighted) return { again: { ...plan, weighted: true, derivativeStep: 1 } };
+  if (last || closed.samples === facts.held) return { part };
+  const restarts = plan.cuts ?? [...facts.cuts, ...closed.cuts];
+  const known = restarts.length > 0 ? { ...plan, cuts: restarts } : plan;
+  if (plan.cuts === undefined && closed.cuts.length > 0) return { again: known };
+  const next = nextPlan(known, part, closed, settings);
+  return next === null ? { part } : { again: { ...next, last: true } };
+}
+
+/** The plan that the whole record asks for; null where the pilot's stands. */
+function nextPlan(
+  plan: RecordPlan,
+  part: StationPart,
+  closed: ClosedRecord,
+  settings: ReduceSettings,
+): RecordPlan | null {
+  if (closed.unequal > 0 && !plan.weighted) return { ...plan, weighted: true, rounded: false };
   const slope = settings.detrend === "linear" ? wholeSlope(part) : plan.slope;
-  if (part.lags !== null && leansOtherwise(part, slope)) return { again: { ...plan, slope } };
+  if (part.lags !== null && leansOtherwise(part, slope)) return { ...plan, slope };
   const time = integralTimeOf(part);
   const changed = time !== null && (plan.integralTime === null || differs(time, plan.integralTime));
   const lost = time === null && plan.integralTime !== null && part.lags !== null;
-  if (!changed && !lost) return { part };
+  if (!changed && !lost) return null;
   // a correlation that no longer crosses zero is looked for four times as far
   const wanted = time ?? 4 * (plan.integralTime ?? plan.step);
-  return { again: { ...replan(plan, closed.samples, wanted, settings), pilotTime: plan.integralTime } };
+  return { ...replan(plan, closed.samples, wanted, settings), pilotTime: plan.integralTime };
 }
 
 /** Slope of the whole record: that of the plan, and what the means of its blocks still show. */
@@ -82,20 +109,18 @@ function integralTimeOf(part: StationPart): number | null {
   return at === null ? null : (area / correlation[0]) * part.lags.stride * part.step;
 }
 
-function recordFlags({ plan, facts }: RecordChunks, closed: ClosedRecord): Flag[] {
-  const flags: Flag[] = [];
+function recordFlags(
+  { plan, facts }: RecordChunks,
+  closed: ClosedRecord,
+  cuts: readonly BranchCut[],
+  part: StationPart,
+): Flag[] {
+  const flags = timeFlags({ plan, closed, cuts, part, repeated: closed.repeated + facts.repeated });
   if (facts.skipped > 0) {
     flags.push({
       code: "start-up",
       text: `${facts.skipped} samples at the start are left out as start-up.`,
       value: facts.skipped,
-    });
-  }
-  if (plan.weighted) {
-    flags.push({
-      code: "unequal-steps",
-      text: `${closed.unequal} time steps differ from the record's: moments are weighted with the steps, and what needs a spectrum is missing.`,
-      value: closed.unequal,
     });
   }
   if (plan.pilotTime !== undefined) {

@@ -8,7 +8,7 @@ import { type BandSums, startBandSums } from "./bandSums.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import type { StationPart } from "./stationPart.ts";
 
-/** Of a record with equal steps: lag products and gradients per block, and the Welch spectrum of the whole. */
+/** Of equally spaced samples: lag products and gradients per block, and the Welch spectrum of the whole. */
 export class SpectralSums {
   /** All that is kept per block, to be merged with the blocks. */
   readonly series: readonly BlockSeries[];
@@ -23,6 +23,7 @@ export class SpectralSums {
   private readonly cross: CrossPower | null;
   private long: readonly WelchSums[] = [];
   private short: readonly WelchSums[] = [];
+  private pieces = 0;
 
   constructor(plan: RecordPlan, components: number) {
     const each = <T>(make: () => T): T[] => Array.from({ length: components }, make);
@@ -47,9 +48,10 @@ export class SpectralSums {
       : this.lags.map((_, c) => startWelch(segment, (_middle, transform) => this.pair(c, transform)));
   }
 
-  take(columns: readonly Float64Array[], from: number, to: number, block: number): void {
+  /** @param place  where in its chunk the first sample stands */
+  take(columns: readonly Float64Array[], from: number, to: number, block: number, place: number): void {
     for (let c = 0; c < columns.length; c++) {
-      this.lags[c].add(columns[c], from, to);
+      this.lags[c].add(columns[c], from, to, place);
       this.lags[c].flush(blockRow(this.products[c], block));
       this.edges[c].add(columns[c], from, to);
       this.long[c].add(columns[c], from, to);
@@ -64,8 +66,24 @@ export class SpectralSums {
     if (component === 1) this.cross?.second(transform);
   };
 
-  tables(rows: number): Pick<StationPart, "lags" | "spectrum" | "bands" | "increments"> {
+  /** A piece of the record ends: nothing reaches across. */
+  restart(): void {
+    this.pieces++;
+    for (const kind of [this.lags, this.edges, this.long]) for (const one of kind) one.restart();
+    this.increments.restart();
+    if (this.short !== this.long) for (const one of this.short) one.restart();
+  }
+
+  /** @param totals  sums of the samples, a number a component; null: they follow from the moments */
+  tables(
+    rows: number,
+    totals: readonly number[] | null,
+  ): Pick<StationPart, "lags" | "spectrum" | "bands" | "increments"> {
     const { plan, bands, long } = this;
+    const own = {
+      ...(this.pieces > 0 || totals ? { pairs: this.edges[0].pairs() } : {}),
+      ...(totals ? { totals } : {}),
+    };
     return {
       lags: {
         count: plan.lagLimit / plan.lagStride,
@@ -73,6 +91,7 @@ export class SpectralSums {
         products: this.products.map((one) => trimmed(one, rows)),
         heads: this.edges.map((one) => one.heads()),
         tails: this.edges.map((one) => one.tails()),
+        ...own,
       },
       spectrum: {
         size: plan.segment,

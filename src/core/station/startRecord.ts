@@ -1,5 +1,6 @@
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
+import { CutSieve } from "./branchCuts.ts";
 import { PilotBuffer } from "./pilotBuffer.ts";
 import { RecordChunks } from "./recordChunks.ts";
 import type { RecordPlan } from "./recordPlan.ts";
@@ -46,28 +47,53 @@ export function startRecord(
 ): RecordReducer {
   const { startup, plan, pilot: length } = { ...recordDefaults, ...options };
   const pilot = new PilotBuffer(origin, startup);
+  const sieve = plan?.cuts === undefined ? null : new CutSieve(plan.cuts, plan.step);
   const held = plan === null ? length : 1;
   let record: RecordChunks | null = null;
+  /** Samples of the file so far. */
+  let raw = 0;
 
   function begin(): RecordChunks {
+    pilot.settle();
     const opened = new RecordChunks(plan ?? pilot.plan(settings), origin, pilot.facts());
-    opened.add(pilot.block(), 0);
+    opened.add(pilot.block(), 0, 0);
     pilot.release();
     return opened;
   }
+  /** Fills the pilot; the index in the block of the first sample that it left, or null where it wants more. */
+  function fill(block: VelocityBlock): number | null {
+    for (let from = 0; ; ) {
+      from = pilot.add(block, from, held);
+      if (!pilot.holds(held)) return null;
+      // stamps alike may turn out to be one sample sent twice: then there is room again
+      pilot.settle();
+      if (pilot.holds(held)) return from;
+    }
+  }
   return {
-    add(block) {
-      let from = 0;
-      if (record === null) {
-        from = pilot.add(block, held);
-        if (!pilot.holds(held)) return;
-        record = begin();
+    add(given) {
+      const block = sieve === null ? given : sifted(given, raw, sieve);
+      const from = record === null ? fill(block) : 0;
+      if (from !== null) {
+        record ??= begin();
+        record.add(block, from, raw);
       }
-      record.add(block, from);
+      raw += given.count;
     },
     finish() {
       record ??= begin();
-      return settle(record, plan !== null, settings);
+      return settle(record, { last: plan?.last === true, cuts: sieve?.tally() ?? [] }, settings);
     },
   };
+}
+
+/** The samples of a block that no later run overtakes. */
+function sifted(block: VelocityBlock, raw: number, sieve: CutSieve): VelocityBlock {
+  const { t, u, v, w } = block;
+  if (t === null) return block;
+  const kept: number[] = [];
+  for (let i = 0; i < block.count; i++) if (sieve.keeps(raw + i, t[i])) kept.push(i);
+  if (kept.length === block.count) return block;
+  const of = (column: Float64Array) => Float64Array.from(kept, (i) => column[i]);
+  return { count: kept.length, t: of(t), u: of(u), v: v && of(v), w: w && of(w) };
 }

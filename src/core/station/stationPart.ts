@@ -21,7 +21,7 @@ export interface StationPart {
   readonly plan: RecordPlan;
   /** A row a block: weight, means and centred sums; see blockFields. */
   readonly blocks: BlockTable;
-  /** Null where the steps are unequal, and with it the next two. */
+  /** Null where the record holds no pair of samples, and with it the next two. */
   readonly lags: LagTable | null;
   readonly spectrum: SpectrumSums | null;
   readonly bands: BandTable | null;
@@ -40,6 +40,10 @@ export interface LagTable {
   /** Per component: sums of the first l and of the last l samples, for the exact change of the mean. */
   readonly heads: readonly Float64Array[];
   readonly tails: readonly Float64Array[];
+  /** Pairs of samples at each kept lag, where a record is in pieces or was put onto equal steps; else N - l. */
+  readonly pairs?: Float64Array;
+  /** Σ u per component over the samples that were put onto equal steps; absent: those of the moments. */
+  readonly totals?: readonly number[];
 }
 
 /** Welch sums of the whole record about the plan's reference, a list a component. */

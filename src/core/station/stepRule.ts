@@ -3,17 +3,19 @@ export interface StepRule {
   readonly step: number;
   /** Last digit the stamps are printed with; 0 where none was found. */
   readonly quantum: number;
+  /** The stamps are known to have too few digits: a step may be a digit off. */
+  readonly rounded?: boolean;
 }
 
 /** A step over so many of the usual ones is a gap: the record is cut there. */
 export const gapSteps = 10;
 
 /**
- * Whether a step is that of the record: within 1/1000 of it, and a printed digit more,
- * since either stamp may be rounded by half of one.
+ * Whether a step is that of the record: within 1/1000 of it, and a printed digit more where the stamps are
+ * rounded, since either may be by half of one.
  */
 export function isEqualStep(step: number, rule: StepRule): boolean {
-  const digit = rule.quantum <= 0.5 * rule.step ? rule.quantum : 0;
+  const digit = rule.rounded ? rule.quantum : 0;
   return Math.abs(step - rule.step) <= 1e-3 * rule.step + 1.001 * digit;
 }
 

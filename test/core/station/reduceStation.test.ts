@@ -324,14 +324,6 @@ describe("what is not known is said", () => {
     expect(codes(station)).toContain("short-record");
     expect(isEstimate(station.uu) && station.uu.why_low).toMatch(/integral times long/);
   });
-  it("unequal steps: moments, but nothing that needs a spectrum", () => {
-    const t = record.u.map((_, i) => i * 1e-3 + (i % 3 === 0 ? 2e-4 : 0));
-    const station = stationOf({ ...record, t });
-    expect(codes(station)).toContain("unequal-steps");
-    expect(isEstimate(station.uu)).toBe(true);
-    expect(isEstimate(station.lambda) || isEstimate(station.T_int)).toBe(false);
-    expect(station.curves).toBeNull();
-  });
   it("a large-eddy simulation: scales wait for the decay, their resolved values stand beside", () => {
     const station = stationOf(record, { kind: "les" });
     for (const q of [station.epsilon, station.lambda, station.eta, station.Re_lambda])
