@@ -1,3 +1,4 @@
+import type { DecayArgument } from "./decayArgument.ts";
 import type { Flag } from "./flag.ts";
 import type { Quantity } from "./quantity.ts";
 
@@ -16,6 +17,21 @@ export interface DecaySettings {
   /** Which dissipation is adopted: what derive needs. */
   readonly dissipation: "auto" | "gradient" | "decay" | "inertial";
   readonly kind: "measurement" | "dns" | "les" | null;
+  /** Lateral size of the domain; null or left out: not given. */
+  readonly extent?: number | null;
+  /** Where a body is to stand, and what it is to meet there. */
+  readonly body?: BodySettings | null;
+  /** Whether the stations were sampled at the same times; "auto" or left out: told by their correlation. */
+  readonly simultaneous?: boolean | "auto";
+}
+
+/** A body's position and chord, and its targets. */
+export interface BodySettings {
+  readonly x: number;
+  readonly chord: number | null;
+  readonly Tu: number | null;
+  /** L11 over the chord. */
+  readonly L11: number | null;
 }
 
 /** One station as the fit sees it. */
@@ -75,7 +91,10 @@ export interface DecayResult {
   readonly hypotheses: readonly { readonly name: string; readonly n: number; readonly p: number | null }[];
   readonly law: PowerLaw | null;
   readonly points: readonly DecayPoint[];
-  /** Fits over every window that begins later (or ends earlier): for the window scan. */
+  /** Groups of common blocks behind the intervals, and the mean correlation of neighbours; null: each station for itself. */
+  readonly together?: { readonly groups: number; readonly correlation: number } | null;
+  /** Left out by a fit in the frame. */
+  readonly argument?: DecayArgument;
   readonly flags: readonly Flag[];
   readonly iterations: number;
   readonly converged: boolean;

@@ -12,5 +12,8 @@ export function decaySettings(sheet: CaseSheet): DecaySettings {
     kinematicViscosity,
     dissipation: sheet.reduce.dissipation,
     kind,
+    extent: sheet.extent,
+    body: sheet.body,
+    simultaneous: sheet.simultaneous,
   };
 }

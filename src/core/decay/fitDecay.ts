@@ -1,13 +1,16 @@
 import type { DecayPoint, DecayResult, DecaySettings, PowerLaw } from "../decayResult.ts";
 import { missing, scaled } from "../quantity.ts";
+import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type ChosenWindow, chooseWindow } from "./chooseWindow.ts";
+import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
 import { decayFlags } from "./decayFlags.ts";
 import { type DecayPoints, decayPoints, decaySpeed, type RawPoint } from "./decayPoints.ts";
 import { epsilonRoute } from "./epsilonRoute.ts";
-import { fitWindow, type WindowFit, windowQuantity } from "./fitWindow.ts";
+import { fitWindow, inflation, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
 import { growthExponent } from "./growthExponent.ts";
 import { hypotheses } from "./hypotheses.ts";
+import { jackknifeLaw } from "./jackknifeLaw.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
 import { laterWindows } from "./laterWindows.ts";
 import { unionOfWindows } from "./unionOfWindows.ts";
@@ -30,8 +33,11 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
   const usedStations = used.map(({ station }) => station);
   const speed = decaySpeed(usedStations, found.quantity, settings);
   const perSpeed = 1 / (speed ?? 1) ** 2;
-  const windows = settings.window === "auto" ? laterWindows(points, window, settings) : [window.fitted];
-  const law = "refused" in window.fitted ? null : powerLaw(window.fitted, perSpeed);
+  const blocks = commonBlocks(usedStations, found, settings);
+  const candidates = settings.window === "auto" ? laterWindows(points, window, settings) : [window.fitted];
+  const windows = candidates.map((fitted, from) => withBlocks(fitted, blocks, from));
+  const [fitted] = windows;
+  const law = "refused" in fitted ? null : powerLaw(fitted, perSpeed);
   const result: DecayResult = {
     quantity: found.quantity,
     assumption: found.assumption,
@@ -42,7 +48,8 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
     windowReason: window.reason,
     stations: used.length,
     speed,
-    ...numbers(window, windows, perSpeed),
+    ...numbers(windows, perSpeed),
+    together: blocks === null ? null : { groups: blocks.groups, correlation: blocks.correlation },
     lambda_route: lambdaRoute(usedStations, settings),
     epsilon_route: epsilonRoute(usedStations, settings),
     growth: { m: growth(usedStations, law) },
@@ -76,8 +83,8 @@ function windowEnds(used: readonly RawPoint[], { window }: DecaySettings): reado
 }
 
 /** Everything that follows from the law, or the reason why there is none. */
-function numbers(window: ChosenWindow, windows: Parameters<typeof unionOfWindows>[0], perSpeed: number) {
-  const { fitted } = window;
+function numbers(windows: readonly (WindowFit | Refusal)[], perSpeed: number) {
+  const [fitted] = windows;
   if ("refused" in fitted) {
     const none = missing(fitted.refused);
     const given_window = { n: none, x0: none };
@@ -100,15 +107,30 @@ function numbers(window: ChosenWindow, windows: Parameters<typeof unionOfWindows
   };
 }
 
-function powerLaw({ fit, variance, quantile, scattered }: WindowFit, perSpeed: number): PowerLaw {
+/** A window's law with what its common blocks tell; `from`: its first station among those of the blocks. */
+function withBlocks(
+  fitted: WindowFit | Refusal,
+  blocks: CommonBlocks | null,
+  from: number,
+): WindowFit | Refusal {
+  if (blocks === null || "refused" in fitted) return fitted;
+  const together = jackknifeLaw(fitted, blocks, from);
+  return together === null ? fitted : { ...fitted, together };
+}
+
+function powerLaw(window: WindowFit, perSpeed: number): PowerLaw {
+  const { fit, variance } = window;
+  const { ratio, freedom } = inflation(window, "n");
+  const blocksTell = window.together !== undefined && ratio !== 1;
+  const own = (fit.unitCovariance ?? []).map((value) => value * variance);
   return {
     A: fit.A * perSpeed,
     x0: fit.x0,
     n: fit.n,
     length: fit.length,
-    covariance: (fit.unitCovariance ?? []).map((value) => value * variance),
-    quantile,
-    freedom: scattered ? fit.freedom : null,
+    covariance: blocksTell ? (window.together?.covariance ?? own) : own,
+    quantile: studentQuantile(0.975, freedom),
+    freedom,
   };
 }
 

@@ -5,6 +5,7 @@ import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { fQuantile } from "../signal/distributions/fQuantile.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { fitPowerLaw, type PowerLawFit } from "./fitPowerLaw.ts";
+import type { JackknifedLaw } from "./jackknifeLaw.ts";
 import { profileInterval } from "./profileInterval.ts";
 
 /** A law fitted to the stations of one window, with all that is said given that window. */
@@ -20,6 +21,8 @@ export interface WindowFit {
   readonly drop: number;
   /** 97.5 % point that belongs to the covariance. */
   readonly quantile: number;
+  /** Where the stations were sampled together: what their common blocks tell. */
+  readonly together?: JackknifedLaw;
 }
 
 /** One station as a fit sees it. */
@@ -105,19 +108,39 @@ function refusalOfCount(points: readonly FitPoint[], { x0, n }: DecaySettings): 
   return `${numerals[places]} ${lie} in the window, and ${law}`;
 }
 
+/** Places of A (as ln A), x0 and n on the diagonal of a covariance. */
+const diagonal = { A: 0, x0: 4, n: 8 } as const;
+
 /**
- * One number of the law with its profile interval given the window.
+ * By how much the variance of one number exceeds what the fit itself makes of it, and the freedom behind that: 1 but
+ * where stations were sampled together and common blocks tell more. A misfit shows in the scatter alone, so that the
+ * larger of both counts where chi-square fails.
+ */
+export function inflation(
+  { fit, variance, scattered, together }: WindowFit,
+  key: keyof typeof diagonal,
+): { ratio: number; freedom: number | null } {
+  const own = (fit.unitCovariance?.[diagonal[key]] ?? 0) * variance;
+  const plain = { ratio: 1, freedom: scattered ? fit.freedom : null };
+  if (together === undefined || !(own > 0)) return plain;
+  const ratio = together.covariance[diagonal[key]] / own;
+  return scattered && ratio < 1 ? plain : { ratio, freedom: together.freedom };
+}
+
+/**
+ * One number of the law with its profile interval given the window; where stations were sampled together the drop is
+ * t² times the ratio of the jackknife's variance to that of the fit.
  * @returns n (1), x0 (unit of x) or A (unit of q); without an interval where it was held
  */
-export function windowQuantity(
-  { fit, drop, variance, scattered }: WindowFit,
-  key: "n" | "x0" | "A",
-): Quantity {
+export function windowQuantity(window: WindowFit, key: "n" | "x0" | "A"): Quantity {
+  const { fit, variance } = window;
   const value = fit[key];
   if (key !== "A" && fit.held[key] !== null) return bare(value, "held, not fitted");
+  const { ratio, freedom } = inflation(window, key);
+  const drop =
+    window.together === undefined ? window.drop : studentQuantile(0.975, freedom) ** 2 * ratio * variance;
   const ends = profileInterval(fit, key, drop);
-  const at = { A: 0, x0: 4, n: 8 }[key];
-  const standard = Math.sqrt((fit.unitCovariance?.[at] ?? 0) * variance);
+  const standard = Math.sqrt((fit.unitCovariance?.[diagonal[key]] ?? 0) * variance * ratio);
   const scale: "log" | "linear" = key === "A" ? "log" : "linear";
-  return { value, ...ends, error: { standard, freedom: scattered ? fit.freedom : null, scale } };
+  return { value, ...ends, error: { standard, freedom, scale } };
 }

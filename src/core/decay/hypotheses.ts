@@ -1,7 +1,7 @@
 import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { fTail } from "../signal/distributions/fTail.ts";
-import type { Refusal, WindowFit } from "./fitWindow.ts";
+import { inflation, type Refusal, type WindowFit } from "./fitWindow.ts";
 import { minimiseLaw } from "./minimiseLaw.ts";
 
 /** Exponents of the energy that theory gives, with the names they go by. */
@@ -32,11 +32,13 @@ export function hypotheses(
   });
 }
 
-function probability({ fit, scattered, variance }: WindowFit, n: number): number {
+function probability(window: WindowFit, n: number): number {
+  const { fit, variance } = window;
   const { problem, law, held } = fit;
   // along the ridge of equal slope at the centre: kappa = b/n
   const start = held.x0 === null ? { ...law, kappa: law.kappa * Math.min(fit.n / n, 1) } : law;
   const rise = Math.max(minimiseLaw(problem, start, { ...held, n }, 1e-4).sum - fit.residualSum, 0);
-  if (!scattered) return chiSquareTail(rise, 1);
-  return variance > 0 ? fTail(rise / variance, 1, fit.freedom) : 0;
+  const { ratio, freedom } = inflation(window, "n");
+  if (freedom === null) return chiSquareTail(rise, 1);
+  return variance * ratio > 0 ? fTail(rise / (variance * ratio), 1, freedom) : 0;
 }

@@ -1,0 +1,73 @@
+import type { ScannedWindow, WindowScan } from "../decayArgument.ts";
+import type { DecayPoint, DecayResult, DecaySettings } from "../decayResult.ts";
+import { missing } from "../quantity.ts";
+import type { StationResult } from "../stationResult.ts";
+import { type Condition, criterion } from "./criterion.ts";
+import { fitWindow, windowQuantity } from "./fitWindow.ts";
+import { startConditions } from "./startConditions.ts";
+
+/** Share of a domain's lateral extent that L11 may reach before the walls, or the periodic images, are felt. */
+export const largestShareOfExtent = 0.25;
+
+/**
+ * n and x0 with their intervals against the first and against the last station used, all other things as adopted;
+ * beside it from where to where physics allows a law.
+ * @param stations derived, in order of x
+ * @param decay    of the same stations
+ * @param settings what is held, residuals; extent: lateral size of the domain
+ * @see            Mohamed & LaRue (1990), J. Fluid Mech. 219, 195
+ */
+export function windowScan(
+  stations: readonly StationResult[],
+  decay: DecayResult,
+  settings: DecaySettings,
+): WindowScan {
+  const points = decay.points.filter(({ x }) => settings.x0 === null || x > settings.x0);
+  const xs = stations.map(({ x }) => x);
+  const first = points.findIndex((point) => point.used);
+  const last = first + points.filter((point) => point.used).length - 1;
+  const end = endCondition(stations, settings.extent ?? null);
+  return {
+    first:
+      first < 0
+        ? []
+        : points
+            .slice(0, last + 1)
+            .map(({ x }, i) => scanned(x, points.slice(i, last + 1), settings, i === first)),
+    last:
+      first < 0
+        ? []
+        : points
+            .slice(first)
+            .map(({ x }, i) => scanned(x, points.slice(first, first + i + 1), settings, first + i === last)),
+    start: startConditions(stations).map((condition) => criterion(xs, condition)),
+    end: end === null ? [] : [criterion(xs, end, "end")],
+  };
+}
+
+function scanned(
+  x: number,
+  points: readonly DecayPoint[],
+  settings: DecaySettings,
+  adopted: boolean,
+): ScannedWindow {
+  const fitted = fitWindow(points, settings);
+  const at = { x, stations: points.length, adopted };
+  if ("refused" in fitted) {
+    const none = missing(fitted.refused);
+    return { ...at, n: none, x0: none, p: null };
+  }
+  return { ...at, n: windowQuantity(fitted, "n"), x0: windowQuantity(fitted, "x0"), p: fitted.p };
+}
+
+/** L11 small beside the lateral extent; null where none is given. */
+function endCondition(stations: readonly StationResult[], extent: number | null): Condition | null {
+  if (extent === null) return null;
+  return {
+    key: "L11",
+    words: `L11 below ${100 * largestShareOfExtent} % of the lateral extent`,
+    values: stations.map(({ L11 }) => L11),
+    low: 0,
+    high: largestShareOfExtent * extent,
+  };
+}
