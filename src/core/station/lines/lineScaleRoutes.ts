@@ -1,0 +1,95 @@
+import type { ReduceSettings } from "../../stationResult.ts";
+import { type IntegralTimes, integralTimes } from "../integralTimes.ts";
+import { areaUpTo } from "../zeroCrossing.ts";
+import type { JoinedLines } from "./joinLines.ts";
+import { lineComponents } from "./lineFields.ts";
+import type { LineSpectra } from "./lineSpectra.ts";
+
+/** Integral length of the component along the line by each route, as integralTimes tells times. */
+export interface LineScales extends IntegralTimes {
+  /** The correlation did not cross zero and was integrated up to half the length of the line. */
+  readonly toHalf?: boolean;
+}
+
+/** Lateral lines: from the correlation along the line and its spectrum. */
+export function lateralScales(
+  lines: JoinedLines,
+  spectra: LineSpectra | null,
+  adopted: ReduceSettings["integralScale"],
+): LineScales {
+  const [name] = lineComponents(lines.along);
+  const c = lines.components.indexOf(name);
+  if (c < 0) return noScale(`${name}, the component along the line, was not measured`);
+  if (spectra === null) return noScale("the points are not equally spaced, so there is no correlation");
+  const { step, covariance, density, lines: segments } = spectra;
+  const correlation = { step, stride: 1, covariance: [covariance[c]] };
+  if (!(covariance[c][0] > 0)) return noScale("the fluctuation is zero");
+  const size = lines.points.length;
+  const found = inSpace(integralTimes(correlation, { step, size, segments, density: [density[c]] }, adopted));
+  return found.tauStar === null ? toHalfLine(found, covariance[c], step, adopted) : found;
+}
+
+/** Correlation at half the length of a periodic line below which the rest of the integral is little. */
+const fallen = 0.1;
+
+/**
+ * A periodic line has no separation beyond half its length, another only poor ones: a correlation that is next to
+ * nothing there, and has not crossed zero, is integrated up to it.
+ */
+function toHalfLine(
+  found: LineScales,
+  covariance: Float64Array,
+  step: number,
+  adopted: ReduceSettings["integralScale"],
+): LineScales {
+  const half = covariance.length - 1;
+  if (!(covariance[half] < fallen * covariance[0])) return found;
+  const area = (areaUpTo(covariance, half) / covariance[0]) * step;
+  const routes = { ...found.routes, "zero-crossing": area };
+  const chosen = routes[adopted];
+  return { routes, tauStar: half * step, scale: typeof chosen === "number" ? chosen : area, toHalf: true };
+}
+
+/** Lines along x: from the correlation of points up- and downstream of the station, as far as the line goes. */
+export function streamwiseScales(lines: JoinedLines, adopted: ReduceSettings["integralScale"]): LineScales {
+  const { spacing, parts } = lines;
+  const pairs = parts.flatMap((part) => (part.pairs ? [part.pairs] : []));
+  if (spacing === null || pairs.length < parts.length)
+    return noScale("the points are not equally spaced, so there is no correlation");
+  const rho = pairs[0].counts.map((_, m) => {
+    const sum = (pick: (one: (typeof pairs)[number]) => Float64Array) =>
+      pairs.reduce((total, one) => total + pick(one)[m], 0) / pairs.reduce((n, one) => n + one.counts[m], 0);
+    const [a, b] = [sum(({ after }) => after), sum(({ before }) => before)];
+    const variances =
+      (sum(({ afterSquared }) => afterSquared) - a * a) * (sum(({ beforeSquared }) => beforeSquared) - b * b);
+    return variances > 0 ? (sum(({ product }) => product) - a * b) / Math.sqrt(variances) : 0;
+  });
+  if (rho.length < 3 || !(rho[0] > 0)) return noScale("the station is too near the end of its line");
+  const correlation = { step: 2 * spacing, stride: 1, covariance: [rho] };
+  return inSpace(integralTimes(correlation, null, adopted));
+}
+
+function noScale(why: string): LineScales {
+  const routes = {
+    "zero-crossing": why,
+    "one-over-e": why,
+    exponential: why,
+    "low-frequency": why,
+    model: why,
+  };
+  return { routes, tauStar: null, scale: null };
+}
+
+/** Reasons in the words of a line. */
+function inSpace({ routes, ...rest }: IntegralTimes): LineScales {
+  const told = Object.entries(routes).map(([name, value]) => [
+    name,
+    typeof value === "string"
+      ? value
+          .replace(/integral time/g, "integral length")
+          .replace(/of lag\b/g, "of separation")
+          .replace("the record is shorter than a segment of the spectrum", "a point has no spectrum along x")
+      : value,
+  ]);
+  return { ...rest, routes: Object.fromEntries(told) };
+}
