@@ -10,6 +10,11 @@ const most = 50;
 /** Integral times a group should hold. */
 const perGroup = 20;
 
+/** Groups that a record of so many integral times is cut into. */
+export function groupsFor(integralTimes: number): number {
+  return Math.min(Math.max(Math.round(integralTimes / perGroup), fewest), most);
+}
+
 /**
  * B = T/(20 T_int) groups, from 10 to 50, of whole neighbouring blocks, two or more where there are enough.
  * @param weights  weight of each block, in order
@@ -17,7 +22,7 @@ const perGroup = 20;
  * @see   Lenschow, Mann & Kristensen (1994), J. Atmos. Ocean. Technol. 11, 661, on independent stretches
  */
 export function groupBlocks(weights: Float64Array, integralTimes: number): BlockGroups {
-  const wanted = Math.min(Math.max(Math.round(integralTimes / perGroup), fewest), most);
+  const wanted = groupsFor(integralTimes);
   const count = Math.min(wanted, Math.max(fewest, Math.floor(weights.length / 2)), weights.length);
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const of = new Int32Array(weights.length);
