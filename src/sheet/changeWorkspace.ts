@@ -1,6 +1,6 @@
-import { assertNever } from "../core/failure.ts";
+import { assert, assertNever } from "../core/failure.ts";
 import type { CaseSheet } from "./caseSheet.ts";
-import type { Workspace, WorkspaceCase, WorkspaceChange } from "./workspace.ts";
+import type { AddedFiles, Workspace, WorkspaceCase, WorkspaceChange } from "./workspace.ts";
 
 export const emptyWorkspace: Workspace = { schema: 1, title: "", cases: [], axis: "x", picked: [] };
 
@@ -12,6 +12,8 @@ export function changeWorkspace(workspace: Workspace, change: WorkspaceChange): 
   switch (change.kind) {
     case "add-cases":
       return addCases(workspace, change.cases);
+    case "add-files":
+      return addFiles(workspace, change);
     case "remove-case":
       return removeCase(workspace, change.caseId);
     case "edit-sheet":
@@ -53,6 +55,21 @@ function addCases(workspace: Workspace, added: readonly Omit<WorkspaceCase, "mar
     cases.push({ ...each, mark: lowestFree(cases.map(({ mark }) => mark)) });
   }
   return cases.length === workspace.cases.length ? workspace : { ...workspace, cases };
+}
+
+function addFiles(workspace: Workspace, { caseId, files, sources }: AddedFiles): Workspace {
+  assert(files.length === sources.length, "every entry of a sheet needs its source");
+  if (files.length === 0 || !workspace.cases.some(({ id }) => id === caseId)) return workspace;
+  const cases = workspace.cases.map((each) =>
+    each.id === caseId
+      ? {
+          ...each,
+          sheet: { ...each.sheet, files: [...each.sheet.files, ...files] },
+          sources: [...each.sources, ...sources],
+        }
+      : each,
+  );
+  return { ...workspace, cases };
 }
 
 function lowestFree(taken: readonly number[]): number {

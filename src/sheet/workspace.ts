@@ -1,4 +1,4 @@
-import type { CaseSheet } from "./caseSheet.ts";
+import type { CaseSheet, SheetFile } from "./caseSheet.ts";
 
 /** All that a user decides, one immutable value. Results are not in it: they follow from it and the files. */
 export interface Workspace {
@@ -28,6 +28,11 @@ export interface WorkspaceSource {
   readonly bytes: number;
   readonly fingerprint: string;
 }
+export interface AddedFiles {
+  readonly caseId: string;
+  readonly files: readonly SheetFile[];
+  readonly sources: readonly WorkspaceSource[];
+}
 export interface PickedStation {
   readonly caseId: string;
   readonly x: number;
@@ -36,6 +41,8 @@ export interface PickedStation {
 /** Everything that can be done to a workspace. */
 export type WorkspaceChange =
   | { readonly kind: "add-cases"; readonly cases: readonly Omit<WorkspaceCase, "mark">[] }
+  /** Further files of a case, an entry of its sheet for each source. */
+  | ({ readonly kind: "add-files" } & AddedFiles)
   | { readonly kind: "remove-case"; readonly caseId: string }
   | { readonly kind: "edit-sheet"; readonly caseId: string; readonly edit: Partial<CaseSheet> }
   | { readonly kind: "edit-every-sheet"; readonly edit: Partial<CaseSheet> }

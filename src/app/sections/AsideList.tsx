@@ -2,6 +2,9 @@ import type { Aside } from "../session/session.ts";
 import { FailureList } from "./FailureList.tsx";
 import { Fold } from "./Fold.tsx";
 
+/** A list no longer than this stands open: it is read sooner than it is opened. */
+const shownAtOnce = 8;
+
 /** What of the drops was not used: faults in sight, files left out in a fold. */
 export function AsideList({ aside, fault = false }: { aside: Aside; fault?: boolean }) {
   const { leftOut, failures, warnings } = aside;
@@ -26,7 +29,11 @@ export function AsideList({ aside, fault = false }: { aside: Aside; fault?: bool
         (fault ? (
           list
         ) : (
-          <Fold name="Left out" fact={leftOut.length === 1 ? "1 file" : `${leftOut.length} files`}>
+          <Fold
+            name="Left out"
+            open={leftOut.length <= shownAtOnce}
+            fact={leftOut.length === 1 ? "1 file" : `${leftOut.length} files`}
+          >
             {list}
           </Fold>
         ))}

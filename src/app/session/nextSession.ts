@@ -1,6 +1,6 @@
 import { assertNever } from "../../core/failure.ts";
 import { changeWorkspace, emptyWorkspace } from "../../sheet/changeWorkspace.ts";
-import type { Workspace } from "../../sheet/workspace.ts";
+import type { Workspace, WorkspaceChange } from "../../sheet/workspace.ts";
 import { firstPicks } from "./firstPicks.ts";
 import { advance, redo, startHistory, undo } from "./history.ts";
 import type { Aside, Held, Offer, Plan, Reduced, Session, Work } from "./session.ts";
@@ -70,13 +70,12 @@ function planned(held: Held | null, plan: Plan): Session {
     aside: { leftOut: [], failures: [], warnings: [] },
     argued: null,
   };
-  const added =
-    plan.cases.length === 0
-      ? before.history
-      : advance(
-          before.history,
-          changeWorkspace(before.history.present, { kind: "add-cases", cases: plan.cases }),
-        );
+  const changes: WorkspaceChange[] = [
+    ...(plan.additions ?? []).map((added) => ({ kind: "add-files" as const, ...added })),
+    ...(plan.cases.length === 0 ? [] : [{ kind: "add-cases" as const, cases: plan.cases }]),
+  ];
+  const after = changes.reduce(changeWorkspace, before.history.present);
+  const added = after === before.history.present ? before.history : advance(before.history, after);
   return {
     kind: "ready",
     held: {

@@ -1,8 +1,9 @@
 import { type PlainFailure, ReductionFailure } from "../../core/failure.ts";
 import type { Preview } from "../../core/records.ts";
 import type { Engine, SourceFile } from "../../engine/protocol.ts";
-import type { DropPlan, PlannedCase } from "../../sheet/dropPlan.ts";
+import type { DropPlan } from "../../sheet/dropPlan.ts";
 import type { WorkspaceCase } from "../../sheet/workspace.ts";
+import { joinCases } from "./joinCases.ts";
 import { heldOf } from "./nextSession.ts";
 import { asSources, type DroppedFile } from "./openDrop.ts";
 import type { PageStore } from "./pageStore.ts";
@@ -51,8 +52,8 @@ export async function runDrop(
   );
   const { planDrop } = await planning;
   const plan = planDrop(sources, sheets, new Map(looks));
-  const names = heldOf(store.getState().session)?.history.present.cases.map(({ sheet }) => sheet.case) ?? [];
-  dispatch({ kind: "planned", plan: asPlan(plan, sources, looks, names) });
+  const here = heldOf(store.getState().session)?.history.present.cases ?? [];
+  dispatch({ kind: "planned", plan: asPlan(plan, sources, looks, here) });
 }
 
 async function firstLook(engine: Engine, file: SourceFile): Promise<Preview | PlainFailure> {
@@ -67,44 +68,22 @@ async function firstLook(engine: Engine, file: SourceFile): Promise<Preview | Pl
 let dropCount = 0;
 
 function asPlan(
-  { cases, leftOut, failures, warnings }: DropPlan,
+  planned: DropPlan,
   sources: readonly SourceFile[],
   looks: readonly (readonly [string, Preview | PlainFailure])[],
-  taken: readonly string[],
+  here: readonly WorkspaceCase[],
 ): Plan {
   dropCount++;
   const byName = new Map(sources.map((source) => [source.name, source]));
-  const used = new Set(cases.flatMap(({ names }) => names));
+  const { cases, additions, leftOut, warnings } = joinCases(planned, here, byName, dropCount);
+  const used = new Set([...cases, ...additions].flatMap((each) => each.sources.map(({ name }) => name)));
   return {
-    cases: cases.map((planned, i) => asCase(planned, `${dropCount}-${i + 1}`, byName, taken)),
+    cases,
+    additions,
     files: sources.filter(({ name }) => used.has(name)),
-    previews: looks.flatMap(([, look]) => ("code" in look ? [] : [look])),
-    aside: { leftOut, failures, warnings },
+    previews: looks.flatMap(([name, look]) => ("code" in look || !used.has(name) ? [] : [look])),
+    aside: { leftOut, failures: planned.failures, warnings },
   };
-}
-
-function asCase(
-  { sheet, fromSheet, names }: PlannedCase,
-  id: string,
-  byName: ReadonlyMap<string, SourceFile>,
-  taken: readonly string[],
-): Omit<WorkspaceCase, "mark"> {
-  return {
-    id,
-    sheet: { ...sheet, case: freeName(sheet.case, taken) },
-    fromSheet,
-    sources: names.flatMap((name) => {
-      const source = byName.get(name);
-      return source ? [{ name, bytes: source.bytes, fingerprint: source.fingerprint }] : [];
-    }),
-  };
-}
-
-/** Cases are told apart by their names. */
-function freeName(wanted: string, taken: readonly string[]): string {
-  let name = wanted;
-  for (let i = 2; taken.includes(name); i++) name = `${wanted} (${i})`;
-  return name;
 }
 
 function untilIdle(store: PageStore): Promise<void> {

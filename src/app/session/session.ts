@@ -6,7 +6,7 @@ import type { Preview, SourceNote } from "../../core/records.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import type { SourceFile } from "../../engine/protocol.ts";
 import type { LeftOut } from "../../sheet/dropPlan.ts";
-import type { Workspace, WorkspaceCase } from "../../sheet/workspace.ts";
+import type { AddedFiles, Workspace, WorkspaceCase } from "../../sheet/workspace.ts";
 import type { History } from "./history.ts";
 
 /**
@@ -84,6 +84,8 @@ export interface Work {
 
 /** What a drop comes to, once it was looked at. */
 export interface Plan {
+  /** Files that join cases which are here already. */
+  readonly additions?: readonly AddedFiles[];
   readonly cases: readonly Omit<WorkspaceCase, "mark">[];
   readonly files: readonly SourceFile[];
   readonly previews: readonly Preview[];

@@ -146,6 +146,37 @@ describe("the work behind the page", () => {
     expect(asked.filter((task) => task === "argue").length).toBeGreaterThan(1);
   });
 
+  it("adds further files of a folder to the case that folder made, and leaves those out that are in it", async () => {
+    const { store, work, waiting, held, only } = await dropped("grid/x0200.csv", "grid/x0400.csv");
+    for (const { ask, end } of waiting) end(reductionOf(ask));
+    await turn();
+    const again = work.drop(files("grid/x0400.csv", "grid/x0800.csv"));
+    await again;
+    await turn();
+    // what is reduced stays in sight, and is not read again
+    expect(held().reductions[only().id].stations.map(({ x }) => x)).toEqual([0.2, 0.4]);
+    expect(waiting.slice(2).map(({ ask }) => ask.file.name)).toEqual(["grid/x0800.csv"]);
+    waiting[2].end(reductionOf(waiting[2].ask));
+    await turn();
+    expect(held().history.present.cases).toHaveLength(1);
+    expect(held().reductions[only().id].stations.map(({ x }) => x)).toEqual([0.2, 0.4, 0.8]);
+    expect(held().aside.leftOut.map(({ name }) => name)).toEqual(["grid/x0400.csv"]);
+    expect(held().aside.warnings.join()).toContain("grid/x0800.csv was added");
+    store.getState().dispatch({ kind: "undone" });
+    expect(only().sources).toHaveLength(2);
+  });
+
+  it("makes a second case of a folder whose files have other contents than those of the same name", async () => {
+    const { work, waiting, held } = await dropped("grid/x0200.csv");
+    waiting[0].end(reductionOf(waiting[0].ask));
+    await turn();
+    const other = new File(["another content"], "grid/x0200.csv");
+    await work.drop(Promise.resolve([{ path: "grid/x0200.csv", file: other }]));
+    await turn();
+    expect(held().history.present.cases.map(({ sheet }) => sheet.case)).toEqual(["grid", "grid (2)"]);
+    expect(held().aside.warnings.join()).toContain("called grid (2)");
+  });
+
   it("tells of a drop in which nothing was a record", async () => {
     const store = createPageStore();
     const { engine } = heldEngine();
