@@ -5,6 +5,8 @@ export interface Flag {
   readonly text: string;
   /** The figure behind the flag, where there is one. */
   readonly value?: number;
+  /** Keys of the quantities that rest on it; left out: the station as a whole. */
+  readonly concerns?: readonly string[];
 }
 
 export const flagCodes = [
@@ -23,6 +25,7 @@ export const flagCodes = [
   "no-zero-crossing",
   "isotropy-assumed",
   "axisymmetry-assumed",
+  "not-realizable",
   "no-viscosity",
   "inhomogeneous",
   "trend",

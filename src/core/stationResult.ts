@@ -116,6 +116,10 @@ export interface StationCurves {
   readonly E11: Float64Array;
   readonly E22: Float64Array | null;
   readonly E33: Float64Array | null;
+  /** Co-spectrum of u and v, ∫ E12 dk1 = uv; null without v. */
+  readonly E12?: Float64Array | null;
+  /** Slope of E11 and the test of isotropy scale by scale. */
+  readonly local?: LocalSpectrum;
   /** Degrees of freedom of one bin's chi-square. */
   readonly freedom: number;
   /** The same at each k1: more where a point stands for several bins. */
@@ -125,6 +129,19 @@ export interface StationCurves {
   readonly rho_u: Float64Array;
   readonly rho_v: Float64Array | null;
   readonly rho_w: Float64Array | null;
+}
+
+/** Spectra averaged over bands of a twentieth of a decade, where they can be differentiated. */
+export interface LocalSpectrum {
+  /** rad/m, ascending. */
+  readonly k1: Float64Array;
+  readonly E11: Float64Array;
+  /** d ln E11/d ln k1. */
+  readonly slope: Float64Array;
+  /** (E11 - k1 dE11/dk1)/2: what E22 is in isotropic flow. */
+  readonly E22_isotropic: Float64Array;
+  readonly E22: Float64Array | null;
+  readonly E33: Float64Array | null;
 }
 
 /**

@@ -3,6 +3,7 @@ import type { Flag } from "../flag.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { ProfileRow, SourceNote } from "../records.ts";
 import type { ReduceSettings, StationFacts, StationResult } from "../stationResult.ts";
+import { profileTensor } from "./profileTensor.ts";
 import { withError } from "./stationErrors.ts";
 import type { Component } from "./stationPart.ts";
 import { lateral } from "./stationValues.ts";
@@ -34,6 +35,7 @@ export function profileStation(
   const none = missing("a profile holds no time series");
   const scales = profileScales(values, squared[0], settings);
   const { lambda } = scales;
+  const tensor = profileTensor(squared, values.uv ?? Number.NaN);
   return {
     x: row.x,
     samples: 0,
@@ -45,8 +47,11 @@ export function profileStation(
     S_dudx: none,
     balance: missing("it follows from the decay law"),
     q: givenQ(values),
-    routes: { lambda_f: isEstimate(lambda) ? bare(Math.SQRT2 * lambda.value, noError) : lambda },
-    flags: profileFlags(components, settings),
+    routes: {
+      lambda_f: isEstimate(lambda) ? bare(Math.SQRT2 * lambda.value, noError) : lambda,
+      ...tensor.routes,
+    },
+    flags: [...profileFlags(components, settings), ...tensor.flags],
     sources: source === null ? [] : [source],
     curves: null,
     blocks: null,

@@ -3,6 +3,7 @@ import type { StationCurves } from "../stationResult.ts";
 import type { JoinedCorrelation } from "./joinCorrelations.ts";
 import type { JoinedRecord } from "./joinParts.ts";
 import type { JoinedSpectra } from "./joinSpectra.ts";
+import { localSpectrum } from "./localSpectrum.ts";
 
 /** Bins a decade in the spectra that are kept: at the low end every point of the estimate. */
 const perDecade = 100;
@@ -34,6 +35,8 @@ export function stationCurves(
     E11: average(spectra.density[0], borders, U / (2 * Math.PI)),
     E22: curve("v"),
     E33: curve("w"),
+    E12: !spectra.cross ? null : average(spectra.cross, borders, U / (2 * Math.PI)),
+    local: localOf(spectra, U, [at("v"), at("w")]),
     freedom: single,
     freedoms: Float64Array.from({ length: borders.length - 1 }, (_, b) =>
       // 2 T df for a band; neighbouring bins of a Hann window are not independent
@@ -44,6 +47,13 @@ export function stationCurves(
     rho_v: rho("v"),
     rho_w: rho("w"),
   };
+}
+
+function localOf({ density, size, step }: JoinedSpectra, U: number, [v, w]: readonly [number, number]) {
+  const unit = (2 * Math.PI) / (U * size * step);
+  const k1 = Float64Array.from({ length: size / 2 }, (_, i) => (i + 1) * unit);
+  const spectrum = (c: number) => density[c].subarray(1).map((value) => (value * U) / (2 * Math.PI));
+  return localSpectrum(k1, spectrum(0), v < 0 ? null : spectrum(v), w < 0 ? null : spectrum(w));
 }
 
 function wavenumbers(borders: readonly number[], unit: number): Float64Array {

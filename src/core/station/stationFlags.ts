@@ -10,6 +10,22 @@ const doubtfulCorrection = 0.1;
 const resolved = 0.9;
 const longSensor = 4;
 
+/** What is formed from all three components, and with one or two of them rests on how the others are taken. */
+const restOnOthers = [
+  "k",
+  "Tu",
+  "epsilon",
+  "epsilon_gradient",
+  "epsilon_decay",
+  "epsilon_inertial",
+  "eta",
+  "C_epsilon",
+  "balance",
+  "lambda",
+  "Re_lambda",
+  "gradient",
+] as const;
+
 /** Facts that the flags are drawn from, beside the material itself. */
 export interface FlagFacts {
   readonly taylorFactor: number;
@@ -53,7 +69,8 @@ function lengthFlags({ sampling, times, correlation, record }: StationMaterial):
 function componentFlags({ record, settings }: StationMaterial): Flag[] {
   const flags: Flag[] = [];
   if (record.components.length === 1) {
-    flags.push({ code: "isotropy-assumed", text: "u alone was measured: isotropy is assumed, not tested." });
+    const text = "u alone was measured: isotropy is assumed, not tested.";
+    flags.push({ code: "isotropy-assumed", text, concerns: restOnOthers });
   }
   if (record.components.length === 2) {
     const [, known] = record.components;
@@ -61,6 +78,7 @@ function componentFlags({ record, settings }: StationMaterial): Flag[] {
     flags.push({
       code: "axisymmetry-assumed",
       text: `${other} was not measured and is taken like ${known}.`,
+      concerns: restOnOthers,
     });
   }
   if (settings.kinematicViscosity === null) {
