@@ -1,5 +1,3 @@
-import type { StationPart } from "../core/station/stationPart.ts";
-
 /** Positions this close, measured by the span of all of them, are one: they were printed with other digits. */
 const sameShare = 1e-9;
 
@@ -8,7 +6,9 @@ const sameShare = 1e-9;
  * @param parts in the order of the files, probe after probe
  * @returns     stations in order of x; the parts of each in the order in which they came
  */
-export function groupByPosition(parts: readonly StationPart[]): StationPart[][] {
+export function groupByPosition<P extends { readonly origin: { readonly x: number } }>(
+  parts: readonly P[],
+): P[][] {
   const places = parts.map(({ origin }, order) => ({ x: origin.x, order }));
   places.sort((a, b) => a.x - b.x || a.order - b.order);
   const last = places.at(-1);

@@ -3,6 +3,7 @@ import type { DecaySettings } from "../core/decayResult.ts";
 import type { PlainFailure } from "../core/failure.ts";
 import type { Flag } from "../core/flag.ts";
 import type { Preview, ReadSettings, SourceNote } from "../core/records.ts";
+import type { LinePart } from "../core/station/lines/linePart.ts";
 import type { StationPart } from "../core/station/stationPart.ts";
 import type { ReduceSettings, StationResult } from "../core/stationResult.ts";
 
@@ -23,7 +24,10 @@ export interface Tasks {
   /** One file, read and reduced. A file may hold many stations, and a station many parts. */
   reduce: { ask: ReduceAsk; answer: FileReduction };
   /** All parts of one station, made into its result. */
-  finish: { ask: { parts: StationPart[]; reduce: ReduceSettings }; answer: StationResult };
+  finish: {
+    ask: { parts: StationPart[]; lineParts?: LinePart[]; reduce: ReduceSettings };
+    answer: StationResult;
+  };
   /** All that may take longer than a frame: automatic windows, comparison with resampling. */
   argue: { ask: ArgueAsk; answer: Argument };
 }
@@ -36,6 +40,8 @@ export interface ReduceAsk {
 
 export interface FileReduction {
   readonly parts: StationPart[];
+  /** Layout "lines": these in place of the parts. */
+  readonly lineParts?: LinePart[];
   /** Stations of a file that is already reduced (layout "profile"). */
   readonly stations: StationResult[];
   readonly sources: SourceNote[];

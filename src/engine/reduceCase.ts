@@ -2,6 +2,7 @@ import type { Place, PlainFailure } from "../core/failure.ts";
 import { assert, ReductionFailure } from "../core/failure.ts";
 import type { Flag } from "../core/flag.ts";
 import type { SourceNote } from "../core/records.ts";
+import type { LinePart } from "../core/station/lines/linePart.ts";
 import type { StationPart } from "../core/station/stationPart.ts";
 import { transferables } from "../core/station/stationPart.ts";
 import type { ReduceSettings, StationResult } from "../core/stationResult.ts";
@@ -109,16 +110,20 @@ function finishStations(
 ): Promise<Attempt<StationResult>[]> {
   const { cache, signal } = options;
   const keys = new Map(
-    read.flatMap(({ key, reduction }) => reduction.parts.map((part, i) => [part, `${key} ${i}`] as const)),
+    read.flatMap(({ key, reduction }) =>
+      [...reduction.parts, ...(reduction.lineParts ?? [])].map((part, i) => [part, `${key} ${i}`] as const),
+    ),
   );
   const groups = groupByPosition([...keys.keys()]);
-  const finish = async (parts: StationPart[]) => {
-    const key = parts.map((part) => keys.get(part)).join("\n"); // holds the settings: each file's key does
+  const finish = async (all: (StationPart | LinePart)[]) => {
+    const key = all.map((part) => keys.get(part)).join("\n"); // holds the settings: each file's key does
     const known = cache?.stations.get(key);
     if (known) return known;
     // parts that are kept are copied to the worker, others given away
-    const transfer = cache ? [] : parts.flatMap(transferables);
-    const made = await engine.run("finish", { parts, reduce }, { signal, transfer });
+    const transfer = cache ? [] : all.flatMap(transferables);
+    const lineParts = all.flatMap((part) => ("along" in part ? [part] : []));
+    const parts = all.flatMap((part) => ("along" in part ? [] : [part]));
+    const made = await engine.run("finish", { parts, lineParts, reduce }, { signal, transfer });
     cache?.stations.set(key, made);
     return made;
   };

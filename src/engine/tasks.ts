@@ -1,12 +1,14 @@
 import { argueCases } from "../core/compare/argueCases.ts";
 import { assertNever } from "../core/failure.ts";
+import { reduceLines } from "../core/station/lines/reduceLines.ts";
 import { reduceStation } from "../core/station/reduceStation.ts";
 import { transferables } from "../core/station/stationPart.ts";
 import type { ByteSource } from "../read/byteSource.ts";
 import { previewFile } from "../read/previewFile.ts";
 import type { ColumnStore } from "./columnStore.ts";
-import type { Ask, SourceFile, TaskName, Tasks } from "./protocol.ts";
+import type { Ask, FileReduction, ReduceAsk, SourceFile, TaskName, Tasks } from "./protocol.ts";
 import { reduceFile } from "./reduceFile.ts";
+import { reduceLineFile } from "./reduceLineFile.ts";
 import { reduceProfile } from "./reduceProfile.ts";
 
 /** What a worker has at hand: how a file is opened differs between a browser and Node. */
@@ -36,14 +38,13 @@ export async function answerAsk(ask: Ask, tools: Tools): Promise<Answered> {
       return { answer: await previewFile(tools.open(ask.ask.file), ask.ask.settings), transfer: [] };
     case "reduce": {
       const source = tools.open(ask.ask.file);
-      const answer =
-        ask.ask.read.layout === "profile"
-          ? await reduceProfile(source, ask.ask, tools.progress)
-          : await reduceFile(source, ask.ask, tools.columns, tools.progress);
-      return { answer, transfer: [...answer.parts, ...answer.stations].flatMap(transferables) };
+      const answer = await reduceSource(source, ask.ask, tools);
+      const given = [...answer.parts, ...(answer.lineParts ?? []), ...answer.stations];
+      return { answer, transfer: given.flatMap(transferables) };
     }
     case "finish": {
-      const answer = reduceStation(ask.ask.parts, ask.ask.reduce);
+      const { parts, lineParts = [], reduce } = ask.ask;
+      const answer = lineParts.length > 0 ? reduceLines(lineParts, reduce) : reduceStation(parts, reduce);
       return { answer, transfer: transferables(answer) };
     }
     case "argue": {
@@ -54,4 +55,12 @@ export async function answerAsk(ask: Ask, tools: Tools): Promise<Answered> {
     default:
       return assertNever(ask);
   }
+}
+
+/** A file of one layout, reduced. */
+function reduceSource(source: ByteSource, ask: ReduceAsk, tools: Tools): Promise<FileReduction> {
+  const { layout } = ask.read;
+  if (layout === "profile") return reduceProfile(source, ask, tools.progress);
+  if (layout === "lines") return reduceLineFile(source, ask, tools.progress);
+  return reduceFile(source, ask, tools.columns, tools.progress);
 }

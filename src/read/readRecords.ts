@@ -105,7 +105,7 @@ const headingsOf = (form: TableForm) =>
 const headingPlace = (form: TableForm) => ({ file: form.file, line: form.headingLine || form.firstLine });
 
 /** A table in which nothing was recognised. */
-function withoutVelocity(form: TableForm, message = "No velocity was recognised"): ReductionFailure {
+export function withoutVelocity(form: TableForm, message = "No velocity was recognised"): ReductionFailure {
   return new ReductionFailure(
     "no-velocity",
     {

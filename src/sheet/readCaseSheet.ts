@@ -24,7 +24,6 @@ export function readCaseSheet(text: string, file: string): ReadSheet {
   if (!result.success) throw invalid(result.issues, file);
   const sheet = result.output as CaseSheet;
   if (sheet.along === "t" && sheet.layout !== "profile") throw alongTime(file);
-  if (sheet.layout === "lines") throw linesNotRead(file);
   const warnings = unknownKeys(caseSheetSchema, value).map(
     (key) => `${file}: key ${key} is not known and was not used`,
   );
@@ -103,20 +102,6 @@ function alongTime(file: string): ReductionFailure {
       remedy: "Mend along or layout in the sheet.",
     },
     { file, key: "along" },
-  );
-}
-
-/** The format has line samples, and nothing here reads them: taken for time series, their numbers would be wrong. */
-function linesNotRead(file: string): ReductionFailure {
-  return new ReductionFailure(
-    "sheet-invalid",
-    {
-      message: "Line samples are not read yet",
-      found: '"lines"',
-      expected: 'layout "series" or "profile"',
-      remedy: "Reduce the lines to statistics and give these as a profile, or give time series of probes.",
-    },
-    { file, key: "layout" },
   );
 }
 

@@ -121,7 +121,6 @@ describe("a value that cannot be used is refused with file and key", () => {
     ["a segment that is no power of two", { ...least, reduce: { segment: 1000 } }, "reduce.segment"],
     ["a tolerance of zero", { ...least, compare: { tolerance: 0 } }, "compare.tolerance"],
     ["a decay in time of a series", { ...least, along: "t" }, "along"],
-    ["line samples, which nothing reads", { ...least, layout: "lines" }, "layout"],
     ["a list", [], "(the whole sheet)"],
   ])("%s", (_, value, key) => {
     const found = failure(JSON.stringify(value));

@@ -1,6 +1,7 @@
 import type { Flag } from "../flag.ts";
 import type { RecordOrigin } from "../records.ts";
 import type { BlockTable, StationResult } from "../stationResult.ts";
+import type { LinePart } from "./lines/linePart.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 
 export type Component = "u" | "v" | "w";
@@ -27,6 +28,8 @@ export interface StationPart {
   readonly bands: BandTable | null;
   /** Increments of u; left out of parts that were made without. */
   readonly increments?: IncrementTable | null;
+  /** A record that repeats itself: the time after which u comes back, and how much alike. */
+  readonly replay?: { readonly period: number; readonly peak: number } | null;
   readonly flags: readonly Flag[];
 }
 
@@ -79,7 +82,7 @@ export interface IncrementTable {
 }
 
 /** Every buffer of a part or a result, so that it crosses to another thread without being copied. */
-export function transferables(value: StationPart | StationResult): ArrayBuffer[] {
+export function transferables(value: StationPart | LinePart | StationResult): ArrayBuffer[] {
   const found = new Set<ArrayBuffer>();
   collect(value, found);
   return [...found];

@@ -77,7 +77,8 @@ export function startLines(grid: LineGrid): LineReducer {
         origin: { file: grid.file, x: places[s], position: grid.position },
         along: grid.along,
         components,
-        points,
+        // a part is given away with its buffers: none may be shared with another
+        points: points.slice(),
         across,
         snapshots: seen.snapshots,
         start: seen.start,

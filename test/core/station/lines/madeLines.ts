@@ -73,13 +73,15 @@ export type Snapshot = readonly [Float64Array, Float64Array, Float64Array];
 export function madeSnapshots({ along, size, spacing, kept = size, snapshots, lines = 1, seed }: LineWish) {
   const { gaussian } = seededRandom(seed);
   const form = { size, spacing, gaussian };
-  const folded = (E: Float64Array) =>
-    foldedSpectrum(interpolatedSpectrum(spectra.k1, E), Math.PI / spacing);
+  const folded = (E: Float64Array) => foldedSpectrum(interpolatedSpectrum(spectra.k1, E), Math.PI / spacing);
   const [longitudinal, transverse] = [folded(spectra.E11), folded(spectra.E22)];
   return Array.from({ length: snapshots }, (): Snapshot => {
     const all = [0, 1, 2].map(() => new Float64Array(lines * kept));
     for (let l = 0; l < lines; l++) {
-      const [a, b] = signalPair(gaussianCoefficients(longitudinal, form), gaussianCoefficients(transverse, form));
+      const [a, b] = signalPair(
+        gaussianCoefficients(longitudinal, form),
+        gaussianCoefficients(transverse, form),
+      );
       const [c] = signalPair(gaussianCoefficients(transverse, form), new Float64Array(2 * size));
       const order = along === "y" ? [b, a, c] : [b, c, a];
       order.forEach((values, i) => {
