@@ -19,8 +19,10 @@ export interface JoinedRecord {
   readonly start: number;
   /** Time recorded, all records together. */
   readonly duration: number;
-  /** Time that counts for sampling errors: that of one record where all were taken at once. */
+  /** Time that counts for sampling errors: that of one record where all were taken at once, of a replayed one its period. */
   readonly span: number;
+  /** How often that time is in the record: above 1 where it repeats itself. */
+  readonly repeats: number;
   /** Mean of each component, by length. */
   readonly means: readonly number[];
   readonly fields: readonly string[];
@@ -56,7 +58,7 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
     step,
     start: parts[0].start,
     duration: parts.reduce((sum, part) => sum + part.duration, 0),
-    span: together ? parts[0].duration : parts.reduce((sum, part) => sum + part.duration, 0),
+    ...independentTime(together ? [shortestReplay(parts)] : parts),
     means: components.map(
       (name) => parts.reduce((sum, part, p) => sum + part.samples * meanOf(part, wholes[p], name), 0) / total,
     ),
@@ -67,6 +69,20 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
       : places.flat().map((one) => [one]),
     blockSamples: parts[0].blocks.blockSamples,
   };
+}
+
+/** Of records taken at once, the one that comes back first. */
+function shortestReplay(parts: readonly StationPart[]): StationPart {
+  return parts.reduce((a, b) => ((b.replay?.period ?? Infinity) < (a.replay?.period ?? Infinity) ? b : a));
+}
+
+function independentTime(parts: readonly StationPart[]): Pick<JoinedRecord, "span" | "repeats"> {
+  const recorded = parts.reduce((sum, part) => sum + part.duration, 0);
+  const span = parts.reduce(
+    (sum, { replay, duration }) => sum + Math.min(duration, replay?.period ?? duration),
+    0,
+  );
+  return { span, repeats: recorded / span };
 }
 
 /** By file, then position, then time: never by arrival. */

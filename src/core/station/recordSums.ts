@@ -11,9 +11,11 @@ import {
 import { fillJoint, type JointLayout, jointLayout } from "../signal/jointMoments.ts";
 import { mergeJoint } from "../signal/mergeJoint.ts";
 import { blockFields, differenceFields } from "./blockFields.ts";
+import { CoarseSignal } from "./coarseSignal.ts";
 import { addDifferences } from "./differenceSums.ts";
 import { notFinite } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
+import { replayPeriod } from "./replayPeriod.ts";
 import { SpectralSums } from "./spectralSums.ts";
 import type { Component, StationPart } from "./stationPart.ts";
 
@@ -57,6 +59,7 @@ export class RecordSums {
   private known = 0;
   /** Σ of the equally spaced samples. */
   private readonly totals: number[];
+  private readonly coarse: CoarseSignal;
 
   constructor(plan: RecordPlan, origin: RecordOrigin, components: readonly Component[]) {
     this.plan = plan;
@@ -70,6 +73,7 @@ export class RecordSums {
     this.spectral = new SpectralSums(plan, components.length);
     this.blocks = startBlocks(plan.blockSamples, [this.moments, ...this.spectral.series]);
     this.spectral.open(this.blocks);
+    this.coarse = new CoarseSignal(coarseLength(plan));
   }
 
   /** @throws not-a-number */
@@ -83,6 +87,7 @@ export class RecordSums {
     const row = blockRow(this.moments, this.blocks.current);
     mergeJoint(row, chunkRow, layout);
     if (moments !== null) this.addTotals(columns, count);
+    this.coarse.add(columns[0], history, history + count);
     let from = 0;
     for (const seam of [...chunk.seams, count]) {
       if (seam > from) this.takeRun(columns, from, seam, row);
@@ -114,6 +119,13 @@ export class RecordSums {
     });
   }
 
+  /** Whether the record comes back, and after which time. */
+  private replay(): Required<StationPart>["replay"] {
+    const { points, length } = this.coarse.finish();
+    const found = replayPeriod(points);
+    return found && { period: found.period * length * this.plan.step, peak: found.peak };
+  }
+
   part(facts: PartFacts): StationPart {
     const { plan, components, blocks } = this;
     const { rows } = blocks;
@@ -133,9 +145,16 @@ export class RecordSums {
       ...facts,
       plan,
       blocks: table,
+      replay: this.replay(),
       ...tables,
     };
   }
+}
+
+/** Samples in a point of the coarse signal: a third of the integral time or less. */
+function coarseLength({ integralTime, lagLimit, step }: RecordPlan): number {
+  const time = integralTime === null ? lagLimit / 16 : integralTime / step;
+  return Math.max(1, Math.floor(time / 3));
 }
 
 /** Joint moments, and the sums of differences behind them in the same row. */

@@ -17,6 +17,9 @@ export interface Sampling {
 /** Shortest record that is given intervals, in integral times. */
 export const shortestRecord = 100;
 
+/** Groups that a period of a replayed record must hold. */
+const fewestInPeriod = 5;
+
 /**
  * Groups for the jackknife, and the error of the integral scale by its own law,
  *     se(ln L11) = √(4 τ* / T),
@@ -29,13 +32,19 @@ export function sampling(record: JoinedRecord, times: IntegralTimes): Sampling {
   }
   const integralTimes = record.span / times.scale;
   if (integralTimes < shortestRecord) {
-    const why = `the record is ${integralTimes.toFixed(0)} integral times long; ${shortestRecord} are needed`;
+    const what = record.repeats > 1 ? "one period of the replayed record" : "the record";
+    const why = `${what} is ${integralTimes.toFixed(0)} integral times long; ${shortestRecord} are needed`;
     return { integralTimes, groups: null, scaleError: null, why };
   }
   const groups = groupBlocks(
     Float64Array.from(record.rows, (row) => row[0]),
     integralTimes,
+    record.repeats,
   );
+  if (record.repeats > 1 && groups.count < fewestInPeriod * record.repeats) {
+    const why = `the record repeats itself ${record.repeats.toFixed(0)} times: its blocks are too long against one period`;
+    return { integralTimes, groups: null, scaleError: null, why };
+  }
   const reach = times.tauStar ?? 2 * times.scale;
   return {
     integralTimes,

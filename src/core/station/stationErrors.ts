@@ -15,6 +15,8 @@ export interface Replicates {
   readonly whole: StationValues;
   readonly without: readonly StationValues[];
   readonly weights: Float64Array;
+  /** How often the record repeats itself; 1: not at all. */
+  readonly repeats: number;
   /** Why there is no interval; null where there is one. */
   readonly why: string | null;
 }
@@ -33,7 +35,7 @@ export function replicates(
   const total = new Float64Array(rows[0].length);
   for (const row of rows) for (let i = 0; i < total.length; i++) total[i] += row[i];
   const whole = stationValues(total, context);
-  if (groups === null) return { whole, without: [], weights: new Float64Array(0), why };
+  if (groups === null) return { whole, without: [], weights: new Float64Array(0), repeats: 1, why };
   const weights = new Float64Array(groups.count);
   const without = Array.from({ length: groups.count }, (_, group) => {
     const rest = total.slice();
@@ -44,11 +46,19 @@ export function replicates(
     });
     return stationValues(rest, context);
   });
-  return { whole, without, weights, why: null };
+  return { whole, without, weights, repeats: groups.repeats, why: null };
 }
 
-/** The 95 % interval of a value, by the jackknife on its own scale; null where none can be had. */
-export function valueError(name: ValueName, { whole, without, weights }: Replicates): StandardError | null {
+/**
+ * The error of a value, by the jackknife on its own scale; null where none can be had. Of a record that repeats
+ * itself r times in B groups it is that of one period,
+ *     se √(r/(1 - r/B)),  with B/r - 1 degrees of freedom,
+ * for a group is r/B of all that there is.
+ */
+export function valueError(
+  name: ValueName,
+  { whole, without, weights, repeats }: Replicates,
+): StandardError | null {
   const scale = valueScales[name];
   const on = (value: number) => (scale === "log" ? Math.log(value) : value);
   const error = jackknife(
@@ -56,7 +66,10 @@ export function valueError(name: ValueName, { whole, without, weights }: Replica
     without.map((values) => on(values[name])),
     weights,
   );
-  return error === null ? null : { ...error, scale };
+  if (error === null || repeats <= 1) return error && { ...error, scale };
+  const groups = without.length;
+  const standard = error.standard * Math.sqrt(repeats / (1 - repeats / groups));
+  return { standard, freedom: Math.max(1, groups / repeats - 1), scale };
 }
 
 /**

@@ -41,6 +41,7 @@ export function stationFlags(material: StationMaterial, facts: FlagFacts): Flag[
     ...componentFlags(material),
     ...taylorFlags(material, facts),
     ...spectrumFlags(material, facts),
+    ...replayFlags(material),
     ...joinFlags(material),
   ];
   return flags.filter((flag, i) => flags.findIndex((other) => other.code === flag.code) === i);
@@ -140,6 +141,15 @@ function risingSlope({ size, segments }: { size: number; segments: number }): nu
   const bins = size / 6;
   const spread = 0.117;
   return 0.1 + (3 * Math.sqrt(38 / (36 * segments * bins))) / spread;
+}
+
+function replayFlags({ record, times }: StationMaterial): Flag[] {
+  const found = record.parts.flatMap(({ replay }) => replay ?? []);
+  if (found.length === 0) return [];
+  const [{ period, peak }] = found;
+  const scales = times.scale === null ? "" : `, ${(period / times.scale).toFixed(0)} integral times`;
+  const text = `u comes back after ${period.toPrecision(4)} of time${scales}, with a correlation of ${peak.toFixed(2)}: the inflow is replayed, and the record counts as one period.`;
+  return [{ code: "replayed-inflow", text, value: period }];
 }
 
 function joinFlags({ record, times }: StationMaterial): Flag[] {
