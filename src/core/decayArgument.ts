@@ -154,8 +154,8 @@ export interface BodyArgument {
   };
   /** Where both targets are missed least, and by what factor each is; null without two targets. */
   readonly both: { readonly x: Quantity; readonly Tu: number; readonly L11_chord: number } | null;
-  /** Intensity at the first station that would bring the target to the body, on a law of the same n and x0. */
-  readonly inflow: { readonly x: number; readonly Tu: Quantity; readonly extrapolated: boolean } | null;
+  /** Intensity at the first station that would bring the target to the body on a law of the same n and x0: extrapolated. */
+  readonly inflow: { readonly x: number; readonly Tu: Quantity; readonly extrapolated: true } | null;
 }
 export const bodyKeys = ["Tu", "L11", "lambda", "Re_lambda", "isotropy_uv", "isotropy_uw"] as const;
 export type BodyKey = (typeof bodyKeys)[number];

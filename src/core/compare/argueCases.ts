@@ -1,4 +1,5 @@
 import type { CaseInput, CompareSettings, Comparison } from "../comparison.ts";
+import { argueDecay } from "../decay/argueDecay.ts";
 import { deriveStations } from "../decay/deriveStations.ts";
 import { fitDecay } from "../decay/fitDecay.ts";
 import type { DecaySettings } from "../decayResult.ts";
@@ -13,8 +14,8 @@ export interface ReducedCase {
 }
 
 /**
- * Everything that follows from reduced stations: each case's law is fitted, what the law fixes is derived from it, and
- * the cases are compared with the first.
+ * Everything that follows from reduced stations: each case's law is fitted, what the law fixes is derived from it, all
+ * that speaks for and against the law is gathered, and the cases are compared with the first.
  * @param cases   stations as reduction left them, in any order; they come back in order of x
  * @param compare alignment and tolerance
  */
@@ -25,7 +26,9 @@ export function argueCases(
   const argued = cases.map(({ name, stations, settings }): CaseInput => {
     const inOrder = [...stations].sort((a, b) => a.x - b.x);
     const decay = fitDecay(inOrder, settings);
-    return { name, stations: deriveStations(inOrder, decay, settings), decay, decaySettings: settings };
+    const derived = deriveStations(inOrder, decay, settings);
+    const argument = argueDecay(derived, decay, settings, { tolerance: compare.tolerance });
+    return { name, stations: derived, decay: { ...decay, argument }, decaySettings: settings };
   });
   return { cases: argued, comparisons: compareCases(argued, compare) };
 }

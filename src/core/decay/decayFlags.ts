@@ -3,12 +3,11 @@ import type { Flag } from "../flag.ts";
 import { isEstimate } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import type { ChosenWindow } from "./chooseWindow.ts";
+import { steadySpeed } from "./flightFit.ts";
 
 /** Below this ratio of the last x - x0 to the first, n and x0 are hardly told apart. */
 const shortSpan = 4;
 const fewStations = 5;
-/** Share by which U may vary before the time of flight is the better coordinate. */
-const steadySpeed = 0.01;
 
 /** All doubts about one case's decay, each with its figure. */
 export function decayFlags(

@@ -3,17 +3,17 @@ import { missing, scaled } from "../quantity.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type ChosenWindow, chooseWindow } from "./chooseWindow.ts";
-import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
+import { commonBlocks } from "./commonBlocks.ts";
 import { decayFlags } from "./decayFlags.ts";
 import { type DecayPoints, decayPoints, decaySpeed, type RawPoint } from "./decayPoints.ts";
 import { epsilonRoute } from "./epsilonRoute.ts";
 import { fitWindow, inflation, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
 import { growthExponent } from "./growthExponent.ts";
 import { hypotheses } from "./hypotheses.ts";
-import { jackknifeLaw } from "./jackknifeLaw.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
 import { laterWindows } from "./laterWindows.ts";
 import { unionOfWindows } from "./unionOfWindows.ts";
+import { withCommonBlocks } from "./withCommonBlocks.ts";
 
 /**
  * The decay of one case: its window, the law q = A ((x - x0)/ell)^(-n) fitted there with the intervals of n, x0
@@ -35,7 +35,7 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
   const perSpeed = 1 / (speed ?? 1) ** 2;
   const blocks = commonBlocks(usedStations, found, settings);
   const candidates = settings.window === "auto" ? laterWindows(points, window, settings) : [window.fitted];
-  const windows = candidates.map((fitted, from) => withBlocks(fitted, blocks, from));
+  const windows = candidates.map((fitted, from) => withCommonBlocks(fitted, blocks, from));
   const [fitted] = windows;
   const law = "refused" in fitted ? null : powerLaw(fitted, perSpeed);
   const result: DecayResult = {
@@ -105,17 +105,6 @@ function numbers(windows: readonly (WindowFit | Refusal)[], perSpeed: number) {
     iterations: fit.iterations,
     converged: fit.converged,
   };
-}
-
-/** A window's law with what its common blocks tell; `from`: its first station among those of the blocks. */
-function withBlocks(
-  fitted: WindowFit | Refusal,
-  blocks: CommonBlocks | null,
-  from: number,
-): WindowFit | Refusal {
-  if (blocks === null || "refused" in fitted) return fitted;
-  const together = jackknifeLaw(fitted, blocks, from);
-  return together === null ? fitted : { ...fitted, together };
 }
 
 function powerLaw(window: WindowFit, perSpeed: number): PowerLaw {

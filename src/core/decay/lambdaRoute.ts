@@ -1,16 +1,14 @@
 import type { DecayResult, DecaySettings } from "../decayResult.ts";
-import { estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
+import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { decayQuantity, decayValue } from "./decayQuantity.ts";
 import { relativeError } from "./relativeError.ts";
-import { type StraightLine, straightLine } from "./straightLine.ts";
+import { relativeLine, zeroOfLine } from "./relativeLine.ts";
+import type { StraightLine } from "./straightLine.ts";
 
 type Route = DecayResult["lambda_route"];
-
-/** Rounds in which the errors of Lambda² are referred to the line itself. */
-const rounds = 3;
 
 /**
  * Origin and exponent from the growth of the Taylor microscale, without the decay law: on it
@@ -50,7 +48,10 @@ export function lambdaRoute(stations: readonly StationResult[], settings: DecayS
   const known = errors.length === points.length && chiSquareTail(line.sum, line.freedom) >= 0.05;
   const variance = known ? 1 : line.sum / line.freedom;
   const quantile = studentQuantile(0.975, known ? null : line.freedom);
-  return { n: exponent(line, (10 * nu) / U, quantile, variance), x0: zero(line, quantile, variance) };
+  return {
+    n: exponent(line, (10 * nu) / U, quantile, variance),
+    x0: zeroOfLine(line, quantile, variance, "the slope of Lambda² is not told from zero: any origin fits"),
+  };
 }
 
 /** A filtered spectrum loses a share of the gradients that changes along the stream: the line would be confidently wrong. */
@@ -66,31 +67,6 @@ function meanSpeed(stations: readonly StationResult[], { along }: DecaySettings)
   return speeds.length === 0 ? null : speeds.reduce((sum, speed) => sum + speed, 0) / speeds.length;
 }
 
-/** A line through values whose relative errors are known: the errors are taken of the line, not of its scatter. */
-function relativeLine(
-  x: readonly number[],
-  y: readonly number[],
-  errors: readonly number[] | null,
-): StraightLine | null {
-  if (errors === null) return straightLine(x, y, null);
-  let line = straightLine(
-    x,
-    y,
-    errors.map((error, i) => error * y[i]),
-  );
-  for (let round = 0; round < rounds && line !== null; round++) {
-    const { intercept, slope } = line;
-    const expected = x.map((at) => intercept + slope * at);
-    if (expected.some((value) => !(value > 0))) break;
-    line = straightLine(
-      x,
-      y,
-      errors.map((error, i) => error * expected[i]),
-    );
-  }
-  return line;
-}
-
 /** n = (10 nu/U)/slope; open above where a slope of zero lies within the interval. */
 function exponent(line: StraightLine, numerator: number, quantile: number, variance: number): Quantity {
   const reach = quantile * Math.sqrt(variance * line.varianceOfSlope);
@@ -102,20 +78,4 @@ function exponent(line: StraightLine, numerator: number, quantile: number, varia
     high,
     ...(high === null ? { why_high: "a Lambda² that does not grow at all is not excluded" } : {}),
   };
-}
-
-/** Where the line is zero: all x0 for which |intercept + slope x0| is within its own error (Fieller). */
-function zero(line: StraightLine, quantile: number, variance: number): Quantity {
-  const { intercept, slope } = line;
-  const value = -intercept / slope;
-  const factor = quantile ** 2 * variance;
-  const a = slope ** 2 - factor * line.varianceOfSlope;
-  const half = intercept * slope - factor * line.covariance;
-  const c = intercept ** 2 - factor * line.varianceOfIntercept;
-  if (!(a > 0)) {
-    const why = "the slope of Lambda² is not told from zero: any origin fits";
-    return { value, low: null, high: null, why_low: why, why_high: why };
-  }
-  const root = Math.sqrt(Math.max(half ** 2 - a * c, 0));
-  return estimate(value, (-half - root) / a, (-half + root) / a);
 }

@@ -44,3 +44,14 @@ export function lawVariance({ covariance, x0, n, length }: PowerLaw, x: number, 
     for (let column = 0; column < 3; column++) sum += by[row] * covariance[3 * row + column] * by[column];
   return Math.max(sum, 0);
 }
+
+/** Variance of ln q(to) - ln q(from), both of one law and above its origin. */
+export function lawChangeVariance({ covariance, x0, n }: PowerLaw, from: number, to: number): number {
+  const byOrigin = n / (to - x0) - n / (from - x0);
+  const byExponent = -Math.log((to - x0) / (from - x0));
+  const sum =
+    byOrigin ** 2 * covariance[4] +
+    2 * byOrigin * byExponent * covariance[5] +
+    byExponent ** 2 * covariance[8];
+  return Math.max(sum, 0);
+}

@@ -20,6 +20,12 @@ describe("the automatic window", () => {
     const ten = xs.slice(0, 10);
     const { n } = fitPowerLaw({ x: ten, q: ten.map(nearField), error: null });
     expectClose(n, 1.5, { absolute: 0.01, because: "the near field as it was designed" });
+    // R² of the straight line in ln(x - x0), which tells nothing
+    const { residualSum } = fitPowerLaw({ x: ten, q: ten.map(nearField), error: null });
+    const logs = ten.map((x) => Math.log(nearField(x)));
+    const mean = logs.reduce((sum, value) => sum + value / 10, 0);
+    const spread = logs.reduce((sum, value) => sum + (value - mean) ** 2, 0);
+    expectClose(1 - residualSum / spread, 0.9995, { absolute: 0.0003, because: "no misfit to be seen" });
   });
   it.each([1, 2, 3, 4, 5, 6])("leaves a near field of 100 % (seed %d)", (seed) => {
     const decay = fitDecay(stations(nearField, 0.005, seed), plainSettings);
@@ -27,6 +33,16 @@ describe("the automatic window", () => {
     expect(decay.window[1]).toBe(100);
     expect(decay.n.value).toBeLessThan(1.35);
     expect(decay.windowReason).toMatch(/p = /);
+  });
+  it("is never those ten, nor begins among the first three of them, in 200 draws", () => {
+    let beyond = 0;
+    for (let seed = 1; seed <= 200; seed++) {
+      const { window } = fitDecay(stations(nearField, 0.005, seed), plainSettings);
+      expect(window[0]).toBeGreaterThan(xs[2]);
+      if (window[1] > xs[9]) beyond++;
+    }
+    // a run of six within the ten passes the test once in a thousand
+    expect(beyond).toBeGreaterThanOrEqual(198);
   });
   it("keeps all stations of a pure law 95 times in 100", () => {
     let all = 0;
