@@ -3,6 +3,7 @@ import type { ByteSource } from "./byteSource.ts";
 import { parseNumber } from "./parseNumber.ts";
 import { type Head, readHead } from "./readHead.ts";
 import type { RecognisedColumns } from "./recogniseColumns.ts";
+import { looksLikeLines } from "./recogniseLines.ts";
 import { recognisePosition, tidyLength } from "./recognisePosition.ts";
 import { recogniseStep } from "./recogniseStep.ts";
 import { surveyTable, type TableForm } from "./surveyTable.ts";
@@ -40,7 +41,7 @@ export async function previewFile(
     separator: form.separator,
     decimal: form.decimal,
     heading: form.headingLine,
-    layout: seen.layout,
+    layout: layoutOf(form, columns, seen, layout),
     columns,
     firstRows: form.headRows.slice(0, shownRows),
     comments: form.comments,
@@ -49,6 +50,18 @@ export async function previewFile(
     estimatedRows: estimateRows(head, form),
     ...(seen.clashes.length > 0 ? { clashes: seen.clashes } : {}),
   };
+}
+
+/** Lines are told by their rows alone: their headings are those of records. */
+function layoutOf(
+  form: TableForm,
+  columns: Preview["columns"],
+  seen: RecognisedColumns,
+  given: Preview["layout"] | null,
+): Preview["layout"] {
+  if (given !== null || seen.layout !== "series") return seen.layout;
+  const roles = columns.map(({ role }) => role);
+  return looksLikeLines(form, roles) ? "lines" : "series";
 }
 
 /** Choices of the settings go before what was recognised. */

@@ -73,17 +73,22 @@ function has({ columns }: Preview, role: Role): boolean {
   return columns.some((column) => column.role === role);
 }
 
-/** The layout of most files; where they are even, that of the records. */
+/** The layout of most files; where they are even, series before lines before profile. */
 function commonLayout(tables: readonly Preview[]): CaseSheet["layout"] {
-  const profiles = tables.filter(({ layout }) => layout === "profile").length;
-  return 2 * profiles > tables.length ? "profile" : "series";
+  const count = (layout: CaseSheet["layout"]) => tables.filter((table) => table.layout === layout).length;
+  const layouts = ["series", "lines", "profile"] as const;
+  return layouts.reduce((most, layout) => (count(layout) > count(most) ? layout : most));
 }
+
+const layoutNames = {
+  series: ["a time series", "time series"],
+  lines: ["a table of lines", "tables of lines"],
+  profile: ["a profile", "profiles"],
+} as const;
 
 function whyNot(table: Preview, layout: CaseSheet["layout"]): string {
   if (isRecognised(table)) {
-    return layout === "series"
-      ? "It is a profile among time series: drop it in a folder of its own."
-      : "It is a time series among profiles: drop it in a folder of its own.";
+    return `It is ${layoutNames[table.layout][0]} among ${layoutNames[layout][1]}: drop it in a folder of its own.`;
   }
   const headings = table.columns.map(({ heading }) => heading).filter((heading) => heading !== "");
   const seen = headings.length > 0 ? `its headings are ${headings.join(", ")}` : "it has no headings";

@@ -20,6 +20,8 @@ export function positionQuestions(
     if (sheet.files[i].x === null && preview.position.source === null && !sheet.columns?.x) {
       questions.push({ key: "files.x", file });
     }
+    // a snapshot has a time and no step
+    if (sheet.layout === "lines") return questions;
     const timed = preview.columns.some(({ role }) => role === "t") || sheet.columns?.t !== undefined;
     if (!timed && preview.step === null && sheet.read.step === null)
       questions.push({ key: "read.step", file });

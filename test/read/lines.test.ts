@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import type { LineGrid } from "../../src/core/station/lines/linePart.ts";
+import { previewFile } from "../../src/read/previewFile.ts";
 import { readLines } from "../../src/read/readLines.ts";
 import { failureOf, plainSettings, sourceOf } from "./support.ts";
 
@@ -88,5 +89,35 @@ describe("lines read from a table", () => {
     const rows = [1, 2].flatMap((x) => ys.map((y) => `${x},${y},0,1`));
     const found = await failureOf(taken(`x,y,t,u\n${rows.join("\n")}\n`, {}, { x: 1 }));
     expect([found.code, found.where.column]).toEqual(["ambiguous-columns", 1]);
+  });
+});
+
+describe("a first look takes a table for lines", () => {
+  const many = Array.from({ length: 20 }, (_, i) => i * 0.5);
+  const seen = async (text: string) => (await previewFile(sourceOf("x0200mm.csv", text))).layout;
+  const from = (rows: readonly string[]) => `y,t,u\n${rows.join("\n")}\n`;
+
+  it("where many equally spaced y stand at one time, snapshot by snapshot or point by point", async () => {
+    expect(await seen(from(rowsOf([0, 1, 2], many)))).toBe("lines");
+    const rows = many.flatMap((y) => [0, 1, 2].map((t) => `${y},${t},${y + t}`));
+    expect(await seen(from(rows))).toBe("lines");
+  });
+
+  it("and where a comment tells the time of one snapshot", async () => {
+    expect(await seen(`# t = 0.3 s\ny,u\n${many.map((y) => `${y},1`).join("\n")}\n`)).toBe("lines");
+  });
+
+  it("and no rake of a few probes, nor probes that are unequally spaced", async () => {
+    expect(await seen(from(rowsOf(times, [0, 1, 2, 3])))).toBe("series");
+    expect(
+      await seen(
+        from(
+          rowsOf(
+            times,
+            many.map((y) => y * y),
+          ),
+        ),
+      ),
+    ).toBe("series");
   });
 });
