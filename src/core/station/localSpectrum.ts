@@ -9,11 +9,12 @@ const fewestBands = 3;
 /**
  * Local log-log slope of E11, and the lateral spectrum that follows from it if the flow is isotropic,
  *     E22 = (E11 - k1 dE11/dk1)/2 = E11 (1 - slope)/2
- * From bands of a twentieth of a decade: a straight line through those within an eighth of a decade of each, every
- * band weighing as the number of its points. The raw estimate is never differentiated.
+ * From bands of a twentieth of a decade: a straight line through those within an eighth of a decade of each, all
+ * weighing alike, so that a spectrum that curves has the slope of its middle. The raw estimate is never
+ * differentiated.
  * @param k1   wavenumbers, rad/m, equally spaced, ascending, the first the spacing
  * @param E11  one-sided spectra at them, m³/s²; E22, E33 measured, null where they are not
- * @returns    points where three bands or more lie within reach and the spectrum is positive; none otherwise
+ * @returns    points with at least three positive bands within reach, and a whole reach on either side
  * @see   Pope (2000) eq. (6.218)
  */
 export function localSpectrum(
@@ -26,13 +27,15 @@ export function localSpectrum(
   const bands = borders.slice(1).map((end, b) => {
     const [from, to] = [borders[b] - 1, end - 1];
     const of = (E: Float64Array | null) => (E === null ? 0 : mean(E, from, to));
-    return { weight: to - from, x: Math.log(mean(k1, from, to)), E11: of(E11), E22: of(E22), E33: of(E33) };
+    return { x: Math.log(mean(k1, from, to)), E11: of(E11), E22: of(E22), E33: of(E33) };
   });
+  const [first, last] = [bands[0]?.x ?? 0, bands.at(-1)?.x ?? 0];
   const points = bands.flatMap((band) => {
+    if (band.x - first < halfWindow || last - band.x < halfWindow * 0.999) return [];
     const near = bands.filter(({ x, E11: E }) => E > 0 && Math.abs(x - band.x) <= halfWindow * (1 + 1e-9));
     if (!(band.E11 > 0) || near.length < fewestBands) return [];
-    const { slope, level } = lineAt(near, band.x);
-    return [{ ...band, slope, isotropic: (level * (1 - slope)) / 2 }];
+    const slope = slopeOf(near);
+    return [{ ...band, slope, isotropic: (band.E11 * (1 - slope)) / 2 }];
   });
   const curve = (value: (point: (typeof points)[number]) => number) => Float64Array.from(points, value);
   return {
@@ -51,17 +54,13 @@ function mean(values: Float64Array, from: number, to: number): number {
   return sum / (to - from);
 }
 
-/** Weighted straight line of ln E in ln k: its slope, and e to its value at x. */
-function lineAt(bands: readonly { weight: number; x: number; E11: number }[], x: number) {
-  let [weight, sx, sy, sxx, sxy] = [0, 0, 0, 0, 0];
-  for (const band of bands) {
-    const [dx, y] = [band.x - x, Math.log(band.E11)];
-    weight += band.weight;
-    sx += band.weight * dx;
-    sy += band.weight * y;
-    sxx += band.weight * dx * dx;
-    sxy += band.weight * dx * y;
+/** Slope of ln E11 in ln k by least squares. */
+function slopeOf(bands: readonly { x: number; E11: number }[]): number {
+  const centre = bands.reduce((sum, { x }) => sum + x, 0) / bands.length;
+  let [square, product] = [0, 0];
+  for (const { x, E11 } of bands) {
+    square += (x - centre) ** 2;
+    product += (x - centre) * Math.log(E11);
   }
-  const slope = (weight * sxy - sx * sy) / (weight * sxx - sx * sx);
-  return { slope, level: Math.exp((sy - slope * sx) / weight) };
+  return product / square;
 }
