@@ -6,6 +6,8 @@ import { program } from "../core/program.ts";
 import type { Quantity } from "../core/quantity.ts";
 import type { SourceNote } from "../core/records.ts";
 import type { StationResult } from "../core/stationResult.ts";
+import { plainArgument } from "./plainArgument.ts";
+import { type PlainQuantity, plainQuantity } from "./plainQuantity.ts";
 
 /** One case on its way into the results file. */
 export interface ResultCase {
@@ -16,11 +18,6 @@ export interface ResultCase {
   /** Doubts about the case as a whole, beside those of its decay. */
   readonly flags: readonly Flag[];
 }
-
-/** A value as scripts read it: plain numbers, an interval or a reason for none. */
-export type PlainQuantity =
-  | { value: number; low: number | null; high: number | null; why_low?: string; why_high?: string }
-  | { value: null; why: string };
 
 export type ResultsFile = ReturnType<typeof resultsFile>;
 
@@ -56,7 +53,7 @@ export const stationQuantities = [
 
 /**
  * Everything that was found, for scripts: one object per case, one per comparison.
- * `scan`, `development` and `body` are objects whose keys are quantities; without keys where nothing was found.
+ * `scan`, `development` and `body` are empty objects where nothing was asked for or found.
  * @param cases       in the order of the sheets
  * @param comparisons every later case against the first
  */
@@ -75,29 +72,17 @@ export function resultsText(file: ResultsFile): string {
   return `${JSON.stringify(file, null, 1)}\n`;
 }
 
-/** A quantity without what only the program needs. */
-export function plainQuantity(quantity: Quantity): PlainQuantity {
-  if (quantity.value === null) return { value: null, why: quantity.why };
-  const { value, low, high, why_low, why_high } = quantity;
-  return {
-    value,
-    low,
-    high,
-    ...(low === null && why_low !== undefined ? { why_low } : {}),
-    ...(high === null && why_high !== undefined ? { why_high } : {}),
-  };
-}
-
 function plainCase({ argued, settings, sources, flags }: ResultCase) {
+  const further = plainArgument(argued.decay.argument);
   return {
     case: argued.name,
     settings,
     sources: sources.map(({ name, bytes, x, position }) => ({ name, bytes, x, position })),
     stations: argued.stations.map(plainStation),
-    decay: plainDecay(argued.decay),
-    scan: {},
-    development: {},
-    body: {},
+    decay: { ...plainDecay(argued.decay), ...further.decay },
+    scan: further.scan,
+    development: further.development,
+    body: further.body,
     flags: [...flags, ...argued.decay.flags].map(plainFlag),
   };
 }
@@ -140,6 +125,7 @@ function plainDecay(decay: DecayResult) {
     epsilon_route: plainEach(decay.epsilon_route),
     growth: plainEach(decay.growth),
     hypotheses: decay.hypotheses.map(({ name, n, p }) => ({ name, n, p })),
+    together: decay.together ?? null,
   };
 }
 

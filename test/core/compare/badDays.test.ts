@@ -51,6 +51,13 @@ const settings: fc.Arbitrary<DecaySettings> = fc
     referenceSpeed: fc.constantFrom(null, 6),
     kinematicViscosity: fc.constantFrom(null, 1.5e-5),
     kind: fc.constantFrom(null, "les" as const),
+    extent: fc.constantFrom(null, 0.3),
+    body: fc.constantFrom(
+      null,
+      { x: 4, chord: null, Tu: null, L11: null },
+      { x: 7, chord: 1, Tu: 0.05, L11: 0.3 },
+      { x: -9, chord: 40, Tu: 1e-4, L11: 1e3 },
+    ),
   })
   .map((choice) => ({ ...plainSettings, ...choice }));
 const aCase = fc.record({
