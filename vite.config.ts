@@ -43,11 +43,15 @@ function policyTag(): Plugin {
 
 const isDemoFile = (name: string) => [".csv", ".json"].includes(extname(name)) && !name.startsWith("truth");
 
+/** The simulation once more, as lines: for whoever wants lines to try, and not a fourth case of the demo. */
+const isOfLines = (name: string) => name.startsWith("simulation-lines");
+
 /** Every demo file below sample-data, as paths relative to it. */
 function demoFiles(folder = samples): string[] {
   if (!existsSync(folder)) return [];
   return readdirSync(folder)
     .sort()
+    .filter((name) => !isOfLines(name))
     .flatMap((name) => {
       const path = join(folder, name);
       if (statSync(path).isDirectory()) return demoFiles(path);

@@ -1,9 +1,11 @@
 import { readdirSync, readFileSync, statSync } from "node:fs";
 import { join, relative, resolve } from "node:path";
+import { reduceLines } from "../../src/core/station/lines/reduceLines.ts";
 import { reduceStation } from "../../src/core/station/reduceStation.ts";
 import type { StationResult } from "../../src/core/stationResult.ts";
 import { memoryColumnStore } from "../../src/engine/columnStore.ts";
 import { reduceFile } from "../../src/engine/reduceFile.ts";
+import { reduceLineFile } from "../../src/engine/reduceLineFile.ts";
 import { reduceProfile } from "../../src/engine/reduceProfile.ts";
 import { fileSource } from "../../src/engine/threadFile.ts";
 import type { CaseSheet } from "../../src/sheet/caseSheet.ts";
@@ -28,6 +30,9 @@ export async function reduceSheet(name: string): Promise<{ sheet: CaseSheet; sta
     const ask = { file: content, read: readSettings(sheet, file), reduce };
     if (sheet.layout === "profile") {
       stations.push(...(await reduceProfile(source, ask, () => {})).stations);
+    } else if (sheet.layout === "lines") {
+      const { lineParts = [] } = await reduceLineFile(source, ask, () => {});
+      stations.push(reduceLines(lineParts, reduce));
     } else {
       const { parts } = await reduceFile(source, ask, memoryColumnStore(1 << 27), () => {});
       stations.push(reduceStation(parts, reduce));

@@ -26,25 +26,27 @@ export function lateralScales(
   if (!(covariance[c][0] > 0)) return noScale("the fluctuation is zero");
   const size = lines.points.length;
   const found = inSpace(integralTimes(correlation, { step, size, segments, density: [density[c]] }, adopted));
-  return found.tauStar === null ? toHalfLine(found, covariance[c], step, adopted) : found;
+  return found.tauStar === null ? toHalfLine(found, covariance[c], spectra, adopted) : found;
 }
 
-/** Correlation at half the length of a periodic line below which the rest of the integral is little. */
+/** Correlation at half the length of a line below which the rest of the integral is little. */
 const fallen = 0.1;
 
 /**
  * A periodic line has no separation beyond half its length, another only poor ones: a correlation that is next to
- * nothing there, and has not crossed zero, is integrated up to it.
+ * nothing there, or not above its own scatter of √(2 L/total length) by twice as much, and has not crossed zero, is
+ * integrated up to it.
  */
 function toHalfLine(
   found: LineScales,
   covariance: Float64Array,
-  step: number,
+  { step, lines, length }: LineSpectra,
   adopted: ReduceSettings["integralScale"],
 ): LineScales {
   const half = covariance.length - 1;
-  if (!(covariance[half] < fallen * covariance[0])) return found;
   const area = (areaUpTo(covariance, half) / covariance[0]) * step;
+  const scatter = Math.sqrt((2 * area) / (lines * length));
+  if (!(covariance[half] < (fallen + 2 * scatter) * covariance[0])) return found;
   const routes = { ...found.routes, "zero-crossing": area };
   const chosen = routes[adopted];
   return { routes, tauStar: half * step, scale: typeof chosen === "number" ? chosen : area, toHalf: true };

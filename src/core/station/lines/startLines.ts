@@ -93,7 +93,8 @@ export function startLines(grid: LineGrid): LineReducer {
           fields,
         },
         memory: memory.of(s),
-        single: single === null ? null : single.map((column) => column.slice(s * perStation, (s + 1) * perStation)),
+        single:
+          single === null ? null : single.map((column) => column.slice(s * perStation, (s + 1) * perStation)),
         ...totals(),
         flags: [],
       })),
