@@ -53,6 +53,17 @@ export interface StationResult {
   /** Null for a profile. */
   readonly blocks: BlockTable | null;
   readonly facts: StationFacts;
+  /** Each probe by itself, where several stand at this x: in order of file and place. */
+  readonly probes?: readonly ProbeResult[];
+}
+
+/** One of several probes at one x, about its own mean. */
+export interface ProbeResult {
+  readonly file: string;
+  readonly y: number | null;
+  readonly z: number | null;
+  readonly U: Quantity;
+  readonly u_rms: Quantity;
 }
 
 /** How the reduction went: the settings as they worked out, for the definition beside each number. */

@@ -25,6 +25,9 @@ export interface JoinedRecord {
   readonly repeats: number;
   /** Mean of each component, by length. */
   readonly means: readonly number[];
+  /** Mean of each component in each part, and its blocks as sums about it. */
+  readonly partMeans: readonly (readonly number[])[];
+  readonly perPart: readonly (readonly Float64Array[])[];
   readonly fields: readonly string[];
   /** A row a block: sums about the record's own mean; rows and sums add up plainly. */
   readonly rows: readonly Float64Array[];
@@ -48,6 +51,7 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
   const perPart = parts.map((part, p) => partRows(part, components, fields.length, wholes[p]));
   const places = parts.map((part) => perPart[parts.indexOf(part)].map((_, block) => ({ part, block })));
   const total = parts.reduce((sum, part) => sum + part.samples, 0);
+  const partMeans = parts.map((part, p) => components.map((name) => meanOf(part, wholes[p], name)));
   const step = parts[0].step;
   return {
     parts,
@@ -60,8 +64,10 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
     duration: parts.reduce((sum, part) => sum + part.duration, 0),
     ...independentTime(together ? [shortestReplay(parts)] : parts),
     means: components.map(
-      (name) => parts.reduce((sum, part, p) => sum + part.samples * meanOf(part, wholes[p], name), 0) / total,
+      (_, c) => parts.reduce((sum, part, p) => sum + part.samples * partMeans[p][c], 0) / total,
     ),
+    partMeans,
+    perPart,
     fields,
     rows: together ? averageRows(perPart) : perPart.flat(),
     blocks: together

@@ -3,6 +3,7 @@ import { missing, type Quantity } from "../quantity.ts";
 import type { SourceNote } from "../records.ts";
 import type { ReduceSettings, StationResult } from "../stationResult.ts";
 import { adoptedDissipation, setByDecay } from "./adoptedDissipation.ts";
+import { compareProbes } from "./compareProbes.ts";
 import { type IntegralTimes, integralTimes } from "./integralTimes.ts";
 import { joinCorrelations } from "./joinCorrelations.ts";
 import { type JoinedRecord, joinParts } from "./joinParts.ts";
@@ -57,7 +58,19 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
     },
     sampling.why,
   );
-  const material = { record, correlation, spectra, times, gradients, structure, sampling, all, settings };
+  const compared = record.parts.length > 1 ? compareProbes(record, times.scale) : null;
+  const material = {
+    record,
+    correlation,
+    spectra,
+    times,
+    gradients,
+    structure,
+    sampling,
+    all,
+    settings,
+    compared,
+  };
   const values = valueQuantities(material);
   const facts = stationFacts(material, values);
   return {
@@ -70,6 +83,7 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
     curves: stationCurves(record, spectra, correlation, times.tauStar),
     blocks: table,
     facts,
+    ...(compared ? { probes: compared.probes } : {}),
   };
 }
 

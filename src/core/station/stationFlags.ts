@@ -1,7 +1,5 @@
 import type { Flag } from "../flag.ts";
 import type { Quantity } from "../quantity.ts";
-import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
-import { wholeMoments } from "./recordCorrelation.ts";
 import { shortestRecord } from "./sampling.ts";
 import type { StationMaterial } from "./stationQuantities.ts";
 
@@ -9,6 +7,8 @@ import type { StationMaterial } from "./stationQuantities.ts";
 const doubtfulCorrection = 0.1;
 const resolved = 0.9;
 const longSensor = 4;
+/** Probability below which probes at one x are said to differ. */
+const disagreement = 0.01;
 
 /** What is formed from all three components, and with one or two of them rests on how the others are taken. */
 const restOnOthers = [
@@ -152,31 +152,20 @@ function replayFlags({ record, times }: StationMaterial): Flag[] {
   return [{ code: "replayed-inflow", text, value: period }];
 }
 
-function joinFlags({ record, times }: StationMaterial): Flag[] {
+function joinFlags({ record, compared }: StationMaterial): Flag[] {
   if (record.parts.length < 2) return [];
   const flags: Flag[] = [];
   if (record.spectral.length > 0 && record.spectral.length < record.parts.length) {
     const text = `${record.parts.length - record.spectral.length} of ${record.parts.length} records have another or an unequal time step: they count for the moments only.`;
     flags.push({ code: "probes-joined", text, value: record.spectral.length });
   }
-  const p = times.scale === null ? 1 : homogeneity(record.parts, times.scale);
-  if (p < 0.01) {
-    const text =
-      "The means of the records at this x differ by more than their sampling errors: the flow is not homogeneous across the stream.";
+  const { p, probes } = compared ?? { p: null, probes: [] };
+  if (p !== null && p < disagreement) {
+    const [U, rms] = [probes.map(({ U }) => U.value ?? 0), probes.map(({ u_rms }) => u_rms.value ?? 0)];
+    const range = (values: number[]) =>
+      `${Math.min(...values).toPrecision(4)} to ${Math.max(...values).toPrecision(4)}`;
+    const text = `The probes at this x differ by more than their sampling errors (U from ${range(U)}, u' from ${range(rms)}; p = ${p.toPrecision(2)}): the flow is not homogeneous across the stream. The station's values are averages over unlike probes; each stands by itself beside them.`;
     flags.push({ code: "inhomogeneous", text, value: p });
   }
   return flags;
-}
-
-/** Probability that means of u as different as these come from one flow; se² = 2 uu T_int/T each. */
-function homogeneity(parts: StationMaterial["record"]["parts"], scale: number): number {
-  const means = parts.map((part) => {
-    const whole = wholeMoments(part);
-    const variance = whole[1 + part.components.length] / whole[0];
-    return { mean: part.plan.reference[0] + whole[1], weight: part.duration / (2 * variance * scale) };
-  });
-  const total = means.reduce((sum, { weight }) => sum + weight, 0);
-  const centre = means.reduce((sum, { mean, weight }) => sum + mean * weight, 0) / total;
-  const chi2 = means.reduce((sum, { mean, weight }) => sum + weight * (mean - centre) ** 2, 0);
-  return chiSquareTail(chi2, parts.length - 1);
 }

@@ -1,5 +1,6 @@
 import { bare, isEstimate, missing, type Quantity, type StandardError } from "../quantity.ts";
 import type { ReduceSettings } from "../stationResult.ts";
+import type { ProbeComparison } from "./compareProbes.ts";
 import { dissipationFromInertialRange } from "./inertialRange.ts";
 import type { IntegralTimes } from "./integralTimes.ts";
 import type { JoinedCorrelation } from "./joinCorrelations.ts";
@@ -23,6 +24,8 @@ export interface StationMaterial {
   readonly sampling: Sampling;
   readonly all: Replicates;
   readonly settings: ReduceSettings;
+  /** The probes beside each other; null where there is one. */
+  readonly compared: ProbeComparison | null;
 }
 
 /** Every value with its interval, or the reason why it is missing. */
