@@ -8,10 +8,11 @@ from scipy import stats
 
 probabilities = [1e-6, 0.001, 0.025, 0.05, 0.3, 0.5, 0.9, 0.95, 0.975, 0.999, 1 - 1e-6]
 freedoms = [1, 2, 3, 4.5, 9, 10, 19, 49, 200, 5000]
+many = [1999, 2000, 123456.7, 1e7, 1e12]
 out = {
     "made_with": f"SciPy {scipy.__version__}, NumPy {numpy.__version__}",
     "normal": [[p, stats.norm.ppf(p)] for p in probabilities],
-    "student": [[p, f, stats.t.ppf(p, f)] for p in probabilities for f in freedoms],
+    "student": [[p, f, stats.t.ppf(p, f)] for p in probabilities for f in freedoms + many],
     "chi_square": [[p, f, stats.chi2.ppf(p, f)] for p in probabilities for f in freedoms],
     "f": [[p, a, b, stats.f.ppf(p, a, b)] for p in probabilities for a in (1, 2, 3, 10) for b in (2, 7, 30, 400)],
     "normal_cdf": [[x, stats.norm.cdf(x)] for x in (-8.0, -3.0, -1.0, -0.1, 0.0, 0.5, 2.0, 5.0)],
