@@ -44,7 +44,7 @@ export function integralTimes(
     "one-over-e": oneOverE(rho, step),
     exponential: exponentialTime(rho, step),
     "low-frequency": lowFrequency(spectra, variance, area * step),
-    model: spectra === null ? noSegment : modelScale(spectra, area * step),
+    model: spectra === null ? noSegment : modelScale(spectra, Math.max(area, 1) * step),
   };
   const chosen = routes[adopted];
   const scale = typeof chosen === "number" ? chosen : at === null ? null : area * step;
@@ -109,5 +109,6 @@ function lowFrequency(spectra: JoinedSpectra | null, variance: number, scale: nu
   if (n < 3 || !(spread > 0))
     return "the spectrum has fewer than three bins below 0.12 over the integral time";
   const level = (sy * sxx - sx * sxy) / spread;
-  return Math.exp(level) / (4 * variance);
+  const found = Math.exp(level) / (4 * variance);
+  return found < spectra.step / 10 ? "the spectrum falls to nothing towards frequency 0" : found;
 }

@@ -24,21 +24,18 @@ const span = 10;
 export function modelScale(spectra: JoinedSpectra, guess: number): number | string {
   const bands = spectrumBands(spectra);
   let scale = guess;
+  let bandsUsed = 0;
   for (let turn = 0; turn < 8; turn++) {
     const used = bands.filter(({ f }) => f * scale < reach);
+    if (used.length === bandsUsed) break; // the same bands give the same scale
     if (used.length < 4) return "the spectrum has fewer than four bands in its energetic range";
-    const next = minimum(
-      (log) => misfit(used, Math.exp(log)),
-      Math.log(guess / span),
-      Math.log(guess * span),
-    );
+    const next = minimum(used, Math.log(guess / span), Math.log(guess * span));
     if (next === null)
       return "no integral time within a factor of ten of the correlation's fits the spectrum";
-    const done = Math.abs(next - Math.log(scale)) < 1e-3;
     scale = Math.exp(next);
-    if (done) break;
+    bandsUsed = used.length;
   }
-  return scale;
+  return scale < spectra.step ? "the spectrum is that of uncorrelated samples" : scale;
 }
 
 interface Band {
@@ -72,13 +69,32 @@ function misfit(bands: readonly Band[], scale: number): number {
   return squares / weight - (sum / weight) ** 2;
 }
 
-/** Least value between two ends by golden sections; null where it lies at an end. */
-function minimum(of: (x: number) => number, low: number, high: number): number | null {
+/** Slope of the misfit against ln T, halved. */
+function slope(bands: readonly Band[], scale: number): number {
+  let [weight, sum, rises, products] = [0, 0, 0, 0];
+  for (const { f, log, weight: w } of bands) {
+    const square = (2 * Math.PI * scaleConstant * f * scale) ** 2;
+    const rest = log + (5 / 6) * Math.log1p(square);
+    const rise = ((5 / 3) * square) / (1 + square);
+    weight += w;
+    sum += w * rest;
+    rises += w * rise;
+    products += w * rest * rise;
+  }
+  return products / weight - (sum / weight) * (rises / weight);
+}
+
+/**
+ * ln T of the least misfit between two ends: golden sections until the valley is narrow, then the zero of the slope
+ * by halving, since the misfit itself is flat to half the digits; null where it lies at an end.
+ */
+function minimum(bands: readonly Band[], low: number, high: number): number | null {
+  const of = (log: number) => misfit(bands, Math.exp(log));
   const golden = (Math.sqrt(5) - 1) / 2;
   let [a, b] = [low, high];
   let [c, d] = [b - golden * (b - a), a + golden * (b - a)];
   let [fc, fd] = [of(c), of(d)];
-  while (b - a > 1e-9) {
+  while (b - a > 1e-2) {
     if (fc < fd) {
       [b, d, fd] = [d, c, fc];
       c = b - golden * (b - a);
@@ -89,6 +105,11 @@ function minimum(of: (x: number) => number, low: number, high: number): number |
       fd = of(d);
     }
   }
-  const found = (a + b) / 2;
-  return found - low < 1e-6 || high - found < 1e-6 ? null : found;
+  if (a === low || b === high) return null;
+  for (let halving = 0; halving < 48; halving++) {
+    const middle = (a + b) / 2;
+    if (slope(bands, Math.exp(middle)) < 0) a = middle;
+    else b = middle;
+  }
+  return (a + b) / 2;
 }

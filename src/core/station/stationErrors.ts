@@ -81,8 +81,13 @@ export function valueQuantity(name: ValueName, all: Replicates, absent: string):
   if (!Number.isFinite(value)) return missing(absent);
   if (all.why !== null) return bare(value, all.why);
   const error = valueError(name, all);
-  return error === null ? bare(value, "a part of the record gives no value of it") : withError(value, error);
+  if (error === null) return bare(value, "a part of the record gives no value of it");
+  const decided = error.scale === "log" && quantile(error.freedom) * error.standard > widest;
+  return decided ? bare(value, "a single part of the record decides the value") : withError(value, error);
 }
+
+/** Half the width of an interval in the logarithm, a factor of 150, beyond which it tells of one group only. */
+const widest = 5;
 
 /** A value and the 95 % interval of Student's t on the scale of its error. */
 export function withError(value: number, error: StandardError): Quantity {

@@ -91,7 +91,11 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
   const [uu, vv, ww] = [co("u", "u"), co("v", "v"), co("w", "w")];
   const [v2, w2] = lateral(uu, vv, ww);
   const factor = taylorFactors(uu, v2, w2, U, context.taylorCorrection);
-  const [gu, gv, gw] = (["u", "v", "w"] as const).map((name, i) => sum(`rate_${name}`) / (U * U) / factor[i]);
+  // without a stream to carry it past there is no distance
+  const speed = U > 0 ? U : Number.NaN;
+  const [gu, gv, gw] = (["u", "v", "w"] as const).map(
+    (name, i) => sum(`rate_${name}`) / speed ** 2 / factor[i],
+  );
   const isotropic = components.length === 1;
   const nu = viscosity ?? Number.NaN;
   const [gv2, gw2] = lateral(2 * gu, gv, gw);
@@ -102,11 +106,11 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
   return {
     ...{ U, uu, vv, ww, k },
     ...stresses(co),
-    Tu: Math.sqrt((2 * k) / 3) / (context.referenceSpeed ?? U),
+    Tu: Math.sqrt((2 * k) / 3) / (context.referenceSpeed ?? speed),
     isotropy_uv: Math.sqrt(uu / vv),
     isotropy_uw: Math.sqrt(uu / ww),
     ...{ gradient_u: gu, gradient_v: gv, gradient_w: gw },
-    ...differences(sums, context, U * U * factor[0]),
+    ...differences(sums, context, speed ** 2 * factor[0]),
     "epsilon_u-gradient": 15 * nu * gu,
     epsilon_gradient: epsilon,
     lambda,
@@ -118,9 +122,9 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
     K_w: (2 * gu) / gw,
     L_v_ratio: (2 * sum("area_v") * uu) / (sum("area_u") * vv),
     L_w_ratio: (2 * sum("area_w") * uu) / (sum("area_u") * ww),
-    ...dissipationFromStructure(sums, context, U),
-    C_epsilon_over_T: (epsilon * U) / rms ** 3,
-    Re_L_over_T: (rms * U) / nu,
+    ...dissipationFromStructure(sums, context, speed),
+    C_epsilon_over_T: (epsilon * speed) / rms ** 3,
+    Re_L_over_T: (rms * speed) / nu,
   };
 }
 
