@@ -82,7 +82,7 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
   if (reduced === null || reduced.stations.length === 0)
     return { ...base, stations: [], decay: null, stale: work !== null };
   const settings = drafted(decaySettings(sheet), draft);
-  const fit = fitOf(reduced, settings, of.id, argued);
+  const fit = fitOf(reduced, settings, of.id, argued, draft !== null);
   if (fit) return { ...base, ...fit, stale: work !== null };
   // the worker is at it: what is known stays, and is marked where it belongs to other settings
   const known = before !== null && before.reduced === reduced && before.decay !== null;
@@ -96,9 +96,13 @@ function fitOf(
   settings: DecaySettings,
   caseId: string,
   argued: Argued | null,
+  inHand: boolean,
 ): { stations: readonly StationResult[]; decay: DecayResult } | null {
   if (argued !== null && argued.keys[caseId] === fitKey(reduced, settings)) return argued.cases[caseId];
-  return settings.window === "auto" ? null : fitNow(reduced.stations, settings);
+  if (settings.window !== "auto") return fitNow(reduced.stations, settings);
+  // an origin in the hand: the automatic window stands still until it rests
+  const last = argued?.cases[caseId]?.decay;
+  return inHand && last?.law ? fitNow(reduced.stations, { ...settings, window: last.window }) : null;
 }
 
 /** The settings with what is in the hand just now. */
