@@ -14,6 +14,8 @@ export interface CompareSettings {
   readonly align: "x0" | "x" | "Tu";
   /** Tolerance d of the verdict: 0.1 is 10 %. */
   readonly tolerance: number;
+  /** Exponents the cases are aligned with; "auto" or left out: a common one unless it is rejected at 5 %. */
+  readonly exponent?: "auto" | "common" | "own";
 }
 
 export const comparedQuantities = ["Tu", "L11", "lambda", "eta", "Re_lambda", "isotropy_uv"] as const;
@@ -39,6 +41,17 @@ export interface ComparedRatio {
   };
 }
 
+/** One exponent for several cases. */
+export interface CommonOfAll {
+  readonly cases: readonly string[];
+  readonly n: number;
+  readonly low: number | null;
+  readonly high: number | null;
+  readonly p: number;
+  readonly test: "chi-square" | "F";
+  readonly AICc: { readonly common: number; readonly own: number } | null;
+}
+
 /** Two cases side by side; ratios and distances are second against first. */
 export interface Comparison {
   readonly cases: readonly [string, string];
@@ -59,7 +72,12 @@ export interface Comparison {
     readonly high: number | null;
     readonly p: number | null;
     readonly why?: string;
+    readonly test?: "chi-square" | "F";
+    /** Akaike's criterion for short samples, of one exponent and of one each; null with too few stations. */
+    readonly AICc?: { readonly common: number; readonly own: number } | null;
   };
+  /** One exponent for all cases at once against one each; left out with two cases, where it is common_n. */
+  readonly common_n_of_all?: CommonOfAll;
   /** Exponents used for the alignment: the common one, or each its own where it was rejected. */
   readonly aligned_with: "common n" | "own n" | "none";
 }

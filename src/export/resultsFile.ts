@@ -142,6 +142,7 @@ function plainComparison(comparison: Comparison) {
     extra_distance: plainQuantity(comparison.extra_distance),
     matched_distance: plainQuantity(comparison.matched_distance),
     common_n,
+    ...(comparison.common_n_of_all ? { common_n_of_all: comparison.common_n_of_all } : {}),
   };
 }
 

@@ -28,11 +28,11 @@ const refitTolerance = 1e-3;
 
 /**
  * The virtual origins two cases are shifted by: those of laws with one common exponent unless that is rejected at 5 %,
- * then those of each case's own.
+ * then those of each case's own; or as the settings choose.
  */
 export function alignment(
   [first, second]: readonly [ComparedCase, ComparedCase],
-  align: CompareSettings["align"],
+  { align, exponent = "auto" }: CompareSettings,
 ): Alignment {
   const [a, b] = [first.law, second.law];
   if (a === null || b === null) {
@@ -43,7 +43,7 @@ export function alignment(
   const held = [a, b].some(({ fitted }) => fitted.fit.held.n !== null);
   const common = held ? null : commonExponent([a.fitted, b.fitted]);
   const why = held ? "the exponent of a case is held" : null;
-  const shared = common !== null && common.p >= 0.05;
+  const shared = common !== null && exponent !== "own" && (exponent === "common" || common.p >= 0.05);
   const used = align === "x" ? "none" : shared ? "common n" : "own n";
   if (common === null || !shared) {
     const refit = () => [ownOrigin(a), ownOrigin(b)] as const;

@@ -1,5 +1,5 @@
 import { crossing } from "../decay/crossing.ts";
-import type { WindowFit } from "../decay/fitWindow.ts";
+import { inflation, type WindowFit } from "../decay/fitWindow.ts";
 import { type CentredLaw, kappaLimit, type LawProblem } from "../decay/lawProblem.ts";
 import { minimiseLaw } from "../decay/minimiseLaw.ts";
 import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts";
@@ -14,7 +14,7 @@ export interface JointCase {
   readonly law: CentredLaw;
   /** A number where the virtual origin is held. */
   readonly x0: number | null;
-  /** Variance of one weighted residual: 1 where errors are known. */
+  /** Variance of one weighted residual as n sees it: 1 where errors are known. */
   readonly variance: number;
   /** Curvature of half the sum of squares along n. */
   readonly curvature: number;
@@ -32,8 +32,10 @@ export interface JointFit {
 const fine = 1e-6;
 const mostSteps = 40;
 
-export function jointCase({ fit, variance }: WindowFit): JointCase {
-  const floor = fit.residualSum > 0 ? variance : 1;
+export function jointCase(window: WindowFit): JointCase {
+  const { fit, variance } = window;
+  // stations sampled together know n worse, or better, than each for itself would
+  const floor = fit.residualSum > 0 ? variance * inflation(window, "n").ratio : 1;
   const spread = fit.unitCovariance?.[8] ?? 0;
   return {
     problem: fit.problem,
@@ -93,18 +95,23 @@ function sloped(
   return { n, laws: found, sum, slope };
 }
 
-/** One exponent for two cases against one each. */
+/** One exponent for all cases against one each. */
 export interface CommonExponent extends JointFit {
   readonly low: number | null;
   readonly high: number | null;
-  /** Probability of a larger rise of the sum of squares if both decay alike. */
+  /** Probability of a larger rise of the sum of squares if all decay alike. */
   readonly p: number;
+  readonly test: "chi-square" | "F";
+  /** Akaike's criterion for short samples, of one exponent and of one each; null with too few stations. */
+  readonly AICc: { readonly common: number; readonly own: number } | null;
 }
 
 /**
- * Whether one exponent serves both cases: the rise of the sum of squares over that of each with its own,
- * by chi-square where both know their errors, else by F with the freedom of those whose scatter tells them.
- * @param fits free fits of the cases, none with n held
+ * Whether one exponent serves all cases: the rise of the sum of squares over that of each with its own, by chi-square
+ * with one freedom less than there are cases where all know their errors, else by F with the freedom of those whose
+ * scatter tells them; and beside it AICc, whose smaller value foretells new stations better.
+ * @param fits free fits of the cases, two or more, none with n held
+ * @see        Hurvich & Tsai (1989), Biometrika 76, 297
  */
 export function commonExponent(fits: readonly WindowFit[]): CommonExponent {
   const cases = fits.map(jointCase);
@@ -113,8 +120,9 @@ export function commonExponent(fits: readonly WindowFit[]): CommonExponent {
   const start = fits.reduce((sum, { fit }, i) => sum + (weights[i] / total) * fit.n, 0);
   const joint = jointFit(cases, start);
   const separate = fits.reduce((sum, { fit }, i) => sum + fit.residualSum / cases[i].variance, 0);
-  const freedom = fits.reduce((sum, { fit, scattered }) => sum + (scattered ? fit.freedom : 0), 0);
+  const freedom = fits.reduce((sum, window) => sum + (inflation(window, "n").freedom ?? 0), 0);
   const rise = Math.max(joint.sum - separate, 0);
+  const fewer = fits.length - 1;
   const drop = freedom === 0 ? chiSquareQuantile(0.95, 1) : fQuantile(0.95, 1, freedom);
   const root = Math.sqrt(drop);
   const excess = (n: number) => Math.sqrt(Math.max(sloped(cases, n, fine).sum - joint.sum, 0)) - root;
@@ -123,6 +131,24 @@ export function commonExponent(fits: readonly WindowFit[]): CommonExponent {
     ...joint,
     low: crossing(excess, joint.n, -Math.min(step, joint.n / 4), joint.n / 100, -root),
     high: crossing(excess, joint.n, step, joint.n * 100, -root),
-    p: freedom === 0 ? chiSquareTail(rise, 1) : fTail(rise, 1, freedom),
+    p: freedom === 0 ? chiSquareTail(rise, fewer) : fTail(rise / fewer, fewer, freedom),
+    test: freedom === 0 ? "chi-square" : "F",
+    AICc: akaike(fits, joint.sum, separate, freedom > 0),
   };
+}
+
+/**
+ * AICc of both: S + 2 p + 2 p (p + 1)/(N - p - 1) where errors are known; N ln(S/N) takes the place of S where the scatter
+ * tells them, which is one number more.
+ */
+function akaike(fits: readonly WindowFit[], common: number, own: number, scattered: boolean) {
+  const stations = fits.reduce((sum, { fit }) => sum + fit.problem.count, 0);
+  const free = stations - fits.reduce((sum, { fit }) => sum + fit.freedom, 0) + (scattered ? 1 : 0);
+  const value = (sum: number, parameters: number) =>
+    (scattered ? stations * Math.log(sum / stations) : sum) +
+    2 * parameters +
+    (2 * parameters * (parameters + 1)) / (stations - parameters - 1);
+  const both = { common: value(common, free - fits.length + 1), own: value(own, free) };
+  const sound = stations - free - 1 > 0 && Number.isFinite(both.common) && Number.isFinite(both.own);
+  return sound ? both : null;
 }

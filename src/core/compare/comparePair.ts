@@ -26,7 +26,7 @@ const noErrors = "the stations of a case carry no errors and are too few to show
  */
 export function comparePair(first: CaseInput, second: CaseInput, settings: CompareSettings): Comparison {
   const cases = [comparedCase(first, settings.align), comparedCase(second, settings.align)] as const;
-  const aligned = alignment(cases, settings.align);
+  const aligned = alignment(cases, settings);
   const laid = overlay(cases, aligned, [first, second]);
   const resampled = resamplePair(cases, aligned, laid);
   return {
@@ -127,5 +127,6 @@ function matchedDistance({ matched }: Overlay, resampled: Resampled): Quantity {
 function commonN({ common, why }: Alignment): Comparison["common_n"] {
   if (common === null)
     return { value: null, low: null, high: null, p: null, why: why ?? "a case has no exponent" };
-  return { value: common.n, low: common.low, high: common.high, p: common.p };
+  const { n, low, high, p, test, AICc } = common;
+  return { value: n, low, high, p, test, AICc };
 }

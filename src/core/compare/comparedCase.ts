@@ -4,8 +4,10 @@ import {
   type CompareSettings,
   comparedQuantities,
 } from "../comparison.ts";
+import { type CommonBlocks, commonBlocks } from "../decay/commonBlocks.ts";
 import { fitWindow, type WindowFit } from "../decay/fitWindow.ts";
 import { type CentredLaw, type LawProblem, lawProblem, powerLawDefaults } from "../decay/lawProblem.ts";
+import { withCommonBlocks } from "../decay/withCommonBlocks.ts";
 import type { DecayPoint } from "../decayResult.ts";
 import { type ComparedSeries, comparedSeries } from "./comparedSeries.ts";
 
@@ -28,6 +30,8 @@ export interface ComparedLaw {
   /** Standard deviation of each station's ln q: sampling, or scatter where that is larger or alone. */
   readonly error: Float64Array;
   readonly x: readonly number[];
+  /** Where the stations were sampled together: what moves them at once. */
+  readonly blocks: CommonBlocks | null;
 }
 
 /**
@@ -51,8 +55,14 @@ export function comparedCase(input: CaseInput, align: CompareSettings["align"]):
   };
 }
 
-function comparedLaw({ decaySettings }: CaseInput, used: readonly DecayPoint[]): ComparedLaw | null {
-  const fitted = fitWindow(used, decaySettings);
+function comparedLaw(
+  { stations, decay, decaySettings }: CaseInput,
+  used: readonly DecayPoint[],
+): ComparedLaw | null {
+  const places = new Set(used.map(({ x }) => x));
+  const inWindow = [...stations].filter(({ x }) => places.has(x)).sort((a, b) => a.x - b.x);
+  const blocks = inWindow.length === used.length ? commonBlocks(inWindow, decay, decaySettings) : null;
+  const fitted = withCommonBlocks(fitWindow(used, decaySettings), blocks, 0);
   if ("refused" in fitted) return null;
   const errors = used.map((point) => point.smoothedError).filter((error) => error !== null);
   const known = errors.length === used.length ? errors : null;
@@ -66,7 +76,7 @@ function comparedLaw({ decaySettings }: CaseInput, used: readonly DecayPoint[]):
     if (known !== null) return known[i] * root;
     return problem.linear ? root / point.q : root;
   });
-  return { fitted, problem, measured: problem.y.slice(), error: Float64Array.from(error), x };
+  return { fitted, problem, measured: problem.y.slice(), error: Float64Array.from(error), x, blocks };
 }
 
 /** Overwrites the station values of a law's copy with measured ones moved by `shift` in ln q. */

@@ -49,3 +49,41 @@ describe("one exponent for two cases", () => {
     });
   });
 });
+
+describe("one exponent for three cases", () => {
+  const three = (exponents: readonly number[], seed: number, told: boolean) =>
+    commonExponent(exponents.map((n, i) => drawn(3 * i, n, 100 * seed + i, told)));
+
+  it.each([true, false])("is rejected 5 times in 100 where they decay alike (errors known: %s)", (told) => {
+    let rejected = 0;
+    let foretold = 0;
+    for (let seed = 0; seed < 300; seed++) {
+      const { p, AICc } = three([1.25, 1.25, 1.25], seed, told);
+      if (p < 0.05) rejected++;
+      if (AICc && AICc.common < AICc.own) foretold++;
+    }
+    // 300 at 5 %: 15 with a standard deviation of 3.8
+    expect(rejected).toBeGreaterThanOrEqual(4);
+    expect(rejected).toBeLessThanOrEqual(27);
+    expect(foretold).toBeGreaterThan(250);
+  });
+  it("is rejected, by AICc too, where one of them decays otherwise", () => {
+    const { p, AICc } = three([1.25, 1.25, 1.5], 1, true);
+    expect(p).toBeLessThan(1e-3);
+    expect(AICc?.own).toBeLessThan(AICc?.common ?? 0);
+  });
+  it("is tested by F as soon as the scatter of one case has to tell its errors", () => {
+    const told = drawn(3, 1.25, 8, true);
+    expect(told.scattered).toBe(false);
+    expect(commonExponent([told, told]).test).toBe("chi-square");
+    expect(commonExponent([told, drawn(3, 1.25, 8, false)]).test).toBe("F");
+  });
+  it("has the AICc of its sum of squares and its seven numbers", () => {
+    const fits = [1.25, 1.25, 1.25].map((n, i) => drawn(3 * i, n, 7 + i, true));
+    const { AICc, sum } = commonExponent(fits);
+    // 42 stations, 3 levels, 3 origins, 1 exponent
+    expectClose(AICc?.common, sum + 14 + (2 * 7 * 8) / (42 - 8), { relative: 1e-12, because: "definition" });
+    const own = fits.reduce((total, { fit }) => total + fit.residualSum, 0);
+    expectClose(AICc?.own, own + 18 + (2 * 9 * 10) / (42 - 10), { relative: 1e-12, because: "definition" });
+  });
+});

@@ -4,45 +4,14 @@ import { fitDecay } from "../../../src/core/decay/fitDecay.ts";
 import type { DecaySettings } from "../../../src/core/decayResult.ts";
 import { isEstimate, type Quantity } from "../../../src/core/quantity.ts";
 import { type SeededRandom, seededRandom } from "../../../src/core/signal/seededRandom.ts";
-import type { StationResult } from "../../../src/core/stationResult.ts";
 import { expectClose } from "../../support/expectClose.ts";
-import { known, plainSettings, spacedFrom, stationAt } from "../../support/lawStations.ts";
+import { plainSettings, spacedFrom } from "../../support/lawStations.ts";
+import { sharedRecords } from "../../support/sharedRecords.ts";
 
 const law = { A: 0.06, x0: 4, n: 1.25, U: 1 };
 const xs = spacedFrom(law.x0, 20, 80, 12);
 const settings: DecaySettings = { ...plainSettings, window: [0, 100], quantity: "uu" };
-const rows = 200;
-/** Blocks of 4 time units: the stations lie 0 to 15 blocks apart in time of flight. */
-const blockTime = 4;
-/** Relative scatter of one block's variance. */
-const scatter = 0.3;
-
-/** A record's blocks: each carries variance uu (1 + scatter e) of eddies that pass the stations in turn. */
-function records(random: SeededRandom, rho: number): StationResult[] {
-  const shared = Float64Array.from({ length: rows }, () => random.gaussian());
-  let eddies = shared;
-  return xs.map((x, i) => {
-    // from station to station the eddies change: neighbours are correlated by rho
-    if (i > 0) eddies = eddies.map((e) => rho * e + Math.sqrt(1 - rho * rho) * random.gaussian());
-    const shift = Math.round((x - xs[0]) / law.U / blockTime);
-    const variance = law.A * (x - law.x0) ** -law.n;
-    const data = new Float64Array(3 * rows);
-    let sum = 0;
-    for (let row = 0; row < rows; row++) {
-      const square = 100 * variance * (1 + scatter * eddies[(row - shift + rows) % rows]);
-      data.set([100, 0, square], 3 * row);
-      sum += square;
-    }
-    const facts = { ...stationAt(x, {}).facts, integralTimes: 1000 };
-    return stationAt(x, {
-      duration: rows * blockTime,
-      U: known(law.U, 0),
-      uu: known(sum / (100 * rows), scatter / Math.sqrt(rows)),
-      blocks: { fields: ["weight", "u", "uu"], rows, data, blockSamples: 40, step: 0.1, start: 0 },
-      facts,
-    });
-  });
-}
+const records = (random: SeededRandom, rho: number) => sharedRecords(law, xs, rho, random);
 
 const holds = (quantity: Quantity, truth: number) =>
   isEstimate(quantity) && (quantity.low ?? -Infinity) <= truth && truth <= (quantity.high ?? Infinity);
