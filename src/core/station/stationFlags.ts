@@ -2,6 +2,7 @@ import type { Flag } from "../flag.ts";
 import type { Quantity } from "../quantity.ts";
 import { shortestRecord } from "./sampling.ts";
 import type { StationMaterial } from "./stationQuantities.ts";
+import { unsteadyFlags } from "./unsteadyFlags.ts";
 
 /** Correction of Taylor's hypothesis above which it is doubtful. */
 const doubtfulCorrection = 0.1;
@@ -42,6 +43,7 @@ export function stationFlags(material: StationMaterial, facts: FlagFacts): Flag[
     ...taylorFlags(material, facts),
     ...spectrumFlags(material, facts),
     ...replayFlags(material),
+    ...unsteadyFlags(material.record),
     ...joinFlags(material),
   ];
   return flags.filter((flag, i) => flags.findIndex((other) => other.code === flag.code) === i);
