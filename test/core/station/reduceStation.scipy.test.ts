@@ -21,7 +21,7 @@ function uniform(seed: number): Float64Array {
 function smooth(seed: number): Float64Array {
   let last = 0;
   let y = uniform(seed).map((x) => {
-    last = 0.95 * last + x;
+    last = 0.95 * last + (x + 2 * x ** 2 - 1 / 6);
     return last;
   });
   for (let pass = 0; pass < 4; pass++) {
