@@ -26,8 +26,9 @@ function lengthFlags(material: LineMaterial): Flag[] {
     flags.push({ code: "short-record", text, value: sampling.independent });
   }
   const length = lineLength(lines, spectra);
-  if (length !== null && scales.scale !== null && length < shortestBox * scales.scale) {
-    const ratio = length / scales.scale;
+  const scale = scales.scale ?? scales.least ?? null;
+  if (length !== null && scale !== null && length < shortestBox * scale) {
+    const ratio = length / scale;
     const text = `The line is ${ratio.toPrecision(2)} integral scales long: with fewer than ${shortestBox} the largest eddies are missing or held down, and with them part of the energy and of L11.`;
     flags.push({ code: "short-box", text, value: ratio });
   }
@@ -37,7 +38,7 @@ function lengthFlags(material: LineMaterial): Flag[] {
     scales.tauStar === null
   ) {
     const text =
-      "The correlation along the line does not fall to zero within it: only a lower bound of the integral scale is known.";
+      "The correlation along the line does not fall to zero within half of it: only a lower bound of the integral scale is known.";
     flags.push({ code: "no-zero-crossing", text });
   }
   if (scales.toHalf === true) {

@@ -9,6 +9,8 @@ import type { LineSpectra } from "./lineSpectra.ts";
 export interface LineScales extends IntegralTimes {
   /** The correlation did not cross zero and was integrated up to half the length of the line. */
   readonly toHalf?: boolean;
+  /** Lower bound of a scale that the line is too short for. */
+  readonly least?: number;
 }
 
 /** Lateral lines: from the correlation along the line and its spectrum. */
@@ -46,7 +48,7 @@ function toHalfLine(
   const half = covariance.length - 1;
   const area = (areaUpTo(covariance, half) / covariance[0]) * step;
   const scatter = Math.sqrt((2 * area) / (lines * length));
-  if (!(covariance[half] < (fallen + 2 * scatter) * covariance[0])) return found;
+  if (!(covariance[half] < (fallen + 2 * scatter) * covariance[0])) return { ...found, least: area };
   const routes = { ...found.routes, "zero-crossing": area };
   const chosen = routes[adopted];
   return { routes, tauStar: half * step, scale: typeof chosen === "number" ? chosen : area, toHalf: true };
