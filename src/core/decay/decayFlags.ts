@@ -63,10 +63,15 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
   const { law, p, stations, chi2_reduced } = decay;
   if (law === null) return [];
   const flags: Flag[] = [];
+  const sensitivity = originSensitivity(law.n, decay.window[0] - law.x0, decay.window[1] - law.x0);
+  const traded =
+    settings.n !== null || !Number.isFinite(sensitivity)
+      ? ""
+      : ` Were x0 one unit of x farther downstream, n would change by ${sensitivity.toPrecision(2)}.`;
   if (stations < fewStations)
     flags.push({
       code: "few-stations",
-      text: `The law rests on ${stations} stations: hardly anything is left over to test it with.`,
+      text: `The law rests on ${stations} stations: hardly anything is left over to test it with.${traded}`,
       value: stations,
     });
   const [first, last] = decay.window;
@@ -74,7 +79,7 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
   if (ratio < shortSpan)
     flags.push({
       code: "short-span",
-      text: `The last x - x0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.`,
+      text: `The last x - x0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.${traded}`,
       value: ratio,
     });
   if (settings.x0 !== null) flags.push(heldOrigin(law.n, first - law.x0, last - law.x0));
@@ -101,10 +106,14 @@ function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string
   return (why_low !== undefined) !== (why_high !== undefined);
 }
 
-/** Had the origin been held elsewhere: dn/dx0 = -n/(x_c - x0), x_c the geometric centre of the window. */
+/** dn/dx0 = -n/(x_c - x0), x_c the geometric centre of the window; from the distances of its ends. */
+function originSensitivity(n: number, first: number, last: number): number {
+  return -n / (Math.sqrt(first) * Math.sqrt(last));
+}
+
+/** Had the origin been held elsewhere. */
 function heldOrigin(n: number, first: number, last: number): Flag {
-  const centre = Math.sqrt(first) * Math.sqrt(last);
-  const slope = -n / centre;
+  const slope = originSensitivity(n, first, last);
   if (!Number.isFinite(slope))
     return { code: "held-origin", text: "The origin is held at the first station." };
   return {

@@ -103,6 +103,20 @@ describe("a window set by hand", () => {
 });
 
 describe("doubts about a decay", () => {
+  it("says at a short span how n moves with the origin, as refits with the origin held do", () => {
+    const places = spacedFrom(law.x0, 0.2, 0.4, 8);
+    const stations = lawStations(law, places, 0.01);
+    const window = [0, 1] as const;
+    const { flags } = fitDecay(stations, { ...settings, window });
+    const text = flags.find(({ code }) => code === "short-span")?.text ?? "";
+    const told = Number(/n would change by (-?\d+\.?\d*)/.exec(text)?.[1]);
+    const nAt = (x0: number) => fitDecay(stations, { ...settings, window, x0 }).n.value ?? 0;
+    const step = 0.001;
+    expectClose(told, (nAt(law.x0 + step) - nAt(law.x0 - step)) / (2 * step), {
+      relative: 0.1,
+      because: "the rule takes the geometric centre for all stations; two digits are printed",
+    });
+  });
   it("flags a law on four stations, and a short span", () => {
     expect(codes(scattered(0.01), { window: [xs[0], xs[3]] })).toEqual(
       expect.arrayContaining(["few-stations", "short-span"]),
