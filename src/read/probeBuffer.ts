@@ -52,6 +52,8 @@ export class ProbeBuffer {
 
   add(row: Float64Array, line: number): void {
     if (!this.running && !this.hasStarted(row)) return;
+    // a restart may go back into the start-up
+    if (this.startup > 0 && this.timeAt >= 0 && this.isBefore(row[this.timeAt])) return;
     const { from, count } = this;
     for (let i = 0; i < from.length; i++) from[i].values[count] = row[from[i].at];
     if (this.firstLine === 0) this.firstLine = line;
@@ -93,8 +95,12 @@ export class ProbeBuffer {
     const time = this.timeAt < 0 ? this.samples * (this.origin.step ?? 0) : row[this.timeAt];
     if (this.samples === 0) this.start = time;
     this.samples++;
-    // half a rounding: times such as 0.1 + 0.2 are not to fall short by their last digit
-    this.running = time - this.start >= this.startup * (1 - 1e-12);
+    this.running = !this.isBefore(time);
     return this.running;
+  }
+
+  private isBefore(time: number): boolean {
+    // half a rounding: times such as 0.1 + 0.2 are not to fall short by their last digit
+    return time - this.start < this.startup * (1 - 1e-12);
   }
 }

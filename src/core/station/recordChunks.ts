@@ -143,8 +143,9 @@ export class RecordChunks {
     for (let i = from; i < to; i++) if (block.u[i] < this.lowest) this.lowest = block.u[i];
     if (this.even === null) this.gather(this.arrays(block), from, to, block.t);
     else if (block.t !== null) {
+      const sources = this.arrays(block);
       for (let i = from; i < to; i++) {
-        this.read(block, i);
+        this.read(sources, block.t, i);
         this.even.add(block.t[i], this.sample);
         this.moments?.add(block.t[i], this.sample);
       }
@@ -155,7 +156,7 @@ export class RecordChunks {
   /** The newer of two samples under one time stands for both. */
   private replace(block: VelocityBlock, i: number): void {
     this.repeated++;
-    this.read(block, i);
+    this.read(this.arrays(block), block.t, i);
     if (block.u[i] < this.lowest) this.lowest = block.u[i];
     this.even?.replace(this.sample);
     this.moments?.replace(this.sample);
@@ -167,12 +168,12 @@ export class RecordChunks {
   }
 
   /** One sample about the reference and the trend. */
-  private read(block: VelocityBlock, i: number): void {
+  private read(sources: readonly Float64Array[], t: Float64Array | null, i: number): void {
     const { plan, sample } = this;
-    this.arrays(block).forEach((source, c) => {
-      const time = block.t === null ? 0 : block.t[i] - plan.centre;
-      sample[c] = source[i] - plan.reference[c] - plan.slope[c] * time;
-    });
+    const time = t === null ? 0 : t[i] - plan.centre;
+    for (let c = 0; c < sample.length; c++) {
+      sample[c] = sources[c][i] - plan.reference[c] - plan.slope[c] * time;
+    }
   }
 
   private arrays(block: VelocityBlock): Float64Array[] {

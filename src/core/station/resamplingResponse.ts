@@ -4,7 +4,7 @@ import { splineAt, splineSecond } from "../signal/cubicSpline.ts";
 const frequencies = 16;
 /** Windows all looked at, and then every so-manieth. */
 const firstWindows = 16;
-const every = 16;
+const every = 128;
 
 /**
  * What a resampling does to the gradient of a sine, with the record's own times: at each frequency the sine is
