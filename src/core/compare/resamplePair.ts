@@ -1,5 +1,5 @@
 import { type ComparedQuantity, comparedQuantities } from "../comparison.ts";
-import type { CommonBlocks } from "../decay/commonBlocks.ts";
+import { drawTogether } from "../decay/drawTogether.ts";
 import { type SeededRandom, seededRandom } from "../signal/seededRandom.ts";
 import { type Alignment, ownLaw } from "./alignment.ts";
 import { type ComparedCase, logSlopes, moveStations } from "./comparedCase.ts";
@@ -112,22 +112,6 @@ function moveLaw({ source, random, ofQ }: Moving): void {
   if (law.blocks !== null) drawTogether(law.blocks, random, ofQ);
   else for (let i = 0; i < ofQ.length; i++) ofQ[i] = law.error[i] * random.gaussian();
   moveStations(law, ofQ);
-}
-
-/**
- * A draw whose covariance over the stations is that of the jackknife: sum over groups j of g_j (m_j - mean m), times
- * ((B - 1)/B)^(1/2), with g_j normal and m_j the move of ln q without group j.
- */
-function drawTogether({ moves, groups }: CommonBlocks, random: SeededRandom, out: Float64Array): void {
-  const factor = Math.sqrt((groups - 1) / groups);
-  const draws = Float64Array.from(moves, () => factor * random.gaussian());
-  const total = draws.reduce((sum, draw) => sum + draw, 0);
-  out.fill(0);
-  moves.forEach((move, j) => {
-    // sum of g_j (m_j - mean m) = sum of (g_j - mean g) m_j
-    const share = draws[j] - total / groups;
-    for (let i = 0; i < out.length; i++) out[i] += share * move[i];
-  });
 }
 
 /** How the dissipation of the case's own law moves with it. */

@@ -3,7 +3,7 @@ import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import type { StationResult } from "../stationResult.ts";
 import { atBody } from "./atBody.ts";
 import { bootstrapLaw } from "./bootstrapLaw.ts";
-import { commonBlocks } from "./commonBlocks.ts";
+import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
 import { decayRoutes, routeDisagreements } from "./decayRoutes.ts";
 import { developmentDefaults, developmentLength } from "./developmentLength.ts";
 import { fitWindow, type WindowFit } from "./fitWindow.ts";
@@ -33,14 +33,15 @@ export function argueDecay(
   const points = decay.points.filter((point) => point.used);
   const used = new Set(points.map(({ x }) => x));
   const inWindow = stations.filter(({ x }) => used.has(x));
-  const window = decay.law === null ? null : windowOf(inWindow, decay, settings);
+  const blocks = commonBlocks(inWindow, decay, settings);
+  const window = decay.law === null ? null : windowOf(decay, settings, blocks);
   const flight = flightFit(inWindow, decay, settings);
   const routes = decayRoutes(decay, settings, flight);
   const { body } = settings;
   return {
     scan: windowScan(stations, decay, settings),
     region: window === null ? null : jointRegion(window),
-    bootstrap: window === null ? null : bootstrapLaw(window),
+    bootstrap: window === null ? null : bootstrapLaw(window, blocks),
     routes,
     disagreements: routeDisagreements(routes),
     originScan:
@@ -61,14 +62,11 @@ export function argueDecay(
 
 /** The adopted law with all that a profile starts from. */
 function windowOf(
-  stations: readonly StationResult[],
   decay: DecayResult,
   settings: DecaySettings,
+  blocks: CommonBlocks | null,
 ): WindowFit | null {
-  const fitted = fitWindow(
-    decay.points.filter((point) => point.used),
-    settings,
-  );
-  const found = withCommonBlocks(fitted, commonBlocks(stations, decay, settings), 0);
-  return "refused" in found ? null : found;
+  const points = decay.points.filter((point) => point.used);
+  const fitted = withCommonBlocks(fitWindow(points, settings), blocks, 0);
+  return "refused" in fitted ? null : fitted;
 }

@@ -1,6 +1,8 @@
 import type { Bootstrap } from "../decayArgument.ts";
 import { estimate, type Quantity } from "../quantity.ts";
 import { seededRandom } from "../signal/seededRandom.ts";
+import type { CommonBlocks } from "./commonBlocks.ts";
+import { drawTogether } from "./drawTogether.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import type { WindowFit } from "./fitWindow.ts";
 import { minimiseLaw } from "./minimiseLaw.ts";
@@ -12,13 +14,19 @@ const refitTolerance = 1e-3;
 
 /**
  * Percentiles of n and x0 over refits of stations drawn anew: about the fitted law, each with its own sampling error,
- * or with the scatter where that is what tells the errors. Shown beside the profile, not adopted.
+ * or with the scatter where that is what tells the errors; stations sampled together all at once, by their common blocks.
+ * Shown beside the profile, not adopted.
  * The seed follows from the places of the stations.
  * @param window a law
+ * @param blocks of its stations; null: each station for itself
  * @returns      2.5 and 97.5 % points; a side is open where more than 2.5 % of the draws fall like an exponential
  * @see          Efron & Tibshirani (1993), An Introduction to the Bootstrap, ch. 13
  */
-export function bootstrapLaw({ fit, variance }: WindowFit, { refits } = bootstrapDefaults): Bootstrap {
+export function bootstrapLaw(
+  { fit, variance }: WindowFit,
+  blocks: CommonBlocks | null = null,
+  { refits } = bootstrapDefaults,
+): Bootstrap {
   const { problem, law, held } = fit;
   evaluateLaw(problem, law, held);
   const measured = problem.y.slice();
@@ -27,9 +35,13 @@ export function bootstrapLaw({ fit, variance }: WindowFit, { refits } = bootstra
   const random = seededRandom(seedOf(problem.d));
   const [n, x0]: [number[], number[]] = [[], []];
   let withoutLaw = 0;
+  const moves = new Float64Array(problem.count);
   for (let draw = 0; draw < refits; draw++) {
+    if (blocks !== null) drawTogether(blocks, random, moves);
+    else for (let i = 0; i < problem.count; i++) moves[i] = (root * random.gaussian()) / problem.w[i];
+    const scaled = blocks !== null && problem.linear;
     for (let i = 0; i < problem.count; i++)
-      problem.y[i] = fitted[i] + (root * random.gaussian()) / problem.w[i];
+      problem.y[i] = scaled ? fitted[i] * Math.exp(moves[i]) : fitted[i] + moves[i];
     const found = minimiseLaw(problem, law, held, refitTolerance);
     if (found.exponential || !found.converged) {
       withoutLaw++;

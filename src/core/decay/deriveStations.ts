@@ -69,8 +69,14 @@ function dissipationOfDecay(station: StationResult, decay: DecayResult, settings
 /** The adopted dissipation and the scales it fixes; what a profile brought itself is kept. */
 function withScales(station: StationResult, { kinematicViscosity }: DecaySettings): StationResult {
   const epsilon = station.epsilon_decay;
-  const scales = scalesFromDissipation(station.uu, epsilon, station.L11, kinematicViscosity);
+  const scales = scalesFromDissipation(longitudinal(station), epsilon, station.L11, kinematicViscosity);
   if (station.duration !== null) return { ...station, epsilon, ...scales };
   const own = isEstimate(station.lambda) ? { lambda: station.lambda } : {};
   return { ...station, epsilon, ...scales, ...own };
+}
+
+/** Variance of the component along the line that distances are taken on: that of u, but on lines across the stream. */
+function longitudinal({ facts, uu, vv, ww }: StationResult): Quantity {
+  const along = facts.lines?.along;
+  return along === "y" ? vv : along === "z" ? ww : uu;
 }

@@ -1,10 +1,12 @@
 import type { ScannedWindow, WindowScan } from "../decayArgument.ts";
-import type { DecayPoint, DecayResult, DecaySettings } from "../decayResult.ts";
+import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { missing } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
+import { commonBlocks } from "./commonBlocks.ts";
 import { type Condition, criterion } from "./criterion.ts";
-import { fitWindow, windowQuantity } from "./fitWindow.ts";
+import { fitWindow, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
 import { startConditions } from "./startConditions.ts";
+import { withCommonBlocks } from "./withCommonBlocks.ts";
 
 /** Share of a domain's lateral extent that L11 may reach before the walls, or the periodic images, are felt. */
 export const largestShareOfExtent = 0.25;
@@ -26,38 +28,34 @@ export function windowScan(
   const xs = stations.map(({ x }) => x);
   const first = points.findIndex((point) => point.used);
   const last = first + points.filter((point) => point.used).length - 1;
+  const places = new Set(points.map(({ x }) => x));
+  const blocks = commonBlocks(
+    stations.filter(({ x }) => places.has(x)),
+    decay,
+    settings,
+  );
+  const scanned = (from: number, to: number, varying: number): ScannedWindow => {
+    const at = { x: points[varying].x, stations: to - from + 1 };
+    if (from === first && to === last) return { ...at, ...decay.given_window, p: decay.p, adopted: true };
+    const fitted = fitWindow(points.slice(from, to + 1), settings);
+    return { ...at, ...numbersOf(withCommonBlocks(fitted, blocks, from)), adopted: false };
+  };
   const end = endCondition(stations, settings.extent ?? null);
+  const none = first < 0;
   return {
-    first:
-      first < 0
-        ? []
-        : points
-            .slice(0, last + 1)
-            .map(({ x }, i) => scanned(x, points.slice(i, last + 1), settings, i === first)),
-    last:
-      first < 0
-        ? []
-        : points
-            .slice(first)
-            .map(({ x }, i) => scanned(x, points.slice(first, first + i + 1), settings, first + i === last)),
+    first: none ? [] : points.slice(0, last + 1).map((_, from) => scanned(from, last, from)),
+    last: none ? [] : points.slice(first).map((_, i) => scanned(first, first + i, first + i)),
     start: startConditions(stations).map((condition) => criterion(xs, condition)),
     end: end === null ? [] : [criterion(xs, end, "end")],
   };
 }
 
-function scanned(
-  x: number,
-  points: readonly DecayPoint[],
-  settings: DecaySettings,
-  adopted: boolean,
-): ScannedWindow {
-  const fitted = fitWindow(points, settings);
-  const at = { x, stations: points.length, adopted };
+function numbersOf(fitted: WindowFit | Refusal): Pick<ScannedWindow, "n" | "x0" | "p"> {
   if ("refused" in fitted) {
     const none = missing(fitted.refused);
-    return { ...at, n: none, x0: none, p: null };
+    return { n: none, x0: none, p: null };
   }
-  return { ...at, n: windowQuantity(fitted, "n"), x0: windowQuantity(fitted, "x0"), p: fitted.p };
+  return { n: windowQuantity(fitted, "n"), x0: windowQuantity(fitted, "x0"), p: fitted.p };
 }
 
 /** L11 small beside the lateral extent; null where none is given. */

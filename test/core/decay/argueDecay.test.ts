@@ -9,6 +9,7 @@ import { seededRandom } from "../../../src/core/signal/seededRandom.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
 import { expectClose } from "../../support/expectClose.ts";
 import { known, lawStations, plainSettings, spacedFrom, stationAt } from "../../support/lawStations.ts";
+import { sharedRecords } from "../../support/sharedRecords.ts";
 
 const M = 0.025;
 const law = { A: 0.06, x0: 3 * M, n: 1.25, ell: M, U: 6, nu: 1.5e-5, B: 0.005, m: 0.375 };
@@ -98,6 +99,20 @@ describe("the joint region of n and x0", () => {
     expect([inner.closed, outer.closed]).toEqual([true, true]);
     expect(Math.max(...inner.n)).toBeLessThan(Math.max(...outer.n));
   });
+  it("has at each of its points the rise of two numbers at 95 %, by hand", () => {
+    const sumAt = (n: number, x0: number) => {
+      const level = scattered.map(({ x, k }) => Math.log(k.value ?? 1) + n * Math.log(x - x0));
+      const mean = level.reduce((sum, value) => sum + value / level.length, 0);
+      return level.reduce((sum, value) => sum + ((value - mean) / 0.01) ** 2, 0);
+    };
+    const least = sumAt(decay.law?.n ?? 0, decay.law?.x0 ?? 0);
+    // chi-square with two degrees of freedom: -2 ln 0.05
+    for (let i = 0; i < outer.n.length; i += 8)
+      expectClose(sumAt(outer.n[i], outer.x0[i]) - least, -2 * Math.log(0.05), {
+        relative: 1e-3,
+        because: "errors smoothed over equal ones are equal; the crossing is found to a millionth",
+      });
+  });
   it("lies near its ellipse where the law is well known, and leaves it where it is not", () => {
     const misfit = (stations: StationResult[]) => {
       const contour = argued(stations).argument.region?.contours[1];
@@ -114,6 +129,19 @@ describe("the joint region of n and x0", () => {
     const contour = argued(short).argument.region?.contours[1];
     expect(contour?.closed).toBe(false);
     expect(contour?.x0.every(Number.isFinite)).toBe(true);
+  });
+  it("and the scan, and the bootstrap, are of the common blocks where stations were sampled together", () => {
+    const shared = { A: 0.06, x0: 4, n: 1.25, U: 1 };
+    const stations = sharedRecords(shared, spacedFrom(4, 20, 80, 12), 0.95, seededRandom(2));
+    const found = argued(stations, { window: [0, 100], quantity: "uu", referenceLength: 1 });
+    const { n } = found.decay.given_window;
+    const { n: drawn } = found.argument.bootstrap ?? { n };
+    const adopted = found.argument.scan.first.find((window) => window.adopted);
+    expect(adopted?.n).toEqual(n);
+    if (!isEstimate(n) || !isEstimate(drawn)) throw new Error("missing");
+    const [told, seen] = [n, drawn].map(({ low, high }) => (high ?? 0) - (low ?? 0));
+    // Student's t of 49 is 2.5 % beyond the normal's
+    expectClose(seen / told, 1, { absolute: 0.12, because: "percentiles of 1000 draws" });
   });
   it("is not drawn where x0 is held", () => expect(argued(scattered, { x0: 0 }).argument.region).toBeNull());
   it("stands beside a bootstrap whose percentiles are those of the profile within their own scatter", () => {
