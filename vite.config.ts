@@ -151,6 +151,7 @@ export default defineConfig(({ mode }) => {
       emptyOutDir: true,
       chunkSizeWarningLimit: 1700,
       assetsInlineLimit: 0,
+      rollupOptions: { checks: { pluginTimings: false } },
     },
     preview: { headers: { "Content-Security-Policy": contentSecurityPolicy } },
     test: tests,
