@@ -3,6 +3,7 @@ import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { isEstimate, type Quantity } from "../../../src/core/quantity.ts";
 import { reduceStation } from "../../../src/core/station/reduceStation.ts";
+import { taylorFactors } from "../../../src/core/station/stationValues.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
 import { expectClose } from "../../support/expectClose.ts";
 import { exponential, partOf, settings, smoothRecord, stationOf, whiteNoise } from "./records.ts";
@@ -331,6 +332,15 @@ describe("what is not known is said", () => {
     expect(numberOf(station.routes.lambda_gradient)).toBe(numberOf(plain.lambda));
     expect(codes(station)).toContain("resolved-scales");
   });
+  it("a measurement whose sensor is longer than four eta: its length in them", () => {
+    const eta = numberOf(plain.eta);
+    const flagOf = (sensorLength: number) =>
+      stationOf(record, { kind: "measurement", sensorLength }).flags.find(
+        ({ code }) => code === "sensor-length",
+      );
+    expect(flagOf(3.9 * eta)).toBeUndefined();
+    expectClose(flagOf(8 * eta)?.value, 8, { relative: 1e-9, because: "definition" });
+  });
   it("a correlation that never falls to zero: a lower bound in words", () => {
     const ramp = Float64Array.from({ length: 600 }, (_, i) => 10 + (i < 300 ? 0 : 1) + 1e-3 * Math.sin(i));
     const station = stationOf({ u: ramp });
@@ -370,6 +380,14 @@ describe("Taylor's hypothesis", () => {
       });
     }
     expect(codes(corrected)).not.toContain("taylor-doubtful");
+  });
+  it("in isotropic flow takes 5 uu/U² from the longitudinal gradient and 2.5 from the lateral ones", () => {
+    // Heskestad (1965), J. Appl. Mech. 32, 735; Wyngaard & Clifford (1977), J. Atmos. Sci. 34, 922
+    const [u, v, w] = taylorFactors(0.09, 0.09, 0.09, 3, true);
+    const close = { relative: 1e-14, because: "closed form" };
+    expectClose(u, 1 + (5 * 0.09) / 9, close);
+    expectClose(v, 1 + (2.5 * 0.09) / 9, close);
+    expectClose(w, 1 + (2.5 * 0.09) / 9, close);
   });
   it("is doubtful where it changes the gradient by more than a tenth", () => {
     const slow = stationOf({ ...record, u: record.u.map((u) => u - 5) }, { taylorCorrection: true });
