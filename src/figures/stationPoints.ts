@@ -7,7 +7,7 @@ import { isUsed } from "./windowOf.ts";
 
 /** Fields of a station that hold a quantity. */
 export type QuantityKey = {
-  [K in keyof StationResult]: StationResult[K] extends Quantity ? K : never;
+  [K in keyof StationResult]-?: StationResult[K] extends Quantity ? K : never;
 }[keyof StationResult];
 
 /** One quantity along the stream, times a factor. What is missing leaves a gap. */

@@ -12,6 +12,7 @@ import type { Held } from "../session/session.ts";
 import { ArgumentSection } from "./ArgumentSection.tsx";
 import { CompareSection } from "./CompareSection.tsx";
 import { DecaySection } from "./DecaySection.tsx";
+import { DefinitionPanel } from "./DefinitionPanel.tsx";
 import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
 import { findingsOf } from "./findings.ts";
 import { PageFoot } from "./PageFoot.tsx";
@@ -44,7 +45,7 @@ export function Argument({
   const reduced = cases.filter((view) => view.stations.length > 0);
   const shared = { cases: reduced, stale };
   return (
-    <>
+    <DefinitionPanel cases={cases}>
       <div className="row page-top">
         <div />
         <div>
@@ -101,7 +102,7 @@ export function Argument({
       )}
       <PageFoot cases={cases} />
       <LiveRegion text={stale ? "Recomputing." : spoken(cases, findings)} />
-    </>
+    </DefinitionPanel>
   );
 }
 

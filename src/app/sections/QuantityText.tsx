@@ -3,6 +3,7 @@ import type { Quantity } from "../../core/quantity.ts";
 import type { Units } from "../../core/unitText.ts";
 import { raisedDigits, thinSpace, withUnit } from "../../figures/formatNumber.ts";
 import { type FormattedQuantity, formatQuantity, formatScaled } from "../../figures/formatQuantity.ts";
+import { NumberButton } from "./NumberButton.tsx";
 import { RichText } from "./RichText.tsx";
 
 /** How a quantity is to be shown: by its label, or in multiples of a length. */
@@ -36,7 +37,11 @@ export function QuantityCells({ quantity, ...manner }: { quantity: Quantity } & 
     );
   return (
     <>
-      <td title={String(quantity.value)}>{withUnit(valueText(shown), manner.per ? shown.unit : "")}</td>
+      <td title={String(quantity.value)}>
+        <NumberButton of={manner.label} quantity={quantity}>
+          {withUnit(valueText(shown), manner.per ? shown.unit : "")}
+        </NumberButton>
+      </td>
       <td className="pm">{shown.interval ?? "–"}</td>
     </>
   );

@@ -1,5 +1,6 @@
 import type { Piece, Sentence } from "../../export/sentences/piece.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { NumberButton } from "./NumberButton.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 
@@ -16,7 +17,13 @@ function PieceText({ piece }: { piece: Piece }) {
     case "text":
       return <RichText text={piece.text} />;
     case "strong":
-      return <strong>{piece.text}</strong>;
+      return piece.about === undefined ? (
+        <strong>{piece.text}</strong>
+      ) : (
+        <NumberButton of={piece.about.key} quantity={piece.about.quantity}>
+          <strong>{piece.text}</strong>
+        </NumberButton>
+      );
     case "interval":
       return <span className="ci">{piece.text}</span>;
     case "symbol":

@@ -1,11 +1,16 @@
+import type { FocusEvent, KeyboardEvent } from "react";
 import { labelOf } from "../../core/catalogue.ts";
+import type { Flag } from "../../core/flag.ts";
 import { isEstimate } from "../../core/quantity.ts";
 import { withReference } from "../../core/symbolRuns.ts";
 import { unitOf } from "../../core/unitText.ts";
+import { concernOf } from "../../figures/flagConcern.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { Definition } from "./Definition.tsx";
+import { NumberButton } from "./NumberButton.tsx";
+import { Pennant } from "./Pennant.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.ts";
@@ -22,7 +27,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
   return (
     <>
       <TableScroll label="Stations">
-        <table className="data stations-table">
+        <table className="data stations-table" onKeyDown={walkCells} onFocus={stayHere} ref={enterAtFirst}>
           <thead>
             <tr>
               <th scope="col">
@@ -49,10 +54,13 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
                 onPointerEnter={() => onHover(station.x)}
                 onPointerLeave={() => onHover(null)}
               >
-                <td>{formatNumber(station.x, decimals)}</td>
+                <td>
+                  {formatNumber(station.x, decimals)}
+                  <CellFlags flags={station.flags.filter((flag) => concernOf(flag) === null)} />
+                </td>
                 {distances && <td>{distances[row]}</td>}
                 {shown.map((column) => (
-                  <Cells column={column} row={row} key={column.key} />
+                  <Cells column={column} row={row} flags={station.flags} key={column.key} />
                 ))}
               </tr>
             ))}
@@ -80,14 +88,70 @@ function ColumnHead({ column }: { column: StationColumn }) {
   );
 }
 
-function Cells({ column, row }: { column: StationColumn; row: number }) {
-  const { value, error, title } = column.cells[row];
+function Cells({ column, row, flags }: { column: StationColumn; row: number; flags: readonly Flag[] }) {
+  const { value, error, title, quantity } = column.cells[row];
+  const own = flags.filter((flag) => concernOf(flag)?.includes(column.key) ?? false);
   return (
     <>
-      <td title={title}>{value}</td>
-      <td className="pm">{error}</td>
+      <td title={title}>
+        <NumberButton of={column.key} quantity={quantity} cell>
+          {value}
+        </NumberButton>
+      </td>
+      <td className="pm">
+        {error}
+        <CellFlags flags={quantity.value === null ? [] : own} />
+      </td>
     </>
   );
+}
+
+/** A pennant beside a number in doubt; its text for the pointer and for screen readers. */
+function CellFlags({ flags }: { flags: readonly Flag[] }) {
+  if (flags.length === 0) return null;
+  const text = flags.map((flag) => flag.text).join(" ");
+  return (
+    <span className="cell-flag" title={text}>
+      <Pennant />
+      <span className="spoken">{text}</span>
+    </span>
+  );
+}
+
+const steps: Readonly<Record<string, readonly [number, number]>> = {
+  ArrowLeft: [0, -1],
+  ArrowRight: [0, 1],
+  ArrowUp: [-1, 0],
+  ArrowDown: [1, 0],
+};
+
+/** Arrow keys go from number to number: the table is one stop of the Tab key. */
+function walkCells(event: KeyboardEvent<HTMLTableElement>): void {
+  const step = steps[event.key];
+  const from = event.target instanceof HTMLElement ? event.target.closest("tr") : null;
+  if (step === undefined || from === null) return;
+  const rows = [...event.currentTarget.querySelectorAll("tbody tr")].map((row) => [
+    ...row.querySelectorAll<HTMLElement>("[data-cell]"),
+  ]);
+  const row = rows.findIndex((cells) => cells.some((cell) => cell === event.target));
+  if (row < 0) return;
+  const column = rows[row].findIndex((cell) => cell === event.target);
+  const next = rows[row + step[0]]?.[column + step[1]];
+  if (next === undefined) return;
+  event.preventDefault();
+  next.focus();
+}
+
+/** The first number, or the one last reached, is where the Tab key comes in. */
+function stayHere(event: FocusEvent<HTMLTableElement>): void {
+  if (!(event.target instanceof HTMLElement) || !("cell" in event.target.dataset)) return;
+  for (const cell of event.currentTarget.querySelectorAll<HTMLElement>("[data-cell]")) cell.tabIndex = -1;
+  event.target.tabIndex = 0;
+}
+
+function enterAtFirst(table: HTMLTableElement | null): void {
+  if (table?.querySelector('[data-cell][tabindex="0"]')) return;
+  table?.querySelector("[data-cell]")?.setAttribute("tabindex", "0");
 }
 
 /** Columns left out because every cell has the same gap: their names and the reason. */

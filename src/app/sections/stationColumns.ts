@@ -33,6 +33,7 @@ export interface StationCell {
   readonly error: string | null;
   /** Full precision, or the reason of the gap. */
   readonly title: string;
+  readonly quantity: Quantity;
 }
 
 /** One column of the table: all its numbers with the same decimals, those the middle interval asks for. */
@@ -59,13 +60,13 @@ export function stationColumn(
 }
 
 function cell(quantity: Quantity, factor: number, decimals: number): StationCell {
-  if (!isEstimate(quantity)) return { value: "–", error: null, title: quantity.why };
+  if (!isEstimate(quantity)) return { value: "–", error: null, title: quantity.why, quantity };
   const { value, low, high, why_low, why_high } = quantity;
   const error =
     low === null || high === null ? "–" : `±\u202f${formatNumber(((high - low) / 2) * factor, decimals)}`;
   const interval =
     low === null || high === null ? (why_low ?? why_high ?? "no interval") : `${low} to ${high}`;
-  return { value: formatNumber(value * factor, decimals), error, title: `${value} (${interval})` };
+  return { value: formatNumber(value * factor, decimals), error, title: `${value} (${interval})`, quantity };
 }
 
 /** Values that fall by more than this along the stream are each written with their own decimals. */

@@ -1,11 +1,17 @@
 import type { Run } from "../../core/catalogue.ts";
+import type { Quantity } from "../../core/quantity.ts";
 import { raisedDigits } from "../../figures/formatNumber.ts";
 
 /** A piece of a sentence, so that the page can set values, intervals, symbols and cases each in its way. */
 export type Piece =
   | { readonly kind: "text"; readonly text: string }
   /** A value or a verdict, set in weight 600. */
-  | { readonly kind: "strong"; readonly text: string }
+  | {
+      readonly kind: "strong";
+      readonly text: string;
+      /** The number it prints: its label's key and the very quantity, for the definition behind it. */
+      readonly about?: { readonly key: string; readonly quantity: Quantity };
+    }
   /** A 95 % interval with its brackets, set in grey. */
   | { readonly kind: "interval"; readonly text: string }
   | { readonly kind: "symbol"; readonly runs: readonly Run[] }

@@ -19,7 +19,7 @@ export function caseOf({ mark, name }: SentenceCase): Piece {
 
 /** A value in weight 600 and its interval in grey: "13.2 mm (12.5 to 13.9)". */
 export function valueWithInterval(quantity: Quantity, key: string, units: Units): Sentence {
-  return shown(formatQuantity(quantity, labelOf(key), units));
+  return shown(formatQuantity(quantity, labelOf(key), units), { key, quantity });
 }
 
 /** The same, opened by the symbol: "n = 1.25 (1.20 to 1.31)". */
@@ -29,9 +29,10 @@ export function equation(quantity: Quantity, key: string, units: Units): Sentenc
 
 /** A length in multiples of the reference length, or in its own unit where the case has none. */
 export function lengthValue(quantity: Quantity, of: SentenceCase): Sentence {
-  if (of.length === null) return valueWithInterval(quantity, of.along === "t" ? "t0" : "x0", of.units);
+  const key = of.along === "t" ? "t0" : "x0";
+  if (of.length === null) return valueWithInterval(quantity, key, of.units);
   const { unit, ...plain } = formatScaled(quantity, { factor: 1 / of.length, unit: of.symbol });
-  return shown({ ...plain, unit: "" }, [
+  return shown({ ...plain, unit: "" }, { key, quantity }, [
     { kind: "text", text: thinSpace },
     { kind: "symbol", runs: withReference([{ text: "ℓ" }], unit) },
   ]);
@@ -62,10 +63,14 @@ export function percent(share: number): string {
   return withUnit(String(Number((100 * share).toPrecision(2))), "%");
 }
 
-function shown(formatted: FormattedQuantity, after: Sentence = []): Sentence {
+function shown(
+  formatted: FormattedQuantity,
+  about: { key: string; quantity: Quantity },
+  after: Sentence = [],
+): Sentence {
   const { value, interval, unit, power } = formatted;
   const times = power === null ? "" : `${thinSpace}×${thinSpace}10${raisedDigits(power)}`;
-  const strong: Piece = { kind: "strong", text: withUnit(value + times, unit) };
+  const strong: Piece = { kind: "strong", text: withUnit(value + times, unit), about };
   const whole: Piece = after.length === 0 ? strong : { kind: "together", pieces: [strong, ...after] };
   return interval === null ? [whole] : say`${whole} ${{ kind: "interval", text: `(${interval})` }}`;
 }

@@ -1,0 +1,69 @@
+import { fireEvent, render, screen, within } from "@testing-library/react";
+import { describe, expect, it } from "vitest";
+import { DefinitionPanel } from "../../../src/app/sections/DefinitionPanel.tsx";
+import { FitTable } from "../../../src/app/sections/FitTable.tsx";
+import { StationTable } from "../../../src/app/sections/StationTable.tsx";
+import { tableKeys } from "../../../src/app/sections/stationColumns.ts";
+import { missing } from "../../../src/core/quantity.ts";
+import type { StationResult } from "../../../src/core/stationResult.ts";
+import { stationAt, viewOf } from "../fixtures.ts";
+
+const flag = { code: "resolution" as const, text: "Gradients are resolved to k1 eta 0.7 only." };
+const station: StationResult = {
+  ...stationAt(0.45),
+  flags: [flag],
+  routes: { lambda_f: { value: 0.004, low: 0.0039, high: 0.0041 }, lambda_gradient: missing("no spectrum") },
+};
+const view = viewOf([stationAt(0.2), station]);
+
+function shown() {
+  render(
+    <DefinitionPanel cases={[view]}>
+      <StationTable view={view} onHover={() => {}} />
+      <FitTable cases={[view]} />
+    </DefinitionPanel>,
+  );
+}
+const panel = () => screen.getByRole("dialog", { hidden: true });
+
+describe("the definition behind a number", () => {
+  it("of the Taylor microscale gives formula, place, other routes with values or reasons, doubts and source", () => {
+    shown();
+    const row = document.querySelector<HTMLElement>('[data-station$=" 0.45"]');
+    if (!row) throw new Error("no row");
+    const cells = within(row).getAllByRole("button");
+    fireEvent.click(cells[tableKeys.indexOf("lambda")]);
+    expect(panel().textContent).toContain("Taylor microscale");
+    expect(panel().textContent).toContain("0.45");
+    expect(panel().textContent).toContain("longitudinal Taylor microscale");
+    expect(panel().textContent).toContain("no spectrum");
+    expect(panel().textContent).toContain(flag.text.slice(0, 24));
+    expect(panel().textContent).toContain("Pope (2000)");
+  });
+
+  it("of the exponent gives window, residuals and the exponent by other routes", () => {
+    shown();
+    const exponent = screen.getByRole("row", { name: /^exponent n/ });
+    fireEvent.click(within(exponent).getAllByRole("button").at(-1) ?? exponent);
+    expect(panel().textContent).toContain("window");
+    expect(panel().textContent).toContain("given this window");
+  });
+
+  it("is reached in a table by one stop of the Tab key and the arrow keys", () => {
+    shown();
+    const cells = [...document.querySelectorAll<HTMLElement>("[data-cell]")];
+    expect(cells.filter(({ tabIndex }) => tabIndex === 0)).toHaveLength(1);
+    cells[0].focus();
+    fireEvent.keyDown(cells[0], { key: "ArrowRight" });
+    expect(document.activeElement).toBe(cells[1]);
+    fireEvent.keyDown(cells[1], { key: "ArrowDown" });
+    expect(document.activeElement?.closest("tr")?.dataset.station).toContain("0.45");
+  });
+
+  it("a doubt stands beside the number it is about, with its text", () => {
+    shown();
+    const marked = [...document.querySelectorAll(".cell-flag")];
+    expect(marked.length).toBeGreaterThan(0);
+    expect(marked.every((each) => each.textContent?.includes(flag.text))).toBe(true);
+  });
+});
