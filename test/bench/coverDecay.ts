@@ -1,12 +1,13 @@
 // How often the 95 % intervals of a decay law hold the truth, over synthetic profiles: node bundle.mjs ASK
-// ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "excesses"}, {"kind": "refits",
-// "profiles", "rounds"} or {"kind": "profiles", "profiles"}. Prints one line of JSON.
+// ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "excesses"}, {"kind": "together",
+// "profiles", "rhos"}, {"kind": "refits", "profiles", "rounds"} or {"kind": "profiles", "profiles"}. Prints one line of JSON.
 import { fitDecay } from "../../src/core/decay/fitDecay.ts";
 import { fitPowerLaw } from "../../src/core/decay/fitPowerLaw.ts";
 import { fitWindow, windowQuantity } from "../../src/core/decay/fitWindow.ts";
 import { isEstimate, type Quantity } from "../../src/core/quantity.ts";
 import { seededRandom } from "../../src/core/signal/seededRandom.ts";
 import { known, plainSettings, spacedFrom, stationAt } from "../support/lawStations.ts";
+import { sharedRecords } from "../support/sharedRecords.ts";
 
 /** One cell of the table: scatter of ln q, (x_last - x0)/(x_first - x0), stations, and whether the fit knows the scatter. */
 interface Cell {
@@ -82,6 +83,21 @@ function coverWindows(excess: number, profiles: number, seed: number) {
   return { excess, begins, given, union };
 }
 
+/** Stations sampled together, their neighbours correlated by rho; taken as such, as each for itself, or told by the data. */
+function coverTogether(rho: number, simultaneous: boolean | "auto", profiles: number): Tally {
+  const random = seededRandom(3);
+  const stream = { ...truth, U: 1 };
+  const xs = spacedFrom(truth.x0, truth.x0 + 16, truth.x0 + 76, 12);
+  const settings = { ...plainSettings, window: [0, 100] as const, quantity: "uu" as const, simultaneous };
+  const tally = startTally(profiles);
+  for (let profile = 0; profile < profiles; profile++) {
+    const decay = fitDecay(sharedRecords(stream, xs, rho, random), settings);
+    if (decay.law === null) tally.refused++;
+    else add(tally, decay.n, decay.x0);
+  }
+  return tally;
+}
+
 /** Profiles for the timing, the same that the script beside reads; both start every refit from the first one's law. */
 function timedProfiles(profiles: number) {
   const random = seededRandom(30);
@@ -116,6 +132,7 @@ function timeRefits(profiles: number, rounds: number) {
 type Request =
   | { kind: "cells"; profiles: number; cells: Cell[]; seeds: number[] }
   | { kind: "windows"; profiles: number; excesses: number[] }
+  | { kind: "together"; profiles: number; rhos: number[] }
   | { kind: "profiles"; profiles: number }
   | { kind: "refits"; profiles: number; rounds: number };
 
@@ -123,6 +140,13 @@ function answer(ask: Request): unknown {
   if (ask.kind === "cells") return ask.cells.map((cell, i) => coverCell(cell, ask.profiles, ask.seeds[i]));
   if (ask.kind === "windows")
     return ask.excesses.map((excess, i) => coverWindows(excess, ask.profiles, 7 + i));
+  if (ask.kind === "together")
+    return ask.rhos.map((rho) => ({
+      rho,
+      blocks: coverTogether(rho, true, ask.profiles),
+      auto: coverTogether(rho, "auto", ask.profiles),
+      alone: coverTogether(rho, false, ask.profiles),
+    }));
   return ask.kind === "profiles" ? timedProfiles(ask.profiles) : timeRefits(ask.profiles, ask.rounds);
 }
 

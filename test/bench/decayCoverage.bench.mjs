@@ -22,6 +22,7 @@ export async function run(tools) {
   };
   await printCells(tools, ask);
   await printWindows(tools, ask);
+  await printTogether(tools, ask);
   await printTimes(tools, ask);
 }
 
@@ -88,6 +89,22 @@ async function printWindows(tools, ask) {
       begins.toFixed(1),
       ...[given.n, given.x0, union.n, union.x0].map((held) => percent(held / profiles)),
       excess > 0 || Math.min(union.n, union.x0) >= unionBar * profiles ? "" : "OUTSIDE",
+    ]),
+  );
+}
+
+async function printTogether(tools, ask) {
+  const found = await ask({ kind: "together", profiles: profiles / 4, rhos: [0, 0.8, 0.95] });
+  console.log(
+    `\nStations sampled together: 12 over a span of 4.75, 1000 integral times, ${profiles / 4} profiles; coverage of n and x0 by their common blocks, where the data have to tell, and each station for itself`,
+  );
+  tools.table(
+    ["neighbours correlated", "blocks: n %", "x0 %", "told: n %", "x0 %", "alone: n %", "x0 %"],
+    found.map(({ rho, blocks, auto, alone }) => [
+      rho.toFixed(2),
+      ...[blocks, auto, alone].flatMap((tally) =>
+        [tally.n, tally.x0].map((held) => percent(held / (tally.profiles - tally.refused))),
+      ),
     ]),
   );
 }
