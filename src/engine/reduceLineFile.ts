@@ -1,6 +1,6 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { LineReducer } from "../core/station/lines/startLines.ts";
-import { startLines } from "../core/station/lines/startLines.ts";
+import { withoutRepeatedEnd } from "../core/station/lines/withoutRepeatedEnd.ts";
 import type { ByteSource } from "../read/byteSource.ts";
 import { readLines } from "../read/readLines.ts";
 import type { FileReduction, ReduceAsk } from "./protocol.ts";
@@ -11,7 +11,7 @@ import type { FileReduction, ReduceAsk } from "./protocol.ts";
  */
 export async function reduceLineFile(
   source: ByteSource,
-  { read }: ReduceAsk,
+  { read, reduce }: ReduceAsk,
   onBytes: (bytes: number) => void,
 ): Promise<FileReduction> {
   let reducer: LineReducer | null = null;
@@ -20,7 +20,7 @@ export async function reduceLineFile(
     read,
     {
       grid(grid) {
-        reducer = startLines(grid);
+        reducer = withoutRepeatedEnd(grid, reduce.periodic);
         return reducer;
       },
     },

@@ -56,6 +56,15 @@ describe("a drop without sheets", () => {
     expect(plan([series("run_x0200.csv"), series("run_x0400.csv")]).cases[0].sheet.case).toBe("run");
     expect(plan([series("x0200.csv"), series("x0400.csv")]).cases[0].sheet.case).toBe("case");
   });
+  it("of tables of lines is a case of that layout, and asks for no step", () => {
+    const lines = (file: string) => looked(file, ["y", "t", "u"], { layout: "lines", step: null });
+    const { cases, leftOut } = plan([lines("a/x1.csv"), lines("a/x2.csv"), series("a/x3.csv")]);
+    expect(cases.map(({ sheet }) => [sheet.layout, sheet.files.length])).toEqual([["lines", 2]]);
+    expect(cases[0].questions.map(({ key }) => key)).not.toContain("read.step");
+    expect(leftOut).toMatchObject([
+      { name: "a/x3.csv", reason: expect.stringContaining("among tables of lines") },
+    ]);
+  });
   it("asks for name, viscosity, reference and what no file tells", () => {
     const { cases } = plan([series("a/x0200.csv"), unplaced("a/end.csv")]);
     expect(cases[0].questions).toEqual([

@@ -1,5 +1,6 @@
 import type { Flag } from "../../flag.ts";
 import { lineComponents } from "./lineFields.ts";
+import { lineHomogeneity } from "./lineHomogeneity.ts";
 import { type LineMaterial, lineLength } from "./lineMaterial.ts";
 import { fewestSnapshots } from "./lineSampling.ts";
 
@@ -14,6 +15,7 @@ export function lineFlags(material: LineMaterial, k1max_eta: number | null): Fla
     ...lengthFlags(material),
     ...componentFlags(material),
     ...spectrumFlags(material, k1max_eta),
+    ...homogeneityFlags(material),
   ];
   return flags.filter((flag, i) => flags.findIndex((other) => other.code === flag.code) === i);
 }
@@ -88,4 +90,12 @@ function spectrumFlags({ gradients }: LineMaterial, k1max_eta: number | null): F
     flags.push({ code: "resolution", text, value: k1max_eta });
   }
   return flags;
+}
+
+function homogeneityFlags(material: LineMaterial): Flag[] {
+  const p = lineHomogeneity(material);
+  if (p === null || p >= 0.01) return [];
+  const text =
+    "The mean of u varies along the line by more than its sampling error: the flow is not homogeneous there, and part of the variance is that of the mean.";
+  return [{ code: "inhomogeneous", text, value: p }];
 }

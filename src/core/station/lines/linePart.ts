@@ -62,6 +62,9 @@ export interface MemorySums {
   /** Lag 0 … in snapshots. */
   readonly products: Float64Array;
   readonly counts: Float64Array;
+  /** Σ of the later and of the earlier values of these pairs, component by component within each lag. */
+  readonly later: Float64Array;
+  readonly earlier: Float64Array;
 }
 
 /** Sums over all lines and snapshots about the reference, a list a component. */

@@ -40,7 +40,7 @@ export function snapshotTime(lines: JoinedLines): SnapshotTime {
   return { time, neighbours: rho.length > 1 ? rho[1] : null, independent };
 }
 
-function memoryOf({ parts, means, components }: JoinedLines): number[] {
+function memoryOf({ parts, means }: JoinedLines): number[] {
   const singles = parts.every((part) => part.single !== null);
   const sums = singles ? acrossFiles(parts) : parts.map((part) => ({ part, memory: part.memory }));
   const lags = sums[0].memory.products.length;
@@ -49,9 +49,14 @@ function memoryOf({ parts, means, components }: JoinedLines): number[] {
     let product = 0;
     let count = 0;
     for (const { part, memory } of sums) {
-      const offset = components.reduce((sum, _, c) => sum + (means[c] - part.reference[c]) ** 2, 0);
-      product += memory.products[lag] - memory.counts[lag] * offset;
+      product += memory.products[lag];
       count += memory.counts[lag];
+      // Σ (a - d)(b - d) = Σ a b - d Σ (a + b) + n d²
+      for (let c = 0; c < means.length; c++) {
+        const d = means[c] - part.reference[c];
+        const at = lag * means.length + c;
+        product += d * (memory.counts[lag] * d - memory.later[at] - memory.earlier[at]);
+      }
     }
     if (!(count > 0)) break;
     rho.push(product / count);
@@ -68,7 +73,7 @@ function acrossFiles(parts: readonly LinePart[]): { part: LinePart; memory: Memo
   }
   return [...lines.values()].map((series) => {
     const [first] = series;
-    const memory = startMemory(1, first.single?.[0].length ?? 0);
+    const memory = startMemory(1, first.single?.[0].length ?? 0, first.components.length);
     for (const { single } of series) if (single) memory.add(single, [first.reference]);
     return { part: first, memory: memory.of(0) };
   });

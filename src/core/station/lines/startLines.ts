@@ -49,7 +49,7 @@ export function startLines(grid: LineGrid): LineReducer {
     1,
     stations.flatMap(({ moments, sums }) => [moments, sums]),
   );
-  const memory = startMemory(places.length, perStation);
+  const memory = startMemory(places.length, perStation, components.length);
   const moment = new Float64Array(layout.length);
   const seen = { snapshots: 0, start: 0, end: 0, lowest: Number.POSITIVE_INFINITY };
   let single: Float64Array[] | null = null;

@@ -5,9 +5,10 @@ import { joinLines } from "../../../../src/core/station/lines/joinLines.ts";
 import { lineSpectra } from "../../../../src/core/station/lines/lineSpectra.ts";
 import { reduceLines } from "../../../../src/core/station/lines/reduceLines.ts";
 import { snapshotTime } from "../../../../src/core/station/lines/snapshotTime.ts";
+import { withoutRepeatedEnd } from "../../../../src/core/station/lines/withoutRepeatedEnd.ts";
 import type { StationResult } from "../../../../src/core/stationResult.ts";
 import { expectClose } from "../../../support/expectClose.ts";
-import { eta, type LineWish, lineSettings, madeSnapshots, partOf, truth } from "./madeLines.ts";
+import { eta, type LineWish, lineGrid, lineSettings, madeSnapshots, partOf, truth } from "./madeLines.ts";
 
 const wish: LineWish = { along: "y", size: 256, spacing: 3 * eta, snapshots: 40, seed: 1 };
 const keys = ["U", "uu", "vv", "ww", "k", "gradient", "epsilon", "lambda", "Re_lambda", "L11"] as const;
@@ -203,5 +204,38 @@ describe("what lines cannot tell is said", () => {
       return null;
     };
     expect([code([part, again]), code([part, fewer])]).toEqual(["backward-time", "different-points"]);
+  });
+});
+
+describe("a line", () => {
+  const codes = (station: StationResult) => station.flags.map(({ code }) => code);
+  const shifted = (by: (i: number) => number) =>
+    madeSnapshots(wish).map(([u, v, w]) => [u.map((value, i) => value + by(i)), v, w] as const);
+
+  it("whose mean varies along it is flagged, and one that is homogeneous is not", () => {
+    const sheared = shifted((i) => 0.3 * Math.cos((2 * Math.PI * i) / wish.size));
+    expect(codes(reduceLines([partOf(wish, sheared)], lineSettings))).toContain("inhomogeneous");
+    expect(codes(reduceLines([partOf(wish)], lineSettings))).not.toContain("inhomogeneous");
+  });
+
+  it("that repeats its first point at the end gives what it gives without", () => {
+    const closed = madeSnapshots(wish).map((snapshot) =>
+      snapshot.map((column) => Float64Array.from([...column, column[0]])),
+    );
+    const grid = lineGrid({ ...wish, kept: wish.size + 1 });
+    const cases = [
+      ["auto", wish.size],
+      [false, wish.size + 1],
+    ] as const;
+    const parts = cases.map(([periodic, points]) => {
+      const reducer = withoutRepeatedEnd(grid, periodic);
+      closed.forEach((snapshot, t) => {
+        reducer.add(t, snapshot);
+      });
+      const [part] = reducer.finish();
+      expect(part.points.length).toBe(points);
+      return part;
+    });
+    expect(reduceLines([parts[0]], lineSettings)).toEqual(reduceLines([partOf(wish)], lineSettings));
   });
 });
