@@ -10,8 +10,8 @@ export interface IncrementSums {
   restart(): void;
 }
 
-/** An increment over l samples is taken every l/8: those between are told by their neighbours. */
-const shareOfLag = 8;
+/** An increment over l samples is taken every l/2: those between are told by their neighbours. */
+const shareOfLag = 2;
 
 /**
  * Increments at a set of lags. Which are taken follows from the sample's index alone, so that chunks of any

@@ -111,8 +111,8 @@ export class SpectralSums {
   }
 }
 
-/** Lags of the structure functions: from a hundredth of the integral time up to it. */
+/** Lags of the structure functions: from a fortieth of the integral time, below any Taylor scale, up to it. */
 function structureLags({ integralTime, step, lagLimit }: RecordPlan): number[] {
   const scale = integralTime === null ? lagLimit / 8 : integralTime / step;
-  return incrementLags(Math.max(1, scale / 100), Math.min(scale, lagLimit));
+  return incrementLags(Math.max(1, scale / 40), Math.min(scale, lagLimit));
 }

@@ -126,7 +126,11 @@ function spectrumFlags({ gradients, spectra, settings }: StationMaterial, facts:
     flags.push({ code: "aliasing", text, value: rising.rule.slope });
   }
   if (facts.k1max_eta !== null && facts.k1max_eta < resolved) {
-    const text = `The highest usable wavenumber times eta is ${facts.k1max_eta.toPrecision(2)}: lambda and eta are upper bounds, the dissipation is a lower one.`;
+    const highest = facts.k1max_eta.toPrecision(2);
+    const extrapolated = gradients.some(({ name, rule }) => name === "u" && rule.tail !== null);
+    const text = extrapolated
+      ? `The spectrum stands out of its noise up to a wavenumber times eta of ${highest} only: lambda, eta and the dissipation rest on what is extrapolated beyond.`
+      : `The highest usable wavenumber times eta is ${highest}: lambda and eta are upper bounds, the dissipation is a lower one.`;
     flags.push({ code: "resolution", text, value: facts.k1max_eta });
   }
   const sensor = settings.sensorLength;

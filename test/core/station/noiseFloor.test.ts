@@ -52,6 +52,43 @@ describe.each([
   });
 });
 
+describe("a record cut by noise of 5 % of u'", () => {
+  const flow = flows[51];
+  const step = (2 * (flow.viscosity ** 3 / flow.epsilon) ** 0.25) / flow.U;
+  const { u, truth } = isotropicRecord({ ...flow, step, samples: 1 << 15, seed: 1 });
+  const random = seededRandom(77);
+  const sigma = 0.05 * Math.sqrt(truth.uu);
+  const station = stationOf({ u: u.map((x) => x + sigma * random.gaussian()) }, {}, { step });
+
+  it("tells the level of the noise it subtracted", () => {
+    // white noise of variance s² up to Nyquist, pi/(U dt)
+    const level = sigma ** 2 / (Math.PI / (flow.U * step));
+    expectClose(station.facts.noiseFloor, level, {
+      relative: 0.06,
+      because: "the spectrum's own end adds a little",
+    });
+  });
+  it("tells the share beyond the cut, and how much of lambda hangs on where the cut is", () => {
+    expect(station.facts.shareBeyondCutoff).toBeGreaterThan(0.02);
+    expect(station.facts.shareBeyondCutoff).toBeLessThan(0.12);
+    expect(station.facts.cutoffSensitivity).toBeGreaterThan(0);
+    expect(station.facts.cutoffSensitivity).toBeLessThan(0.01);
+  });
+  it("has differences that hold the noise: by s²/2 over the step squared more than the spectrum lets expect", () => {
+    const { gradient_difference2, gradient_difference2_expected } = station.routes;
+    const excess = (gradient_difference2.value ?? 0) - (gradient_difference2_expected.value ?? 0);
+    expectClose(excess, sigma ** 2 / 2 / (flow.U * step) ** 2, {
+      relative: 0.18,
+      because: "three standard errors of the mean product of the two differences over 32768 samples",
+    });
+  });
+  it("is flagged, as noisy and as extrapolated", () => {
+    const texts = station.flags.map(({ code, text }) => `${code}: ${text}`).join("\n");
+    expect(texts).toMatch(/noise-floor: .* added from an exponential/);
+    expect(texts).toMatch(/resolution: .* extrapolated beyond/);
+  });
+});
+
 describe("the rule for a noise floor", () => {
   const size = 4096;
   // a closed form: an exponential above a level, no scatter

@@ -202,15 +202,15 @@ describe("forced isotropic turbulence, JHTDB isotropic1024 (Li et al. 2008, J. T
   const { density, size, step } = spectrum;
   const uu = varianceOf(spectrum);
   const epsilon =
-    15 * published.nu * meanSquareRate(density, size, step, noiseFloor(density, size, Infinity));
+    15 * Number(published.nu) * meanSquareRate(density, size, step, noiseFloor(density, size, Infinity));
 
   it("has the published energy, dissipation, Taylor scale and Reynolds number", () => {
     const digits = { relative: 0.005, because: "three published digits" };
-    expectClose(1.5 * uu, published.K, digits);
+    expectClose(1.5 * uu, Number(published.K), digits);
     expectClose(epsilon, published.eps, digits);
-    expectClose(Math.sqrt((15 * published.nu * uu) / epsilon), published.lambda, digits);
+    expectClose(Math.sqrt((15 * Number(published.nu) * uu) / epsilon), Number(published.lambda), digits);
     const row = { file: "jhtdb", line: 1, x: 0, values: { uu, epsilon } };
-    const { Re_lambda, eta } = profileStation(row, { ...settings, kinematicViscosity: published.nu });
+    const { Re_lambda, eta } = profileStation(row, { ...settings, kinematicViscosity: Number(published.nu) });
     expectClose(Re_lambda.value, published.R_lambda, digits);
     expectClose(eta.value, published.eta, digits);
   });

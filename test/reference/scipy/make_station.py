@@ -205,11 +205,11 @@ def reduce(u, v, w):
     out |= {"S_dudx": -(d**3).mean() / (d**2).mean() ** 1.5, "derivativeStep": m}
 
     lags = np.unique(np.round(10 ** (np.arange(60) / 10))).astype(int)
-    lags = lags[(lags >= max(1, T / STEP / 100)) & (lags * STEP >= np.sqrt(uu / rates[0])) & (lags * STEP <= T)]
+    lags = lags[(lags >= max(1, T / STEP / 40)) & (lags * STEP >= np.sqrt(uu / rates[0])) & (lags * STEP <= T)]
     two, three = [], []
     for lag in lags:
         later = np.arange(lag, N)
-        later = later[later % max(1, lag // 8) == 0]
+        later = later[later % max(1, lag // 2) == 0]
         jump = u[later] - u[later - lag]
         two.append(((jump**2).mean() / 2) ** 1.5 / (U * lag * STEP))
         three.append(1.25 * (jump**3).mean() / (U * lag * STEP))
