@@ -2,10 +2,11 @@ import { jointLayout, pairIndex } from "../signal/jointMoments.ts";
 import { shiftJoint } from "../signal/shiftJoint.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import { blockFields, differenceFields } from "./blockFields.ts";
-import { wholeMoments } from "./recordCorrelation.ts";
+import { withCommonMeans } from "./commonMeans.ts";
+import { restOfMean } from "./recordCorrelation.ts";
 import type { Component, StationPart } from "./stationPart.ts";
 
-/** All records of one station put together, each about its own mean. */
+/** All records of one station put together, each probe about its own mean. */
 export interface JoinedRecord {
   /** In an order that does not depend on that of arrival. */
   readonly parts: readonly StationPart[];
@@ -29,7 +30,7 @@ export interface JoinedRecord {
   readonly partMeans: readonly (readonly number[])[];
   readonly perPart: readonly (readonly Float64Array[])[];
   readonly fields: readonly string[];
-  /** A row a block: sums about the record's own mean; rows and sums add up plainly. */
+  /** A row a block: sums about the record's mean; rows and sums add up plainly. */
   readonly rows: readonly Float64Array[];
   /** Block of its own record behind each row, for what a part keeps per block: part and index, by probe. */
   readonly blocks: readonly (readonly BlockPlace[])[];
@@ -41,17 +42,16 @@ export interface BlockPlace {
 }
 
 export function joinParts(given: readonly StationPart[], settings: ReduceSettings): JoinedRecord {
-  const parts = [...given].sort(byPlace);
+  const parts = withCommonMeans([...given].sort(byPlace));
   const components = (["u", "v", "w"] as const).filter((name) =>
     parts.every((part) => part.components.includes(name)),
   );
   const fields = blockFields(components);
-  const wholes = parts.map((part) => wholeMoments(part));
   const together = areTogether(parts, settings);
-  const perPart = parts.map((part, p) => partRows(part, components, fields.length, wholes[p]));
+  const perPart = parts.map((part) => partRows(part, components, fields.length));
   const places = parts.map((part) => perPart[parts.indexOf(part)].map((_, block) => ({ part, block })));
   const total = parts.reduce((sum, part) => sum + part.samples, 0);
-  const partMeans = parts.map((part, p) => components.map((name) => meanOf(part, wholes[p], name)));
+  const partMeans = parts.map((part) => components.map((name) => meanOf(part, name)));
   const step = parts[0].step;
   return {
     parts,
@@ -97,8 +97,15 @@ function byPlace(a: StationPart, b: StationPart): number {
   return (a.origin.y ?? 0) - (b.origin.y ?? 0) || (a.origin.z ?? 0) - (b.origin.z ?? 0) || a.start - b.start;
 }
 
+function hasOnePlaceTwice(parts: readonly StationPart[]): boolean {
+  const places = parts.flatMap(({ origin: { y, z } }) => (y === null && z === null ? [] : [`${y},${z}`]));
+  return new Set(places).size < places.length;
+}
+
 function areTogether(parts: readonly StationPart[], settings: ReduceSettings): boolean {
   if (settings.simultaneous === false || parts.length < 2) return false;
+  // at one place only one record can be taken at a time
+  if (settings.simultaneous !== true && hasOnePlaceTwice(parts)) return false;
   const [first, ...others] = parts;
   return others.every(
     (part) =>
@@ -111,22 +118,17 @@ function areTogether(parts: readonly StationPart[], settings: ReduceSettings): b
   );
 }
 
-function meanOf(part: StationPart, whole: Float64Array, name: Component): number {
+function meanOf(part: StationPart, name: Component): number {
   const c = part.components.indexOf(name);
-  return part.plan.reference[c] + whole[1 + c];
+  return part.plan.reference[c] + restOfMean(part, c);
 }
 
-/** A part's blocks as sums about the part's own mean, in the fields of the station. */
-function partRows(
-  part: StationPart,
-  components: readonly Component[],
-  width: number,
-  whole: Float64Array,
-): Float64Array[] {
+/** A part's blocks as sums about the part's mean, in the fields of the station. */
+function partRows(part: StationPart, components: readonly Component[], width: number): Float64Array[] {
   const own = jointLayout(part.components.length);
   const layout = jointLayout(components.length);
   const at = components.map((name) => part.components.indexOf(name));
-  const about = whole.subarray(own.mean, own.mean + own.sequences);
+  const about = part.components.map((_, c) => restOfMean(part, c));
   const sums = new Float64Array(own.length);
   const stored = part.blocks.fields.length;
   return Array.from({ length: part.blocks.rows }, (_, block) => {

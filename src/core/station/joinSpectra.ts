@@ -2,7 +2,7 @@ import { coarsenDensity } from "../signal/coarsenDensity.ts";
 import { crossDensity } from "../signal/crossDensity.ts";
 import { welchDensity } from "../signal/welchDensity.ts";
 import type { JoinedRecord } from "./joinParts.ts";
-import { wholeMoments } from "./recordCorrelation.ts";
+import { restOfMean } from "./recordCorrelation.ts";
 import type { Component, StationPart } from "./stationPart.ts";
 
 /** Welch spectra of a station, all its records together. */
@@ -47,7 +47,7 @@ function partDensity(part: StationPart, name: Component, size: number): Float64A
   const { spectrum } = part;
   if (spectrum === null) return new Float64Array(size / 2 + 1);
   const c = part.components.indexOf(name);
-  const rest = wholeMoments(part)[1 + c];
+  const rest = restOfMean(part, c);
   const totals = {
     size: spectrum.size,
     segments: spectrum.segments,
@@ -60,10 +60,9 @@ function partDensity(part: StationPart, name: Component, size: number): Float64A
 function partCross(part: StationPart, size: number): Float64Array {
   const { spectrum } = part;
   if (spectrum === null || !spectrum.cross) return new Float64Array(size / 2 + 1);
-  const moments = wholeMoments(part);
   const side = (name: Component) => {
     const c = part.components.indexOf(name);
-    return { edges: spectrum.edges[c], mean: moments[1 + c] };
+    return { edges: spectrum.edges[c], mean: restOfMean(part, c) };
   };
   const totals = { size: spectrum.size, segments: spectrum.segments, power: spectrum.cross };
   return coarsenDensity(crossDensity(totals, part.step, side("u"), side("v")), spectrum.size, size);

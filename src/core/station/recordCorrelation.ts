@@ -14,7 +14,15 @@ export function wholeMoments(part: Pick<StationPart, "blocks" | "components">): 
 }
 
 /**
- * Lag products of a whole part about its own mean, exactly,
+ * The mean that a part's fluctuation is about, less the plan's reference: its own, or that of all records of its
+ * probe.
+ */
+export function restOfMean(part: StationPart, component: number): number {
+  return part.commonRest?.[component] ?? wholeMoments(part)[1 + component];
+}
+
+/**
+ * Lag products of a whole part about its mean, exactly,
  *     R_l = Σ x_i x_(i-l) - d (2 S - head_l - tail_l) + (pairs at l) d²,   S = Σ x
  * with x about the plan's reference and d what is left of the mean.
  * @param part       a part with lag products
@@ -25,10 +33,10 @@ export function recordCorrelation(part: StationPart, component: number): Float64
   const { lags } = part;
   if (lags === null) return null;
   const products = lags.products[component];
-  const rest = wholeMoments(part)[1 + component];
+  const rest = restOfMean(part, component);
   const heads = lags.heads[component];
   const tails = lags.tails[component];
-  const sum = lags.totals?.[component] ?? part.samples * rest;
+  const sum = lags.totals?.[component] ?? part.samples * wholeMoments(part)[1 + component];
   const correlation = new Float64Array(lags.count);
   for (let row = 0; row < part.blocks.rows; row++) {
     const offset = row * lags.count;

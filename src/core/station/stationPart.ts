@@ -28,6 +28,8 @@ export interface StationPart {
   readonly bands: BandTable | null;
   /** Increments of u; left out of parts that were made without. */
   readonly increments?: IncrementTable | null;
+  /** Mean of all records of the same probe less the plan's reference, a number a component; absent: the record's own. */
+  readonly commonRest?: readonly number[];
   /** A record that repeats itself: the time after which u comes back, and how much alike. */
   readonly replay?: { readonly period: number; readonly peak: number } | null;
   readonly flags: readonly Flag[];
