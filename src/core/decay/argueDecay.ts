@@ -33,7 +33,7 @@ export function argueDecay(
   const points = decay.points.filter((point) => point.used);
   const used = new Set(points.map(({ x }) => x));
   const inWindow = stations.filter(({ x }) => used.has(x));
-  const blocks = commonBlocks(inWindow, decay, settings);
+  const blocks = inWindow.length === points.length ? commonBlocks(inWindow, decay, settings) : null;
   const window = decay.law === null ? null : windowOf(decay, settings, blocks);
   const flight = flightFit(inWindow, decay, settings);
   const routes = decayRoutes(decay, settings, flight);

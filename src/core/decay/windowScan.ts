@@ -29,16 +29,14 @@ export function windowScan(
   const first = points.findIndex((point) => point.used);
   const last = first + points.filter((point) => point.used).length - 1;
   const places = new Set(points.map(({ x }) => x));
-  const blocks = commonBlocks(
-    stations.filter(({ x }) => places.has(x)),
-    decay,
-    settings,
-  );
+  const fitted = stations.filter(({ x }) => places.has(x));
+  // a second station at one x, without the quantity, would put the blocks out of step with the points
+  const blocks = fitted.length === points.length ? commonBlocks(fitted, decay, settings) : null;
   const scanned = (from: number, to: number, varying: number): ScannedWindow => {
     const at = { x: points[varying].x, stations: to - from + 1 };
     if (from === first && to === last) return { ...at, ...decay.given_window, p: decay.p, adopted: true };
-    const fitted = fitWindow(points.slice(from, to + 1), settings);
-    return { ...at, ...numbersOf(withCommonBlocks(fitted, blocks, from)), adopted: false };
+    const window = fitWindow(points.slice(from, to + 1), settings);
+    return { ...at, ...numbersOf(withCommonBlocks(window, blocks, from)), adopted: false };
   };
   const end = endCondition(stations, settings.extent ?? null);
   const none = first < 0;
