@@ -3,13 +3,11 @@ import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { missing } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { commonBlocks } from "./commonBlocks.ts";
-import { type Condition, criterion } from "./criterion.ts";
+import { criterion } from "./criterion.ts";
+import { endConditions } from "./endConditions.ts";
 import { fitWindow, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
 import { startConditions } from "./startConditions.ts";
 import { withCommonBlocks } from "./withCommonBlocks.ts";
-
-/** Share of a domain's lateral extent that L11 may reach before the walls, or the periodic images, are felt. */
-export const largestShareOfExtent = 0.25;
 
 /**
  * n and x0 with their intervals against the first and against the last station used, all other things as adopted;
@@ -38,13 +36,12 @@ export function windowScan(
     const window = fitWindow(points.slice(from, to + 1), settings);
     return { ...at, ...numbersOf(withCommonBlocks(window, blocks, from)), adopted: false };
   };
-  const end = endCondition(stations, settings.extent ?? null);
   const none = first < 0;
   return {
     first: none ? [] : points.slice(0, last + 1).map((_, from) => scanned(from, last, from)),
     last: none ? [] : points.slice(first).map((_, i) => scanned(first, first + i, first + i)),
     start: startConditions(stations).map((condition) => criterion(xs, condition)),
-    end: end === null ? [] : [criterion(xs, end, "end")],
+    end: endConditions(stations, settings.extent ?? null).map((end) => criterion(xs, end, "end")),
   };
 }
 
@@ -54,16 +51,4 @@ function numbersOf(fitted: WindowFit | Refusal): Pick<ScannedWindow, "n" | "x0" 
     return { n: none, x0: none, p: null };
   }
   return { n: windowQuantity(fitted, "n"), x0: windowQuantity(fitted, "x0"), p: fitted.p };
-}
-
-/** L11 small beside the lateral extent; null where none is given. */
-function endCondition(stations: readonly StationResult[], extent: number | null): Condition | null {
-  if (extent === null) return null;
-  return {
-    key: "L11",
-    words: `L11 below ${100 * largestShareOfExtent} % of the lateral extent`,
-    values: stations.map(({ L11 }) => L11),
-    low: 0,
-    high: largestShareOfExtent * extent,
-  };
 }

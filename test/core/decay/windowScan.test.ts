@@ -112,4 +112,20 @@ describe("what physics says of the ends of a window", () => {
     expectClose(place, bound, { relative: 0.25, because: "stations stand 21 % apart, L11 known to 4 %" });
     expect(windowScan(developing, fitDecay(developing, plainSettings), plainSettings).end).toEqual([]);
   });
+  it("ends, too, where noise of a known level reaches 2 % of the variance", () => {
+    // white noise of variance s² has E11 = s²/k1max one-sided
+    const step = 1e-4;
+    const most = Math.PI / (law.U * step);
+    const variance = 2e-4;
+    const noisy = developing.map((station) => ({
+      ...station,
+      U: known(law.U, 0),
+      facts: { ...station.facts, step, noiseFloor: variance / most },
+    }));
+    const found = windowScan(noisy, fitDecay(noisy, plainSettings), plainSettings).end;
+    const clean = noisy.filter(({ uu }) => (uu.value ?? 0) > variance / 0.02).map(({ x }) => x);
+    expect(clean.length).toBeGreaterThan(3);
+    expect(clean.length).toBeLessThan(xs.length);
+    expect(found.map(({ key, inside }) => [key, inside.value])).toEqual([["background", Math.max(...clean)]]);
+  });
 });
