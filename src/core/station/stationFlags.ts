@@ -1,5 +1,6 @@
 import type { Flag } from "../flag.ts";
 import type { Quantity } from "../quantity.ts";
+import { probeFlags } from "./probeFlags.ts";
 import { shortestRecord } from "./sampling.ts";
 import type { StationMaterial } from "./stationQuantities.ts";
 import { unsteadyFlags } from "./unsteadyFlags.ts";
@@ -8,8 +9,6 @@ import { unsteadyFlags } from "./unsteadyFlags.ts";
 const doubtfulCorrection = 0.1;
 const resolved = 0.9;
 const longSensor = 4;
-/** Probability below which probes at one x are said to differ. */
-const disagreement = 0.01;
 
 /** What is formed from all three components, and with one or two of them rests on how the others are taken. */
 const restOnOthers = [
@@ -44,7 +43,7 @@ export function stationFlags(material: StationMaterial, facts: FlagFacts): Flag[
     ...spectrumFlags(material, facts),
     ...replayFlags(material),
     ...unsteadyFlags(material.record),
-    ...joinFlags(material),
+    ...probeFlags(material),
   ];
   return flags.filter((flag, i) => flags.findIndex((other) => other.code === flag.code) === i);
 }
@@ -156,22 +155,4 @@ function replayFlags({ record, times }: StationMaterial): Flag[] {
   const scales = times.scale === null ? "" : `, ${(period / times.scale).toFixed(0)} integral times`;
   const text = `u comes back after ${period.toPrecision(4)} of time${scales}, with a correlation of ${peak.toFixed(2)}: the inflow is replayed, and the record counts as one period.`;
   return [{ code: "replayed-inflow", text, value: period }];
-}
-
-function joinFlags({ record, compared }: StationMaterial): Flag[] {
-  if (record.parts.length < 2) return [];
-  const flags: Flag[] = [];
-  if (record.spectral.length > 0 && record.spectral.length < record.parts.length) {
-    const text = `${record.parts.length - record.spectral.length} of ${record.parts.length} records have another or an unequal time step: they count for the moments only.`;
-    flags.push({ code: "probes-joined", text, value: record.spectral.length });
-  }
-  const { p, probes } = compared ?? { p: null, probes: [] };
-  if (p !== null && p < disagreement) {
-    const [U, rms] = [probes.map(({ U }) => U.value ?? 0), probes.map(({ u_rms }) => u_rms.value ?? 0)];
-    const range = (values: number[]) =>
-      `${Math.min(...values).toPrecision(4)} to ${Math.max(...values).toPrecision(4)}`;
-    const text = `The probes at this x differ by more than their sampling errors (U from ${range(U)}, u' from ${range(rms)}; p = ${p.toPrecision(2)}): the flow is not homogeneous across the stream. The station's values are averages over unlike probes; each stands by itself beside them.`;
-    flags.push({ code: "inhomogeneous", text, value: p });
-  }
-  return flags;
 }
