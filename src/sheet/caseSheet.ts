@@ -66,5 +66,6 @@ export interface SheetBody {
   readonly x: number;
   readonly chord: number | null;
   readonly Tu: number | null;
+  /** Target of L11 over the chord, not of L11 itself. */
   readonly L11: number | null;
 }
