@@ -58,5 +58,27 @@ export const figureLabels: readonly Label[] = [
   ),
   label("rho", "ρ_{uu}", "autocorrelation of u", "1", "⟨u(t) u(t + τ)⟩/⟨u²⟩"),
   label("lag", "τ", "time lag", "T", "time between the two factors of the correlation"),
+  label("k1_L11", "k_{1}L_{11}", "wavenumber in integral scales", "1", "k₁ times L₁₁"),
+  label(
+    "E11_premultiplied",
+    "k_{1}E_{11}/⟨u^{2}⟩",
+    "premultiplied spectrum of u",
+    "1",
+    "equal areas over ln k₁ carry equal shares of the variance",
+  ),
+  label(
+    "local_slope",
+    "d ln E_{11}/d ln k_{1}",
+    "local slope of the spectrum",
+    "1",
+    "d ln E₁₁/d ln k₁ over bands",
+  ),
+  label(
+    "E22_over_isotropic",
+    'E_{22}/E_{22,"isotropic"}',
+    "isotropy scale by scale",
+    "1",
+    "E₂₂ over (E₁₁ − k₁ dE₁₁/dk₁)/2, one if isotropic",
+  ),
   label("r/L11", "r/L_{11}", "separation over integral scale", "1", "r = U τ over the integral length"),
 ];

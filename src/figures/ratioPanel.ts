@@ -1,6 +1,7 @@
 import { labelOf } from "../core/catalogue.ts";
 import { linearRange, streamwiseRange } from "./axisRange.ts";
 import type { FigureAxis, FigureCase, FigureOptions } from "./figureSpec.ts";
+import { flagPennants } from "./flagPennants.ts";
 import { levelLine, shadedBand } from "./pageShapes.ts";
 import { type Box, type Decor, linearAxis, type Panel } from "./panel.ts";
 import { type QuantityKey, stationPoints } from "./stationPoints.ts";
@@ -34,6 +35,12 @@ export function ratioPanel(
   };
   return {
     panel,
-    decor: { shapes: [shadedBand(panel, band, options), ...levelLine(panel, 1, options, false)] },
+    decor: {
+      shapes: [
+        shadedBand(panel, band, options),
+        ...levelLine(panel, 1, options, false),
+        ...cases.flatMap((of, i) => flagPennants(of, key, points[i], panel, options)),
+      ],
+    },
   };
 }

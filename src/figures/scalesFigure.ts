@@ -1,4 +1,4 @@
-import type { Annotations } from "plotly.js";
+import type { Annotations, Shape } from "plotly.js";
 import { labelOf } from "../core/catalogue.ts";
 import { withReference } from "../core/symbolRuns.ts";
 import { displayOf } from "../core/unitText.ts";
@@ -7,6 +7,7 @@ import { linearRange, logRange, present } from "./axisRange.ts";
 import { placeCells } from "./cells.ts";
 import { drawingOf } from "./drawing.ts";
 import type { FigureAxis, FigureCase, FigureOptions, FigureSpec } from "./figureSpec.ts";
+import { flagPennants } from "./flagPennants.ts";
 import { impliedLine } from "./impliedLine.ts";
 import { caseRows, legend } from "./legend.ts";
 import { pageNote } from "./pageNote.ts";
@@ -45,12 +46,30 @@ export function scalesFigure(cases: readonly FigureCase[], options: FigureOption
       heightMm: cells.heightMm,
       panels,
       decor: joinDecor(
-        { notes: lengthNames(cases, axis, sizes, options) },
+        {
+          notes: lengthNames(cases, axis, sizes, options),
+          shapes: [
+            ...pennantsOf(lengths, sizes, cases, axis, options),
+            ...panels.slice(1).flatMap((panel) => pennantsOf(["Re_lambda"], panel, cases, axis, options)),
+          ],
+        },
         legend(caseRows(cases), panels[panels.length - 1], options),
       ),
       table: stationTable(cases, [...lengths, "Re_lambda"], axis),
     },
     options,
+  );
+}
+
+function pennantsOf(
+  keys: readonly Key[],
+  panel: Panel,
+  cases: readonly FigureCase[],
+  axis: FigureAxis,
+  options: FigureOptions,
+): Partial<Shape>[] {
+  return seriesOf(cases, keys, axis, options).flatMap(({ of, key, points }) =>
+    flagPennants(of, key, points, panel, options),
   );
 }
 

@@ -1,4 +1,4 @@
-import { labelOf } from "../core/catalogue.ts";
+import { labelOf, type Run } from "../core/catalogue.ts";
 import { unitOf } from "../core/unitText.ts";
 import { assembleFigure } from "./assembleFigure.ts";
 import { logRange } from "./axisRange.ts";
@@ -12,7 +12,13 @@ import { lineWeight } from "./lineWeight.ts";
 import { pageNote } from "./pageNote.ts";
 import { levelLine } from "./pageShapes.ts";
 import { type Box, type Decor, joinDecor, logAxis, type Panel, placeY } from "./panel.ts";
-import { possibleForm, type SpectrumCurve, type SpectrumForm, spectrumCurves } from "./spectrumCurves.ts";
+import {
+  possibleForm,
+  type SpectrumCurve,
+  type SpectrumForm,
+  type SpectrumOf,
+  spectrumCurves,
+} from "./spectrumCurves.ts";
 import { caseLine } from "./stationTrace.ts";
 import { titleWithUnit } from "./streamwise.ts";
 import { escapeText, symbolHtml } from "./symbolHtml.ts";
@@ -20,9 +26,10 @@ import { escapeText, symbolHtml } from "./symbolHtml.ts";
 /** Level of the compensated one-sided spectrum in an inertial range: Pope (2000). */
 const plateau = 0.49;
 /** What is drawn of a spectrum's range below its largest value. */
-const depth = { compensated: 2.4, kolmogorov: 9, dimensional: 9 } as const;
+const depth = { compensated: 2.4, premultiplied: 2.4, kolmogorov: 9, dimensional: 9 } as const;
 const labels = {
   compensated: ["k1_eta", "E11_compensated"],
+  premultiplied: ["k1_L11", "E11_premultiplied"],
   kolmogorov: ["k1_eta", "E11_kolmogorov"],
   dimensional: ["k1", "E11"],
 } as const;
@@ -32,11 +39,12 @@ export function spectrumFigure(
   picked: readonly PickedCurve[],
   options: FigureOptions,
   wanted: SpectrumForm = "compensated",
+  component: SpectrumOf = "E11",
 ): FigureSpec {
   const form = possibleForm(picked, wanted);
-  const curves = spectrumCurves(picked, form);
+  const curves = spectrumCurves(picked, form, component);
   const cells = placeCells(2, 66, options);
-  const spectra = spectraPanel(curves, form, cells.boxes[0], options);
+  const spectra = spectraPanel(curves, form, component, cells.boxes[0], options);
   const correlation = correlationPanel(picked, cells.boxes[1], "b", options);
   return assembleFigure(
     {
@@ -45,11 +53,11 @@ export function spectrumFigure(
       heightMm: cells.heightMm,
       panels: [spectra, correlation.panel],
       decor: joinDecor(
-        form === "compensated" ? plateauLine(spectra, options) : {},
+        form === "compensated" && component === "E11" ? plateauLine(spectra, options) : {},
         correlation.decor,
         legend(pickedRows(picked, options), correlation.panel, options),
       ),
-      table: spectrumTable(curves, form),
+      table: spectrumTable(curves, form, component),
     },
     options,
   );
@@ -58,12 +66,16 @@ export function spectrumFigure(
 function spectraPanel(
   curves: readonly SpectrumCurve[],
   form: SpectrumForm,
+  component: SpectrumOf,
   box: Box,
   options: FigureOptions,
 ): Panel {
   const [across, up] = labels[form].map((key) => {
     const label = labelOf(key);
-    return titleWithUnit(symbolHtml(label.symbol), unitOf(label.dimension, options.units));
+    return titleWithUnit(
+      symbolHtml(ofComponent(label.symbol, component)),
+      unitOf(label.dimension, options.units),
+    );
   });
   const top = Math.max(...curves.flatMap(({ y }) => y), 0);
   const isShown = (value: number) => value > top / 10 ** depth[form];
@@ -73,7 +85,8 @@ function spectraPanel(
     box,
     x: logAxis(logRange(places, 0.03), across),
     y: logAxis(logRange(form === "compensated" ? [...values, 2 * plateau] : values), up),
-    traces: curves.map(({ picked, x, y }) =>
+    traces: curves.flatMap(({ picked, x, y, low, high }) => [
+      caseLine(...barsOf(x, low, high), picked.of.mark, options, { weightPt: 0.3, dashed: false }),
       caseLine(x, y, picked.of.mark, options, {
         weightPt: lineWeight(
           picked,
@@ -81,9 +94,28 @@ function spectraPanel(
         ),
         dashed: true,
       }),
-    ),
+    ]),
     letter: "a",
   };
+}
+
+/** Every so many bands one bar: the intervals of neighbours are alike. */
+const barEvery = 3;
+
+/** Upright strokes from low to high, as one broken line. */
+function barsOf(x: readonly number[], low: readonly number[], high: readonly number[]) {
+  const shown = x.flatMap((_, i) => (i % barEvery === 0 ? [i] : []));
+  return [shown.flatMap((i) => [x[i], x[i], null]), shown.flatMap((i) => [low[i], high[i], null])] as const;
+}
+
+const velocities = { E11: "u", E22: "v", E33: "w" } as const;
+
+/** A symbol written for u, of another component: E11 -> E22, ⟨u²⟩ -> ⟨v²⟩. */
+function ofComponent(symbol: readonly Run[], component: SpectrumOf): Run[] {
+  return symbol.map((run) => ({
+    ...run,
+    text: run.text.replace("11", component.slice(1)).replace("u", velocities[component]),
+  }));
 }
 
 function plateauLine(panel: Panel, options: FigureOptions): Partial<Decor> {
@@ -100,7 +132,7 @@ function plateauLine(panel: Panel, options: FigureOptions): Partial<Decor> {
   };
 }
 
-function pickedRows(picked: readonly PickedCurve[], options: FigureOptions): LegendRow[] {
+export function pickedRows(picked: readonly PickedCurve[], options: FigureOptions): LegendRow[] {
   const unit = options.units === "SI" ? (options.along === "t" ? "s" : "m") : "";
   return picked.map((one) => ({
     mark: one.of.mark,
@@ -111,11 +143,17 @@ function pickedRows(picked: readonly PickedCurve[], options: FigureOptions): Leg
   }));
 }
 
-function spectrumTable(curves: readonly SpectrumCurve[], form: SpectrumForm): FigureTable {
+function spectrumTable(
+  curves: readonly SpectrumCurve[],
+  form: SpectrumForm,
+  component: SpectrumOf,
+): FigureTable {
+  const [across, up] = labels[form];
+  const name = up.replace("E11", component);
   return {
-    heading: ["case", "x", ...labels[form]],
-    rows: curves.flatMap(({ picked, x, y }) =>
-      x.map((value, i) => [picked.of.name, picked.station.x, value, y[i]]),
+    heading: ["case", "x", across, name, `${name}_low`, `${name}_high`],
+    rows: curves.flatMap(({ picked, x, y, low, high }) =>
+      x.map((value, i) => [picked.of.name, picked.station.x, value, y[i], low[i], high[i]]),
     ),
   };
 }

@@ -179,8 +179,33 @@ describe("figures of what is missing", () => {
       ...one,
       station: { ...one.station, epsilon: missing("no viscosity") },
     }));
-    expect(spectrumFigure(bare, options).table.heading).toEqual(["case", "x", "k1", "E11"]);
-    expect(spectrumFigure(picked, options).table.heading).toEqual(["case", "x", "k1_eta", "E11_compensated"]);
+    expect(spectrumFigure(bare, options).table.heading).toEqual([
+      ...["case", "x", "k1", "E11", "E11_low", "E11_high"],
+    ]);
+    expect(spectrumFigure(picked, options).table.heading).toEqual([
+      ...["case", "x", "k1_eta", "E11_compensated", "E11_compensated_low", "E11_compensated_high"],
+    ]);
+  });
+  it("offer a premultiplied spectrum whose area over ln k1 is its share of the variance, and the spectra of v and w", () => {
+    const { rows, heading } = spectrumFigure([picked[0]], options, "premultiplied").table;
+    expect(heading[3]).toBe("E11_premultiplied");
+    const [k, y] = [2, 3].map((column) => rows.map((row) => Number(row[column])));
+    const area = y.reduce(
+      (sum, value, i) => (i === 0 ? 0 : sum + ((value + y[i - 1]) / 2) * Math.log(k[i] / k[i - 1])),
+      0,
+    );
+    // what the made spectrum itself holds, by trapezoids over its own points
+    const { curves, uu } = picked[0].station;
+    const [k1, E11] = [curves?.k1 ?? [], curves?.E11 ?? []];
+    const held = [...k1].reduce(
+      (sum, at, i) => (i === 0 ? 0 : sum + ((E11[i] + E11[i - 1]) / 2) * (at - k1[i - 1])),
+      0,
+    );
+    expectClose(area, held / (uu.value ?? Number.NaN), {
+      relative: 0.02,
+      because: "trapezoids in k1 over bands are not those in ln k1",
+    });
+    expect(spectrumFigure(picked, options, "dimensional", "E22").table.heading[3]).toBe("E22");
   });
   it("say that a quantity is not compared", () => {
     const notes = (comparisonFigure(madeComparison, "M", options).layout.annotations ?? []) as {

@@ -9,15 +9,25 @@ import type { CaseView } from "../session/caseView.ts";
 import type { PageStore } from "../session/pageStore.ts";
 import type { PageWork } from "../session/pageWork.ts";
 import type { Held } from "../session/session.ts";
+import { AdoptedRoutes } from "./AdoptedRoutes.tsx";
 import { ArgumentSection } from "./ArgumentSection.tsx";
 import { CompareSection } from "./CompareSection.tsx";
 import { DecaySection } from "./DecaySection.tsx";
 import { DefinitionPanel } from "./DefinitionPanel.tsx";
+import { Fold } from "./Fold.tsx";
 import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
 import { findingsOf } from "./findings.ts";
 import { PageFoot } from "./PageFoot.tsx";
 import { RecordsSection } from "./RecordsSection.tsx";
+import {
+  anisotropyColumns,
+  dissipationColumns,
+  gradientColumns,
+  integralColumns,
+  momentColumns,
+} from "./routeColumns.ts";
 import { SpectraSection } from "./SpectraSection.tsx";
+import { StationRoutes } from "./StationRoutes.tsx";
 import { TableSection } from "./TableSection.tsx";
 
 /** The argument from the records to the comparison, top to bottom. */
@@ -75,8 +85,17 @@ export function Argument({
             sentences={findings.isotropy}
             figure={isotropyPicture}
             notes={isotropyNotes}
-          />
-          <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture} />
+          >
+            <Fold name="Small scales, stress tensor, skewness and flatness">
+              <StationRoutes label="Anisotropy" cases={reduced} columns={anisotropyColumns} />
+              <StationRoutes label="Skewness and flatness" cases={reduced} columns={momentColumns} />
+            </Fold>
+          </ArgumentSection>
+          <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture}>
+            <Fold name="Integral scale by every route, transverse scales">
+              <StationRoutes label="Integral scales by route" cases={reduced} columns={integralColumns} />
+            </Fold>
+          </ArgumentSection>
           <SpectraSection {...shared} picked={workspace.picked} onChange={change} />
           <ArgumentSection
             id="balance"
@@ -84,7 +103,17 @@ export function Argument({
             sentences={findings.balance}
             figure={balancePicture}
             notes={balanceNotes}
-          />
+          >
+            <Fold name="Dissipation and gradients by every route">
+              <AdoptedRoutes cases={reduced} />
+              <StationRoutes
+                label="Dissipation of every station by route"
+                cases={reduced}
+                columns={dissipationColumns}
+              />
+              <StationRoutes label="Gradients by route" cases={reduced} columns={gradientColumns} />
+            </Fold>
+          </ArgumentSection>
           <CompareSection
             cases={reduced}
             stale={late !== null}

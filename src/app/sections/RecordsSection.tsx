@@ -6,6 +6,8 @@ import { sectionOf } from "../page/sectionList.ts";
 import type { CaseView } from "../session/caseView.ts";
 import type { Held } from "../session/session.ts";
 import { AsideList } from "./AsideList.tsx";
+import { ChecksFold } from "./ChecksFold.tsx";
+import { DurationFold } from "./DurationFold.tsx";
 import { FailureList } from "./FailureList.tsx";
 import { FilesFold } from "./FilesFold.tsx";
 import { Finding } from "./Finding.tsx";
@@ -72,6 +74,8 @@ export function RecordsSection({
       <CaseQuestions cases={cases} onChange={onChange} onSave={onSave} />
       <AsideList aside={held.aside} />
       <FilesFold cases={cases} previews={held.previews} />
+      <ChecksFold cases={cases} />
+      <DurationFold cases={cases} />
     </SectionFrame>
   );
 }

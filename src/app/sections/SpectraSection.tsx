@@ -3,6 +3,7 @@ import { unitOf } from "../../core/unitText.ts";
 import { spectrumSentences } from "../../export/sentences/spectrumSentences.ts";
 import type { FigureOptions, PickedCurve } from "../../figures/figureSpec.ts";
 import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
+import { localSpectrumFigure } from "../../figures/localSpectrumFigure.ts";
 import { spectrumFigure } from "../../figures/spectrumFigure.ts";
 import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
 import { pickLetters } from "../page/pickLetters.ts";
@@ -10,13 +11,18 @@ import type { CaseView } from "../session/caseView.ts";
 import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
 import { CaseMark } from "./CaseMark.tsx";
 import { ChoiceField } from "./ChoiceField.tsx";
+import { FigureBlock } from "./FigureBlock.tsx";
+import { Fold } from "./Fold.tsx";
 
 const forms = {
   compensated: "compensated",
+  premultiplied: "premultiplied",
   kolmogorov: "Kolmogorov form",
   dimensional: "dimensional",
 } as const;
 type Form = keyof typeof forms;
+const components = { E11: "of u, E₁₁", E22: "of v, E₂₂", E33: "of w, E₃₃" } as const;
+type Component = keyof typeof components;
 
 /** Spectra and correlations of the stations picked on the ruler. */
 export function SpectraSection({
@@ -31,10 +37,15 @@ export function SpectraSection({
   onChange: (change: WorkspaceChange) => void;
 }) {
   const [form, setForm] = useState<Form>("compensated");
+  const [component, setComponent] = useState<Component>("E11");
   const build = useCallback(
     (shown: readonly CaseView[], options: FigureOptions) =>
-      spectrumFigure(pickedCurves(shown, picked), options, form),
-    [picked, form],
+      spectrumFigure(pickedCurves(shown, picked), options, form, component),
+    [picked, form, component],
+  );
+  const buildLocal = useCallback(
+    (options: FigureOptions) => localSpectrumFigure(pickedCurves(cases, picked), options),
+    [cases, picked],
   );
   const curves = useMemo(() => pickedCurves(cases, picked), [cases, picked]);
   const sentences = useMemo(() => spectrumSentences(curves), [curves]);
@@ -45,8 +56,9 @@ export function SpectraSection({
     build,
     caption: (
       <>
-        (<i>a</i>) One-sided spectra of the picked stations, {forms[form]}; thin: further downstream. (
-        <i>b</i>) Autocorrelation; ringed: its first zero, the limit of the integral.
+        (<i>a</i>) One-sided spectra {components[component]}, {forms[form]}, in bands; upright strokes: 95 %
+        by chi-square; thin: further downstream. (<i>b</i>) Autocorrelation; ringed: its first zero, the limit
+        of the integral.
       </>
     ),
   };
@@ -58,6 +70,7 @@ export function SpectraSection({
         <>
           <PickedList curves={curves} cases={cases} onChange={onChange} />
           <ChoiceField label="spectra" value={form} choices={forms} onChange={setForm} />
+          <ChoiceField label="component" value={component} choices={components} onChange={setComponent} />
         </>
       ),
     },
@@ -78,9 +91,27 @@ export function SpectraSection({
             : "A profile holds no records, so there are no spectra."}
         </p>
       )}
+      {curves.some(({ station }) => station.curves?.local) && (
+        <Fold name="Local slope, isotropy scale by scale">
+          <FigureBlock
+            name="Figure 4 (continued)"
+            title="Local slope of the spectra, and E22 against isotropy"
+            widthMm={178}
+            build={buildLocal}
+            caption={localCaption}
+          />
+        </Fold>
+      )}
     </ArgumentSection>
   );
 }
+
+const localCaption = (
+  <>
+    (<i>a</i>) Local slope of the spectrum of u over bands; dashed: −5/3. (<i>b</i>) Spectrum of v over the
+    one that the spectrum of u implies in isotropic flow.
+  </>
+);
 
 /** A picked station with what the sentences and the figure need of its case. */
 interface CurveOfCase extends PickedCurve {

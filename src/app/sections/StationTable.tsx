@@ -128,14 +128,14 @@ const steps: Readonly<Record<string, readonly [number, number]>> = {
 /** Arrow keys go from number to number: the table is one stop of the Tab key. */
 function walkCells(event: KeyboardEvent<HTMLTableElement>): void {
   const step = steps[event.key];
-  const from = event.target instanceof HTMLElement ? event.target.closest("tr") : null;
-  if (step === undefined || from === null) return;
+  const { target } = event;
+  if (step === undefined || !(target instanceof HTMLElement)) return;
   const rows = [...event.currentTarget.querySelectorAll("tbody tr")].map((row) => [
     ...row.querySelectorAll<HTMLElement>("[data-cell]"),
   ]);
-  const row = rows.findIndex((cells) => cells.some((cell) => cell === event.target));
+  const row = rows.findIndex((cells) => cells.includes(target));
   if (row < 0) return;
-  const column = rows[row].findIndex((cell) => cell === event.target);
+  const column = rows[row].indexOf(target);
   const next = rows[row + step[0]]?.[column + step[1]];
   if (next === undefined) return;
   event.preventDefault();

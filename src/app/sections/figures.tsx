@@ -29,7 +29,7 @@ export const scalesPicture: SectionFigure = {
       (<i>a</i>) Integral, Taylor and Kolmogorov lengths; bars smaller than a marker are not drawn. (<i>b</i>)
       Taylor Reynolds number. Lines, where the axis starts at the origin, have the slopes that <i>n</i> and a
       constant <i>C</i>
-      <sub className="sym">ε</sub> imply; only their height is fitted.
+      <sub className="sym">ε</sub> imply; only their height is fitted. Pennant: in doubt, see the flags.
     </>
   ),
 };
