@@ -35,7 +35,7 @@ export function lineMaterial(parts: readonly LinePart[], settings: ReduceSetting
     ? streamwiseScales(lines, settings.integralScale)
     : lateralScales(lines, spectra, settings.integralScale);
   const gradients = streamwise ? streamwiseGradients(lines) : lateralGradients(lines, spectra, scales.scale);
-  const sampling = lineSampling(lines, lineLength(lines, spectra), scales.scale, scales.tauStar);
+  const sampling = lineSampling(lines, lineLength(lines, spectra), scales.scale, scales.tauStar, periodic);
   const fields = [...lines.fields, ...gradients.map(({ name }) => `rate_${name}`)];
   const rows = lines.rows.map((row, block) => {
     const full = new Float64Array(fields.length);

@@ -24,12 +24,14 @@ const perSnapshot = 20;
  * @param length  of the line; null: of lines along x, where a point stands for itself
  * @param L11     the integral scale, or null where it is not known
  * @param reach   separation up to which the correlation was integrated; null like L11
+ * @param periodic of a line that does not close, pairs are fewer the farther apart they are
  */
 export function lineSampling(
   lines: JoinedLines,
   length: number | null,
   L11: number | null,
   reach: number | null,
+  periodic: boolean,
 ): LineSampling {
   const time = snapshotTime(lines);
   const across = independentLines(lines, L11);
@@ -45,16 +47,24 @@ export function lineSampling(
     ...time,
     samples,
     groups,
-    scaleError: scaleError(time.independent * across, length, reach),
+    scaleError: scaleError(time.independent * across, length, reach, periodic),
     why: "",
   };
 }
 
-/** se(ln L11) = √(4 r* / total length), as for a record in time: a jackknife fails at a zero crossing. */
-function scaleError(lines: number, length: number | null, reach: number | null): StandardError | null {
+/**
+ * se(ln L11) = √(4 r* / total length), as for a record in time: a jackknife fails at a zero crossing. The length of a
+ * line that does not close is that which pairs up to r* have on average, half of r* less.
+ */
+function scaleError(
+  lines: number,
+  length: number | null,
+  reach: number | null,
+  periodic: boolean,
+): StandardError | null {
   if (reach === null) return null;
   // of lines along x each snapshot gives the correlation around the station once
-  const total = lines * Math.max(length ?? 0, 2 * reach);
+  const total = lines * Math.max((length ?? 0) - (periodic ? 0 : reach / 2), reach);
   return { standard: Math.sqrt((4 * reach) / total), freedom: null, scale: "log" };
 }
 
