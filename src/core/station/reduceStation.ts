@@ -24,8 +24,8 @@ import {
 } from "./stationQuantities.ts";
 import { stationRoutes } from "./stationRoutes.ts";
 import { stationRows } from "./stationRows.ts";
-import type { ValueName } from "./stationValues.ts";
-import { structureSums } from "./structureSums.ts";
+import type { ValueContext, ValueName } from "./stationValues.ts";
+import { type StructureSums, structureSums } from "./structureSums.ts";
 
 /**
  * One station from its records: the stages in their order. The order of the parts does not matter.
@@ -46,31 +46,12 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
   const all = replicates(
     rows,
     sampling.groups,
-    {
-      components: record.components,
-      column,
-      means: record.means,
-      step: record.step,
-      viscosity: settings.kinematicViscosity,
-      referenceSpeed: settings.referenceSpeed,
-      taylorCorrection: settings.taylorCorrection,
-      structure: structure && { second: structure.second.lag, third: structure.third.lag },
-    },
+    valueContext(record, column, structure, settings),
     sampling.why,
   );
   const compared = record.parts.length > 1 ? compareProbes(record, times.scale) : null;
-  const material = {
-    record,
-    correlation,
-    spectra,
-    times,
-    gradients,
-    structure,
-    sampling,
-    all,
-    settings,
-    compared,
-  };
+  const sums = { record, correlation, spectra, structure, all };
+  const material = { ...sums, times, gradients, sampling, settings, compared };
   const values = valueQuantities(material);
   const facts = stationFacts(material, values);
   return {
@@ -84,6 +65,24 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
     blocks: table,
     facts,
     ...(compared ? { probes: compared.probes } : {}),
+  };
+}
+
+function valueContext(
+  record: JoinedRecord,
+  column: ValueContext["column"],
+  structure: StructureSums | null,
+  settings: ReduceSettings,
+): ValueContext {
+  return {
+    components: record.components,
+    column,
+    means: record.means,
+    step: record.step,
+    viscosity: settings.kinematicViscosity,
+    referenceSpeed: settings.referenceSpeed,
+    taylorCorrection: settings.taylorCorrection,
+    structure: structure && { second: structure.second.lag, third: structure.third.lag },
   };
 }
 

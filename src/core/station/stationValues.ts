@@ -96,13 +96,10 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
   const [gu, gv, gw] = (["u", "v", "w"] as const).map(
     (name, i) => sum(`rate_${name}`) / speed ** 2 / factor[i],
   );
-  const isotropic = components.length === 1;
   const nu = viscosity ?? Number.NaN;
-  const [gv2, gw2] = lateral(2 * gu, gv, gw);
-  const epsilon = isotropic ? 15 * nu * gu : 3 * nu * (gu + gv2 + gw2);
+  const epsilon = components.length === 1 ? 15 * nu * gu : 3 * nu * (gu + sumOf(lateral(2 * gu, gv, gw)));
   const k = (uu + v2 + w2) / 2;
-  const rms = Math.sqrt(uu);
-  const lambda = rms / Math.sqrt(gu);
+  const [rms, lambda] = [Math.sqrt(uu), Math.sqrt(uu / gu)];
   return {
     ...{ U, uu, vv, ww, k },
     ...stresses(co),
@@ -112,20 +109,22 @@ export function stationValues(sums: Float64Array, context: ValueContext): Statio
     ...{ gradient_u: gu, gradient_v: gv, gradient_w: gw },
     ...differences(sums, context, speed ** 2 * factor[0]),
     "epsilon_u-gradient": 15 * nu * gu,
-    epsilon_gradient: epsilon,
-    lambda,
+    ...{ epsilon_gradient: epsilon, lambda },
     lambda_f: Math.SQRT2 * lambda,
     eta: (nu ** 3 / epsilon) ** 0.25,
     Re_lambda: (rms * lambda) / nu,
     ...shapes(sum, { u: uu, v: vv, w: ww }),
-    K_v: (2 * gu) / gv,
-    K_w: (2 * gu) / gw,
+    ...{ K_v: (2 * gu) / gv, K_w: (2 * gu) / gw },
     L_v_ratio: (2 * sum("area_v") * uu) / (sum("area_u") * vv),
     L_w_ratio: (2 * sum("area_w") * uu) / (sum("area_u") * ww),
     ...dissipationFromStructure(sums, context, speed),
     C_epsilon_over_T: (epsilon * speed) / rms ** 3,
     Re_L_over_T: (rms * speed) / nu,
   };
+}
+
+function sumOf([a, b]: readonly [number, number]): number {
+  return a + b;
 }
 
 /** Shear stresses, their coefficients, and where the tensor stands between its limits. */
