@@ -93,6 +93,7 @@ const tests = {
         environment: "node",
         include: ["../../test/**/*.test.ts"],
         exclude: ["../../test/browser/**"],
+        testTimeout: 60_000,
       },
     },
     {
@@ -102,6 +103,7 @@ const tests = {
         environment: "happy-dom",
         include: ["../../test/app/**/*.test.tsx"],
         setupFiles: ["../../test/app/setup.ts"],
+        testTimeout: 60_000,
       },
     },
     {
