@@ -33,6 +33,17 @@ describe("the point record of the JHTDB channel", () => {
     const { uu, vv, uv } = station;
     const coefficient = (uv.value ?? 0) / Math.sqrt((uu.value ?? 0) * (vv.value ?? 0));
     expectClose(coefficient, -0.43066, { relative: 2e-5, because: "five digits" });
+    expectClose(station.routes.rho_uv.value, coefficient, { relative: 1e-12, because: "definition" });
+  });
+  it("is far from isotropic: one component dominates, as beside a wall", () => {
+    // b_11 = 0.504, the largest that b_ij holds being 2/3
+    const { uu, k } = station;
+    expectClose((uu.value ?? 0) / (2 * (k.value ?? 1)) - 1 / 3, 0.504, {
+      absolute: 5e-4,
+      because: "three digits",
+    });
+    const { barycentric_1, barycentric_3 } = station.routes;
+    expect(barycentric_1.value ?? 0).toBeGreaterThan(2 * (barycentric_3.value ?? 1));
   });
   it("has an integral time of 0.3608, or of 0.3657 by the unbiased correlation", () => {
     const unbiased = stationOf(signal, { correlation: "unbiased" });
