@@ -17,6 +17,7 @@ import { DefinitionPanel } from "./DefinitionPanel.tsx";
 import { Fold } from "./Fold.tsx";
 import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
 import { findingsOf } from "./findings.ts";
+import { InvariantsBlock } from "./InvariantsBlock.tsx";
 import { PageFoot } from "./PageFoot.tsx";
 import { RecordsSection } from "./RecordsSection.tsx";
 import {
@@ -87,6 +88,7 @@ export function Argument({
             notes={isotropyNotes}
           >
             <Fold name="Small scales, stress tensor, skewness and flatness">
+              <InvariantsBlock cases={reduced} />
               <StationRoutes label="Anisotropy" cases={reduced} columns={anisotropyColumns} />
               <StationRoutes label="Skewness and flatness" cases={reduced} columns={momentColumns} />
             </Fold>

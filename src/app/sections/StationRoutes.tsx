@@ -1,4 +1,4 @@
-import { labelOf } from "../../core/catalogue.ts";
+import { labelOf, type Run } from "../../core/catalogue.ts";
 import type { Quantity } from "../../core/quantity.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import { displayOf, unitOf } from "../../core/unitText.ts";
@@ -53,7 +53,7 @@ export function StationRoutes({
             {there.map(({ key, shownAs = key }) => (
               <th scope="col" key={key}>
                 <Definition of={key}>
-                  <SymbolText runs={labelOf(key).symbol} />
+                  <SymbolText runs={shownAs === key ? labelOf(key).symbol : alongTheStream(key)} />
                   <HeadUnit unit={displayOf(labelOf(shownAs), units).unit} />
                 </Definition>
               </th>
@@ -71,6 +71,13 @@ export function StationRoutes({
     </TableScroll>
   );
 }
+
+/** A time shown as a length: U times its symbol. */
+const alongTheStream = (key: string): readonly Run[] => [
+  ...labelOf("U").symbol,
+  { text: "\u202f" },
+  ...labelOf(key).symbol,
+];
 
 function HeadUnit({ unit }: { unit: string }) {
   return (
