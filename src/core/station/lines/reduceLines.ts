@@ -1,4 +1,4 @@
-import { assert } from "../../failure.ts";
+import { assert, ReductionFailure } from "../../failure.ts";
 import { isEstimate, missing, type Quantity, scaled } from "../../quantity.ts";
 import type { SourceNote } from "../../records.ts";
 import type { ReduceSettings, StationFacts, StationResult } from "../../stationResult.ts";
@@ -20,11 +20,12 @@ import type { LineValueName } from "./lineValues.ts";
  * parts does not matter.
  * @param parts     lines at one x
  * @param settings  what the user decided
- * @throws different-points, backward-time
+ * @throws different-points, backward-time, constant-signal
  */
 export function reduceLines(parts: readonly LinePart[], settings: ReduceSettings): StationResult {
   assert(parts.length > 0, "a station has at least one line");
   const material = lineMaterial(parts, settings);
+  if (!(material.all.whole.uu > 0)) throw withoutFluctuation(parts[0]);
   const { lines, sampling, spectra, rows, fields } = material;
   const values = lineQuantities(material);
   const facts = lineFacts(material, values);
@@ -134,7 +135,8 @@ function lineFacts(material: LineMaterial, values: Record<LineValueName, Quantit
   const variance = spectra?.covariance[c]?.[0] ?? 0;
   return {
     step: time(lines.spacing),
-    integralTimes: 2 * sampling.samples,
+    // a length of line makes up for no snapshot: few of them are a short record, however long the line
+    integralTimes: 2 * (sampling.groups === null ? sampling.independent : sampling.samples),
     groups: 0,
     segment: spectra === null ? null : lines.points.length,
     segments: spectra?.lines ?? 0,
@@ -168,4 +170,16 @@ function sourceNotes(parts: readonly LinePart[]): SourceNote[] {
   for (const { origin } of parts)
     notes.set(origin.file, { name: origin.file, bytes: 0, x: origin.x, position: origin.position });
   return [...notes.values()];
+}
+
+function withoutFluctuation({ origin }: LinePart): ReductionFailure {
+  return new ReductionFailure(
+    "constant-signal",
+    {
+      message: `u does not vary along the lines or in time at x = ${origin.x}`,
+      found: "one value at every point",
+      remedy: "Choose the column of u, or leave the file out.",
+    },
+    { file: origin.file },
+  );
 }

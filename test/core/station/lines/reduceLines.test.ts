@@ -163,6 +163,7 @@ describe("what lines cannot tell is said", () => {
     expect(codes(station)).toContain("short-record");
     expect(station.k).toMatchObject({ low: null, high: null });
     expect(station.k.value).toBeGreaterThan(0);
+    expect(station.facts.integralTimes).toBeLessThan(20);
   });
 
   it("a line shorter than eight integral scales is flagged with its length in them", () => {
@@ -189,6 +190,11 @@ describe("what lines cannot tell is said", () => {
     const station = reduceLines([partOf(wish)], { ...lineSettings, kinematicViscosity: null });
     expect(why(station.epsilon)).toBe("no kinematic viscosity is given");
     expect(station.lambda.value).toBeGreaterThan(0);
+  });
+
+  it("a u that is the same everywhere is refused", () => {
+    const still = madeSnapshots(wish).map(([u, v, w]) => [u.map(() => 5), v, w] as const);
+    expect(() => reduceLines([partOf(wish, still)], lineSettings)).toThrow("does not vary");
   });
 
   it("one line in two files at the same times, or with other points, is refused", () => {
