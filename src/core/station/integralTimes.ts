@@ -20,7 +20,7 @@ export interface IntegralTimes {
  *     exponential    ρ = e^(-τ/T) fitted to ρ > 0.2, through ρ(0) = 1
  *     low-frequency  E(0)/(4 uu), E one-sided, from ln E linear in f² on 0 < f < 0.12/T
  *     model          von Karman's form of E11 fitted to the energetic range (see modelScale)
- * @param correlation  of the station; null: unequal steps
+ * @param correlation  of the station; null where its records hold no lag products
  * @param spectra      of the station, or null
  * @param adopted      route that the user chose
  * @see   Pope (2000) §3.6; Tennekes & Lumley (1972) §6.4
@@ -31,7 +31,7 @@ export function integralTimes(
   adopted: ReduceSettings["integralScale"],
 ): IntegralTimes {
   if (correlation === null) {
-    const why = "the time steps are unequal, so there is no correlation";
+    const why = "the records hold no lag products, so there is no correlation";
     return { routes: allRoutes(why), tauStar: null, scale: null };
   }
   const { step } = correlation;

@@ -12,7 +12,7 @@ const mostLags = 1000;
 /**
  * Curves of a station: spectra against wavenumber, k1 = 2πf/U and E(k1) = U/(2π) E(f), averaged over bins of a
  * hundredth of a decade where they hold more than one point; correlations up to four zero crossings.
- * @returns null where the time steps are unequal or U is not positive
+ * @returns null where no record holds a whole segment, or U is not positive
  */
 export function stationCurves(
   record: JoinedRecord,

@@ -53,7 +53,7 @@ function absence(name: ValueName, material: StationMaterial): string {
   if (!(all.whole.U > 0))
     return "the mean velocity is not positive, so time is not to be turned into distance";
   if (needsSpectrum.test(name) && spectra === null)
-    return "the time steps are unequal, and a spectrum needs equal ones";
+    return "no piece of a record holds a whole segment of the spectrum";
   if (structural.test(name) && structure === null)
     return "no lag lies between the Taylor and the integral scale";
   if (needsSpectrum.test(name)) return "the spectrum shows nothing above its noise floor";
@@ -91,7 +91,7 @@ export function lateralLength(
 ): Quantity {
   const c = record.components.indexOf(name);
   if (c < 0) return missing(`${name} was not measured`);
-  if (correlation === null) return missing("the time steps are unequal, so there is no correlation");
+  if (correlation === null) return missing("the records hold no lag products, so there is no correlation");
   if (times.tauStar === null) return missing("the correlation of u does not fall to zero");
   const covariance = correlation.covariance[c];
   const area = (areaUpTo(covariance, times.tauStar / correlation.step) * correlation.step) / covariance[0];
@@ -102,7 +102,7 @@ export function lateralLength(
 export function inertialDissipation({ record, spectra, all }: StationMaterial): Quantity {
   const U = record.means[0];
   if (spectra === null || !(U > 0))
-    return missing("the time steps are unequal, and a spectrum needs equal ones");
+    return missing("no piece of a record holds a whole segment of the spectrum");
   const unit = (2 * Math.PI) / (U * spectra.size * spectra.step);
   const k1 = Float64Array.from({ length: spectra.size / 2 }, (_, i) => (i + 1) * unit);
   const E11 = spectra.density[0].subarray(1).map((value) => (value * U) / (2 * Math.PI));

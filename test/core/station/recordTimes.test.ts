@@ -286,3 +286,18 @@ describe("unequal steps of a record of Pope's model spectrum, every 2 eta", () =
     expect(part.lags?.pairs?.[0]).toBe(count - 1);
   });
 });
+
+describe("a record in pieces that are all too short for a segment", () => {
+  it("has moments, and says what a spectrum would have needed", () => {
+    const u = exponential(3000, 10, 6).map((value) => 4 + value);
+    const shreds = timed(u, (i) => (i + 40 * Math.floor(i / 30)) * step);
+    const part = partOf(shreds);
+    const station = reduceStation(
+      [{ ...part, spectrum: part.spectrum && { ...part.spectrum, segments: 0 } }],
+      settings,
+    );
+    expectClose(station.uu.value, 1, { relative: 0.3, because: "150 integral times" });
+    expect(station.lambda.value).toBeNull();
+    expect("why" in station.lambda && station.lambda.why).toContain("whole segment");
+  });
+});
