@@ -7,6 +7,7 @@ import { quantityText } from "../../figures/formatQuantity.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { NumberButton } from "./NumberButton.tsx";
 import { formatted, valueText } from "./QuantityText.tsx";
@@ -43,7 +44,7 @@ export function StationRoutes({
   const unit = unitOf(along === "t" ? "T" : "L", units);
   return (
     <TableScroll label={label}>
-      <table className="data dense stations-table">
+      <table className="data dense stations-table" {...cellKeys}>
         <thead>
           <tr>
             <th scope="col">
@@ -130,6 +131,7 @@ function RouteCell({
     <NumberButton
       of={key}
       quantity={quantity}
+      cell
       title={quantity.value === null ? quantity.why : quantityText(text)}
     >
       {valueText(text)}

@@ -1,4 +1,3 @@
-import type { FocusEvent, KeyboardEvent } from "react";
 import { labelOf } from "../../core/catalogue.ts";
 import type { Flag } from "../../core/flag.ts";
 import { isEstimate } from "../../core/quantity.ts";
@@ -8,6 +7,7 @@ import { concernOf } from "../../figures/flagConcern.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { NumberButton } from "./NumberButton.tsx";
 import { Pennant } from "./Pennant.tsx";
@@ -27,7 +27,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
   return (
     <>
       <TableScroll label="Stations">
-        <table className="data stations-table" onKeyDown={walkCells} onFocus={stayHere} ref={enterAtFirst}>
+        <table className="data stations-table" {...cellKeys}>
           <thead>
             <tr>
               <th scope="col">
@@ -116,42 +116,6 @@ function CellFlags({ flags }: { flags: readonly Flag[] }) {
       <span className="spoken">{text}</span>
     </span>
   );
-}
-
-const steps: Readonly<Record<string, readonly [number, number]>> = {
-  ArrowLeft: [0, -1],
-  ArrowRight: [0, 1],
-  ArrowUp: [-1, 0],
-  ArrowDown: [1, 0],
-};
-
-/** Arrow keys go from number to number: the table is one stop of the Tab key. */
-function walkCells(event: KeyboardEvent<HTMLTableElement>): void {
-  const step = steps[event.key];
-  const { target } = event;
-  if (step === undefined || !(target instanceof HTMLElement)) return;
-  const rows = [...event.currentTarget.querySelectorAll("tbody tr")].map((row) => [
-    ...row.querySelectorAll<HTMLElement>("[data-cell]"),
-  ]);
-  const row = rows.findIndex((cells) => cells.includes(target));
-  if (row < 0) return;
-  const column = rows[row].indexOf(target);
-  const next = rows[row + step[0]]?.[column + step[1]];
-  if (next === undefined) return;
-  event.preventDefault();
-  next.focus();
-}
-
-/** The first number, or the one last reached, is where the Tab key comes in. */
-function stayHere(event: FocusEvent<HTMLTableElement>): void {
-  if (!(event.target instanceof HTMLElement) || !("cell" in event.target.dataset)) return;
-  for (const cell of event.currentTarget.querySelectorAll<HTMLElement>("[data-cell]")) cell.tabIndex = -1;
-  event.target.tabIndex = 0;
-}
-
-function enterAtFirst(table: HTMLTableElement | null): void {
-  if (table?.querySelector('[data-cell][tabindex="0"]')) return;
-  table?.querySelector("[data-cell]")?.setAttribute("tabindex", "0");
 }
 
 /** Columns left out because every cell has the same gap: their names and the reason. */
