@@ -16,6 +16,8 @@ const sameStamp = 1e-6;
 export interface ClosedRecord {
   readonly sums: RecordSums;
   readonly samples: number;
+  /** Samples of the longest piece. */
+  readonly longest: number;
   readonly duration: number;
   readonly lowestSpeed: number;
   /** Steps that are not the plan's. */
@@ -50,6 +52,8 @@ export class RecordChunks {
   private seams: number[] = [];
   private filled = 0;
   private samples = 0;
+  private piece = 0;
+  private longest = 0;
   private lowest = Infinity;
   private unequal = 0;
   private gaps = 0;
@@ -95,7 +99,7 @@ export class RecordChunks {
     this.flush();
     const { plan, samples, sums, unequal, gaps, lost, repeated, cuts, response, last, facts } = this;
     const duration = plan.weighted && last !== null ? last - facts.start - lost : samples * plan.step;
-    const counted = { samples, duration, unequal, gaps, lost, repeated, cuts };
+    const counted = { samples, longest: this.longest, duration, unequal, gaps, lost, repeated, cuts };
     return { sums, ...counted, lowestSpeed: this.lowest, response };
   }
 
@@ -131,6 +135,7 @@ export class RecordChunks {
   }
 
   private seam(): void {
+    this.piece = 0;
     if (this.even !== null) {
       this.even.end();
       this.moments?.end();
@@ -151,6 +156,8 @@ export class RecordChunks {
       }
     }
     this.samples += to - from;
+    this.piece += to - from;
+    this.longest = Math.max(this.longest, this.piece);
   }
 
   /** The newer of two samples under one time stands for both. */

@@ -66,7 +66,7 @@ function nextPlan(
   if (!changed && !lost) return null;
   // a correlation that no longer crosses zero is looked for four times as far
   const wanted = time ?? 4 * (plan.integralTime ?? plan.step);
-  return { ...replan(plan, closed.samples, wanted, settings), pilotTime: plan.integralTime };
+  return { ...replan(plan, closed.longest, wanted, settings), pilotTime: plan.integralTime };
 }
 
 /** Slope of the whole record: that of the plan, and what the means of its blocks still show. */

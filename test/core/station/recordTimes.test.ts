@@ -182,6 +182,18 @@ describe("gaps", () => {
       because: "one pair in forty is lost at the seams",
     });
   });
+  it("limit segments to the pieces, also in the plan of another reading", () => {
+    const quick = exponential(8192, 6, 5);
+    const slow = exponential(40_000, 60, 6);
+    const both = Float64Array.of(...quick, ...slow).map((value) => 8 + value);
+    const part = readAll(
+      timed(both, (i) => (i + 100 * Math.floor(i / 3000)) * step),
+      8192,
+    );
+    expect(flagOf(part, "record-unsteady-scale")).toBeDefined();
+    expect(flagOf(part, "gap")?.value).toBe(16);
+    expect(part.spectrum?.segments).toBeGreaterThan(100);
+  });
   it("give the same bits however the record is handed over", () => {
     const whole = partOf(broken);
     for (const cuts of [[2500], [2499, 2501], [1, 2000, 4000]]) {
