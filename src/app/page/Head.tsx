@@ -32,7 +32,13 @@ export function Head({
   const [menu, setMenu] = useState<"none" | "sections" | "more">("none");
   const toggle = (name: "sections" | "more") => setMenu(menu === name ? "none" : name);
   return (
-    <header className="head" ref={ref} style={withVariables({ "--lanes": lanes })}>
+    // biome-ignore lint/a11y/noStaticElementInteractions: Escape from anywhere in the head closes its menu
+    <header
+      className="head"
+      ref={ref}
+      style={withVariables({ "--lanes": lanes })}
+      onKeyDown={(event) => event.key === "Escape" && setMenu("none")}
+    >
       <div className="bar">
         <WordMark />
         <SectionIndex sections={sections} />
