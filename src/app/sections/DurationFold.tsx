@@ -1,9 +1,10 @@
-import { useState } from "react";
+import { memo, use, useState } from "react";
 import { labelOf } from "../../core/catalogue.ts";
 import { plannedNames, requiredDuration } from "../../core/station/requiredDuration.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
+import { RestedCases } from "../page/restedCases.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { Fold } from "./Fold.tsx";
@@ -13,7 +14,8 @@ import { SymbolText } from "./SymbolText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
 /** Record lengths that would bring Tu, L11 and lambda to an interval of the width that is asked for. */
-export function DurationFold({ cases }: { cases: readonly CaseView[] }) {
+export function DurationFold() {
+  const cases = use(RestedCases);
   const [percent, setPercent] = useState(2);
   const recorded = cases.filter((view) => view.stations.some(({ duration }) => duration !== null));
   if (recorded.length === 0) return null;
@@ -51,7 +53,8 @@ export function DurationFold({ cases }: { cases: readonly CaseView[] }) {
   );
 }
 
-function DurationRows({ view, width }: { view: CaseView; width: number }) {
+/** Each length is a search of its own: they follow a bracket only once it rests. */
+const DurationRows = memo(function DurationRows({ view, width }: { view: CaseView; width: number }) {
   const decimals = positionDecimals(view.stations.map(({ x }) => x));
   return (
     <tbody>
@@ -80,4 +83,4 @@ function DurationRows({ view, width }: { view: CaseView; width: number }) {
       })}
     </tbody>
   );
-}
+});

@@ -75,7 +75,7 @@ export function RecordsSection({
       <AsideList aside={held.aside} />
       <FilesFold cases={cases} previews={held.previews} />
       <ChecksFold cases={cases} />
-      <DurationFold cases={cases} />
+      <DurationFold />
     </SectionFrame>
   );
 }
