@@ -1,9 +1,10 @@
-import { useMemo } from "react";
+import { use, useMemo } from "react";
 import { useStore } from "zustand";
 import { plainText } from "../../export/sentences/piece.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { LiveRegion } from "../page/LiveRegion.tsx";
 import { pageExports } from "../page/pageExports.ts";
+import { RestedCases } from "../page/restedCases.ts";
 import { Title } from "../page/Title.tsx";
 import type { CaseView } from "../session/caseView.ts";
 import type { PageStore } from "../session/pageStore.ts";
@@ -55,6 +56,9 @@ export function Argument({
   const stale = late !== null && cases.some((view) => view.stale);
   const reduced = cases.filter((view) => view.stations.length > 0);
   const shared = { cases: reduced, stale };
+  // the many numbers of the folds follow a bracket once it rests
+  const rested = use(RestedCases);
+  const folded = useMemo(() => rested.filter((view) => view.stations.length > 0), [rested]);
   return (
     <DefinitionPanel cases={cases}>
       <div className="row page-top">
@@ -88,14 +92,14 @@ export function Argument({
             notes={isotropyNotes}
           >
             <Fold name="Small scales, stress tensor, skewness and flatness">
-              <InvariantsBlock cases={reduced} />
-              <StationRoutes label="Anisotropy" cases={reduced} columns={anisotropyColumns} />
-              <StationRoutes label="Skewness and flatness" cases={reduced} columns={momentColumns} />
+              <InvariantsBlock cases={folded} />
+              <StationRoutes label="Anisotropy" cases={folded} columns={anisotropyColumns} />
+              <StationRoutes label="Skewness and flatness" cases={folded} columns={momentColumns} />
             </Fold>
           </ArgumentSection>
           <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture}>
             <Fold name="Integral scale by every route, transverse scales">
-              <StationRoutes label="Integral scales by route" cases={reduced} columns={integralColumns} />
+              <StationRoutes label="Integral scales by route" cases={folded} columns={integralColumns} />
             </Fold>
           </ArgumentSection>
           <SpectraSection {...shared} picked={workspace.picked} onChange={change} />
@@ -110,10 +114,10 @@ export function Argument({
               <AdoptedRoutes cases={reduced} />
               <StationRoutes
                 label="Dissipation of every station by route"
-                cases={reduced}
+                cases={folded}
                 columns={dissipationColumns}
               />
-              <StationRoutes label="Gradients by route" cases={reduced} columns={gradientColumns} />
+              <StationRoutes label="Gradients by route" cases={folded} columns={gradientColumns} />
             </Fold>
           </ArgumentSection>
           <CompareSection

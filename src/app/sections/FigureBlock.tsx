@@ -1,4 +1,4 @@
-import { type ReactNode, useMemo } from "react";
+import { type ReactNode, useDeferredValue, useMemo } from "react";
 import type { FigureOptions, FigureSpec } from "../../figures/figureSpec.ts";
 import { useFigureSettings } from "../page/figureSettings.ts";
 import { Plot } from "../plot/Plot.tsx";
@@ -21,9 +21,11 @@ export function FigureBlock({
   caption: ReactNode;
 }) {
   const settings = useFigureSettings();
+  // sentences and readings come first: the figure is built in a pass of its own behind them
+  const drawn = useDeferredValue(build);
   const figure = useMemo(
-    () => build({ ...settings, widthMm: settings.stacked ? 86 : widthMm }),
-    [build, settings, widthMm],
+    () => drawn({ ...settings, widthMm: settings.stacked ? 86 : widthMm }),
+    [drawn, settings, widthMm],
   );
   return (
     <div className="figure-block">

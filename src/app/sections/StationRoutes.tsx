@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { labelOf, type Run } from "../../core/catalogue.ts";
 import type { Quantity } from "../../core/quantity.ts";
 import type { StationResult } from "../../core/stationResult.ts";
@@ -27,7 +28,7 @@ export interface RouteColumn {
 }
 
 /** Some quantities of every station, a block a case; intervals and reasons stand behind the numbers. */
-export function StationRoutes({
+export const StationRoutes = memo(function StationRoutes({
   label,
   cases,
   columns,
@@ -71,7 +72,7 @@ export function StationRoutes({
       </table>
     </TableScroll>
   );
-}
+});
 
 /** A time shown as a length: U times its symbol. */
 const alongTheStream = (key: string): readonly Run[] => [
