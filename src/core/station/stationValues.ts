@@ -1,4 +1,5 @@
 import { anisotropy } from "./anisotropy.ts";
+import { commonScales } from "./commonScales.ts";
 import type { Component } from "./stationPart.ts";
 import { dissipationFromStructure } from "./structureDissipation.ts";
 
@@ -18,41 +19,11 @@ export interface ValueContext {
 }
 
 /**
- * Scale on which each value's error is formed: the logarithm for what is positive.
+ * The scale of every value's error.
  * The values are those of one station as functions of its sums; a name is a key of the result or of its routes.
  */
 export const valueScales = {
-  U: "linear",
-  uu: "log",
-  vv: "log",
-  ww: "log",
-  uv: "linear",
-  uw: "linear",
-  vw: "linear",
-  k: "log",
-  Tu: "log",
-  isotropy_uv: "log",
-  isotropy_uw: "log",
-  gradient_u: "log",
-  gradient_v: "log",
-  gradient_w: "log",
-  gradient_difference2: "log",
-  gradient_difference4: "log",
-  "epsilon_u-gradient": "log",
-  epsilon_gradient: "log",
-  lambda: "log",
-  lambda_f: "log",
-  eta: "log",
-  Re_lambda: "log",
-  S_dudx: "linear",
-  skewness_u: "linear",
-  skewness_v: "linear",
-  skewness_w: "linear",
-  flatness_u: "log",
-  flatness_v: "log",
-  flatness_w: "log",
-  K_v: "log",
-  K_w: "log",
+  ...commonScales,
   rho_uv: "linear",
   rho_uw: "linear",
   rho_vw: "linear",

@@ -1,3 +1,4 @@
+import { commonScales } from "../commonScales.ts";
 import type { Component } from "../stationPart.ts";
 import { lateral } from "../stationValues.ts";
 import { lineComponents } from "./lineFields.ts";
@@ -19,41 +20,11 @@ export interface LineContext {
 }
 
 /**
- * Scale on which each value's error is formed: the logarithm for what is positive.
+ * The scale of every value's error.
  * gradient_u, _v, _w are those of the component along the line and of the two across, in the places of u, v and w.
  */
 export const lineScales = {
-  U: "linear",
-  uu: "log",
-  vv: "log",
-  ww: "log",
-  uv: "linear",
-  uw: "linear",
-  vw: "linear",
-  k: "log",
-  Tu: "log",
-  isotropy_uv: "log",
-  isotropy_uw: "log",
-  gradient_u: "log",
-  gradient_v: "log",
-  gradient_w: "log",
-  gradient_difference2: "log",
-  gradient_difference4: "log",
-  "epsilon_u-gradient": "log",
-  epsilon_gradient: "log",
-  lambda: "log",
-  lambda_f: "log",
-  eta: "log",
-  Re_lambda: "log",
-  S_dudx: "linear",
-  K_v: "log",
-  K_w: "log",
-  skewness_u: "linear",
-  skewness_v: "linear",
-  skewness_w: "linear",
-  flatness_u: "log",
-  flatness_v: "log",
-  flatness_w: "log",
+  ...commonScales,
   /** C_epsilon/L11 and Re_L/L11: the error of L11 is added to theirs. */
   C_epsilon_over_L: "log",
   Re_L_over_L: "log",

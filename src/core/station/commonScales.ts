@@ -1,0 +1,37 @@
+/**
+ * Scale on which the error of a value is formed: the logarithm for what is positive. These are the values that
+ * records and line samples alike give; a name is a key of the result or of its routes.
+ */
+export const commonScales = {
+  U: "linear",
+  uu: "log",
+  vv: "log",
+  ww: "log",
+  uv: "linear",
+  uw: "linear",
+  vw: "linear",
+  k: "log",
+  Tu: "log",
+  isotropy_uv: "log",
+  isotropy_uw: "log",
+  gradient_u: "log",
+  gradient_v: "log",
+  gradient_w: "log",
+  gradient_difference2: "log",
+  gradient_difference4: "log",
+  "epsilon_u-gradient": "log",
+  epsilon_gradient: "log",
+  lambda: "log",
+  lambda_f: "log",
+  eta: "log",
+  Re_lambda: "log",
+  S_dudx: "linear",
+  skewness_u: "linear",
+  skewness_v: "linear",
+  skewness_w: "linear",
+  flatness_u: "log",
+  flatness_v: "log",
+  flatness_w: "log",
+  K_v: "log",
+  K_w: "log",
+} as const;
