@@ -11,6 +11,8 @@ export interface DecaySettings {
   readonly residuals: "log" | "linear";
   readonly weights: "sampling" | "equal";
   readonly along: "x" | "t";
+  /** What the law runs along; "auto" or left out: the time of flight where U varies, else x. */
+  readonly coordinate?: "auto" | "x" | "flight";
   readonly referenceLength: number | null;
   readonly referenceSpeed: number | null;
   readonly kinematicViscosity: number | null;
@@ -21,6 +23,8 @@ export interface DecaySettings {
   readonly extent?: number | null;
   /** Where a body is to stand, and what it is to meet there. */
   readonly body?: BodySettings | null;
+  /** Share by which a ratio may depart from 1, or from its last value, where the flow has developed; left out: 0.1. */
+  readonly developmentTolerance?: number;
   /** Whether the stations were sampled at the same times; "auto" or left out: told by their correlation. */
   readonly simultaneous?: boolean | "auto";
 }

@@ -26,6 +26,8 @@ export interface CaseSheet {
   readonly sensorLength: number | null;
   readonly reduce: SheetReduce;
   readonly body: SheetBody | null;
+  /** Share by which a ratio may depart from 1, or from its last value, where the flow has developed. */
+  readonly development: { readonly tolerance: number };
   readonly compare: { readonly align: "x0" | "x" | "Tu"; readonly tolerance: number };
 }
 
@@ -46,6 +48,8 @@ export interface SheetFit {
   readonly n: number | null;
   readonly residuals: "log" | "linear";
   readonly weights: "sampling" | "equal";
+  /** What the law runs along: x, the time of flight, or that of the two which U asks for. */
+  readonly coordinate: "auto" | "x" | "flight";
 }
 export interface SheetRead {
   readonly separator: Separator | null;

@@ -88,6 +88,7 @@ export const caseSheetSchema = keyed({
       n: v.optional(v.nullable(positive), standard.fit.n),
       residuals: v.optional(oneOf("log", "linear"), standard.fit.residuals),
       weights: v.optional(oneOf("sampling", "equal"), standard.fit.weights),
+      coordinate: v.optional(oneOf("auto", "x", "flight"), standard.fit.coordinate),
     },
     {},
   ),
@@ -136,6 +137,7 @@ export const caseSheetSchema = keyed({
     ),
     standard.body,
   ),
+  development: part({ tolerance: v.optional(positive, standard.development.tolerance) }, {}),
   compare: part(
     {
       align: v.optional(oneOf("x0", "x", "Tu"), standard.compare.align),

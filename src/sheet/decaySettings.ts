@@ -14,6 +14,7 @@ export function decaySettings(sheet: CaseSheet): DecaySettings {
     kind,
     extent: sheet.extent,
     body: sheet.body,
+    developmentTolerance: sheet.development.tolerance,
     simultaneous: sheet.simultaneous,
   };
 }

@@ -10,7 +10,15 @@ export const defaultCaseSheet: CaseSheet = {
   along: "x",
   columns: null,
   files: [],
-  fit: { quantity: "auto", window: "auto", x0: null, n: null, residuals: "log", weights: "sampling" },
+  fit: {
+    quantity: "auto",
+    window: "auto",
+    x0: null,
+    n: null,
+    residuals: "log",
+    weights: "sampling",
+    coordinate: "auto",
+  },
   kind: null,
   read: { separator: null, decimal: null, heading: null, step: null, missing: [] },
   zero: 0,
@@ -28,5 +36,6 @@ export const defaultCaseSheet: CaseSheet = {
     dissipation: "auto",
   },
   body: null,
+  development: { tolerance: 0.1 },
   compare: { align: "x0", tolerance: 0.1 },
 };

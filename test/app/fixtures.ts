@@ -120,7 +120,15 @@ export const sheet: CaseSheet = {
   along: "x",
   columns: null,
   files: [{ path: "x0.3.csv", x: 0.3 }],
-  fit: { quantity: "auto", window: "auto", x0: null, n: null, residuals: "log", weights: "sampling" },
+  fit: {
+    quantity: "auto",
+    window: "auto",
+    x0: null,
+    n: null,
+    residuals: "log",
+    weights: "sampling",
+    coordinate: "auto",
+  },
   kind: null,
   read: { separator: null, decimal: null, heading: null, step: null, missing: [] },
   zero: 0,
@@ -138,6 +146,7 @@ export const sheet: CaseSheet = {
     dissipation: "auto",
   },
   body: null,
+  development: { tolerance: 0.1 },
   compare: { align: "x0", tolerance: 0.1 },
 };
 

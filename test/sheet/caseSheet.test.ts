@@ -26,7 +26,8 @@ describe("a case sheet", () => {
     expect(warnings).toEqual([]);
   });
   it("has the defaults of the published format", () => {
-    const { fit, compare, units, along, zero, startup, extent, simultaneous, periodic } = read(least).sheet;
+    const { fit, compare, development, units, along, zero, startup, extent, simultaneous, periodic } =
+      read(least).sheet;
     expect(fit).toEqual({
       quantity: "auto",
       window: "auto",
@@ -34,8 +35,10 @@ describe("a case sheet", () => {
       n: null,
       residuals: "log",
       weights: "sampling",
+      coordinate: "auto",
     });
     expect(compare).toEqual({ align: "x0", tolerance: 0.1 });
+    expect(development).toEqual({ tolerance: 0.1 });
     expect({ units, along, zero, startup, extent, simultaneous, periodic }).toEqual({
       units: "SI",
       along: "x",
@@ -119,6 +122,8 @@ describe("a value that cannot be used is refused with file and key", () => {
     ["residuals nobody knows", { ...least, fit: { residuals: "cubic" } }, "fit.residuals"],
     ["a negative column", { ...least, columns: { u: -1 } }, "columns.u"],
     ["a segment that is no power of two", { ...least, reduce: { segment: 1000 } }, "reduce.segment"],
+    ["a coordinate nobody knows", { ...least, fit: { coordinate: "t" } }, "fit.coordinate"],
+    ["a development within nothing", { ...least, development: { tolerance: 0 } }, "development.tolerance"],
     ["a tolerance of zero", { ...least, compare: { tolerance: 0 } }, "compare.tolerance"],
     ["a decay in time of a series", { ...least, along: "t" }, "along"],
     ["a list", [], "(the whole sheet)"],

@@ -27,7 +27,7 @@ export function argueCases(
     const inOrder = [...stations].sort((a, b) => a.x - b.x);
     const decay = fitDecay(inOrder, settings);
     const derived = deriveStations(inOrder, decay, settings);
-    const argument = argueDecay(derived, decay, settings, { tolerance: compare.tolerance });
+    const argument = argueDecay(derived, decay, settings);
     return { name, stations: derived, decay: { ...decay, argument }, decaySettings: settings };
   });
   return { cases: argued, comparisons: compareCases(argued, compare) };

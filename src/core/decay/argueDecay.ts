@@ -5,7 +5,7 @@ import { atBody } from "./atBody.ts";
 import { bootstrapLaw } from "./bootstrapLaw.ts";
 import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
 import { decayRoutes, routeDisagreements } from "./decayRoutes.ts";
-import { developmentDefaults, developmentLength } from "./developmentLength.ts";
+import { developmentLength } from "./developmentLength.ts";
 import { fitWindow, type WindowFit } from "./fitWindow.ts";
 import { flightFit } from "./flightFit.ts";
 import { growths } from "./growths.ts";
@@ -22,13 +22,11 @@ import { withCommonBlocks } from "./withCommonBlocks.ts";
  * It takes some tenths of a second, and is asked for once a change has come to rest.
  * @param stations derived, in order of x
  * @param decay    of the same stations and settings
- * @param options  tolerance of the development length
  */
 export function argueDecay(
   stations: readonly StationResult[],
   decay: DecayResult,
   settings: DecaySettings,
-  options = developmentDefaults,
 ): DecayArgument {
   const points = decay.points.filter((point) => point.used);
   const used = new Set(points.map(({ x }) => x));
@@ -53,7 +51,7 @@ export function argueDecay(
           ),
     local: decay.law === null ? null : localDecay(decay.points, decay.law),
     growths: growths(inWindow, decay),
-    development: developmentLength(stations, decay, settings, options),
+    development: developmentLength(stations, decay, settings),
     body: body ? atBody(stations, decay, settings, body) : null,
     narrowing: window === null ? [] : narrowing(points, window),
     flight,

@@ -16,14 +16,13 @@ export const developmentDefaults = {
  * against the gradients' closes; and where the window of the law begins. Each in both readings: from where no interval
  * contradicts it, and from where every interval lies inside.
  * @param stations derived, in order of x
- * @param options  tolerance
+ * @param settings developmentTolerance; reference length
  * @see            Wu (2017), Annu. Rev. Fluid Mech. 49, 23
  */
 export function developmentLength(
   stations: readonly StationResult[],
   decay: DecayResult,
-  { referenceLength }: DecaySettings,
-  { tolerance } = developmentDefaults,
+  { referenceLength, developmentTolerance: tolerance = developmentDefaults.tolerance }: DecaySettings,
 ): Development {
   const xs = stations.map(({ x }) => x);
   const share = `${Number((100 * tolerance).toPrecision(3))} %`;

@@ -199,7 +199,10 @@ describe("development length", () => {
   });
   it("moves with its tolerance", () => {
     const derived = deriveStations(developing, fitDecay(developing, settings), settings);
-    const wide = argueDecay(derived, fitDecay(developing, settings), settings, { tolerance: 0.25 });
+    const wide = argueDecay(derived, fitDecay(developing, settings), {
+      ...settings,
+      developmentTolerance: 0.25,
+    });
     expect(wide.development.criteria.find((one) => one.key === "isotropy_uw")?.inside.value).toBe(xs[6]);
     expect(wide.development.tolerance).toBe(0.25);
   });
