@@ -1,5 +1,7 @@
 import type { Flag } from "./flag.ts";
+import type { ProbeReading } from "./probeReading.ts";
 import type { Quantity } from "./quantity.ts";
+import type { RecordCut } from "./recordCut.ts";
 import type { SourceNote } from "./records.ts";
 
 /**
@@ -54,16 +56,11 @@ export interface StationResult {
   readonly blocks: BlockTable | null;
   readonly facts: StationFacts;
   /** Each probe by itself, where several stand at this x: in order of file and place. */
-  readonly probes?: readonly ProbeResult[];
-}
-
-/** One of several probes at one x, about its own mean. */
-export interface ProbeResult {
-  readonly file: string;
-  readonly y: number | null;
-  readonly z: number | null;
-  readonly U: Quantity;
-  readonly u_rms: Quantity;
+  readonly probes?: readonly ProbeReading[];
+  /** Where its records were cut, in order of file and time; left out where nowhere. */
+  readonly cuts?: readonly RecordCut[];
+  /** Cuts beyond those that are listed. */
+  readonly cuts_more?: number;
 }
 
 /** How the reduction went: the settings as they worked out, for the definition beside each number. */

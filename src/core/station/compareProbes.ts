@@ -1,9 +1,9 @@
+import type { ProbeReading } from "../probeReading.ts";
 import { bare, type Quantity, type StandardError } from "../quantity.ts";
 import { fTail } from "../signal/distributions/fTail.ts";
 import { studentTail } from "../signal/distributions/studentTail.ts";
 import { jackknife } from "../signal/jackknife.ts";
 import { jointLayout } from "../signal/jointMoments.ts";
-import type { ProbeResult } from "../stationResult.ts";
 import { type BlockGroups, groupBlocks } from "./groupBlocks.ts";
 import type { JoinedRecord } from "./joinParts.ts";
 import { shortestRecord } from "./sampling.ts";
@@ -11,7 +11,7 @@ import { withError } from "./stationErrors.ts";
 
 /** The probes of one station beside each other. */
 export interface ProbeComparison {
-  readonly probes: readonly ProbeResult[];
+  readonly probes: readonly ProbeReading[];
   /** Probability that U and u' as different as these come from one flow; null where their errors are not known. */
   readonly p: number | null;
 }
@@ -55,6 +55,8 @@ export function compareProbes(record: JoinedRecord, scale: number | null): Probe
       z: origin.z,
       U: quantityOf(U.value, errorOf(U, "linear", repeats)),
       u_rms: quantityOf(Math.exp(rms.value), errorOf(rms, "log", repeats)),
+      agrees: null,
+      departs: [],
     };
   });
   if (groups.some((group) => group === null)) return { probes, p: null };
