@@ -47,6 +47,8 @@ export interface FigureCase {
   readonly stations: readonly StationResult[];
   /** Null until the case has been fitted. */
   readonly decay: DecayResult | null;
+  /** The fit as it was argued last, where `decay` is newer and not argued yet; null or left out: none. */
+  readonly argued?: DecayResult | null;
   /** The reference length and its letter; null where the case has none. */
   readonly length: number | null;
   readonly symbol: string;

@@ -77,6 +77,7 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
     along: sheet.along,
     of,
     reduced,
+    argued: argued?.cases[of.id]?.decay ?? null,
     work,
   };
   if (reduced === null || reduced.stations.length === 0)
