@@ -1,5 +1,6 @@
 import { assert, assertNever } from "../core/failure.ts";
 import type { CaseSheet } from "./caseSheet.ts";
+import { moveBody, setBody } from "./changeBody.ts";
 import type { AddedFiles, Workspace, WorkspaceCase, WorkspaceChange } from "./workspace.ts";
 
 export const emptyWorkspace: Workspace = { schema: 1, title: "", cases: [], axis: "x", picked: [] };
@@ -26,6 +27,10 @@ export function changeWorkspace(workspace: Workspace, change: WorkspaceChange): 
       return onFit(workspace, change.caseId, { x0: change.x0 });
     case "hold-exponent":
       return onFit(workspace, change.caseId, { n: change.n });
+    case "set-body":
+      return setBody(workspace, change);
+    case "move-body":
+      return moveBody(workspace, change);
     case "place-file":
       return placeFile(workspace, change.caseId, change.name, change.x);
     case "set-axis":

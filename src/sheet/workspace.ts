@@ -1,4 +1,4 @@
-import type { CaseSheet, SheetFile } from "./caseSheet.ts";
+import type { CaseSheet, SheetBody, SheetFile } from "./caseSheet.ts";
 
 /** All that a user decides, one immutable value. Results are not in it: they follow from it and the files. */
 export interface Workspace {
@@ -37,6 +37,11 @@ export interface PickedStation {
   readonly caseId: string;
   readonly x: number;
 }
+/** What of a body differs from now on, in one case or (null) in all of them; no body takes it away. */
+export interface BodyEdit {
+  readonly caseId: string | null;
+  readonly body: Partial<SheetBody> | null;
+}
 
 /** Everything that can be done to a workspace. */
 export type WorkspaceChange =
@@ -53,6 +58,9 @@ export type WorkspaceChange =
     }
   | { readonly kind: "hold-origin"; readonly caseId: string; readonly x0: number | null }
   | { readonly kind: "hold-exponent"; readonly caseId: string; readonly n: number | null }
+  | ({ readonly kind: "set-body" } & BodyEdit)
+  /** The marker of all bodies was moved. */
+  | { readonly kind: "move-body"; readonly from: number; readonly to: number }
   | { readonly kind: "place-file"; readonly caseId: string; readonly name: string; readonly x: number | null }
   | { readonly kind: "set-axis"; readonly axis: Axis }
   | { readonly kind: "pick"; readonly station: PickedStation }
