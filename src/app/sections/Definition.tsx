@@ -1,6 +1,6 @@
 import { type ReactNode, useId, useRef } from "react";
 import { labelOf } from "../../core/catalogue.ts";
-import { FormulaText } from "./FormulaText.tsx";
+import { RichText } from "./RichText.tsx";
 
 /**
  * What stands in a table's head, opening what it means and who says so. A native popover: it needs no place
@@ -25,7 +25,7 @@ export function Definition({ of, children }: { of: string; children: ReactNode }
       </button>
       <div id={id} ref={text} popover="auto" className="definition-text">
         <p>
-          <b>{label.name}</b>: <FormulaText text={label.definition} />.
+          <b>{label.name}</b>: <RichText text={label.definition} />.
         </p>
         <p>{label.source}</p>
       </div>

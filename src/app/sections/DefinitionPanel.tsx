@@ -15,7 +15,6 @@ import {
   stationAlternatives,
   stationSettings,
 } from "./definitionRows.ts";
-import { FormulaText } from "./FormulaText.tsx";
 import { type FoundNumber, foundNumber } from "./foundNumber.ts";
 import { Pennant } from "./Pennant.tsx";
 import { formatted } from "./QuantityText.tsx";
@@ -62,7 +61,7 @@ function DefinitionText({ asked: { key, quantity }, found }: { asked: Asked; fou
   return (
     <>
       <p>
-        <b>{label.name}</b>, <SymbolText runs={label.symbol} />: <FormulaText text={label.definition} />.
+        <b>{label.name}</b>, <SymbolText runs={label.symbol} />: <RichText text={label.definition} />.
       </p>
       {found && <Place found={found} />}
       {found && <ValueLine of={key} quantity={quantity} view={found.view} />}

@@ -1,28 +1,18 @@
-import { labelOf } from "../../core/catalogue.ts";
 import { SymbolText } from "./SymbolText.tsx";
+import { symbolParts } from "./symbolParts.ts";
 
-/** Quantities that reasons and flags name in plain letters, the longer names first. */
-const keys = [
-  "C_epsilon",
-  "Re_lambda",
-  "S_dudx",
-  "T_int",
-  "Re_L",
-  "epsilon",
-  "lambda",
-  "L11",
-  "eta",
-  "x0",
-] as const;
-const named = new RegExp(`(?<![\\w/])(${keys.join("|")})(?!\\w)`, "g");
-
-/** Plain text of the core, with the quantities that it names set as their symbols. */
+/** Plain text of the core with its symbols set as such: italic, indices lowered, powers raised. */
 export function RichText({ text }: { text: string }) {
-  const parts = text.split(named);
-  if (parts.length === 1) return text;
-  return parts.map((part, i) =>
-    // every second part is a name: what the pattern caught
-    // biome-ignore lint/suspicious/noArrayIndexKey: parts have no identity but their place
-    i % 2 === 1 ? <SymbolText runs={labelOf(part).symbol} key={i} /> : part,
-  );
+  const parts = symbolParts(text);
+  if (parts.length === 1 && parts[0].kind === "text") return text;
+  return parts.map((part, i) => {
+    if (part.kind === "text") return part.text;
+    return part.kind === "symbol" ? (
+      // biome-ignore lint/suspicious/noArrayIndexKey: parts have no identity but their place
+      <SymbolText runs={part.runs} key={i} />
+    ) : (
+      // biome-ignore lint/suspicious/noArrayIndexKey: parts have no identity but their place
+      <sup key={i}>{part.text}</sup>
+    );
+  });
 }
