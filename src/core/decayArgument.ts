@@ -84,6 +84,8 @@ export interface Bootstrap {
   readonly withoutLaw: number;
   readonly n: Quantity;
   readonly x0: Quantity;
+  /** Some of the refits, for the eye. */
+  readonly cloud: { readonly n: readonly number[]; readonly x0: readonly number[] };
 }
 
 export const routeKeys = [
@@ -94,6 +96,7 @@ export const routeKeys = [
   "epsilon",
   "origin-zero",
   "origin-held",
+  "origin-other",
   "flight",
 ] as const;
 export type RouteKey = (typeof routeKeys)[number];

@@ -13,6 +13,8 @@ export interface DecaySettings {
   readonly along: "x" | "t";
   /** What the law runs along; "auto" or left out: the time of flight where U varies, else x. */
   readonly coordinate?: "auto" | "x" | "flight";
+  /** Another origin, to see the exponent it would give: a route, not the fit; null or left out: none. */
+  readonly otherX0?: number | null;
   readonly referenceLength: number | null;
   readonly referenceSpeed: number | null;
   readonly kinematicViscosity: number | null;
@@ -65,6 +67,15 @@ export interface PowerLaw {
   readonly freedom?: number | null;
 }
 
+/** A named exponent, and how probable data so far from it are. */
+export interface Hypothesis {
+  readonly name: string;
+  readonly n: number;
+  readonly p: number | null;
+  /** Chi-square where errors are known, F where residuals or common blocks tell them. */
+  readonly test?: "chi-square" | "F" | null;
+}
+
 /** The decay of one case. Keys are those of the results file, to the letter; the rest is for the page. */
 export interface DecayResult {
   readonly quantity: "k" | "uu" | "q";
@@ -92,7 +103,7 @@ export interface DecayResult {
   readonly lambda_route: { readonly n: Quantity; readonly x0: Quantity };
   readonly epsilon_route: { readonly n: Quantity; readonly x0: Quantity };
   readonly growth: { readonly m: Quantity };
-  readonly hypotheses: readonly { readonly name: string; readonly n: number; readonly p: number | null }[];
+  readonly hypotheses: readonly Hypothesis[];
   readonly law: PowerLaw | null;
   readonly points: readonly DecayPoint[];
   /** Groups of common blocks behind the intervals, and the mean correlation of neighbours; null: each station for itself. */

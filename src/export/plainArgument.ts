@@ -34,7 +34,7 @@ export function plainArgument(argument: DecayArgument | undefined): PlainArgumen
     decay: {
       growths: plain(rest.growths),
       region: plain(rest.region),
-      bootstrap: plain(rest.bootstrap),
+      bootstrap: plain(withoutCloud(rest.bootstrap)),
       routes: plain(rest.routes),
       disagreements: plain(rest.disagreements),
       origin_scan: plain(rest.originScan),
@@ -43,6 +43,13 @@ export function plainArgument(argument: DecayArgument | undefined): PlainArgumen
       flight: plain(rest.flight),
     },
   };
+}
+
+/** A picture's points are no result: they can be drawn again from the seed. */
+function withoutCloud(bootstrap: DecayArgument["bootstrap"]) {
+  if (bootstrap === null) return null;
+  const { cloud: _, ...summary } = bootstrap;
+  return summary;
 }
 
 /** Results as they stand, each quantity without what only the program needs. */

@@ -124,7 +124,7 @@ function plainDecay(decay: DecayResult) {
     lambda_route: plainEach(decay.lambda_route),
     epsilon_route: plainEach(decay.epsilon_route),
     growth: plainEach(decay.growth),
-    hypotheses: decay.hypotheses.map(({ name, n, p }) => ({ name, n, p })),
+    hypotheses: decay.hypotheses.map(({ name, n, p, test = null }) => ({ name, n, p, test })),
     together: decay.together ?? null,
   };
 }

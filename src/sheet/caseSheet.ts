@@ -50,6 +50,8 @@ export interface SheetFit {
   readonly weights: "sampling" | "equal";
   /** What the law runs along: x, the time of flight, or that of the two which U asks for. */
   readonly coordinate: "auto" | "x" | "flight";
+  /** Another origin, to see beside the fit which exponent it would give. */
+  readonly otherX0: number | null;
 }
 export interface SheetRead {
   readonly separator: Separator | null;

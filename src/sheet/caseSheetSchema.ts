@@ -89,6 +89,7 @@ export const caseSheetSchema = keyed({
       residuals: v.optional(oneOf("log", "linear"), standard.fit.residuals),
       weights: v.optional(oneOf("sampling", "equal"), standard.fit.weights),
       coordinate: v.optional(oneOf("auto", "x", "flight"), standard.fit.coordinate),
+      otherX0: v.optional(v.nullable(finite), standard.fit.otherX0),
     },
     {},
   ),

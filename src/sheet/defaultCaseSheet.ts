@@ -18,6 +18,7 @@ export const defaultCaseSheet: CaseSheet = {
     residuals: "log",
     weights: "sampling",
     coordinate: "auto",
+    otherX0: null,
   },
   kind: null,
   read: { separator: null, decimal: null, heading: null, step: null, missing: [] },

@@ -128,6 +128,7 @@ export const sheet: CaseSheet = {
     residuals: "log",
     weights: "sampling",
     coordinate: "auto",
+    otherX0: null,
   },
   kind: null,
   read: { separator: null, decimal: null, heading: null, step: null, missing: [] },

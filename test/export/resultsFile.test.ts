@@ -72,7 +72,7 @@ describe("the results file", () => {
     for (const key of keys.split(" ")) expect(first.decay, key).toHaveProperty(key);
     expect(first.decay.given_window.n).toEqual({ value: 1.25, low: 1.22, high: 1.28 });
     expect(first.decay.growth.m.value).toBe(0.37);
-    expect(first.decay.hypotheses).toEqual([{ name: "Saffman", n: 1.2, p: 0.41 }]);
+    expect(first.decay.hypotheses).toEqual([{ name: "Saffman", n: 1.2, p: 0.41, test: null }]);
   });
 
   it("lists the doubts about the case and about its decay together", () => {

@@ -36,6 +36,7 @@ describe("a case sheet", () => {
       residuals: "log",
       weights: "sampling",
       coordinate: "auto",
+      otherX0: null,
     });
     expect(compare).toEqual({ align: "x0", tolerance: 0.1 });
     expect(development).toEqual({ tolerance: 0.1 });

@@ -9,6 +9,9 @@ import { minimiseLaw } from "./minimiseLaw.ts";
 
 export const bootstrapDefaults = { refits: 1000 };
 
+/** The first draws, enough to see their shape. */
+const cloudPoints = 400;
+
 /** A refit is followed to this share of a standard error. */
 const refitTolerance = 1e-3;
 
@@ -52,12 +55,14 @@ export function bootstrapLaw(
   }
   problem.y.set(measured);
   evaluateLaw(problem, law, held);
+  const shown = { n: n.slice(0, cloudPoints), x0: x0.slice(0, cloudPoints) };
   // draws without a law stand for an origin without end upstream and an n without end
   return {
     refits,
     withoutLaw,
     n: percentiles(fit.n, n, 0, withoutLaw),
     x0: percentiles(fit.x0, x0, withoutLaw, 0),
+    cloud: shown,
   };
 }
 

@@ -4,6 +4,7 @@ import { isEstimate } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import type { ChosenWindow } from "./chooseWindow.ts";
 import { steadySpeed } from "./flightFit.ts";
+import { originSensitivity } from "./originSensitivity.ts";
 
 /** Below this ratio of the last x - x0 to the first, n and x0 are hardly told apart. */
 const shortSpan = 4;
@@ -63,9 +64,9 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
   const { law, p, stations, chi2_reduced } = decay;
   if (law === null) return [];
   const flags: Flag[] = [];
-  const sensitivity = originSensitivity(law.n, decay.window[0] - law.x0, decay.window[1] - law.x0);
+  const sensitivity = originSensitivity(law, decay.window);
   const traded =
-    settings.n !== null || !Number.isFinite(sensitivity)
+    settings.n !== null || sensitivity === null
       ? ""
       : ` Were x0 one unit of x farther downstream, n would change by ${sensitivity.toPrecision(2)}.`;
   if (stations < fewStations)
@@ -82,7 +83,7 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
       text: `The last x - x0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.${traded}`,
       value: ratio,
     });
-  if (settings.x0 !== null) flags.push(heldOrigin(law.n, first - law.x0, last - law.x0));
+  if (settings.x0 !== null) flags.push(heldOrigin(sensitivity));
   if (window.withoutPlateau)
     flags.push({
       code: "window-without-plateau",
@@ -106,16 +107,9 @@ function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string
   return (why_low !== undefined) !== (why_high !== undefined);
 }
 
-/** dn/dx0 = -n/(x_c - x0), x_c the geometric centre of the window; from the distances of its ends. */
-function originSensitivity(n: number, first: number, last: number): number {
-  return -n / (Math.sqrt(first) * Math.sqrt(last));
-}
-
 /** Had the origin been held elsewhere. */
-function heldOrigin(n: number, first: number, last: number): Flag {
-  const slope = originSensitivity(n, first, last);
-  if (!Number.isFinite(slope))
-    return { code: "held-origin", text: "The origin is held at the first station." };
+function heldOrigin(slope: number | null): Flag {
+  if (slope === null) return { code: "held-origin", text: "The origin is held at the first station." };
   return {
     code: "held-origin",
     text: `The origin is held: were it held farther downstream by one unit of x, n would change by ${slope.toPrecision(2)}.`,

@@ -48,6 +48,9 @@ export function decayRoutes(
     ...(settings.x0 === null || settings.x0 === 0
       ? []
       : [heldRoute("origin-held", "x0 held as given", points, { ...free, x0: settings.x0 })]),
+    ...(settings.otherX0 == null
+      ? []
+      : [heldRoute("origin-other", "x0 held elsewhere", points, { ...free, x0: settings.otherX0 })]),
     ...(flight === null
       ? []
       : [
@@ -81,7 +84,7 @@ function fitted(points: readonly DecayPoint[], settings: DecaySettings): { n: Qu
 }
 
 function heldRoute(
-  key: "origin-zero" | "origin-held",
+  key: "origin-zero" | "origin-held" | "origin-other",
   name: string,
   points: readonly DecayPoint[],
   settings: DecaySettings,
