@@ -5,7 +5,8 @@ import type { WorkspaceCase } from "../../sheet/workspace.ts";
 import type { CaseView } from "./caseView.ts";
 import { fitNow } from "./fitNow.ts";
 import type { Draft } from "./pageStore.ts";
-import type { Argued, Held, Reduced, Session, Work } from "./session.ts";
+import type { Argued, ArguedCase, Held, Reduced, Session, Work } from "./session.ts";
+import { withBody } from "./withBody.ts";
 
 /** Everything one view follows from. */
 interface Ground {
@@ -16,9 +17,13 @@ interface Ground {
   readonly work: Work | null;
 }
 
-/** What a case's numbers were fitted from: results and settings. Equal keys, equal numbers. */
+/**
+ * What a case was fitted from: results and settings. Equal keys, equal fits. A body and what development is asked to
+ * keep to change no fit: they are seen to in withBody.
+ */
 export function fitKey(reduced: Reduced, settings: DecaySettings): string {
-  return `${reduced.key} ${reduced.stations.length} ${JSON.stringify(settings)}`;
+  const { body: _body, developmentTolerance: _tolerance, ...fitted } = settings;
+  return `${reduced.key} ${reduced.stations.length} ${JSON.stringify(fitted)}`;
 }
 
 /**
@@ -77,7 +82,7 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
     along: sheet.along,
     of,
     reduced,
-    argued: argued?.cases[of.id]?.decay ?? null,
+    argued: arguedLast(of, argued)?.decay ?? null,
     work,
   };
   if (reduced === null || reduced.stations.length === 0)
@@ -92,6 +97,11 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
     : { ...base, stations: reduced.stations, decay: null, stale: true };
 }
 
+function arguedLast({ id, sheet }: WorkspaceCase, argued: Argued | null): ArguedCase | null {
+  const last = argued?.cases[id];
+  return last ? withBody(last, decaySettings(sheet)) : null;
+}
+
 function fitOf(
   reduced: Reduced,
   settings: DecaySettings,
@@ -99,7 +109,8 @@ function fitOf(
   argued: Argued | null,
   inHand: boolean,
 ): { stations: readonly StationResult[]; decay: DecayResult } | null {
-  if (argued !== null && argued.keys[caseId] === fitKey(reduced, settings)) return argued.cases[caseId];
+  if (argued !== null && argued.keys[caseId] === fitKey(reduced, settings))
+    return withBody(argued.cases[caseId], settings);
   if (settings.window !== "auto") return fitNow(reduced.stations, settings);
   // an origin in the hand: the automatic window stands still until it rests
   const last = argued?.cases[caseId]?.decay;
