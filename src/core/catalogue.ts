@@ -1,4 +1,5 @@
 import { decayLabels } from "./decayLabels.ts";
+import { factLabels } from "./factLabels.ts";
 import { assert } from "./failure.ts";
 import { figureLabels } from "./figureLabels.ts";
 import { routeLabels } from "./routeLabels.ts";
@@ -35,7 +36,10 @@ export interface Label {
 
 /** Every label by its key: the keys of the results file, then the axes of the figures. */
 export const catalogue: Readonly<Record<string, Label>> = Object.fromEntries(
-  [...stationLabels, ...routeLabels, ...decayLabels, ...figureLabels].map((label) => [label.key, label]),
+  [...stationLabels, ...routeLabels, ...factLabels, ...decayLabels, ...figureLabels].map((label) => [
+    label.key,
+    label,
+  ]),
 );
 
 /** The label of a key that the program itself names. */

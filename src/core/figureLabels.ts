@@ -80,5 +80,19 @@ export const figureLabels: readonly Label[] = [
     "1",
     "E₂₂ over (E₁₁ − k₁ dE₁₁/dk₁)/2, one if isotropic",
   ),
+  label(
+    "E33_over_isotropic",
+    'E_{33}/E_{33,"isotropic"}',
+    "isotropy scale by scale, w",
+    "1",
+    "E₃₃ over (E₁₁ − k₁ dE₁₁/dk₁)/2, one if isotropic",
+  ),
+  label(
+    "E12_premultiplied",
+    "k_{1}E_{12}/(u′v′)",
+    "co-spectrum of u and v",
+    "1",
+    "k₁ E₁₂/(u′v′); its area over ln k₁ is the correlation coefficient of u and v",
+  ),
   label("r/L11", "r/L_{11}", "separation over integral scale", "1", "r = U τ over the integral length"),
 ];
