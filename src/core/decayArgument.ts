@@ -40,6 +40,8 @@ export interface ScannedWindow {
   /** Probability of a larger chi-square; null with equal weights, and without a law. */
   readonly p: number | null;
   readonly adopted: boolean;
+  /** Whether its intervals are among those whose union an automatic window's n and x0 carry. */
+  readonly inUnion?: boolean;
 }
 
 /** One condition on the stations, in its two readings. */
