@@ -15,6 +15,7 @@ import { useHeadHeight } from "./page/useHeadHeight.ts";
 import { useScreenFigures } from "./page/useScreenFigures.ts";
 import { useMediaQuery, useTheme } from "./page/useTheme.ts";
 import { useUndoKeys } from "./page/useUndoKeys.ts";
+import { DefinitionContext, DefinitionDoor, type OpenDefinition } from "./sections/definitionContext.ts";
 import { PageBody } from "./sections/PageBody.tsx";
 import { heldOf } from "./session/nextSession.ts";
 import { openDemo } from "./session/openDemo.ts";
@@ -36,6 +37,9 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
   useHeadHeight(head);
   useUndoKeys(dispatch);
   const drop = useDrop(work, setNotice);
+  // the panel of definitions comes with the argument; the readings of the head open it through this door
+  const door = useRef<OpenDefinition>(null);
+  const openDefinition: OpenDefinition = useCallback((asked, beside) => door.current?.(asked, beside), []);
   const there = live.length > 0;
   const sections = useMemo(() => sectionList.map((section) => ({ ...section, there })), [there]);
   const demo = () => {
@@ -55,11 +59,15 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
           lanes={live.length}
           more={axisActions(live, axis, dispatch)}
         >
-          <PageRuler store={store} cases={live} work={work} />
+          <DefinitionContext value={openDefinition}>
+            <PageRuler store={store} cases={live} work={work} />
+          </DefinitionContext>
         </Head>
         <main id="top" tabIndex={-1}>
           {notice !== null && <Notice text={notice} onClose={() => setNotice(null)} />}
-          <PageBody store={store} work={work} cases={live} narrow={narrow} picker={picker} onDemo={demo} />
+          <DefinitionDoor value={door}>
+            <PageBody store={store} work={work} cases={live} narrow={narrow} picker={picker} onDemo={demo} />
+          </DefinitionDoor>
         </main>
         <FilePicker ref={picker} onChoice={(files) => drop(Promise.resolve(files))} />
         <DropVeil more={there} onDrop={drop} />

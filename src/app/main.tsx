@@ -12,6 +12,7 @@ import "./styles/section.css";
 import "./styles/parts.css";
 import "./styles/table.css";
 import "./styles/controls.css";
+import "./styles/reduction.css";
 import "./styles/states.css";
 import "./styles/narrow.css";
 import "./styles/print.css";

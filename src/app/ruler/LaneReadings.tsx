@@ -1,6 +1,8 @@
 import type { ReactNode } from "react";
+import type { Quantity } from "../../core/quantity.ts";
 import { raisedDigits, thinSpace } from "../../figures/formatNumber.ts";
 import { type FormattedQuantity, formatScaled } from "../../figures/formatQuantity.ts";
+import { NumberButton } from "../sections/NumberButton.tsx";
 import { exponentReading, originReading } from "./readings.ts";
 import type { RulerCase } from "./rulerProps.ts";
 import { OriginSymbol } from "./Symbols.tsx";
@@ -47,8 +49,10 @@ export function LaneReadings({ one, along, units, onCancel }: LaneReadingsProps)
   const stale = state.kind === "stale";
   return (
     <div className={`ruler-readings${stale ? " stale" : ""}`} aria-busy={stale}>
-      <Reading symbol={<span className="sym">n</span>} shown={exponentReading(one)} />
+      <Reading of="n" quantity={one.n} symbol={<span className="sym">n</span>} shown={exponentReading(one)} />
       <Reading
+        of={along === "t" ? "t0" : "x0"}
+        quantity={one.x0}
         symbol={<OriginSymbol along={along} />}
         shown={originReading(one, units)}
         italicUnit={one.length !== null}
@@ -59,27 +63,32 @@ export function LaneReadings({ one, along, units, onCancel }: LaneReadingsProps)
 }
 
 interface ReadingProps {
+  /** Key of its label, and the very number: its definition is one click away. */
+  readonly of: string;
+  readonly quantity: Quantity;
   readonly symbol: ReactNode;
   readonly shown: FormattedQuantity;
   readonly italicUnit?: boolean;
   readonly note?: string | null;
 }
 
-function Reading({ symbol, shown, italicUnit = false, note = null }: ReadingProps) {
+function Reading({ of, quantity, symbol, shown, italicUnit = false, note = null }: ReadingProps) {
   const has = shown.value !== formatScaled({ value: null, why: "" }, { factor: 1, unit: "" }).value;
   const power = shown.power === null ? "" : `${thinSpace}×${thinSpace}10${raisedDigits(shown.power)}`;
   return (
     <p className="ruler-reading">
       <span>{symbol}</span>
       <span className="value">
-        {shown.value}
-        {power}
-        {has && shown.unit !== "" && (
-          <>
-            {thinSpace}
-            {italicUnit ? <span className="sym">{shown.unit}</span> : shown.unit}
-          </>
-        )}
+        <NumberButton of={of} quantity={quantity}>
+          {shown.value}
+          {power}
+          {has && shown.unit !== "" && (
+            <>
+              {thinSpace}
+              {italicUnit ? <span className="sym">{shown.unit}</span> : shown.unit}
+            </>
+          )}
+        </NumberButton>
       </span>
       <span className="ci">{note ?? shown.interval ?? shown.why}</span>
     </p>

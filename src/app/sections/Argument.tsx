@@ -60,7 +60,7 @@ export function Argument({
   const rested = use(RestedCases);
   const folded = useMemo(() => rested.filter((view) => view.stations.length > 0), [rested]);
   return (
-    <DefinitionPanel cases={cases}>
+    <DefinitionPanel cases={cases} comparisons={comparisons}>
       <div className="row page-top">
         <div />
         <div>

@@ -1,5 +1,6 @@
 import { type ReactNode, useId, useRef } from "react";
 import { labelOf } from "../../core/catalogue.ts";
+import { placeBeside } from "./placeBeside.ts";
 import { RichText } from "./RichText.tsx";
 
 /**
@@ -12,11 +13,7 @@ export function Definition({ of, children }: { of: string; children: ReactNode }
   const button = useRef<HTMLButtonElement>(null);
   const label = labelOf(of);
   const place = () => {
-    const panel = text.current;
-    const box = button.current?.getBoundingClientRect();
-    if (!panel || !box) return;
-    panel.style.left = `${Math.max(8, Math.min(box.left, window.innerWidth - 356))}px`;
-    panel.style.top = `${box.bottom + 6}px`;
+    if (text.current && button.current) placeBeside(text.current, button.current, 340);
   };
   return (
     <span className="definition">
