@@ -3,6 +3,7 @@ export interface ByteSource {
   /** Path inside the drop, or relative to the sheet: what messages call the file. */
   readonly name: string;
   readonly bytes: number;
+  /** From the beginning. An array is good until the next one is asked for: it may be filled again. */
   stream(): AsyncIterable<Uint8Array>;
 }
 

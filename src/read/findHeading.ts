@@ -71,16 +71,28 @@ function linesOf(head: Head, separator: Separator): Line[] {
   return head.lines.flatMap((line, i) => {
     if (line.trim() === "") return [];
     const comment = commentText(line, separator);
-    const text = comment ?? line;
-    return [{ at: i + 1, text, comment: comment !== null, row: splitRows(text, separator)[0] }];
+    return [lineOf(i + 1, comment ?? line, comment !== null, separator)];
   });
+}
+
+/** Its fields are told apart when they are asked for: of most lines nobody asks. */
+function lineOf(at: number, text: string, comment: boolean, separator: Separator): Line {
+  let row: readonly string[] | null = null;
+  return {
+    at,
+    text,
+    comment,
+    get row() {
+      row ??= splitRows(text, separator)[0];
+      return row;
+    },
+  };
 }
 
 /** Index of the first line that begins three rows in a row (fewer at the file's end). */
 function firstRun(lines: readonly Line[], dialect: Dialect): number {
   const rows = lines.map((line, i) => ({ i, line })).filter(({ line }) => !line.comment);
-  const good = rows.map(({ line }) => isRow(line, dialect));
-  const at = good.findIndex((_, i) => good.slice(i, i + 3).every(Boolean));
+  const at = rows.findIndex((_, i) => rows.slice(i, i + 3).every(({ line }) => isRow(line, dialect)));
   return at < 0 ? lines.length : rows[at].i;
 }
 

@@ -35,8 +35,8 @@ function unmarked(start: Uint8Array): Uint8Array {
   return start[0] === 0xef && start[1] === 0xbb && start[2] === 0xbf ? start.subarray(3) : start;
 }
 
+/** A copy: the chunk may be filled again. */
 function joined(a: Uint8Array, b: Uint8Array): Uint8Array {
-  if (a.length === 0) return b;
   const both = new Uint8Array(a.length + b.length);
   both.set(a);
   both.set(b, a.length);
