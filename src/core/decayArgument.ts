@@ -100,6 +100,7 @@ export const routeKeys = [
   "origin-held",
   "origin-other",
   "flight",
+  "along-x",
 ] as const;
 export type RouteKey = (typeof routeKeys)[number];
 
@@ -175,7 +176,7 @@ export interface Narrowing {
   readonly x0: number;
 }
 
-/** The law along the time of flight, in lengths at the mean speed: x1 + U integral of dx/U from the first station x1. */
+/** The law along the time of flight, as a length at the mean speed of the window: x1 + Us integral of dx/U from x1 on. */
 export interface FlightFit {
   /** Share by which U varies along the window. */
   readonly variation: number;
@@ -183,6 +184,6 @@ export interface FlightFit {
   readonly x: readonly number[];
   readonly distance: readonly number[];
   readonly n: Quantity;
-  /** Carried back to x with the speed of the first station. */
+  /** Carried back to x; upstream of the first station of all with the speed there. */
   readonly x0: Quantity;
 }

@@ -52,6 +52,16 @@ export interface DecayPoint {
   readonly used: boolean;
 }
 
+/** The time of flight of a stream as a length s along x, Us times it: what a law runs along where U varies. */
+export interface Flight {
+  /** Stations that carry a U, in order of x; U there, and s. */
+  readonly x: readonly number[];
+  readonly U: readonly number[];
+  readonly s: readonly number[];
+  /** Us, the mean U of the window. */
+  readonly speed: number;
+}
+
 /** q = A ((x - x0)/ell)^(-n), with what is needed to draw its band. */
 export interface PowerLaw {
   readonly A: number;
@@ -65,6 +75,8 @@ export interface PowerLaw {
   readonly quantile: number;
   /** Degrees of freedom behind it; null: the normal's. */
   readonly freedom?: number | null;
+  /** Where the law runs along the time of flight, s - s(x0) stands for x - x0; null or left out: along x. */
+  readonly flight?: Flight | null;
 }
 
 /** A named exponent, and how probable data so far from it are. */
@@ -92,6 +104,9 @@ export interface DecayResult {
   readonly stations: number;
   /** Us of q = k/Us²; null in a q profile. */
   readonly speed: number | null;
+  /** What the law runs along; left out: x. x0 is a place in x all the same. */
+  readonly coordinate?: "x" | "t" | "flight";
+  readonly flight?: Flight | null;
   readonly n: Quantity;
   readonly x0: Quantity;
   readonly A: Quantity;

@@ -44,6 +44,7 @@ export const flagCodes = [
   "chi-square-fails",
   "half-open",
   "u-varies",
+  "flight-unknown",
   "window-without-plateau",
   "law-refused",
   "circular-route",

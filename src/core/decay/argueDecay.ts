@@ -33,7 +33,7 @@ export function argueDecay(
   const inWindow = stations.filter(({ x }) => used.has(x));
   const blocks = inWindow.length === points.length ? commonBlocks(inWindow, decay, settings) : null;
   const window = decay.law === null ? null : windowOf(decay, settings, blocks);
-  const flight = flightFit(inWindow, decay, settings);
+  const flight = flightFit(stations, decay, settings);
   const routes = decayRoutes(decay, settings, flight);
   const { body } = settings;
   return {
@@ -48,6 +48,7 @@ export function argueDecay(
         : originScan(
             points.map(({ x }) => x),
             points.map(({ q }) => q),
+            decay.flight,
           ),
     local: decay.law === null ? null : localDecay(decay.points, decay.law),
     growths: growths(inWindow, decay),
@@ -65,6 +66,6 @@ function windowOf(
   blocks: CommonBlocks | null,
 ): WindowFit | null {
   const points = decay.points.filter((point) => point.used);
-  const fitted = withCommonBlocks(fitWindow(points, settings), blocks, 0);
+  const fitted = withCommonBlocks(fitWindow(points, settings, decay.flight), blocks, 0);
   return "refused" in fitted ? null : fitted;
 }

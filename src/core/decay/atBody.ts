@@ -5,6 +5,7 @@ import type { StationResult } from "../stationResult.ts";
 import { type BodyCurve, bodyCurves } from "./bodyCurves.ts";
 import { type GrowthCurve, growthCurve } from "./growthCurve.ts";
 import { lawAt, lawChangeVariance } from "./lawBand.ts";
+import { lawDistance, lawPlace, lawRate } from "./lawDistance.ts";
 import { logEstimate } from "./powerProduct.ts";
 import { targetPlace } from "./targetPlace.ts";
 
@@ -45,7 +46,7 @@ export function atBody(
           ? null
           : {
               target: L11,
-              x: length === null ? noChord : placeOfLength(growth, Math.log(length)),
+              x: length === null ? noChord : placeOfLength(growth, decay.law, Math.log(length)),
             },
     },
     both: Tu === null || length === null ? null : smallestMiss(curves.Tu, growth, Tu, length),
@@ -58,9 +59,10 @@ function each(of: (key: BodyKey) => Quantity): Record<BodyKey, Quantity> {
 }
 
 /** Where the growing L11 reaches a length, within the stations that carry it. */
-function placeOfLength(growth: GrowthCurve | null, logarithm: number): Quantity {
-  if (growth === null) return missing("no law, or fewer than three stations of its window carry an L11");
-  const { slope, ends, x0 } = growth;
+function placeOfLength(growth: GrowthCurve | null, law: PowerLaw | null, logarithm: number): Quantity {
+  if (growth === null || law === null)
+    return missing("no law, or fewer than three stations of its window carry an L11");
+  const { slope, ends } = growth;
   if (!(slope > 0)) return missing("L11 does not grow along the window");
   const [first, last] = ends;
   const shortfall = (end: number) => Math.exp(growth.logarithm(end) - logarithm).toPrecision(3);
@@ -69,9 +71,9 @@ function placeOfLength(growth: GrowthCurve | null, logarithm: number): Quantity 
   if (growth.logarithm(last) < logarithm)
     return missing(`L11 is ${shortfall(last)} times the target at the last station of the window still`);
   // ln L11 is linear in ln(x - x0)
-  const distance = (first - x0) * Math.exp((logarithm - growth.logarithm(first)) / slope);
-  const at = x0 + distance;
-  const reach = (1.959963984540054 * growth.error(at) * distance) / slope;
+  const distance = lawDistance(law, first) * Math.exp((logarithm - growth.logarithm(first)) / slope);
+  const at = lawPlace(law, distance);
+  const reach = (1.959963984540054 * growth.error(at) * distance) / slope / lawRate(law, at);
   return { value: at, low: at - reach, high: at + reach };
 }
 

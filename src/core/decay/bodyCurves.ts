@@ -3,6 +3,7 @@ import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { lawAt, lawChangeVariance, lawVariance } from "./lawBand.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { type LogPlace, type LogSeries, logPlace, logSeries, sharesVariance } from "./logSeries.ts";
 import { logEstimate } from "./powerProduct.ts";
 
@@ -40,8 +41,8 @@ export function bodyCurves(
 
 /** ln(x - x0) where all stations lie beyond an origin, else ln x, else x. */
 function coordinate(xs: readonly number[], { law }: DecayResult): (x: number) => number {
-  const origin = law !== null && xs[0] > law.x0 ? law.x0 : xs[0] > 0 ? 0 : null;
-  return origin === null ? (x) => x : (x) => Math.log(x - origin);
+  if (law !== null && xs[0] > law.x0) return (x) => Math.log(lawDistance(law, x));
+  return xs[0] > 0 ? Math.log : (x) => x;
 }
 
 function interpolated(

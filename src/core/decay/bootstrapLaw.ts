@@ -5,6 +5,7 @@ import type { CommonBlocks } from "./commonBlocks.ts";
 import { drawTogether } from "./drawTogether.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import type { WindowFit } from "./fitWindow.ts";
+import { placeBack, quantityBack } from "./flightCourse.ts";
 import { minimiseLaw } from "./minimiseLaw.ts";
 
 export const bootstrapDefaults = { refits: 1000 };
@@ -26,7 +27,7 @@ const refitTolerance = 1e-3;
  * @see          Efron & Tibshirani (1993), An Introduction to the Bootstrap, ch. 13
  */
 export function bootstrapLaw(
-  { fit, variance }: WindowFit,
+  { fit, variance, flight }: WindowFit,
   blocks: CommonBlocks | null = null,
   { refits } = bootstrapDefaults,
 ): Bootstrap {
@@ -55,13 +56,16 @@ export function bootstrapLaw(
   }
   problem.y.set(measured);
   evaluateLaw(problem, law, held);
-  const shown = { n: n.slice(0, cloudPoints), x0: x0.slice(0, cloudPoints) };
+  const shown = {
+    n: n.slice(0, cloudPoints),
+    x0: x0.slice(0, cloudPoints).map((place) => placeBack(flight, place)),
+  };
   // draws without a law stand for an origin without end upstream and an n without end
   return {
     refits,
     withoutLaw,
     n: percentiles(fit.n, n, 0, withoutLaw),
-    x0: percentiles(fit.x0, x0, withoutLaw, 0),
+    x0: quantityBack(flight, percentiles(fit.x0, x0, withoutLaw, 0)),
     cloud: shown,
   };
 }

@@ -1,4 +1,4 @@
-import type { DecaySettings } from "../decayResult.ts";
+import type { DecaySettings, Flight } from "../decayResult.ts";
 import type { RawPoint } from "./decayPoints.ts";
 import { fitWindow, type Refusal, type WindowFit } from "./fitWindow.ts";
 import { settledFrom } from "./settledFrom.ts";
@@ -26,10 +26,15 @@ const settledTolerance = { isotropy: 0.1, skewness: 0.05 };
  * not before derivative skewness and isotropy have settled, if they do. Of two runs with as many stations the later is
  * taken, as a near field stands at the start. With equal weights there is no chi-square: all stations.
  * @param points in order of x
+ * @param flight the course the law runs along; null: x
  */
-export function chooseWindow(points: readonly RawPoint[], settings: DecaySettings): ChosenWindow {
+export function chooseWindow(
+  points: readonly RawPoint[],
+  settings: DecaySettings,
+  flight: Flight | null = null,
+): ChosenWindow {
   const last = points.length - 1;
-  const lawOf = (from: number, to: number) => fitWindow(points.slice(from, to + 1), settings);
+  const lawOf = (from: number, to: number) => fitWindow(points.slice(from, to + 1), settings, flight);
   const settled = settledStart(points);
   if (points.length < leastStations)
     return chosen(0, last, lawOf(0, last), "all stations: there are fewer than five to choose from");

@@ -3,8 +3,9 @@ import type { Flag } from "../flag.ts";
 import { isEstimate } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import type { ChosenWindow } from "./chooseWindow.ts";
-import { steadySpeed } from "./flightFit.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { originSensitivity } from "./originSensitivity.ts";
+import { speedVariation, steadySpeed } from "./speedVariation.ts";
 
 /** Below this ratio of the last x - x0 to the first, n and x0 are hardly told apart. */
 const shortSpan = 4;
@@ -26,7 +27,7 @@ export function decayFlags(
 }
 
 function aboutData(
-  { assumption, weights, windowChosen }: DecayResult,
+  { assumption, weights, windowChosen, coordinate }: DecayResult,
   used: readonly StationResult[],
   settings: DecaySettings,
 ): Flag[] {
@@ -46,18 +47,34 @@ function aboutData(
           ? "Not all stations carry a sampling error: all weigh alike, and the scatter alone makes the intervals."
           : "All stations weigh alike: nothing tells an automatic window which of them leave the law.",
     });
-  const speeds = used.flatMap(({ U }) => (isEstimate(U) && U.value > 0 ? [U.value] : []));
-  if (speeds.length > 1 && settings.along === "x") {
-    const mean = speeds.reduce((sum, speed) => sum + speed, 0) / speeds.length;
-    const share = (Math.max(...speeds) - Math.min(...speeds)) / mean;
-    if (share > steadySpeed)
-      flags.push({
-        code: "u-varies",
-        text: `U varies by ${(100 * share).toFixed(1)} % along the window: x and time of flight differ.`,
-        value: share,
-      });
-  }
-  return flags;
+  return [...flags, ...aboutSpeed(coordinate, used, settings)];
+}
+
+function aboutSpeed(
+  coordinate: DecayResult["coordinate"],
+  used: readonly StationResult[],
+  settings: DecaySettings,
+): Flag[] {
+  if (settings.along === "t") return [];
+  if (settings.coordinate === "flight" && coordinate !== "flight")
+    return [
+      {
+        code: "flight-unknown",
+        text: "The law was to run along the time of flight, but no station carries a U: it runs along x.",
+      },
+    ];
+  const variation = speedVariation(used);
+  if (variation === null || !(variation.beyondErrors > steadySpeed)) return [];
+  const what =
+    coordinate === "flight" ? "the law runs along the time of flight" : "x and time of flight differ";
+  const { range } = variation;
+  return [
+    {
+      code: "u-varies",
+      text: `U varies by ${(100 * range).toFixed(1)} % along the window: ${what}.`,
+      value: range,
+    },
+  ];
 }
 
 function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySettings): Flag[] {
@@ -76,7 +93,7 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
       value: stations,
     });
   const [first, last] = decay.window;
-  const ratio = (last - law.x0) / (first - law.x0);
+  const ratio = lawDistance(law, last) / lawDistance(law, first);
   if (ratio < shortSpan)
     flags.push({
       code: "short-span",

@@ -1,9 +1,10 @@
 import type { DecayRoute, FlightFit, RouteDisagreement } from "../decayArgument.ts";
-import type { DecayPoint, DecayResult, DecaySettings } from "../decayResult.ts";
+import type { DecayPoint, DecayResult, DecaySettings, Flight } from "../decayResult.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { fitWindow, windowQuantity } from "./fitWindow.ts";
+import { placeAlong, quantityBack } from "./flightCourse.ts";
 import { relativeLine, zeroOfLine } from "./relativeLine.ts";
 
 /**
@@ -20,6 +21,7 @@ export function decayRoutes(
   flight: FlightFit | null,
 ): DecayRoute[] {
   const points = decay.points.filter((point) => point.used);
+  const course = decay.flight ?? null;
   const equal = points.map((point) => ({ ...point, smoothedError: null }));
   const free = { ...settings, x0: null, n: null };
   const others = "no law of decay enters: epsilon is that of the measured gradients";
@@ -33,10 +35,10 @@ export function decayRoutes(
     {
       key: "origin-scan",
       name: "scan of x0 for the least scatter",
-      ...fitted(equal, { ...free, residuals: "log" }),
+      ...fitted(equal, { ...free, residuals: "log" }, course),
       note: "all stations weigh alike; the scatter makes the interval",
     },
-    straightLineRoute(points, settings.n ?? decay.law?.n ?? null, settings.n !== null),
+    straightLineRoute(points, settings.n ?? decay.law?.n ?? null, settings.n !== null, course),
     {
       key: "lambda",
       name: "straight line of Lambda²",
@@ -44,41 +46,50 @@ export function decayRoutes(
       note: others,
     },
     { key: "epsilon", name: "fall of epsilon", ...decay.epsilon_route, note: others },
-    heldRoute("origin-zero", "x0 held at 0", points, { ...free, x0: 0 }),
+    heldRoute("origin-zero", "x0 held at 0", points, { ...free, x0: 0 }, course),
     ...(settings.x0 === null || settings.x0 === 0
       ? []
-      : [heldRoute("origin-held", "x0 held as given", points, { ...free, x0: settings.x0 })]),
+      : [heldRoute("origin-held", "x0 held as given", points, { ...free, x0: settings.x0 }, course)]),
     ...(settings.otherX0 == null
       ? []
-      : [heldRoute("origin-other", "x0 held elsewhere", points, { ...free, x0: settings.otherX0 })]),
-    ...(flight === null
-      ? []
-      : [
-          {
-            key: "flight" as const,
-            name: "joint fit along the time of flight",
-            n: flight.n,
-            x0: flight.x0,
-            note: `U varies by ${(100 * flight.variation).toFixed(1)} % along the window`,
-          },
-        ]),
+      : [heldRoute("origin-other", "x0 held elsewhere", points, { ...free, x0: settings.otherX0 }, course)]),
+    ...otherCoordinate(points, decay, free, flight),
   ];
+}
+
+/** The joint fit along the coordinate that was not adopted, where U tells the two apart. */
+function otherCoordinate(
+  points: readonly DecayPoint[],
+  decay: DecayResult,
+  free: DecaySettings,
+  flight: FlightFit | null,
+): DecayRoute[] {
+  if (flight === null) return [];
+  const note = `U varies by ${(100 * flight.variation).toFixed(1)} % along the window`;
+  return decay.flight
+    ? [{ key: "along-x", name: "joint fit along x", ...fitted(points, free), note }]
+    : [{ key: "flight", name: "joint fit along the time of flight", n: flight.n, x0: flight.x0, note }];
 }
 
 /** The adopted fit given its window, or where that holds a number, one with all of them free. */
 function joint(points: readonly DecayPoint[], decay: DecayResult, settings: DecaySettings) {
   return settings.x0 === null && settings.n === null
     ? decay.given_window
-    : fitted(points, { ...settings, x0: null, n: null });
+    : fitted(points, { ...settings, x0: null, n: null }, decay.flight);
 }
 
-function jointNote({ windowChosen, weights }: DecayResult): string {
+function jointNote({ windowChosen, weights, flight }: DecayResult): string {
   const errors = weights === "sampling" ? "weighted by sampling errors" : "all stations weigh alike";
-  return windowChosen === "auto" ? `${errors}; interval given the window` : errors;
+  const along = flight ? "along the time of flight; " : "";
+  return `${along}${errors}${windowChosen === "auto" ? "; interval given the window" : ""}`;
 }
 
-function fitted(points: readonly DecayPoint[], settings: DecaySettings): { n: Quantity; x0: Quantity } {
-  const window = fitWindow(points, settings);
+function fitted(
+  points: readonly DecayPoint[],
+  settings: DecaySettings,
+  flight: Flight | null = null,
+): { n: Quantity; x0: Quantity } {
+  const window = fitWindow(points, settings, flight);
   if ("refused" in window) return { n: missing(window.refused), x0: missing(window.refused) };
   return { n: windowQuantity(window, "n"), x0: windowQuantity(window, "x0") };
 }
@@ -88,17 +99,23 @@ function heldRoute(
   name: string,
   points: readonly DecayPoint[],
   settings: DecaySettings,
+  course: Flight | null,
 ): DecayRoute {
   const note = "its interval leaves out that x0 is not known";
   if (points.length > 0 && (settings.x0 ?? 0) >= points[0].x) {
     const none = missing("the origin would lie at or beyond the first station");
     return { key, name, n: none, x0: none, note };
   }
-  return { key, name, ...fitted(points, settings), note };
+  return { key, name, ...fitted(points, settings, course), note };
 }
 
 /** (1/q)^(1/n) = A^(-1/n) (x - x0)/ell: with n held a straight line whose zero is x0. */
-function straightLineRoute(points: readonly DecayPoint[], n: number | null, given: boolean): DecayRoute {
+function straightLineRoute(
+  points: readonly DecayPoint[],
+  n: number | null,
+  given: boolean,
+  course: Flight | null,
+): DecayRoute {
   const name = "straight line of (U²/q)^(1/n), n held";
   const key = "straight-line";
   if (n === null || points.length < 3) {
@@ -110,7 +127,7 @@ function straightLineRoute(points: readonly DecayPoint[], n: number | null, give
   const errors = points.map((point) => point.smoothedError).filter((error) => error !== null);
   const told = errors.length === points.length;
   const line = relativeLine(
-    points.map(({ x }) => x),
+    points.map(({ x }) => placeAlong(course, x)),
     // scaled to the first station, so that no power over- or underflows
     points.map(({ q }) => (points[0].q / q) ** (1 / n)),
     told ? errors.map((error) => error / n) : null,
@@ -124,7 +141,7 @@ function straightLineRoute(points: readonly DecayPoint[], n: number | null, give
     known ? 1 : line.sum / line.freedom,
     "its slope is not told from zero: any origin fits",
   );
-  return { key, name, n: held, x0, note };
+  return { key, name, n: held, x0: quantityBack(course, x0), note };
 }
 
 /**

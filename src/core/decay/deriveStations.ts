@@ -2,6 +2,7 @@ import type { DecayResult, DecaySettings } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity, scaled } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { lawAt, lawVariance } from "./lawBand.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { logEstimate, powerProduct } from "./powerProduct.ts";
 import { relativeError } from "./relativeError.ts";
 import { scalesFromDissipation } from "./scalesFromDissipation.ts";
@@ -10,6 +11,7 @@ import { scalesFromDissipation } from "./scalesFromDissipation.ts";
  * What follows from the fitted law at each station: the dissipation of the decay, its balance against the measured one,
  * and where the decay is the adopted route, the scales that rest on it.
  *     epsilon_decay = -U dk/dx = n U k/(x - x0), k from the law;   balance = epsilon_decay/epsilon_gradient
+ * and along the time of flight epsilon_decay = -dk/dt = n Us k/(s - s0).
  * The law says nothing outside its window: there these are missing.
  * @param stations as reduction left them, never derived ones; returned in their order
  * @param decay    of the same stations and settings
@@ -52,10 +54,12 @@ function dissipationOfDecay(station: StationResult, decay: DecayResult, settings
     return missing("the station lies outside the fit window, where the law was not fitted");
   const q = lawAt(law, x);
   if (q === null) return missing("the station lies upstream of the virtual origin");
-  if (settings.along === "x" && !isEstimate(station.U)) return missing("no mean velocity at this station");
+  if (settings.along === "x" && !law.flight && !isEstimate(station.U))
+    return missing("no mean velocity at this station");
   const energy = q * (decay.speed ?? 1) ** 2 * (quantity === "uu" ? 3 / 2 : 1);
-  const slope = (law.n * energy) / (x - law.x0);
+  const slope = (law.n * energy) / lawDistance(law, x);
   const ofLaw = logEstimate(slope, Math.sqrt(lawVariance(law, x, 1)), law.freedom ?? null);
+  if (law.flight) return scaled(ofLaw, law.flight.speed);
   if (settings.along === "t" || !isEstimate(station.U)) return ofLaw;
   // a U without an interval (a short record, a profile) is far better known than the law
   return relativeError(station.U) === null

@@ -1,4 +1,4 @@
-import type { DecayResult, DecaySettings } from "../decayResult.ts";
+import type { DecayResult, DecaySettings, Flight } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type FitPoint, fitWindow, windowQuantity } from "./fitWindow.ts";
@@ -9,11 +9,13 @@ import { relativeError } from "./relativeError.ts";
  * Origin and exponent from the fall of the measured dissipation: on the decay law epsilon ~ (x - x0)^-(n + 1).
  * epsilon is that of the gradients alone; one that comes from the decay would argue in a circle.
  * @param stations those of the window, in order of x
+ * @param flight   the course of the law; null: x
  * @returns        n (1) and x0 (unit of x) with profile intervals; missing with the reason of a refused law
  */
 export function epsilonRoute(
   stations: readonly StationResult[],
   settings: DecaySettings,
+  flight: Flight | null = null,
 ): DecayResult["epsilon_route"] {
   if (settings.kind === "les") return both(unresolvedGradients);
   const points: FitPoint[] = stations.flatMap((station) => {
@@ -22,7 +24,7 @@ export function epsilonRoute(
     return [{ x: station.x, q: epsilon.value, smoothedError: relativeError(epsilon) }];
   });
   if (points.length === 0) return both(missing("no station carries a dissipation from measured gradients"));
-  const fitted = fitWindow(points, { ...settings, x0: null, n: null, residuals: "log" });
+  const fitted = fitWindow(points, { ...settings, x0: null, n: null, residuals: "log" }, flight);
   if ("refused" in fitted) return both(missing(fitted.refused));
   return { n: lessOne(windowQuantity(fitted, "n")), x0: windowQuantity(fitted, "x0") };
 }

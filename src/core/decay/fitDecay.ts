@@ -2,12 +2,13 @@ import type { DecayPoint, DecayResult, DecaySettings, PowerLaw } from "../decayR
 import { missing, scaled } from "../quantity.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
-import { type ChosenWindow, chooseWindow } from "./chooseWindow.ts";
 import { commonBlocks } from "./commonBlocks.ts";
 import { decayFlags } from "./decayFlags.ts";
 import { type DecayPoints, decayPoints, decaySpeed, type RawPoint } from "./decayPoints.ts";
+import { decayWindow } from "./decayWindow.ts";
 import { epsilonRoute } from "./epsilonRoute.ts";
-import { fitWindow, inflation, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
+import { inflation, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
+import { placeBack, rateAlong } from "./flightCourse.ts";
 import { growthExponent } from "./growthExponent.ts";
 import { hypotheses } from "./hypotheses.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
@@ -28,7 +29,7 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
   const found = decayPoints(stations, settings);
   // no law reaches upstream of a held origin
   const points = found.points.filter(({ x }) => settings.x0 === null || x > settings.x0);
-  const window = settings.window === "auto" ? chooseWindow(points, settings) : givenWindow(points, settings);
+  const { window, flight } = decayWindow(points, settings);
   const used = points.slice(window.first, window.last + 1);
   const usedStations = used.map(({ station }) => station);
   const speed = decaySpeed(usedStations, found.quantity, settings);
@@ -48,10 +49,12 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
     windowReason: window.reason,
     stations: used.length,
     speed,
+    coordinate: settings.along === "t" ? "t" : flight === null ? "x" : "flight",
+    flight,
     ...numbers(windows, perSpeed),
     together: blocks === null ? null : { groups: blocks.groups, correlation: blocks.correlation },
-    lambda_route: lambdaRoute(usedStations, settings),
-    epsilon_route: epsilonRoute(usedStations, settings),
+    lambda_route: lambdaRoute(usedStations, settings, flight),
+    epsilon_route: epsilonRoute(usedStations, settings, flight),
     growth: { m: growth(usedStations, law) },
     hypotheses: hypotheses(windows, settings),
     law,
@@ -59,22 +62,6 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
     flags: [],
   };
   return { ...result, flags: decayFlags(result, window, usedStations, settings) };
-}
-
-/** The stations within the ends that were set. */
-function givenWindow(points: readonly RawPoint[], settings: DecaySettings): ChosenWindow {
-  const [from, to] = settings.window === "auto" ? [0, 0] : settings.window;
-  // an end set on a station includes it, whatever its last digit
-  const slack = 1e-9 * Math.max(Math.abs(from), Math.abs(to));
-  const inside = points.filter(({ x }) => x >= from - slack && x <= to + slack);
-  const first = inside.length > 0 ? points.indexOf(inside[0]) : 0;
-  return {
-    first,
-    last: first + inside.length - 1,
-    fitted: fitWindow(inside, settings),
-    reason: "set by hand",
-    withoutPlateau: false,
-  };
 }
 
 function windowEnds(used: readonly RawPoint[], { window }: DecaySettings): readonly [number, number] {
@@ -108,19 +95,29 @@ function numbers(windows: readonly (WindowFit | Refusal)[], perSpeed: number) {
 }
 
 function powerLaw(window: WindowFit, perSpeed: number): PowerLaw {
-  const { fit, variance } = window;
+  const { fit, variance, flight } = window;
   const { ratio, freedom } = inflation(window, "n");
   const blocksTell = window.together !== undefined && ratio !== 1;
   const own = (fit.unitCovariance ?? []).map((value) => value * variance);
+  const x0 = placeBack(flight, fit.x0);
+  const covariance = blocksTell ? (window.together?.covariance ?? own) : own;
   return {
     A: fit.A * perSpeed,
-    x0: fit.x0,
+    x0,
     n: fit.n,
     length: fit.length,
-    covariance: blocksTell ? (window.together?.covariance ?? own) : own,
+    covariance: withOriginInX(covariance, rateAlong(flight, x0)),
     quantile: studentQuantile(0.975, freedom),
     freedom,
+    flight,
   };
+}
+
+/** Row and column of x0 carried from what the law runs along to x: over ds/dx each. */
+function withOriginInX(covariance: readonly number[], rate: number): number[] {
+  return covariance.map(
+    (value, at) => value / (Math.floor(at / 3) === 1 ? rate : 1) / (at % 3 === 1 ? rate : 1),
+  );
 }
 
 function growth(stations: readonly StationResult[], law: PowerLaw | null) {

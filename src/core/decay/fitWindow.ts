@@ -1,16 +1,20 @@
-import type { DecaySettings } from "../decayResult.ts";
+import type { DecaySettings, Flight } from "../decayResult.ts";
 import { bare, type Quantity } from "../quantity.ts";
 import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { fQuantile } from "../signal/distributions/fQuantile.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { fitPowerLaw, type PowerLawFit } from "./fitPowerLaw.ts";
+import { placeAlong, quantityBack } from "./flightCourse.ts";
 import type { JackknifedLaw } from "./jackknifeLaw.ts";
 import { profileInterval } from "./profileInterval.ts";
 
 /** A law fitted to the stations of one window, with all that is said given that window. */
 export interface WindowFit {
+  /** Its x0 is a place along what the law runs along. */
   readonly fit: PowerLawFit;
+  /** The course the law runs along; null: x. */
+  readonly flight: Flight | null;
   /** Probability of a larger chi-square; null with equal weights. */
   readonly p: number | null;
   /** Whether the errors are told by the residuals: equal weights, or a chi-square that fails at 5 %. */
@@ -46,20 +50,25 @@ const oneNumber = chiSquareQuantile(0.95, 1);
  * The law of one window, or why there is none.
  * @param points   stations of the window, in order of x
  * @param settings residuals, what is held, ell
+ * @param flight   the course the law runs along; null: x
  */
-export function fitWindow(points: readonly FitPoint[], settings: DecaySettings): WindowFit | Refusal {
+export function fitWindow(
+  points: readonly FitPoint[],
+  settings: DecaySettings,
+  flight: Flight | null = null,
+): WindowFit | Refusal {
   const tooFew = refusalOfCount(points, settings);
   if (tooFew !== null) return { refused: tooFew };
   const errors = points.map((point) => point.smoothedError).filter((error) => error !== null);
   const fit = fitPowerLaw(
     {
-      x: points.map((point) => point.x),
+      x: points.map((point) => placeAlong(flight, point.x)),
       q: points.map((point) => point.q),
       error: errors.length === points.length ? errors : null,
     },
     {
       residuals: settings.residuals,
-      x0: settings.x0,
+      x0: settings.x0 === null ? null : placeAlong(flight, settings.x0),
       n: settings.n,
       length: settings.referenceLength ?? 1,
     },
@@ -76,6 +85,7 @@ export function fitWindow(points: readonly FitPoint[], settings: DecaySettings):
   const variance = scattered ? fit.residualSum / fit.freedom : 1;
   return {
     fit,
+    flight,
     p,
     scattered,
     variance,
@@ -130,17 +140,18 @@ export function inflation(
 /**
  * One number of the law with its profile interval given the window; where stations were sampled together the drop is
  * t² times the ratio of the jackknife's variance to that of the fit.
- * @returns n (1), x0 (unit of x) or A (unit of q); without an interval where it was held
+ * @returns n (1), x0 (as a place in x, whatever the law runs along) or A (unit of q); without an interval where it was held
  */
 export function windowQuantity(window: WindowFit, key: "n" | "x0" | "A"): Quantity {
-  const { fit, variance } = window;
+  const { fit, variance, flight } = window;
   const value = fit[key];
-  if (key !== "A" && fit.held[key] !== null) return bare(value, "held, not fitted");
+  const asPlace = (quantity: Quantity) => (key === "x0" ? quantityBack(flight, quantity) : quantity);
+  if (key !== "A" && fit.held[key] !== null) return asPlace(bare(value, "held, not fitted"));
   const { ratio, freedom } = inflation(window, key);
   const drop =
     window.together === undefined ? window.drop : studentQuantile(0.975, freedom) ** 2 * ratio * variance;
   const ends = profileInterval(fit, key, drop);
   const standard = Math.sqrt((fit.unitCovariance?.[diagonal[key]] ?? 0) * variance * ratio);
   const scale: "log" | "linear" = key === "A" ? "log" : "linear";
-  return { value, ...ends, error: { standard, freedom, scale } };
+  return asPlace({ value, ...ends, error: { standard, freedom, scale } });
 }

@@ -1,5 +1,6 @@
 import type { PowerLaw } from "../decayResult.ts";
 import type { StationResult } from "../stationResult.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { logSeries } from "./logSeries.ts";
 import { straightLine } from "./straightLine.ts";
 
@@ -12,16 +13,15 @@ export interface GrowthCurve {
   readonly slope: number;
   /** Places of the first and the last station that carry it. */
   readonly ends: readonly [number, number];
-  readonly x0: number;
 }
 
 /**
  * @param stations of the window, in order of x
  * @returns        null with fewer than three stations beyond the origin that carry an L11
  */
-export function growthCurve(stations: readonly StationResult[], { x0 }: PowerLaw): GrowthCurve | null {
-  const beyond = stations.filter(({ x }) => x > x0);
-  const along = (x: number) => Math.log(x - x0);
+export function growthCurve(stations: readonly StationResult[], law: PowerLaw): GrowthCurve | null {
+  const beyond = stations.filter(({ x }) => x > law.x0);
+  const along = (x: number) => Math.log(lawDistance(law, x));
   const { x, s, logarithm, error } = logSeries(
     beyond.map((station) => station.x),
     beyond.map(({ L11 }) => L11),
@@ -41,6 +41,5 @@ export function growthCurve(stations: readonly StationResult[], { x0 }: PowerLaw
     },
     slope: line.slope,
     ends: [x[0], x[x.length - 1]],
-    x0,
   };
 }

@@ -2,6 +2,7 @@ import type { PowerLaw } from "../decayResult.ts";
 import { bare, estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { relativeError } from "./relativeError.ts";
 import { straightLine } from "./straightLine.ts";
 
@@ -25,7 +26,7 @@ export function growthExponent(x: readonly number[], lengths: readonly Quantity[
   const y = points.map((point) => point.y);
   const lineFrom = (x0: number) =>
     straightLine(
-      points.map((point) => Math.log(point.x - x0)),
+      points.map((point) => Math.log(lawDistance({ ...law, x0 }, point.x))),
       y,
       weights,
     );

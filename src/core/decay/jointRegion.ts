@@ -4,6 +4,7 @@ import { fQuantile } from "../signal/distributions/fQuantile.ts";
 import { crossing } from "./crossing.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import { inflation, type WindowFit } from "./fitWindow.ts";
+import { placeBack } from "./flightCourse.ts";
 import { kappaFloor, kappaLimit } from "./lawProblem.ts";
 
 const levels = [0.68, 0.95];
@@ -89,7 +90,7 @@ function contour(window: WindowFit, axes: Axes, level: number): Contour {
     const reach = at ?? limit;
     const kappa = law.kappa + reach * byKappa;
     n.push((law.b + reach * byB) / kappa);
-    x0.push(problem.centre - 1 / kappa);
+    x0.push(placeBack(window.flight, problem.centre - 1 / kappa));
   }
   return { level, n, x0, closed, ellipse: ellipse(window, level) };
 }
@@ -106,7 +107,7 @@ function ellipse(window: WindowFit, level: number): Contour["ellipse"] {
   const rho = x0n / (sx * sn);
   const angles = Array.from({ length: rays }, (_, ray) => (2 * Math.PI * ray) / rays);
   return {
-    x0: angles.map((angle) => fit.x0 + sx * Math.cos(angle)),
+    x0: angles.map((angle) => placeBack(window.flight, fit.x0 + sx * Math.cos(angle))),
     n: angles.map(
       (angle) => fit.n + sn * (rho * Math.cos(angle) + Math.sqrt(1 - rho * rho) * Math.sin(angle)),
     ),

@@ -1,9 +1,10 @@
-import type { DecayResult, DecaySettings } from "../decayResult.ts";
+import type { DecayResult, DecaySettings, Flight } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { decayQuantity, decayValue } from "./decayQuantity.ts";
+import { placeAlong, quantityBack } from "./flightCourse.ts";
 import { relativeError } from "./relativeError.ts";
 import { relativeLine, zeroOfLine } from "./relativeLine.ts";
 import type { StraightLine } from "./straightLine.ts";
@@ -15,11 +16,16 @@ type Route = DecayResult["lambda_route"];
  *     Lambda² = 10 nu k/epsilon = (10 nu/(n U)) (x - x0)
  * is a straight line whose zero is x0 and whose slope gives n. epsilon is that of the measured gradients alone.
  * @param stations those of the window, in order of x
+ * @param flight   the course of the law; null: x
  * @returns        n (1) and x0 (unit of x), x0's interval by Fieller's theorem; missing without viscosity, without U,
  *                 or with fewer than three stations that carry a dissipation from gradients
  * @see            Batchelor & Townsend (1948), Proc. R. Soc. A 193, 539; Fieller (1954), J. R. Statist. Soc. B 16, 175
  */
-export function lambdaRoute(stations: readonly StationResult[], settings: DecaySettings): Route {
+export function lambdaRoute(
+  stations: readonly StationResult[],
+  settings: DecaySettings,
+  flight: Flight | null = null,
+): Route {
   const { kinematicViscosity: nu } = settings;
   if (nu === null) return both(missing("no kinematic viscosity is given"));
   if (settings.kind === "les") return both(unresolvedGradients);
@@ -38,9 +44,9 @@ export function lambdaRoute(stations: readonly StationResult[], settings: DecayS
         "fewer than three stations carry a dissipation from measured gradients; one that comes from the decay would argue in a circle",
       ),
     );
-  const U = meanSpeed(stations, settings);
+  const U = flight?.speed ?? meanSpeed(stations, settings);
   if (U === null) return both(missing("no mean velocity at these stations"));
-  const x = points.map((point) => point.x);
+  const x = points.map((point) => placeAlong(flight, point.x));
   const squares = points.map((point) => point.square);
   const errors = points.map((point) => point.error).filter((error) => error !== null);
   const line = relativeLine(x, squares, errors.length === points.length ? errors : null);
@@ -50,7 +56,10 @@ export function lambdaRoute(stations: readonly StationResult[], settings: DecayS
   const quantile = studentQuantile(0.975, known ? null : line.freedom);
   return {
     n: exponent(line, (10 * nu) / U, quantile, variance),
-    x0: zeroOfLine(line, quantile, variance, "the slope of Lambda² is not told from zero: any origin fits"),
+    x0: quantityBack(
+      flight,
+      zeroOfLine(line, quantile, variance, "the slope of Lambda² is not told from zero: any origin fits"),
+    ),
   };
 }
 

@@ -1,6 +1,7 @@
 import type { LocalDecay } from "../decayArgument.ts";
 import type { DecayPoint, PowerLaw } from "../decayResult.ts";
 import { bare, estimate, missing, type Quantity } from "../quantity.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { logEstimate } from "./powerProduct.ts";
 import { straightLine } from "./straightLine.ts";
 
@@ -16,7 +17,7 @@ export function localDecay(points: readonly DecayPoint[], law: PowerLaw): LocalD
     x: beyond.map(({ x }) => x),
     exponent: beyond.map((_, i) => localExponent(beyond.slice(Math.max(i - 1, 0), i + 2), law)),
     compensated: beyond.map(({ x, q, smoothedError, error }) => {
-      const value = q * ((x - law.x0) / law.length) ** law.n;
+      const value = q * (lawDistance(law, x) / law.length) ** law.n;
       const standard = smoothedError ?? error;
       return standard === null
         ? bare(value, "the station carries no sampling error")
@@ -25,12 +26,12 @@ export function localDecay(points: readonly DecayPoint[], law: PowerLaw): LocalD
   };
 }
 
-function localExponent(points: readonly DecayPoint[], { x0 }: PowerLaw): Quantity {
+function localExponent(points: readonly DecayPoint[], law: PowerLaw): Quantity {
   if (points.length < 3) return missing("a station at an end has one neighbour only");
   const errors = points.map((point) => point.smoothedError).filter((error) => error !== null);
   const told = errors.length === points.length;
   const line = straightLine(
-    points.map(({ x }) => Math.log(x - x0)),
+    points.map(({ x }) => Math.log(lawDistance(law, x))),
     points.map(({ q }) => Math.log(q)),
     told ? errors : null,
   );

@@ -2,10 +2,11 @@ import type { Narrowing } from "../decayArgument.ts";
 import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import type { FitPoint, WindowFit } from "./fitWindow.ts";
+import { placeAlong, placeBack } from "./flightCourse.ts";
 import { lawCovariance } from "./lawCovariance.ts";
 import { lawProblem, powerLawDefaults } from "./lawProblem.ts";
 
-/** One station of a plan: where it stands, and the standard error of its ln q up to a common factor. */
+/** One station of a plan: where it stands along the law, and the standard error of its ln q up to a common factor. */
 interface Planned {
   readonly x: number;
   readonly error: number;
@@ -21,11 +22,14 @@ interface Planned {
  * @see          Fedorov (1972), Theory of Optimal Experiments, ch. 2
  */
 export function narrowing(points: readonly FitPoint[], window: WindowFit): Narrowing[] {
-  const { fit, scattered } = window;
+  const { fit, flight, scattered } = window;
   const { problem, x0, held } = fit;
   if (held.n !== null && held.x0 !== null) return [];
   const present = points.map(
-    ({ x, q, smoothedError }): Planned => ({ x, error: smoothedError ?? (problem.linear ? 1 / q : 1) }),
+    ({ x, q, smoothedError }): Planned => ({
+      x: placeAlong(flight, x),
+      error: smoothedError ?? (problem.linear ? 1 / q : 1),
+    }),
   );
   const before = variances(present, window);
   if (before === null) return [];
@@ -36,7 +40,7 @@ export function narrowing(points: readonly FitPoint[], window: WindowFit): Narro
     const freedom = fit.freedom + plan.length - present.length;
     const quantile = scattered ? studentQuantile(0.975, freedom) / studentQuantile(0.975, fit.freedom) : 1;
     const width = (key: "n" | "x0") => (before[key] > 0 ? quantile * Math.sqrt(after[key] / before[key]) : 1);
-    return [{ kind, x, n: width("n"), x0: width("x0") }];
+    return [{ kind, x: placeBack(flight, x), n: width("n"), x0: width("x0") }];
   };
   const between = present.slice(1).map((right, i): Planned => {
     const left = present[i];

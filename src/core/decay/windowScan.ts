@@ -33,7 +33,7 @@ export function windowScan(
   const scanned = (from: number, to: number, varying: number): ScannedWindow => {
     const at = { x: points[varying].x, stations: to - from + 1 };
     if (from === first && to === last) return { ...at, ...decay.given_window, p: decay.p, adopted: true };
-    const window = fitWindow(points.slice(from, to + 1), settings);
+    const window = fitWindow(points.slice(from, to + 1), settings, decay.flight);
     return { ...at, ...numbersOf(withCommonBlocks(window, blocks, from)), adopted: false };
   };
   const none = first < 0;

@@ -224,16 +224,32 @@ describe("U that varies along the stream", () => {
       uu: known(((flown(x) - law.x0) / M) ** -law.n, 0.005),
     }),
   );
-  const { flight, routes } = argued(stations, { quantity: "uu" }).argument;
+  const alongX = argued(stations, { quantity: "uu", coordinate: "x" }).argument;
+  const inFlight = argued(stations, { quantity: "uu" }).argument;
+  const keys = ({ routes }: DecayArgument) => routes.map(({ key }) => key);
 
   it("is put right by the time of flight: n comes back, which it does not along x", () => {
-    expectClose(flight?.n.value, law.n, { relative: 1e-3, because: "trapezoids over 39 steps" });
+    const { flight, routes } = alongX;
+    expectClose(flight?.n.value, law.n, { relative: 1e-9, because: "U is straight between stations" });
     expectClose(flight?.x0.value, 0.2 - ((0.2 - law.x0) * speedAt(0.2)) / Um, {
-      relative: 0.01,
-      because: "the same, carried back to x",
+      relative: 1e-9,
+      because: "the same, carried back to x with the U of the first station",
     });
     expect(Math.abs((routes[0].n.value ?? 0) - law.n)).toBeGreaterThan(0.01);
-    expect(routes.map(({ key }) => key)).toContain("flight");
+  });
+  it("shows the coordinate that was not adopted among the routes", () => {
+    expect(keys(alongX)).toContain("flight");
+    expect(keys(alongX)).not.toContain("along-x");
+    expect(keys(inFlight)).toContain("along-x");
+    expect(keys(inFlight)).not.toContain("flight");
+    expectClose(
+      inFlight.routes.find(({ key }) => key === "along-x")?.n.value,
+      alongX.routes[0].n.value ?? 0,
+      {
+        relative: 1e-9,
+        because: "the same fit of the same stations",
+      },
+    );
   });
   it("is left alone below 1 %", () => expect(argument.flight).toBeNull());
 });
