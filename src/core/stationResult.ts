@@ -171,6 +171,8 @@ export interface ReduceSettings {
   readonly referenceSpeed: number | null;
   readonly kind: "measurement" | "dns" | "les" | null;
   readonly simultaneous: boolean | "auto";
+  /** Which of several probes at one x make the station: those that agree (the default), or all of them. */
+  readonly probes?: "agreeing" | "all";
   readonly periodic: boolean | "auto";
   readonly sensorLength: number | null;
   readonly integralScale: IntegralScaleRoute;

@@ -8,6 +8,7 @@ import type { SourceNote } from "../core/records.ts";
 import type { StationResult } from "../core/stationResult.ts";
 import { plainArgument } from "./plainArgument.ts";
 import { type PlainQuantity, plainQuantity } from "./plainQuantity.ts";
+import { plainRecord } from "./plainRecord.ts";
 
 /** One case on its way into the results file. */
 export interface ResultCase {
@@ -99,6 +100,7 @@ function plainStation(station: StationResult) {
     ...quantities,
     routes: plainEach(routes),
     flags: flags.map(plainFlag),
+    ...plainRecord(station),
     facts,
   };
 }

@@ -67,6 +67,8 @@ export interface SheetReduce {
   readonly segment: number | null;
   readonly taylorCorrection: boolean;
   readonly dissipation: "auto" | "gradient" | "decay" | "inertial";
+  /** Which of several probes at one x make the station. */
+  readonly probes: "agreeing" | "all";
 }
 export interface SheetBody {
   readonly x: number;

@@ -124,6 +124,7 @@ export const caseSheetSchema = keyed({
       segment: v.optional(v.nullable(powerOfTwo), standard.reduce.segment),
       taylorCorrection: v.optional(v.boolean("true or false"), standard.reduce.taylorCorrection),
       dissipation: v.optional(oneOf("auto", "gradient", "decay", "inertial"), standard.reduce.dissipation),
+      probes: v.optional(oneOf("agreeing", "all"), standard.reduce.probes),
     },
     {},
   ),

@@ -35,6 +35,7 @@ export const defaultCaseSheet: CaseSheet = {
     segment: null,
     taylorCorrection: true,
     dissipation: "auto",
+    probes: "agreeing",
   },
   body: null,
   development: { tolerance: 0.1 },

@@ -145,6 +145,7 @@ export const sheet: CaseSheet = {
     segment: null,
     taylorCorrection: true,
     dissipation: "auto",
+    probes: "agreeing",
   },
   body: null,
   development: { tolerance: 0.1 },

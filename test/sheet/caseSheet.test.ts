@@ -59,7 +59,7 @@ describe("a case sheet", () => {
       columns,
       fit: { window: [0.3, 2], x0: 0.08 },
       read: { separator: ";", decimal: ",", missing: ["-999"] },
-      reduce: { taylorCorrection: false },
+      reduce: { taylorCorrection: false, probes: "all" },
       body: { x: 1.2, chord: 0.3 },
       kind: "les",
     };
@@ -74,7 +74,7 @@ describe("a case sheet", () => {
       step: null,
       missing: ["-999"],
     });
-    expect(sheet.reduce.taylorCorrection).toBe(false);
+    expect(sheet.reduce).toMatchObject({ taylorCorrection: false, probes: "all" });
     expect(sheet.body).toEqual({ x: 1.2, chord: 0.3, Tu: null, L11: null });
   });
   it("warns of every key that it does not know, by name", () => {

@@ -32,6 +32,7 @@ describe("the settings of each stage", () => {
       kinematicViscosity: 1.5e-5,
       referenceSpeed: 6,
       taylorCorrection: true,
+      probes: "agreeing",
     });
     expect(decaySettings(sheet)).toMatchObject({
       referenceLength: 0.025,

@@ -1,4 +1,5 @@
 import { wholeMoments } from "./recordCorrelation.ts";
+import { aboutItself } from "./recordTime.ts";
 import type { StationPart } from "./stationPart.ts";
 
 /**
@@ -8,14 +9,20 @@ import type { StationPart } from "./stationPart.ts";
  * @param parts  of one station, in order of place and time
  */
 export function withCommonMeans(parts: readonly StationPart[]): readonly StationPart[] {
+  const probes = recordsByProbe(parts);
+  const common = new Map(probes.filter(({ length }) => length > 1).flatMap(meansOf));
+  return parts.map((part) => common.get(part) ?? aboutItself(part));
+}
+
+/** Records sorted by the probe that took them, each probe's in order of time. */
+export function recordsByProbe(parts: readonly StationPart[]): StationPart[][] {
   const probes: StationPart[][] = [];
   for (const part of [...parts].sort((a, b) => a.start - b.start)) {
     const probe = probes.find((held) => held.every((other) => isOneProbe(other, part)));
     if (probe === undefined) probes.push([part]);
     else probe.push(part);
   }
-  const common = new Map(probes.filter(({ length }) => length > 1).flatMap(meansOf));
-  return parts.map((part) => common.get(part) ?? part);
+  return probes;
 }
 
 function isOneProbe(before: StationPart, after: StationPart): boolean {

@@ -1,145 +1,113 @@
-import type { ProbeReading } from "../probeReading.ts";
-import { bare, type Quantity, type StandardError } from "../quantity.ts";
-import { fTail } from "../signal/distributions/fTail.ts";
-import { studentTail } from "../signal/distributions/studentTail.ts";
-import { jackknife } from "../signal/jackknife.ts";
-import { jointLayout } from "../signal/jointMoments.ts";
-import { type BlockGroups, groupBlocks } from "./groupBlocks.ts";
+import type { ProbedName, ProbeReading } from "../probeReading.ts";
+import type { ReduceSettings } from "../stationResult.ts";
+import { recordsByProbe } from "./commonMeans.ts";
 import type { JoinedRecord } from "./joinParts.ts";
-import { shortestRecord } from "./sampling.ts";
-import { withError } from "./stationErrors.ts";
+import { leavesError, type ProbeLeaves, probeLeaves, probeQuantity } from "./probeLeaves.ts";
+import { type Alikeness, alikeAlone, alikeTogether } from "./probeTests.ts";
+import type { StationPart } from "./stationPart.ts";
 
 /** The probes of one station beside each other. */
 export interface ProbeComparison {
+  /** In the order of the record's parts. */
   readonly probes: readonly ProbeReading[];
   /** Probability that U and u' as different as these come from one flow; null where their errors are not known. */
   readonly p: number | null;
+  /** Records that the station's values are made from: all, or the larger part that agrees. */
+  readonly kept: readonly StationPart[];
+  /** In what no larger part agrees, so that the station has no value of it. */
+  readonly divided: readonly ProbedName[];
+  /** Records of one probe, taken one after another. */
+  readonly oneProbe: boolean;
 }
 
-/** One value of every probe, with what it is when one group of blocks is left out. */
-interface Leaves {
-  readonly value: number;
-  readonly without: readonly number[];
-  readonly weights: Float64Array;
+/** Probability below which probes at one x are said to differ. */
+const disagreement = 0.01;
+
+/** What is tested of some of the probes: the probabilities of U and u', the least first multiplied (Holm). */
+interface Verdict {
+  readonly of: Readonly<Record<ProbedName, Alikeness>>;
+  readonly p: number;
+  readonly differ: readonly ProbedName[];
 }
-/** U, and ln u'. */
-type Pair = readonly [Leaves, Leaves];
 
 /**
  * Whether the probes at one x may be averaged: U and u' of each about its own mean, their spread held against
- * their sampling errors. Probes sampled together share their eddies: each probe's departure from their mean is
- * tested with the error of that departure, the same blocks left out at all, and the least probability is
- * multiplied by the number of probes (Bonferroni). Others are independent: Welch's test of equal means.
+ * their sampling errors at a level of 1 % for both together. Where they differ, the probe that stands out most is
+ * set aside and the rest held against each other again; the station is that of the probes which agree, if they are
+ * more than half, and else has no value of what they differ in. Records of one probe are all kept.
  * @param record  a station of two records or more
  * @param scale   its integral time, s; null where it is not known
- * @see   Welch (1951), Biometrika 38, 330
+ * @param probes  "all": none is set aside
+ * @see   Holm (1979), Scand. J. Statist. 6, 65
  */
-export function compareProbes(record: JoinedRecord, scale: number | null): ProbeComparison {
-  const { parts, perPart, together, repeats } = record;
-  const groups = parts.map((part, i) =>
-    scale === null || part.duration / repeats < shortestRecord * scale
-      ? null
-      : groupBlocks(
-          Float64Array.from(perPart[i], (row) => row[0]),
-          part.duration / repeats / scale,
-          repeats,
-        ),
-  );
-  const means = parts.map((_, i) => record.partMeans[i][0]);
-  const pairs = parts.map((_, i) => leavesOf(perPart[i], record.components.length, means[i], groups[i]));
-  const probes = parts.map(({ origin }, i) => {
-    const [U, rms] = pairs[i];
+export function compareProbes(
+  record: JoinedRecord,
+  scale: number | null,
+  { probes: wanted = "agreeing" }: Pick<ReduceSettings, "probes"> = {},
+): ProbeComparison {
+  const { parts, repeats } = record;
+  const leaves = probeLeaves(record, scale);
+  const readings = parts.map(({ origin }, i): ProbeReading => {
+    const { U, lnRms } = leaves[i];
     return {
-      file: origin.file,
-      y: origin.y,
-      z: origin.z,
-      U: quantityOf(U.value, errorOf(U, "linear", repeats)),
-      u_rms: quantityOf(Math.exp(rms.value), errorOf(rms, "log", repeats)),
+      ...{ file: origin.file, y: origin.y, z: origin.z },
+      U: probeQuantity(U.value, leavesError(U, "linear", repeats)),
+      u_rms: probeQuantity(Math.exp(lnRms.value), leavesError(lnRms, "log", repeats)),
       agrees: null,
       departs: [],
     };
   });
-  if (groups.some((group) => group === null)) return { probes, p: null };
-  const test = together ? apartTogether : apartAlone;
-  const values = [0, 1].map((which) => pairs.map((pair) => pair[which]));
-  // two tests are made of one question
-  const p = Math.min(1, 2 * Math.min(...values.map((each) => test(each, repeats))));
-  return { probes, p };
-}
-
-function leavesOf(
-  rows: readonly Float64Array[],
-  components: number,
-  mean: number,
-  groups: BlockGroups | null,
-): Pair {
-  const { second } = jointLayout(components);
-  const total = [0, 0, 0];
-  const parts = Array.from({ length: groups?.count ?? 0 }, () => [0, 0, 0]);
-  rows.forEach((row, block) => {
-    const sums = [row[0], row[1], row[second]];
-    for (let i = 0; i < 3; i++) total[i] += sums[i];
-    if (groups === null) return;
-    for (let i = 0; i < 3; i++) parts[groups.of[block]][i] += sums[i];
+  const oneProbe = recordsByProbe(parts).length === 1;
+  const all = { kept: parts, divided: [], oneProbe };
+  if (leaves.some(({ tested }) => !tested)) return { probes: readings, p: null, ...all };
+  const first = verdictOn(leaves, record);
+  const { apart, divided } = setAside(leaves, record, first);
+  const probes = readings.map((reading, i) => {
+    const departs = divided.length > 0 ? divided : (apart.get(i) ?? []);
+    return { ...reading, agrees: departs.length === 0, departs };
   });
-  const rest = parts.map((part) => part.map((value, i) => total[i] - value));
-  const meanOf = ([weight, sum]: number[]) => mean + sum / weight;
-  const lnRms = ([weight, sum, squares]: number[]) => Math.log(squares / weight - (sum / weight) ** 2) / 2;
-  const weights = Float64Array.from(parts, ([weight]) => weight);
-  return [
-    { value: meanOf(total), without: rest.map(meanOf), weights },
-    { value: lnRms(total), without: rest.map(lnRms), weights },
-  ];
+  if (oneProbe || wanted === "all") return { probes, p: first.p, ...all };
+  const kept = divided.length > 0 ? parts : parts.filter((_, i) => !apart.has(i));
+  return { probes, p: first.p, kept, divided, oneProbe };
 }
 
-function errorOf(
-  { value, without, weights }: Leaves,
-  scale: StandardError["scale"],
-  repeats: number,
-): StandardError | null {
-  const error = jackknife(value, without, weights);
-  return error === null ? null : { ...error, standard: error.standard * Math.sqrt(repeats), scale };
+/** The probes that stand out from a larger part, or in what there is no such part. */
+function setAside(leaves: readonly ProbeLeaves[], record: JoinedRecord, first: Verdict) {
+  const apart = new Map<number, readonly ProbedName[]>();
+  let left = leaves.map((one, at) => ({ one, at }));
+  let verdict = first;
+  while (verdict.differ.length > 0) {
+    // a probe that is set aside must leave more than half of all
+    if (2 * (left.length - 1) <= leaves.length) return { apart: new Map(), divided: first.differ };
+    const { of, differ } = verdict;
+    const least = left.map((_, i) => Math.min(...differ.map((name) => of[name].each[i])));
+    const out = least.indexOf(Math.min(...least));
+    const departs = differ.filter((name) => of[name].each[out] <= Math.max(disagreement, least[out]));
+    apart.set(left[out].at, departs);
+    left = left.filter((_, i) => i !== out);
+    verdict = verdictOn(
+      left.map(({ one }) => one),
+      record,
+    );
+  }
+  return { apart, divided: [] as readonly ProbedName[] };
 }
 
-function quantityOf(value: number, error: StandardError | null): Quantity {
-  if (error === null) return bare(value, `the record is shorter than ${shortestRecord} integral times`);
-  return withError(value, error);
-}
-
-/** Probes that saw the same eddies: every one against the mean of all. */
-function apartTogether(probes: readonly Leaves[], repeats: number): number {
-  const { weights } = probes[0];
-  const centre = (of: (one: Leaves) => number) =>
-    probes.reduce((sum, one) => sum + of(one), 0) / probes.length;
-  const whole = centre(({ value }) => value);
-  const without = probes[0].without.map((_, g) => centre((one) => one.without[g]));
-  const least = probes.map((one) => {
-    const departure = one.value - whole;
-    const apart = { value: departure, without: one.without.map((value, g) => value - without[g]), weights };
-    const error = errorOf(apart, "linear", repeats);
-    // what differs by rounding alone does not differ
-    const rounding = 1e-12 * Math.max(1, Math.abs(one.value));
-    if (error === null || Math.abs(departure) <= rounding) return 1;
-    return studentTail(departure / Math.max(error.standard, rounding), error.freedom);
-  });
-  // of two probes, one departs as the other does
-  return Math.min(1, (probes.length === 2 ? 1 : probes.length) * Math.min(...least));
-}
-
-/** Independent probes: equal means where the errors are not equal. */
-function apartAlone(probes: readonly Leaves[], repeats: number): number {
-  const known = probes.map((one) => ({ value: one.value, error: errorOf(one, "linear", repeats) }));
-  if (known.some(({ error }) => error === null || !(error.standard > 0))) return 1;
-  const count = probes.length;
-  const weights = known.map(({ error }) => (error?.standard ?? 1) ** -2);
-  const total = weights.reduce((sum, weight) => sum + weight, 0);
-  const centre = known.reduce((sum, { value }, i) => sum + weights[i] * value, 0) / total;
-  const between =
-    known.reduce((sum, { value }, i) => sum + weights[i] * (value - centre) ** 2, 0) / (count - 1);
-  const loose = known.reduce(
-    (sum, { error }, i) => sum + (1 - weights[i] / total) ** 2 / (error?.freedom ?? Infinity),
-    0,
+function verdictOn(leaves: readonly ProbeLeaves[], { together, repeats }: JoinedRecord): Verdict {
+  const alike = together ? alikeTogether : alikeAlone;
+  const U = alike(
+    leaves.map((one) => one.U),
+    repeats,
   );
-  const statistic = between / (1 + ((2 * (count - 2)) / (count ** 2 - 1)) * loose);
-  return fTail(statistic, count - 1, (count ** 2 - 1) / (3 * loose));
+  const u_rms = alike(
+    leaves.map((one) => one.lnRms),
+    repeats,
+  );
+  // two tests are made of one question
+  const p = Math.min(1, 2 * Math.min(U.p, u_rms.p));
+  const level = (own: Alikeness, other: Alikeness) => (own.p <= other.p ? 2 * own.p : own.p) < disagreement;
+  const differ: ProbedName[] = [];
+  if (p < disagreement && level(U, u_rms)) differ.push("U");
+  if (p < disagreement && level(u_rms, U)) differ.push("u_rms");
+  return { of: { U, u_rms }, p, differ };
 }

@@ -4,11 +4,12 @@ import type { SourceNote } from "../records.ts";
 import type { ReduceSettings, StationResult } from "../stationResult.ts";
 import { adoptedDissipation, setByDecay } from "./adoptedDissipation.ts";
 import { compareProbes } from "./compareProbes.ts";
-import { type IntegralTimes, integralTimes } from "./integralTimes.ts";
-import { joinCorrelations } from "./joinCorrelations.ts";
-import { type JoinedRecord, joinParts } from "./joinParts.ts";
-import { joinSpectra } from "./joinSpectra.ts";
+import { withoutDivided } from "./dividedStation.ts";
+import type { IntegralTimes } from "./integralTimes.ts";
+import type { JoinedRecord } from "./joinParts.ts";
+import { usualTime } from "./recordTime.ts";
 import { sampling as samplingOf } from "./sampling.ts";
+import { stationBasis } from "./stationBasis.ts";
 import { stationCurves } from "./stationCurves.ts";
 import { replicates } from "./stationErrors.ts";
 import { stationFacts } from "./stationFacts.ts";
@@ -35,10 +36,14 @@ import { type StructureSums, structureSums } from "./structureSums.ts";
  */
 export function reduceStation(parts: readonly StationPart[], settings: ReduceSettings): StationResult {
   assert(parts.length > 0, "a station has at least one record");
-  const record = joinParts(parts, settings);
-  const correlation = joinCorrelations(record, settings.correlation === "unbiased");
-  const spectra = joinSpectra(record);
-  const times = integralTimes(correlation, spectra, settings.integralScale);
+  const given = stationBasis(parts, settings);
+  const compared =
+    parts.length > 1 ? compareProbes(given.record, usualTime(given.record.parts), settings) : null;
+  const basis =
+    compared === null || compared.kept.length === parts.length
+      ? given
+      : stationBasis(compared.kept, settings);
+  const { record, correlation, spectra, times } = basis;
   const gradients = stationGradients(record, spectra, times);
   const structure = structureOf(record, gradients, times);
   const { table, rows, column } = stationRows(record, gradients, times, structure);
@@ -49,20 +54,21 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
     valueContext(record, column, structure, settings),
     sampling.why,
   );
-  const compared = record.parts.length > 1 ? compareProbes(record, times.scale) : null;
   const sums = { record, correlation, spectra, structure, all };
   const material = { ...sums, times, gradients, sampling, settings, compared };
   const values = valueQuantities(material);
   const facts = stationFacts(material, values);
+  const divided = compared?.divided ?? [];
   return {
     x: record.parts[0].origin.x,
     samples: record.samples,
     duration: record.duration,
-    ...quantities(material, values),
+    ...withoutDivided(quantities(material, values), compared?.probes ?? [], divided, settings.referenceSpeed),
     flags: stationFlags(material, { ...facts, taylorFactor: facts.taylorFactor ?? 1, eta: values.eta }),
-    sources: sourceNotes(record),
-    curves: stationCurves(record, spectra, correlation, times.tauStar),
-    blocks: table,
+    sources: sourceNotes(given.record),
+    // spectra and blocks of unlike probes are those of none of them
+    curves: divided.length > 0 ? null : stationCurves(record, spectra, correlation, times.tauStar),
+    blocks: divided.length > 0 ? null : table,
     facts,
     ...(compared ? { probes: compared.probes } : {}),
   };

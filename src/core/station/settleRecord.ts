@@ -4,11 +4,11 @@ import type { ReduceSettings } from "../stationResult.ts";
 import type { BranchCut } from "./branchCuts.ts";
 import { replan } from "./planRecord.ts";
 import type { ClosedRecord, RecordChunks } from "./recordChunks.ts";
-import { recordCorrelation, wholeMoments } from "./recordCorrelation.ts";
+import { wholeMoments } from "./recordCorrelation.ts";
 import type { RecordPlan } from "./recordPlan.ts";
+import { recordTime } from "./recordTime.ts";
 import type { StationPart } from "./stationPart.ts";
 import { timeFlags } from "./timeFlags.ts";
-import { zeroCrossing } from "./zeroCrossing.ts";
 
 /** The integral time of the whole record may differ by so much from the pilot's. */
 const allowedChange = 0.25;
@@ -60,7 +60,7 @@ function nextPlan(
   if (closed.unequal > 0 && !plan.weighted) return { ...plan, weighted: true, rounded: false };
   const slope = settings.detrend === "linear" ? wholeSlope(part) : plan.slope;
   if (part.lags !== null && leansOtherwise(part, slope)) return { ...plan, slope };
-  const time = integralTimeOf(part);
+  const time = recordTime(part);
   const changed = time !== null && (plan.integralTime === null || differs(time, plan.integralTime));
   const lost = time === null && plan.integralTime !== null && part.lags !== null;
   if (!changed && !lost) return null;
@@ -100,13 +100,6 @@ function leansOtherwise(part: StationPart, slope: readonly number[]): boolean {
 
 function differs(time: number, other: number): boolean {
   return Math.abs(time / other - 1) > allowedChange;
-}
-
-function integralTimeOf(part: StationPart): number | null {
-  const correlation = recordCorrelation(part, 0);
-  if (correlation === null || part.lags === null) return null;
-  const { at, area } = zeroCrossing(correlation);
-  return at === null ? null : (area / correlation[0]) * part.lags.stride * part.step;
 }
 
 function recordFlags(

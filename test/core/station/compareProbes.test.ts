@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { isEstimate } from "../../../src/core/quantity.ts";
+import { isEstimate, type Quantity } from "../../../src/core/quantity.ts";
 import { compareProbes } from "../../../src/core/station/compareProbes.ts";
 import { joinParts } from "../../../src/core/station/joinParts.ts";
 import { reduceStation } from "../../../src/core/station/reduceStation.ts";
@@ -31,6 +31,8 @@ function stationOf(...[probes, seed, more]: Parameters<typeof partsOf>) {
     simultaneous: more?.simultaneous ?? "auto",
   });
 }
+
+const timesFrom = (first: number) => Float64Array.from({ length: samples }, (_, i) => (first + i) * 1e-3);
 
 const differ = (station: ReturnType<typeof stationOf>) =>
   station.flags.some(({ code }) => code === "inhomogeneous");
@@ -95,4 +97,105 @@ describe("several probes at one x", () => {
     expect(station.flags.map(({ code }) => code)).not.toContain("inhomogeneous");
     expect(station.probes?.every(({ U }) => isEstimate(U) && U.low === null)).toBe(true);
   });
+});
+
+describe("a station whose probes do not all agree", () => {
+  const numberOf = (quantity: Quantity) => (isEstimate(quantity) ? quantity.value : quantity.why);
+  const textOf = (station: ReturnType<typeof stationOf>) =>
+    station.flags.find(({ code }) => code === "inhomogeneous")?.text;
+  const rake = [{ mean: 10 }, { mean: 10 }, { mean: 11 }, { mean: 10 }, { mean: 10 }];
+
+  it.each([{}, { simultaneous: false }])(
+    "is that of the larger part which agrees, to the last digit: %o",
+    (how) => {
+      const parts = partsOf(rake, 6, how);
+      const chosen = { ...settings, simultaneous: how.simultaneous ?? ("auto" as const) };
+      const station = reduceStation(parts, chosen);
+      const four = reduceStation(
+        parts.filter((_, i) => i !== 2),
+        chosen,
+      );
+      for (const key of ["U", "uu", "k", "Tu", "L11", "lambda", "samples", "duration"] as const)
+        expect(station[key]).toEqual(four[key]);
+      expect(four.flags.map(({ code }) => code)).not.toContain("inhomogeneous");
+      expect(station.probes?.map(({ agrees }) => agrees)).toEqual([true, true, false, true, true]);
+      expect(station.probes?.[2].departs).toEqual(["U"]);
+      expect(textOf(station)).toMatch(/4 of 5 which agree\. Set aside: at y = 0\.2 U 1[01]\.\d/);
+    },
+  );
+  it("has no U where half of its probes differ from the others, but their fluctuations", () => {
+    const station = stationOf([{ mean: 10 }, { mean: 11 }], 3);
+    expect(numberOf(station.U)).toMatch(/^no larger part of the 2 probes at this x agrees in U: at y = 0 U/);
+    for (const key of ["Tu", "L11", "lambda", "epsilon", "gradient", "C_epsilon"] as const)
+      expect(numberOf(station[key])).toBe(numberOf(station.U));
+    expectClose(numberOf(station.uu) as number, 1, { relative: 0.25, because: "three standard errors" });
+    expect(isEstimate(station.T_int) && isEstimate(station.k)).toBe(true);
+    expect(station.curves).toBeNull();
+    expect(station.probes?.map(({ agrees, departs }) => [agrees, departs])).toEqual([
+      [false, ["U"]],
+      [false, ["U"]],
+    ]);
+  });
+  it("keeps its U where they differ in u' alone, and nothing of the fluctuations", () => {
+    const station = stationOf([{ mean: 10 }, { mean: 10, factor: 1.5 }], 8);
+    expectClose(numberOf(station.U) as number, 10, { relative: 0.02, because: "three standard errors" });
+    for (const key of ["uu", "k", "Tu", "T_int", "L11", "isotropy_uv"] as const)
+      expect(isEstimate(station[key])).toBe(false);
+    expect(numberOf(station.k)).toContain("agrees in u'");
+    // v was not measured, which is the reason that stands
+    expect(numberOf(station.vv)).toBe("v was not measured");
+    expect(station.blocks).toBeNull();
+  });
+  it("has a Tu over the reference speed though they differ in U", () => {
+    const parts = partsOf([{ mean: 10 }, { mean: 11 }], 3);
+    const { Tu, L11 } = reduceStation(parts, { ...settings, referenceSpeed: 20 });
+    expectClose(numberOf(Tu) as number, 1 / 20, { relative: 0.15, because: "three standard errors" });
+    expect(isEstimate(L11)).toBe(false);
+  });
+  it("has no larger part along a profile", () => {
+    const shear = [9, 9.7, 10.4, 11.1].map((mean) => ({ mean }));
+    expect(isEstimate(stationOf(shear, 5).U)).toBe(false);
+  });
+  it("is the average of all where that is chosen, and says so", () => {
+    const parts = partsOf(rake, 3);
+    const station = reduceStation(parts, { ...settings, probes: "all" });
+    expectClose(numberOf(station.U) as number, 10.2, { relative: 0.01, because: "three standard errors" });
+    expect(station.samples).toBe(5 * samples);
+    expect(station.probes?.[2].agrees).toBe(false);
+    expect(textOf(station)).toContain("All of them are averaged, as chosen");
+  });
+  it("is the average of the records of one probe, though it drifts from one to the next", () => {
+    const parts = [10, 11].map((mean, i) =>
+      partOf(
+        { u: exponential(samples, 10, 70 + i).map((u) => u + mean), t: timesFrom(i * samples) },
+        { origin: { file: `run${i}.csv`, y: 0.1 } },
+      ),
+    );
+    const station = reduceStation(parts, settings);
+    expectClose(numberOf(station.U) as number, 10.5, { relative: 0.01, because: "three standard errors" });
+    expect(textOf(station)).toContain("The records of this probe differ");
+  });
+  it("keeps the larger part's own mean where one probe has several records", () => {
+    const origin = (y: number) => ({ origin: { file: `y${y}.csv`, y } });
+    const first = exponential(samples, 10, 80).map((u) => u + 10);
+    const records = [
+      partOf({ u: first, t: timesFrom(0) }, origin(0)),
+      partOf({ u: exponential(samples, 10, 81).map((u) => u + 12), t: timesFrom(samples) }, origin(0)),
+      partOf({ u: exponential(samples, 10, 82).map((u) => u + 10), t: timesFrom(2) }, origin(1)),
+      partOf({ u: exponential(samples, 10, 83).map((u) => u + 10), t: timesFrom(3) }, origin(2)),
+    ];
+    const station = reduceStation(records, settings);
+    const without = reduceStation([records[0], records[2], records[3]], settings);
+    expect(station.uu).toEqual(without.uu);
+    expectClose(numberOf(station.uu) as number, 1, { relative: 0.2, because: "the mean of 12 is not in it" });
+  });
+  it("sets aside none of ten alike but once in a hundred", () => {
+    const alike = Array.from({ length: 10 }, () => ({ mean: 10 }));
+    const lost = Array.from({ length: 25 }, (_, i) => {
+      const record = joinParts(partsOf(alike, 400 + i, { shared: 0.5 }), settings);
+      return compareProbes(record, 0.01).probes.some(({ agrees }) => agrees === false);
+    });
+    // binomial: at a rate of 1 %, three or more of 25 have a probability of 0.2 %
+    expect(lost.filter(Boolean).length).toBeLessThanOrEqual(2);
+  }, 60_000);
 });

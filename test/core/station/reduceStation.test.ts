@@ -213,7 +213,7 @@ describe("several records at one x", () => {
       { ...smoothRecord(12_000, 40), u: smoothRecord(12_000, 40).u.map((u) => u + 5) },
       { origin: { file: "other.csv", y: 9 } },
     );
-    const both = reduceStation([parts[0], shifted], settings);
+    const both = reduceStation([parts[0], shifted], { ...settings, probes: "all" });
     const alone = reduceStation([parts[0]], settings);
     expectClose(numberOf(both.uu), numberOf(alone.uu), {
       relative: 1e-10,
