@@ -14,6 +14,7 @@ import { hypotheses } from "./hypotheses.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
 import { laterWindows } from "./laterWindows.ts";
 import { unionOfWindows } from "./unionOfWindows.ts";
+import { unlikeProbes } from "./unlikeProbes.ts";
 import { withCommonBlocks } from "./withCommonBlocks.ts";
 
 /**
@@ -61,7 +62,8 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
     points: found.points.map((point) => decayPoint(point, perSpeed, used.includes(point))),
     flags: [],
   };
-  return { ...result, flags: decayFlags(result, window, usedStations, settings) };
+  const flags = decayFlags(result, window, usedStations, settings);
+  return { ...result, flags: [...flags, ...unlikeProbes(stations, found)] };
 }
 
 function windowEnds(used: readonly RawPoint[], { window }: DecaySettings): readonly [number, number] {
