@@ -27,13 +27,17 @@ export function isEqualStep(step: number, rule: StepRule): boolean {
  * @returns      a power of ten; 0 where the stamps have no last digit that a double can tell
  */
 export function printQuantum(t: Float64Array, from: number, to: number): number {
+  let largest = 0;
+  for (let i = from; i < to; i++) largest = Math.max(largest, Math.abs(t[i]));
   for (let exponent = 3; exponent >= -15; exponent--) {
     const quantum = 10 ** exponent;
+    if (largest / quantum > 1e11) return 0;
+    // what rounding leaves of a whole number; a time far below the digit is no multiple of it
+    const allowed = Math.min(1e-4, (2 ** -46 * largest) / quantum);
     let divides = true;
     for (let i = from; i < to && divides; i++) {
       const digits = t[i] / quantum;
-      if (Math.abs(digits) > 1e11) return 0;
-      divides = Math.abs(digits - Math.round(digits)) <= 1e-4;
+      divides = Math.abs(digits - Math.round(digits)) <= allowed;
     }
     if (divides) return quantum;
   }
