@@ -1,24 +1,29 @@
+import { bare } from "../../core/quantity.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatDigits, formatPosition, withUnit } from "../../figures/formatNumber.ts";
-import { quantityText } from "../../figures/formatQuantity.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { CutsTable, cutsOf } from "./CutsTable.tsx";
 import { Fold } from "./Fold.tsx";
-import { formatted } from "./QuantityText.tsx";
+import { NumberButton } from "./NumberButton.tsx";
+import { ProbesTable, probesOf } from "./ProbesTable.tsx";
 import { RichText } from "./RichText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
-/** Every check of every record that found something, and probes at one x that were held against each other. */
+/** Every check of every record that found something, every cut of one, and probes at one x held against each other. */
 export function ChecksFold({ cases }: { cases: readonly CaseView[] }) {
   const found = cases.flatMap((view) =>
     view.stations.flatMap((station) => station.flags.map((flag) => ({ view, station, flag }))),
   );
-  const probes = cases.flatMap((view) =>
-    view.stations.flatMap((station) => (station.probes ?? []).map((probe) => ({ view, station, probe }))),
-  );
-  if (found.length === 0 && probes.length === 0) return null;
+  const cuts = cutsOf(cases);
+  const probes = probesOf(cases);
+  if (found.length === 0 && probes.length === 0 && cuts.length === 0) return null;
+  const facts = [
+    `${found.length} found`,
+    ...(cuts.length === 0 ? [] : [cuts.length === 1 ? "1 cut" : `${cuts.length} cuts`]),
+  ];
   return (
-    <Fold name="Checks of the records" fact={`${found.length} found`}>
+    <Fold name="Checks of the records" fact={facts.join(", ")}>
       {found.length > 0 && (
         <TableScroll label="Checks">
           <table className="data dense">
@@ -40,43 +45,35 @@ export function ChecksFold({ cases }: { cases: readonly CaseView[] }) {
                   <td className="text wrap">
                     <RichText text={flag.text} />
                   </td>
-                  <td>{flag.value === undefined ? "–" : formatDigits(flag.value, 3)}</td>
+                  <td>
+                    {flag.value === undefined ? (
+                      "–"
+                    ) : (
+                      <FlagFigure view={view} text={flag.text} value={flag.value} />
+                    )}
+                  </td>
                 </tr>
               ))}
             </tbody>
           </table>
         </TableScroll>
       )}
-      {probes.length > 0 && (
-        <TableScroll label="Probes at one position">
-          <table className="data dense">
-            <thead>
-              <tr>
-                <th scope="col">Probe</th>
-                <th scope="col">y, z</th>
-                <th scope="col">U</th>
-                <th scope="col">u′</th>
-              </tr>
-            </thead>
-            <tbody>
-              {probes.map(({ view, station, probe }, i) => (
-                // biome-ignore lint/suspicious/noArrayIndexKey: probes of one file at one x have no name of their own
-                <tr key={i}>
-                  <td>
-                    <CaseMark mark={view.mark} /> {placeOf(view, station.x)}, {probe.file}
-                  </td>
-                  <td>
-                    {[probe.y, probe.z].map((at) => (at === null ? "–" : formatPosition(at))).join(", ")}
-                  </td>
-                  <td>{quantityText(formatted(probe.U, { label: "U", units: view.units }))}</td>
-                  <td>{quantityText(formatted(probe.u_rms, { label: "U", units: view.units }))}</td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
-        </TableScroll>
-      )}
+      <CutsTable cuts={cuts} />
+      <ProbesTable probes={probes} />
     </Fold>
+  );
+}
+
+function FlagFigure({ view, text, value }: { view: CaseView; text: string; value: number }) {
+  const shown = formatDigits(value, 3);
+  return (
+    <NumberButton
+      of="flagFigure"
+      quantity={bare(value, "a check is decided by the number itself")}
+      at={{ kind: "page", view, shown, rows: [["check", text]] }}
+    >
+      {shown}
+    </NumberButton>
   );
 }
 

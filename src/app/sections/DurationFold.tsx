@@ -1,14 +1,21 @@
 import { memo, use, useState } from "react";
 import { labelOf } from "../../core/catalogue.ts";
-import { plannedNames, requiredDuration } from "../../core/station/requiredDuration.ts";
+import { bare, type Quantity } from "../../core/quantity.ts";
+import { type PlannedName, plannedNames, requiredDuration } from "../../core/station/requiredDuration.ts";
+import type { StationResult } from "../../core/stationResult.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import { quantityText } from "../../figures/formatQuantity.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
 import { RestedCases } from "../page/restedCases.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
+import { Definition } from "./Definition.tsx";
 import { Fold } from "./Fold.tsx";
+import { NumberButton } from "./NumberButton.tsx";
 import { NumberField } from "./NumberField.tsx";
+import { formatted } from "./QuantityText.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
@@ -28,18 +35,22 @@ export function DurationFold() {
         onChange={(value) => value !== null && value > 0 && setPercent(value)}
       />
       <TableScroll label="Record lengths">
-        <table className="data dense stations-table">
+        <table className="data dense stations-table" {...cellKeys}>
           <thead>
             <tr>
               <th scope="col">
                 <SymbolText runs={labelOf("x").symbol} />
                 {unitOf("L", recorded[0].units) !== "" && ` (${unitOf("L", recorded[0].units)})`}
               </th>
-              <th scope="col">recorded{unit !== "" && ` (${unit})`}</th>
+              <th scope="col">
+                <Definition of="duration">recorded{unit !== "" && ` (${unit})`}</Definition>
+              </th>
               {plannedNames.map((key) => (
                 <th scope="col" key={key}>
-                  for <SymbolText runs={labelOf(key).symbol} />
-                  {unit !== "" && ` (${unit})`}
+                  <Definition of="requiredDuration">
+                    for <SymbolText runs={labelOf(key).symbol} />
+                    {unit !== "" && ` (${unit})`}
+                  </Definition>
                 </th>
               ))}
             </tr>
@@ -68,14 +79,12 @@ const DurationRows = memo(function DurationRows({ view, width }: { view: CaseVie
         return (
           <tr key={station.x}>
             <td>{formatNumber(station.x, decimals)}</td>
-            <td>{station.duration === null ? "–" : formatDigits(station.duration, 3)}</td>
+            <td>
+              <Recorded view={view} station={station} />
+            </td>
             {plannedNames.map((key) => (
               <td key={key} className={needed[key].value === null ? "why" : undefined}>
-                {needed[key].value === null ? (
-                  <RichText text={needed[key].why} />
-                ) : (
-                  formatDigits(needed[key].value, 2)
-                )}
+                <Needed quantity={needed[key]} of={key} width={width} view={view} station={station} />
               </td>
             ))}
           </tr>
@@ -84,3 +93,53 @@ const DurationRows = memo(function DurationRows({ view, width }: { view: CaseVie
     </tbody>
   );
 });
+
+interface OfStation {
+  readonly view: CaseView;
+  readonly station: StationResult;
+}
+
+function Recorded({ view, station }: OfStation) {
+  if (station.duration === null) return "–";
+  return (
+    <NumberButton
+      of="duration"
+      quantity={bare(station.duration, "counted, not estimated")}
+      at={{ kind: "station", view, station }}
+      cell
+    >
+      {formatDigits(station.duration, 3)}
+    </NumberButton>
+  );
+}
+
+/** A record length to plan with; its definition says for which number, and what that has now. */
+function Needed({
+  quantity,
+  of,
+  width,
+  view,
+  station,
+}: OfStation & { quantity: Quantity; of: PlannedName; width: number }) {
+  if (quantity.value === null) return <RichText text={quantity.why} />;
+  const shown = formatDigits(quantity.value, 2);
+  const { facts } = station;
+  const unit = unitOf("T", view.units);
+  const rows = [
+    ["for", labelOf(of).name],
+    ["half-width asked for", withUnit(`±\u202f${formatNumber(100 * width, 1)}`, "%")],
+    ["now", quantityText(formatted(station[of], { label: of, units: view.units }))],
+    ["recorded", withUnit(formatDigits(station.duration ?? 0, 3), unit)],
+    ["integral times", facts.integralTimes === null ? "not known" : formatDigits(facts.integralTimes, 2)],
+  ] as const;
+  return (
+    <NumberButton
+      of="requiredDuration"
+      quantity={quantity}
+      at={{ kind: "page", view, shown: withUnit(shown, unit), rows }}
+      cell
+    >
+      {shown}
+    </NumberButton>
+  );
+}

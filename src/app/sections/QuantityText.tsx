@@ -3,6 +3,7 @@ import type { Quantity } from "../../core/quantity.ts";
 import type { Units } from "../../core/unitText.ts";
 import { raisedDigits, thinSpace, withUnit } from "../../figures/formatNumber.ts";
 import { type FormattedQuantity, formatQuantity, formatScaled } from "../../figures/formatQuantity.ts";
+import type { FoundNumber } from "./foundNumber.ts";
 import { NumberButton } from "./NumberButton.tsx";
 import { RichText } from "./RichText.tsx";
 
@@ -12,6 +13,12 @@ export interface Manner {
   readonly units: Units;
   /** A length is divided by this and followed by its letter. */
   readonly per?: { readonly length: number; readonly symbol: string };
+}
+
+/** The same, and where the number comes from if no result holds it as it is shown. */
+interface Cells extends Manner {
+  readonly quantity: Quantity;
+  readonly at?: FoundNumber;
 }
 
 export function formatted(quantity: Quantity, { label, units, per }: Manner): FormattedQuantity {
@@ -27,7 +34,7 @@ export function valueText({ value, power }: FormattedQuantity): string {
 }
 
 /** A value and its interval as two cells of a table; the reason of a gap spans both. */
-export function QuantityCells({ quantity, ...manner }: { quantity: Quantity } & Manner) {
+export function QuantityCells({ quantity, at, ...manner }: Cells) {
   const shown = formatted(quantity, manner);
   if (quantity.value === null)
     return (
@@ -38,7 +45,7 @@ export function QuantityCells({ quantity, ...manner }: { quantity: Quantity } & 
   return (
     <>
       <td title={String(quantity.value)}>
-        <NumberButton of={manner.label} quantity={quantity}>
+        <NumberButton of={manner.label} quantity={quantity} at={at}>
           {withUnit(valueText(shown), manner.per ? shown.unit : "")}
         </NumberButton>
       </td>

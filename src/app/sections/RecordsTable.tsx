@@ -8,6 +8,8 @@ import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
+import { NumberButton } from "./NumberButton.tsx";
+import { overStations, stationCount } from "./overStations.ts";
 import { SymbolText } from "./SymbolText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
@@ -27,18 +29,13 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
             <th scope="col" className="text">
               Layout
             </th>
-            <th scope="col">Stations</th>
+            <th scope="col">
+              <Definition of="stations">Stations</Definition>
+            </th>
             <Head of="x" unit={unitOf("L", units)} />
             <Head of="U" unit={unitOf("L/T", units)} />
-            <th scope="col">
-              Record/
-              <SymbolText runs={labelOf("T_int").symbol} />
-            </th>
-            <th scope="col">
-              <SymbolText
-                runs={[{ text: "k" }, { text: "1,max", place: "sub", upright: true }, { text: " η" }]}
-              />
-            </th>
+            <Head of="integralTimes" unit="" />
+            <Head of="k1max_eta" unit="" />
             <th scope="col" className="text">
               Flags
             </th>
@@ -51,11 +48,23 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
                 <CaseMark mark={view.mark} line /> {view.name}
               </th>
               <td className="text">{layoutOf(view)}</td>
-              <td>{view.stations.length}</td>
-              <td>{placesOf(view)}</td>
-              <td>{speedOf(view)}</td>
-              <td>{lengthsOf(view)}</td>
-              <td>{resolutionOf(view)}</td>
+              <td>
+                <NumberButton {...stationCount(view)}>{view.stations.length}</NumberButton>
+              </td>
+              <Cell view={view} of="x" shown={placesOf(view)} value={({ x }) => x} />
+              <Cell view={view} of="U" shown={speedOf(view)} value={({ U }) => U.value} />
+              <Cell
+                view={view}
+                of="integralTimes"
+                shown={lengthsOf(view)}
+                value={({ facts }) => facts.integralTimes}
+              />
+              <Cell
+                view={view}
+                of="k1max_eta"
+                shown={resolutionOf(view)}
+                value={({ facts }) => facts.k1max_eta}
+              />
               <td className="text">{flagsOf(view)}</td>
             </tr>
           ))}
@@ -76,12 +85,24 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
             <CaseMark mark={view.mark} line />
             <span>
               <b>{view.name}</b>, {layoutOf(view)}, {stationsText(view.stations.length)},{" "}
-              <span className="nowrap">{withUnit(xs, unitOf("L", units))}</span>
+              <span className="nowrap">
+                <StationsNumber view={view} of="x" shown={xs} value={({ x }) => x} />
+                {withUnit("", unitOf("L", units))}
+              </span>
               <br />
-              <SymbolText runs={labelOf("U").symbol} /> = {withUnit(speedOf(view), unitOf("L/T", units))}
+              <SymbolText runs={labelOf("U").symbol} /> ={" "}
+              <StationsNumber view={view} of="U" shown={speedOf(view)} value={({ U }) => U.value} />
+              {withUnit("", unitOf("L/T", units))}
               {lengthsOf(view) !== "–" && (
                 <>
-                  ; records of {lengthsOf(view)} <SymbolText runs={labelOf("T_int").symbol} />
+                  ; records of{" "}
+                  <StationsNumber
+                    view={view}
+                    of="integralTimes"
+                    shown={lengthsOf(view)}
+                    value={({ facts }) => facts.integralTimes}
+                  />{" "}
+                  <SymbolText runs={labelOf("T_int").symbol} />
                 </>
               )}
             </span>
@@ -90,6 +111,27 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
       })}
     </ul>
   );
+}
+
+/** A number for all stations at once; its definition says which gave the least and the greatest. */
+function Cell({ view, of, shown, value }: CellProps) {
+  return (
+    <td>
+      <StationsNumber view={view} of={of} shown={shown} value={value} />
+    </td>
+  );
+}
+
+interface CellProps {
+  readonly view: CaseView;
+  readonly of: string;
+  readonly shown: string;
+  readonly value: (station: StationResult) => number | null;
+}
+
+function StationsNumber({ view, of, shown, value }: CellProps) {
+  if (shown === "–") return shown;
+  return <NumberButton {...overStations(view, of, shown, value)}>{shown}</NumberButton>;
 }
 
 function Head({ of, unit }: { of: string; unit: string }) {

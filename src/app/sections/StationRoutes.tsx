@@ -132,6 +132,7 @@ function RouteCell({
     <NumberButton
       of={key}
       quantity={quantity}
+      at={{ kind: "station", view, station }}
       cell
       title={quantity.value === null ? quantity.why : quantityText(text)}
     >

@@ -1,5 +1,6 @@
 import { isEstimate, type Quantity, scaled } from "../../core/quantity.ts";
 import type { StationResult } from "../../core/stationResult.ts";
+import { spreadColumn } from "./factColumns.ts";
 import type { RouteColumn } from "./StationRoutes.tsx";
 
 const route = (key: string): RouteColumn => ({ key, of: ({ routes }) => routes[key] });
@@ -23,6 +24,7 @@ export const integralColumns: readonly RouteColumn[] = [
   ...["zero-crossing", "one-over-e", "exponential", "low-frequency", "model"].map((of) =>
     asLength(`T_int_${of}`),
   ),
+  spreadColumn,
   ...["L_v_ratio", "L_w_ratio"].map(route),
 ];
 
