@@ -41,7 +41,7 @@ export interface ScannedWindow {
   readonly p: number | null;
   readonly adopted: boolean;
   /** Whether its intervals are among those whose union an automatic window's n and x0 carry. */
-  readonly inUnion?: boolean;
+  readonly inUnion: boolean;
 }
 
 /** One condition on the stations, in its two readings. */

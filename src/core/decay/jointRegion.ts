@@ -104,7 +104,8 @@ function ellipse(window: WindowFit, level: number): Contour["ellipse"] {
   const scale = drop / variance / Math.max(inflation(window, "n").ratio, inflation(window, "x0").ratio);
   const [, , , , x0x0, x0n, , , nn] = own ? own.map((value) => value * scale) : plain;
   const [sx, sn] = [Math.sqrt(x0x0), Math.sqrt(nn)];
-  const rho = x0n / (sx * sn);
+  // rounding may carry a correlation past one, and exact data leave no variance at all
+  const rho = sx * sn > 0 ? Math.min(Math.max(x0n / (sx * sn), -1), 1) : 0;
   const angles = Array.from({ length: rays }, (_, ray) => (2 * Math.PI * ray) / rays);
   return {
     x0: angles.map((angle) => placeBack(window.flight, fit.x0 + sx * Math.cos(angle))),

@@ -16,12 +16,22 @@ export function laterWindows(
 ): (WindowFit | Refusal)[] {
   if ("refused" in fitted) return [fitted];
   const { flight } = fitted;
-  const { x0 } = fitted.fit;
-  const farthest = x0 + 2.5 * (placeAlong(flight, points[first].x) - x0);
-  const windows: (WindowFit | Refusal)[] = [fitted];
-  for (let from = first + 1; from <= last - leastStations + 1; from++) {
-    if (placeAlong(flight, points[from].x) > farthest) break;
-    windows.push(fitWindow(points.slice(from, last + 1), settings, flight));
-  }
-  return windows;
+  const places = points.slice(first, last + 1).map(({ x }) => placeAlong(flight, x));
+  const later = laterStarts(places, fitted.fit.x0).slice(1);
+  return [
+    fitted,
+    ...later.map((after) => fitWindow(points.slice(first + after, last + 1), settings, flight)),
+  ];
+}
+
+/**
+ * The starts that count, by their order in the window; the first is its own.
+ * @param places of the stations along the law, in order
+ * @param x0     of the law, on the same axis
+ */
+export function laterStarts(places: readonly number[], x0: number): number[] {
+  const farthest = x0 + 2.5 * (places[0] - x0);
+  return places.flatMap((place, i) =>
+    i === 0 || (i <= places.length - leastStations && place <= farthest) ? [i] : [],
+  );
 }

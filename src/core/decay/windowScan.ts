@@ -1,11 +1,13 @@
 import type { ScannedWindow, WindowScan } from "../decayArgument.ts";
-import type { DecayResult, DecaySettings } from "../decayResult.ts";
+import type { DecayPoint, DecayResult, DecaySettings } from "../decayResult.ts";
 import { missing } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { commonBlocks } from "./commonBlocks.ts";
 import { criterion } from "./criterion.ts";
 import { endConditions } from "./endConditions.ts";
 import { fitWindow, type Refusal, type WindowFit, windowQuantity } from "./fitWindow.ts";
+import { laterStarts } from "./laterWindows.ts";
+import { lawDistance } from "./lawDistance.ts";
 import { startConditions } from "./startConditions.ts";
 import { withCommonBlocks } from "./withCommonBlocks.ts";
 
@@ -30,8 +32,10 @@ export function windowScan(
   const fitted = stations.filter(({ x }) => places.has(x));
   // a second station at one x, without the quantity, would put the blocks out of step with the points
   const blocks = fitted.length === points.length ? commonBlocks(fitted, decay, settings) : null;
+  const united = unitedStarts(points.slice(first, last + 1), decay).map((after) => first + after);
   const scanned = (from: number, to: number, varying: number): ScannedWindow => {
-    const at = { x: points[varying].x, stations: to - from + 1 };
+    const inUnion = to === last && united.includes(from);
+    const at = { x: points[varying].x, stations: to - from + 1, inUnion };
     if (from === first && to === last) return { ...at, ...decay.given_window, p: decay.p, adopted: true };
     const window = fitWindow(points.slice(from, to + 1), settings, decay.flight);
     return { ...at, ...numbersOf(withCommonBlocks(window, blocks, from)), adopted: false };
@@ -43,6 +47,15 @@ export function windowScan(
     start: startConditions(stations).map((condition) => criterion(xs, condition)),
     end: endConditions(stations, settings.extent ?? null).map((end) => criterion(xs, end, "end")),
   };
+}
+
+/** Starts whose intervals an automatic window's n and x0 unite, by their order in the window; none of a given one. */
+function unitedStarts(window: readonly DecayPoint[], { law, windowChosen }: DecayResult): number[] {
+  if (law === null || windowChosen !== "auto" || window.length === 0) return [];
+  return laterStarts(
+    window.map(({ x }) => lawDistance(law, x)),
+    0,
+  );
 }
 
 function numbersOf(fitted: WindowFit | Refusal): Pick<ScannedWindow, "n" | "x0" | "p"> {

@@ -43,6 +43,16 @@ describe("n and x0 against the first and the last station used", () => {
     expect(three?.n).toMatchObject({ value: null, why: expect.stringMatching(/three stations/) });
     expect(three?.p).toBeNull();
   });
+  it("mark the starts whose intervals the adopted one unites", () => {
+    const united = first.flatMap(({ inUnion, n }) => (inUnion && isEstimate(n) ? [n] : []));
+    expect(united.length).toBeGreaterThan(1);
+    if (!isEstimate(decay.n)) throw new Error("no law");
+    expect(decay.n.low).toBe(Math.min(...united.map(({ low }) => low ?? Number.NEGATIVE_INFINITY)));
+    expect(decay.n.high).toBe(Math.max(...united.map(({ high }) => high ?? Number.POSITIVE_INFINITY)));
+    expect(last.filter(({ inUnion }) => inUnion)).toHaveLength(1);
+    const given = scanOf({ ...plainSettings, window: decay.window });
+    expect(given.first.some(({ inUnion }) => inUnion)).toBe(false);
+  });
   it("are in order of x, one window a station", () => {
     expect(last.map(({ x }) => x)).toEqual(xs.filter((x) => x >= decay.window[0]));
   });
