@@ -1,5 +1,6 @@
 import type { Data } from "plotly.js";
 import { labelOf } from "../core/catalogue.ts";
+import { lawPlace } from "../core/decay/lawDistance.ts";
 import { linearRange, logRange, present } from "./axisRange.ts";
 import { caseMark } from "./caseMark.ts";
 import { type DecayEntry, decayEntries } from "./decayPoints.ts";
@@ -94,8 +95,8 @@ function lawTraces(
   const law = of.decay?.law;
   if (!law || !of.decay) return [];
   const back = (place: number) =>
-    axis === "x" ? place : axis === "x/ell" ? place * (of.length ?? 1) : law.x0 + place * law.length;
-  const nearest = law.x0 + law.length * 1e-3;
+    axis === "x" ? place : axis === "x/ell" ? place * (of.length ?? 1) : lawPlace(law, place * law.length);
+  const nearest = lawPlace(law, law.length * 1e-3);
   const curve = (from: number, to: number) => {
     const at = lawPositions(law, Math.max(from, nearest), to, lawSamples);
     return { at: at.map((x) => streamwise(of, x, axis)), law: at.map((x) => lawAt(law, x)) };

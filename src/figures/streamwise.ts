@@ -1,4 +1,5 @@
 import { labelOf } from "../core/catalogue.ts";
+import { lawDistance } from "../core/decay/lawDistance.ts";
 import { withReference } from "../core/symbolRuns.ts";
 import { unitOf } from "../core/unitText.ts";
 import type { FigureAxis, FigureCase, FigureOptions } from "./figureSpec.ts";
@@ -9,7 +10,7 @@ export function streamwise(of: FigureCase, x: number, axis: FigureAxis): number 
   if (axis === "x") return x;
   if (axis === "x/ell") return of.length === null ? null : x / of.length;
   const law = of.decay?.law ?? null;
-  return law === null ? null : (x - law.x0) / law.length;
+  return law === null ? null : lawDistance(law, x) / law.length;
 }
 
 /** The axis that every case has: the one asked for, else x. */
@@ -37,7 +38,8 @@ export function streamwiseTitle(
 ): string {
   const divided = axis === "x/ell" || (axis === "(x-x0)/ell" && isDivided(cases));
   const spatial = axis === "x" ? "x" : divided ? axis : "x-x0";
-  const label = labelOf(along === "t" ? spatial.replaceAll("x", "t") : spatial);
+  const runsInFlight = axis === "(x-x0)/ell" && cases.some(({ decay }) => decay?.law?.flight);
+  const label = labelOf(spatial.replaceAll("x", along === "t" ? "t" : runsInFlight ? "s" : "x"));
   const title = symbolHtml(withReference(label.symbol, referenceSymbol(cases)));
   return titleWithUnit(title, divided ? "" : unitOf(label.dimension, units));
 }

@@ -1,3 +1,4 @@
+import { lawDistance, lawPlace } from "../../core/decay/lawDistance.ts";
 import type { PowerLaw } from "../../core/decayResult.ts";
 import { tickScale } from "./laneHeight.ts";
 import type { LaneMap } from "./rulerScale.ts";
@@ -23,12 +24,12 @@ export function bandShape(
   const scale = tickScale(lane.height) * lawTu * Math.sqrt(law.A);
   // w = scale ((x - x0)/ell)^(-n/2) solved for the x where w fills the lane.
   const reach = law.length * (widest / scale) ** (-2 / law.n);
-  const begin = Math.max(0, map.at + map.perX * (law.x0 + reach));
+  const begin = Math.max(0, map.at + map.perX * lawPlace(law, reach));
   if (!Number.isFinite(begin) || begin >= lane.width || law.n <= 0) return { px: [], half: [] };
   const points = Math.max(2, Math.ceil((lane.width - begin) / every) + 1);
   const px = Array.from({ length: points }, (_, i) => begin + ((lane.width - begin) * i) / (points - 1));
   const half = px.map((at) => {
-    const distance = ((at - map.at) / map.perX - law.x0) / law.length;
+    const distance = lawDistance(law, (at - map.at) / map.perX) / law.length;
     return Math.min(widest, scale * distance ** (-law.n / 2)) / 2;
   });
   return { px, half };
