@@ -21,7 +21,9 @@ export function linearRange(
   const all = [...present(values), ...include];
   if (all.length === 0) return [0, 1];
   const [low, high] = [Math.min(...all), Math.max(...all)];
-  const room = (high - low) * margin || Math.abs(high) * 0.1 || 1;
+  // numbers that differ by rounding alone are one number
+  const span = high - low > 1e-9 * Math.max(Math.abs(low), Math.abs(high)) ? high - low : 0;
+  const room = span * margin || Math.abs(high) * 0.1 || 1;
   return [low - room, high + room];
 }
 

@@ -43,28 +43,6 @@ export function decayFigure(cases: readonly FigureCase[], options: FigureOptions
   );
 }
 
-/** The joint regions of n and x0 alone, for one column of print. */
-export function jointRegionFigure(cases: readonly FigureCase[], options: FigureOptions): FigureSpec {
-  const cells = placeCells(1, 66, options, { ...usualRoom, top: 4.4 });
-  const { panel, decor } = jointRegionPanel(cases, cells.boxes[0], "", options);
-  const rows = cases.flatMap(({ name, decay }) =>
-    decay?.law ? [[name, decay.law.n, decay.law.x0, ...decay.law.covariance]] : [],
-  );
-  const terms = ["lnA", "x0", "n"];
-  const heading = ["case", "n", "x0", ...terms.flatMap((a) => terms.map((b) => `cov_${a}_${b}`))];
-  return assembleFigure(
-    {
-      key: "joint-region",
-      widthMm: cells.widthMm,
-      heightMm: cells.heightMm,
-      panels: [panel],
-      decor: joinDecor(decor),
-      table: { heading, rows },
-    },
-    options,
-  );
-}
-
 function decayTable(cases: readonly FigureCase[], axis: FigureOptions["axis"]): FigureTable {
   return {
     heading: ["case", "x", axis, "q", "q_low", "q_high", "residual_percent", "in_window"],

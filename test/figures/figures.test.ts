@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { missing } from "../../src/core/quantity.ts";
 import { balanceFigure } from "../../src/figures/balanceFigure.ts";
 import { comparisonFigure } from "../../src/figures/comparisonFigure.ts";
-import { decayFigure, jointRegionFigure } from "../../src/figures/decayFigure.ts";
+import { decayFigure } from "../../src/figures/decayFigure.ts";
 import {
   defaultFigureOptions,
   type FigureCase,
@@ -21,7 +21,6 @@ const options: FigureOptions = { ...defaultFigureOptions, tokens: lightTokens, w
 const picked = madePair.map((of, i) => ({ of, station: of.stations[5], letter: "ab"[i] }));
 const everyFigure: [string, (options: FigureOptions) => FigureSpec][] = [
   ["decay", (how) => decayFigure(madePair, how)],
-  ["joint region", (how) => jointRegionFigure(madePair, how)],
   ["isotropy", (how) => isotropyFigure(madePair, how)],
   ["scales", (how) => scalesFigure(madePair, how)],
   ["balance", (how) => balanceFigure(madePair, how)],
@@ -214,7 +213,7 @@ describe("figures of what is missing", () => {
     expect(notes.map(({ text }) => text)).toContain("not compared");
   });
   it("are empty frames where there is no case at all", () => {
-    for (const build of [decayFigure, isotropyFigure, scalesFigure, balanceFigure, jointRegionFigure])
+    for (const build of [decayFigure, isotropyFigure, scalesFigure, balanceFigure])
       expect(() => build([], options)).not.toThrow();
     expect(() => spectrumFigure([], options)).not.toThrow();
   });

@@ -1,0 +1,15 @@
+import type { RouteKey } from "../core/decayArgument.ts";
+
+/** Routes to n and x0 in a few words, in the markup of a figure's text. */
+export const routeNames: Readonly<Record<RouteKey, string>> = {
+  joint: "joint fit",
+  "origin-scan": "scan of <i>x</i><sub>0</sub>",
+  "straight-line": "straight line, <i>n</i> held",
+  lambda: "line of <i>Λ</i><sup>2</sup>",
+  epsilon: "fall of <i>ε</i>",
+  "origin-zero": "<i>x</i><sub>0</sub> held at 0",
+  "origin-held": "<i>x</i><sub>0</sub> held as given",
+  "origin-other": "<i>x</i><sub>0</sub> held elsewhere",
+  flight: "along time of flight",
+  "along-x": "along <i>x</i>",
+};
