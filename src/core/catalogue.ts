@@ -1,4 +1,5 @@
 import { bodyLabels } from "./bodyLabels.ts";
+import { compareLabels } from "./compareLabels.ts";
 import { decayLabels } from "./decayLabels.ts";
 import { factLabels } from "./factLabels.ts";
 import { assert } from "./failure.ts";
@@ -37,9 +38,15 @@ export interface Label {
 
 /** Every label by its key: the keys of the results file, then the axes of the figures. */
 export const catalogue: Readonly<Record<string, Label>> = Object.fromEntries(
-  [...stationLabels, ...routeLabels, ...factLabels, ...decayLabels, ...bodyLabels, ...figureLabels].map(
-    (label) => [label.key, label],
-  ),
+  [
+    ...stationLabels,
+    ...routeLabels,
+    ...factLabels,
+    ...decayLabels,
+    ...compareLabels,
+    ...bodyLabels,
+    ...figureLabels,
+  ].map((label) => [label.key, label]),
 );
 
 /** The label of a key that the program itself names. */

@@ -10,16 +10,30 @@ export interface CaseInput {
   readonly decaySettings: DecaySettings;
 }
 
+export const comparedQuantities = ["Tu", "L11", "lambda", "eta", "Re_lambda", "isotropy_uv"] as const;
+export type ComparedQuantity = (typeof comparedQuantities)[number];
+
 export interface CompareSettings {
   readonly align: "x0" | "x" | "Tu";
   /** Tolerance d of the verdict: 0.1 is 10 %. */
   readonly tolerance: number;
-  /** Exponents the cases are aligned with; "auto" or left out: a common one unless it is rejected at 5 %. */
+  /** Exponents the cases are aligned with; "auto": a common one unless it is rejected at 5 %. */
   readonly exponent?: "auto" | "common" | "own";
+  /** Name of the case that all others are held against; null, or none of the cases: the first. */
+  readonly against?: string | null;
+  /** x in that case at which the others' places of equal Tu are looked for; null: its body's, else the middle. */
+  readonly at?: number | null;
+  /** Quantities for which it is told from where on the cases are equivalent. */
+  readonly quantities?: readonly ComparedQuantity[];
 }
 
-export const comparedQuantities = ["Tu", "L11", "lambda", "eta", "Re_lambda", "isotropy_uv"] as const;
-export type ComparedQuantity = (typeof comparedQuantities)[number];
+/** What is taken where a setting is left out. */
+export const compareDefaults = {
+  exponent: "auto",
+  against: null,
+  at: null,
+  quantities: ["Tu", "lambda"],
+} as const satisfies Omit<CompareSettings, "align" | "tolerance">;
 
 export type Verdict = "equivalent" | "different" | "undecided";
 
@@ -32,6 +46,8 @@ export interface ComparedRatio {
   /** Holm-adjusted p of "equivalent" and of "different". */
   readonly p_equivalent: number | null;
   readonly p_different: number | null;
+  /** Where the stretch begins from which on this quantity by itself is equivalent; null: nowhere, or not to be told. */
+  readonly equivalent_from: number | null;
   /** The ratio along the overlap, for the figure. */
   readonly curve: {
     readonly xi: readonly number[];
@@ -52,20 +68,75 @@ export interface CommonOfAll {
   readonly AICc: { readonly common: number; readonly own: number } | null;
 }
 
+/** One stretch of the common range: what is tested to tell from where on two cases are equivalent. */
+export interface ComparedStretch {
+  readonly from: number;
+  readonly to: number;
+  /** Whether all chosen quantities are equivalent along it, each at 5 %. */
+  readonly equivalent: boolean;
+  /** The quantity that keeps least room within the tolerance, and its mean ratio; null where one cannot be told. */
+  readonly narrowest: { readonly quantity: ComparedQuantity; readonly ratio: Quantity } | null;
+}
+
+/** From where on two cases are equivalent in all chosen quantities at once. */
+export interface EquivalentBeyond {
+  readonly quantities: readonly ComparedQuantity[];
+  /** Begin of the farthest-reaching run of equivalent stretches that ends the common range; null: there is none. */
+  readonly from: number | null;
+  /** Why there is none, or why it begins no earlier; null where it covers the common range. */
+  readonly why: string | null;
+  /** In order of the stream. */
+  readonly stretches: readonly ComparedStretch[];
+}
+
+/** Virtual origins of two cases by one way of fitting them, and how far they lie apart. */
+export interface AlignedOrigins {
+  readonly n: readonly [Quantity, Quantity];
+  readonly x0: readonly [Quantity, Quantity];
+  readonly extra_distance: Quantity;
+}
+
+/** Spectra of one station of each case at nearly equal distance from their origins, in Kolmogorov form. */
+export interface SpectrumPair {
+  readonly x: readonly [number, number];
+  readonly xi: readonly [number, number];
+  /** Common range of k1 eta. */
+  readonly range: readonly [number, number];
+  readonly bands: number;
+  /** Root mean square of ln (second/first) over the bands. */
+  readonly distance: number;
+  /** What it would be by the errors of both spectra alone: its mean, and what 95 in 100 stay below. */
+  readonly chance: number;
+  readonly chance_95: number;
+  /** Probability of a distance at least as large by chance. */
+  readonly p: number;
+}
+
+export interface ComparedSpectra {
+  /** Largest ratio of xi of two stations that are held against each other, less one. */
+  readonly within: number;
+  readonly pairs: readonly SpectrumPair[];
+  /** Why there are none; null where there are. */
+  readonly why: string | null;
+}
+
 /** Two cases side by side; ratios and distances are second against first. */
 export interface Comparison {
   readonly cases: readonly [string, string];
   readonly align: "x0" | "x" | "Tu";
   readonly tolerance: number;
-  /** Common range of xi (or of x); null where there is none. */
+  /** Common range of xi (or of x, or of Tu); null where there is none. */
   readonly overlap: readonly [number, number] | null;
   /** Why nothing could be compared; null where it could. */
   readonly why: string | null;
   readonly quantities: Readonly<Record<ComparedQuantity, ComparedRatio>>;
-  /** x0_B - x0_A. */
+  readonly equivalent_beyond: EquivalentBeyond;
+  /** x0_B - x0_A by the exponents used for the alignment. */
   readonly extra_distance: Quantity;
   /** x_B - x_A at equal Tu. */
   readonly matched_distance: Quantity;
+  /** The places that are so far apart: x in the first case, where Tu was asked for, Tu there, and x in the second. */
+  readonly matched: { readonly x: readonly [Quantity, Quantity]; readonly Tu: Quantity };
   readonly common_n: {
     readonly value: number | null;
     readonly low: number | null;
@@ -78,6 +149,9 @@ export interface Comparison {
   };
   /** One exponent for all cases at once against one each; left out with two cases, where it is common_n. */
   readonly common_n_of_all?: CommonOfAll;
-  /** Exponents used for the alignment: the common one, or each its own where it was rejected. */
+  /** Origins with each case's own exponent and with one for all: both are shown, whichever was used. */
+  readonly origins: { readonly own: AlignedOrigins | null; readonly common: AlignedOrigins | null };
+  /** Exponents used for the alignment: the common one, or each its own where it was rejected or asked for. */
   readonly aligned_with: "common n" | "own n" | "none";
+  readonly spectra: ComparedSpectra;
 }

@@ -1,20 +1,22 @@
-import type { CaseInput, ComparedRatio, Comparison } from "../core/comparison.ts";
-import { comparedQuantities } from "../core/comparison.ts";
+import type { CaseInput, Comparison } from "../core/comparison.ts";
 import type { DecayResult } from "../core/decayResult.ts";
 import type { Flag } from "../core/flag.ts";
 import { program } from "../core/program.ts";
 import type { Quantity } from "../core/quantity.ts";
 import type { SourceNote } from "../core/records.ts";
 import type { StationResult } from "../core/stationResult.ts";
+import type { Units } from "../core/unitText.ts";
 import { plainArgument } from "./plainArgument.ts";
+import { plainComparison } from "./plainComparison.ts";
 import { type PlainQuantity, plainQuantity } from "./plainQuantity.ts";
 import { plainRecord } from "./plainRecord.ts";
+import type { SentenceCase } from "./sentences/sentenceCase.ts";
 
 /** One case on its way into the results file. */
 export interface ResultCase {
   readonly argued: CaseInput;
   /** The case sheet with every default filled in. */
-  readonly settings: object;
+  readonly settings: object & { readonly units?: Units; readonly reference?: { readonly symbol: string } };
   readonly sources: readonly SourceNote[];
   /** Doubts about the case as a whole, beside those of its decay. */
   readonly flags: readonly Flag[];
@@ -56,15 +58,19 @@ export const stationQuantities = [
  * Everything that was found, for scripts: one object per case, one per comparison.
  * `scan`, `development` and `body` are empty objects where nothing was asked for or found.
  * @param cases       in the order of the sheets
- * @param comparisons every later case against the first
+ * @param comparisons every other case against the one chosen, or the first
  */
 export function resultsFile(cases: readonly ResultCase[], comparisons: readonly Comparison[]) {
+  const named = cases.map(sentenceCase);
   return {
     program: program.name,
     version: program.version,
     schema: program.schema,
     cases: cases.map(plainCase),
-    comparisons: comparisons.map(plainComparison),
+    comparisons: comparisons.map((comparison) => {
+      const [first, second] = comparison.cases.map((name) => named.find((each) => each.name === name));
+      return plainComparison(comparison, first && second ? [first, second] : null);
+    }),
   };
 }
 
@@ -116,6 +122,7 @@ function plainDecay(decay: DecayResult) {
     window_reason: decay.windowReason,
     stations: decay.stations,
     speed: decay.speed,
+    coordinate: decay.coordinate ?? "x",
     n: plainQuantity(decay.n),
     x0: plainQuantity(decay.x0),
     A: plainQuantity(decay.A),
@@ -131,25 +138,20 @@ function plainDecay(decay: DecayResult) {
   };
 }
 
-function plainComparison(comparison: Comparison) {
-  const { cases, align, tolerance, overlap, why, aligned_with, quantities, common_n } = comparison;
+/** A case as sentences name it. */
+function sentenceCase({ argued, settings }: ResultCase, mark: number): SentenceCase {
+  const { name, stations, decay, decaySettings } = argued;
+  const { units = "SI", reference } = settings;
   return {
-    cases,
-    align,
-    tolerance,
-    overlap,
-    why,
-    aligned_with,
-    quantities: Object.fromEntries(comparedQuantities.map((key) => [key, plainRatio(quantities[key])])),
-    extra_distance: plainQuantity(comparison.extra_distance),
-    matched_distance: plainQuantity(comparison.matched_distance),
-    common_n,
-    ...(comparison.common_n_of_all ? { common_n_of_all: comparison.common_n_of_all } : {}),
+    name,
+    mark,
+    stations,
+    decay,
+    length: decaySettings.referenceLength,
+    symbol: reference?.symbol ?? "ℓ",
+    units,
+    along: decaySettings.along,
   };
-}
-
-function plainRatio({ ratio, largest, verdict, p_equivalent, p_different }: ComparedRatio) {
-  return { ratio: plainQuantity(ratio), largest: plainQuantity(largest), verdict, p_equivalent, p_different };
 }
 
 function plainEach<K extends string>(quantities: Readonly<Record<K, Quantity>>): Record<K, PlainQuantity> {

@@ -1,5 +1,5 @@
+import { bandAverage } from "../core/signal/bandAverage.ts";
 import { chiSquareQuantile } from "../core/signal/distributions/chiSquareQuantile.ts";
-import { bandAverage } from "./bandAverage.ts";
 import type { PickedCurve } from "./figureSpec.ts";
 
 export type SpectrumForm = "compensated" | "premultiplied" | "kolmogorov" | "dimensional";

@@ -1,3 +1,4 @@
+import type { ComparedQuantity } from "../core/comparison.ts";
 import type { Layout, Role, Separator } from "../core/records.ts";
 import type { IntegralScaleRoute } from "../core/stationResult.ts";
 
@@ -28,7 +29,7 @@ export interface CaseSheet {
   readonly body: SheetBody | null;
   /** Share by which a ratio may depart from 1, or from its last value, where the flow has developed. */
   readonly development: { readonly tolerance: number };
-  readonly compare: { readonly align: "x0" | "x" | "Tu"; readonly tolerance: number };
+  readonly compare: SheetCompare;
 }
 
 export interface SheetReference {
@@ -69,6 +70,18 @@ export interface SheetReduce {
   readonly dissipation: "auto" | "gradient" | "decay" | "inertial";
   /** Which of several probes at one x make the station. */
   readonly probes: "agreeing" | "all";
+}
+export interface SheetCompare {
+  readonly align: "x0" | "x" | "Tu";
+  readonly tolerance: number;
+  /** Exponents the cases are laid over one another with. */
+  readonly exponent: "auto" | "common" | "own";
+  /** Name of the case that the others are held against; null: the first. */
+  readonly against: string | null;
+  /** x in that case at which equal Tu is looked for; null: the body's, else the middle. */
+  readonly at: number | null;
+  /** What has to agree for the cases to count as equivalent from a place on. */
+  readonly quantities: readonly ComparedQuantity[];
 }
 export interface SheetBody {
   readonly x: number;

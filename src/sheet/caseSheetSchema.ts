@@ -1,4 +1,5 @@
 import * as v from "valibot";
+import { comparedQuantities } from "../core/comparison.ts";
 import { profileRoles, recordRoles } from "../core/records.ts";
 import { defaultCaseSheet as standard } from "./defaultCaseSheet.ts";
 
@@ -144,6 +145,17 @@ export const caseSheetSchema = keyed({
     {
       align: v.optional(oneOf("x0", "x", "Tu"), standard.compare.align),
       tolerance: v.optional(positive, standard.compare.tolerance),
+      exponent: v.optional(oneOf("auto", "common", "own"), standard.compare.exponent),
+      against: v.optional(v.nullable(text), standard.compare.against),
+      at: v.optional(v.nullable(finite), standard.compare.at),
+      quantities: v.optional(
+        v.pipe(
+          v.array(oneOf(...comparedQuantities), "a list of quantities"),
+          v.nonEmpty("at least one quantity"),
+          v.check((list) => new Set(list).size === list.length, "each quantity once"),
+        ),
+        [...standard.compare.quantities],
+      ),
     },
     {},
   ),

@@ -1,3 +1,4 @@
+import { compareDefaults } from "../core/comparison.ts";
 import type { CaseSheet } from "./caseSheet.ts";
 
 /** Every default of a case sheet; `case` and `files` have none and are empty here, `layout` is the commonest. */
@@ -39,5 +40,5 @@ export const defaultCaseSheet: CaseSheet = {
   },
   body: null,
   development: { tolerance: 0.1 },
-  compare: { align: "x0", tolerance: 0.1 },
+  compare: { align: "x0", tolerance: 0.1, ...compareDefaults },
 };

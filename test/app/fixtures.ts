@@ -1,4 +1,5 @@
 import type { CaseView } from "../../src/app/session/caseView.ts";
+import { compareDefaults } from "../../src/core/comparison.ts";
 import type { DecayResult } from "../../src/core/decayResult.ts";
 import { estimate, missing, type Quantity } from "../../src/core/quantity.ts";
 import type { StationResult } from "../../src/core/stationResult.ts";
@@ -149,7 +150,7 @@ export const sheet: CaseSheet = {
   },
   body: null,
   development: { tolerance: 0.1 },
-  compare: { align: "x0", tolerance: 0.1 },
+  compare: { align: "x0", tolerance: 0.1, ...compareDefaults },
 };
 
 export const workspaceCase: WorkspaceCase = {

@@ -91,7 +91,14 @@ describe("two sheets given to the batch", () => {
     const [first] = results("both").cases;
     expect(first.settings).toMatchObject({ case: "screen", along: "x", zero: 0, startup: 0, body: null });
     expect(first.settings.fit).toMatchObject({ quantity: "auto", window: "auto", residuals: "log" });
-    expect(first.settings.compare).toEqual({ align: "x0", tolerance: 0.1 });
+    expect(first.settings.compare).toEqual({
+      align: "x0",
+      tolerance: 0.1,
+      exponent: "auto",
+      against: null,
+      at: null,
+      quantities: ["Tu", "lambda"],
+    });
     expect(first.sources[0]).toEqual({
       name: fileOf(0.3),
       bytes: read(`screen/${fileOf(0.3)}`).length,

@@ -1,4 +1,4 @@
-import type { CaseInput, ComparedRatio, Comparison } from "../../src/core/comparison.ts";
+import type { AlignedOrigins, CaseInput, ComparedRatio, Comparison } from "../../src/core/comparison.ts";
 import { comparedQuantities } from "../../src/core/comparison.ts";
 import type { DecayResult, DecaySettings } from "../../src/core/decayResult.ts";
 import { bare, estimate, missing } from "../../src/core/quantity.ts";
@@ -103,7 +103,15 @@ const ratio: ComparedRatio = {
   verdict: "equivalent",
   p_equivalent: 0.01,
   p_different: 0.9,
+  equivalent_from: 10,
   curve: { xi: [10, 20], ratio: [1.01, 1.03], low: [0.9, 0.9], high: [1.1, 1.1] },
+};
+
+const noPlace = missing("the cases share no intensity");
+const origins: AlignedOrigins = {
+  n: [estimate(1.22, 1.2, 1.24), estimate(1.22, 1.2, 1.24)],
+  x0: [estimate(0.1, 0.05, 0.15), estimate(0.5, 0.4, 0.6)],
+  extra_distance: estimate(0.4, 0.3, 0.5),
 };
 
 export const exampleComparison: Comparison = {
@@ -114,7 +122,39 @@ export const exampleComparison: Comparison = {
   why: null,
   quantities: Object.fromEntries(comparedQuantities.map((key) => [key, ratio])) as Comparison["quantities"],
   extra_distance: estimate(0.4, 0.3, 0.5),
-  matched_distance: missing("the cases share no intensity"),
+  matched_distance: noPlace,
+  equivalent_beyond: {
+    quantities: ["Tu", "lambda"],
+    from: 20,
+    why: "the stretch before departs by more than the tolerance",
+    stretches: [
+      {
+        from: 10,
+        to: 40,
+        equivalent: false,
+        narrowest: { quantity: "Tu", ratio: estimate(1.2, 1.15, 1.25) },
+      },
+      { from: 20, to: 60, equivalent: true, narrowest: { quantity: "Tu", ratio: estimate(1.02, 1, 1.04) } },
+    ],
+  },
+  matched: { x: [noPlace, noPlace], Tu: noPlace },
   common_n: { value: 1.22, low: 1.2, high: 1.24, p: 0.4 },
+  origins: { own: origins, common: origins },
   aligned_with: "common n",
+  spectra: {
+    within: 0.1,
+    pairs: [
+      {
+        x: [0.4, 0.8],
+        xi: [20, 21],
+        range: [0.01, 0.8],
+        bands: 18,
+        distance: 0.08,
+        chance: 0.07,
+        chance_95: 0.09,
+        p: 0.2,
+      },
+    ],
+    why: null,
+  },
 };

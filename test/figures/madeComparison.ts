@@ -10,6 +10,7 @@ function ratio(value: number, low: number, high: number, verdict: Verdict): Comp
     verdict,
     p_equivalent: 0.02,
     p_different: 0.3,
+    equivalent_from: verdict === "equivalent" ? 13 : null,
     curve: {
       xi,
       ratio: along,
@@ -42,6 +43,65 @@ export const madeComparison: Comparison = {
   },
   extra_distance: estimate(-0.1525, -0.23, -0.08),
   matched_distance: estimate(-0.151, -0.22, -0.09),
-  common_n: { value: 1.26, low: 1.21, high: 1.31, p: 0.81 },
+  equivalent_beyond: {
+    quantities: ["Tu", "L11"],
+    from: 24,
+    why: "the interval of the stretch before reaches beyond the tolerance",
+    stretches: [
+      { from: 13, to: 31, equivalent: true, narrowest: { quantity: "Tu", ratio: estimate(1, 0.98, 1.02) } },
+      { from: 18, to: 40, equivalent: false, narrowest: { quantity: "L11", ratio: estimate(1.07, 1, 1.14) } },
+      { from: 24, to: 67, equivalent: true, narrowest: { quantity: "L11", ratio: estimate(1.03, 1, 1.06) } },
+    ],
+  },
+  matched: {
+    x: [bare(0.6, "chosen, not measured"), estimate(0.449, 0.38, 0.51)],
+    Tu: estimate(0.032, 0.031, 0.033),
+  },
+  common_n: {
+    value: 1.26,
+    low: 1.21,
+    high: 1.31,
+    p: 0.81,
+    test: "chi-square",
+    AICc: { common: 31, own: 34 },
+  },
+  origins: {
+    own: {
+      n: [estimate(1.25, 1.2, 1.31), estimate(1.27, 1.13, 1.41)],
+      x0: [estimate(0.08, 0.055, 0.105), estimate(-0.0725, -0.145, 0)],
+      extra_distance: estimate(-0.1525, -0.25, -0.06),
+    },
+    common: {
+      n: [estimate(1.26, 1.21, 1.31), estimate(1.26, 1.21, 1.31)],
+      x0: [estimate(0.078, 0.06, 0.096), estimate(-0.0745, -0.13, -0.02)],
+      extra_distance: estimate(-0.1525, -0.23, -0.08),
+    },
+  },
   aligned_with: "common n",
+  spectra: {
+    within: 0.1,
+    pairs: [
+      {
+        x: [0.5, 0.35],
+        xi: [17, 17.2],
+        range: [0.004, 0.9],
+        bands: 22,
+        distance: 0.21,
+        chance: 0.1,
+        chance_95: 0.13,
+        p: 0.0001,
+      },
+      {
+        x: [1, 0.85],
+        xi: [37, 37.4],
+        range: [0.005, 0.9],
+        bands: 21,
+        distance: 0.09,
+        chance: 0.1,
+        chance_95: 0.13,
+        p: 0.6,
+      },
+    ],
+    why: null,
+  },
 };

@@ -1,5 +1,5 @@
 import { describe, it } from "vitest";
-import { bandAverage } from "../../src/figures/bandAverage.ts";
+import { bandAverage } from "../../src/core/signal/bandAverage.ts";
 import { spectrumCurves } from "../../src/figures/spectrumCurves.ts";
 import { expectClose } from "../support/expectClose.ts";
 import { madePair } from "./powerLawCase.ts";

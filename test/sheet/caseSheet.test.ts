@@ -38,7 +38,14 @@ describe("a case sheet", () => {
       coordinate: "auto",
       otherX0: null,
     });
-    expect(compare).toEqual({ align: "x0", tolerance: 0.1 });
+    expect(compare).toEqual({
+      align: "x0",
+      tolerance: 0.1,
+      exponent: "auto",
+      against: null,
+      at: null,
+      quantities: ["Tu", "lambda"],
+    });
     expect(development).toEqual({ tolerance: 0.1 });
     expect({ units, along, zero, startup, extent, simultaneous, periodic }).toEqual({
       units: "SI",
@@ -125,6 +132,12 @@ describe("a value that cannot be used is refused with file and key", () => {
     ["a segment that is no power of two", { ...least, reduce: { segment: 1000 } }, "reduce.segment"],
     ["a coordinate nobody knows", { ...least, fit: { coordinate: "t" } }, "fit.coordinate"],
     ["a development within nothing", { ...least, development: { tolerance: 0 } }, "development.tolerance"],
+    [
+      "a quantity that is not compared",
+      { ...least, compare: { quantities: ["U"] } },
+      "compare.quantities[0]",
+    ],
+    ["no quantity at all", { ...least, compare: { quantities: [] } }, "compare.quantities"],
     ["a tolerance of zero", { ...least, compare: { tolerance: 0 } }, "compare.tolerance"],
     ["a decay in time of a series", { ...least, along: "t" }, "along"],
     ["a list", [], "(the whole sheet)"],

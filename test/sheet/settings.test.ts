@@ -40,7 +40,14 @@ describe("the settings of each stage", () => {
       along: "x",
       dissipation: "auto",
     });
-    expect(compareSettings(sheet)).toEqual({ align: "x0", tolerance: 0.1 });
+    expect(compareSettings(sheet)).toEqual({
+      align: "x0",
+      tolerance: 0.1,
+      exponent: "auto",
+      against: null,
+      at: null,
+      quantities: ["Tu", "lambda"],
+    });
   });
 });
 

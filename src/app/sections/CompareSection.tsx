@@ -1,9 +1,10 @@
 import { useCallback } from "react";
-import type { CompareSettings, Comparison } from "../../core/comparison.ts";
+import type { Comparison } from "../../core/comparison.ts";
 import type { Sentence } from "../../export/sentences/piece.ts";
 import { comparisonFigure } from "../../figures/comparisonFigure.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
+import type { SheetCompare } from "../../sheet/caseSheet.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { sectionOf } from "../page/sectionList.ts";
 import type { CaseView } from "../session/caseView.ts";
@@ -30,7 +31,7 @@ export function CompareSection({
   stale: boolean;
   sentences: readonly (readonly Sentence[])[];
   comparisons: readonly Comparison[];
-  settings: CompareSettings;
+  settings: SheetCompare;
   onChange: (change: WorkspaceChange) => void;
 }) {
   const notes = [

@@ -1,6 +1,6 @@
 import { useId, useState } from "react";
-import type { CompareSettings } from "../../core/comparison.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
+import type { SheetCompare } from "../../sheet/caseSheet.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { ChoiceField } from "./ChoiceField.tsx";
 
@@ -16,13 +16,13 @@ export function ToleranceControl({
   settings,
   onChange,
 }: {
-  settings: CompareSettings;
+  settings: SheetCompare;
   onChange: (change: WorkspaceChange) => void;
 }) {
   const id = useId();
   const [moving, move] = useState<number | null>(null);
   const percent = moving ?? Math.round(settings.tolerance * 100);
-  const compare = (edit: Partial<CompareSettings>) =>
+  const compare = (edit: Partial<SheetCompare>) =>
     onChange({ kind: "edit-every-sheet", edit: { compare: { ...settings, ...edit } } });
   const settle = () => {
     if (moving !== null && moving / 100 !== settings.tolerance) compare({ tolerance: moving / 100 });

@@ -1,6 +1,7 @@
 import type { CompareSettings } from "../../core/comparison.ts";
-import type { StationResult } from "../../core/stationResult.ts";
+import type { StationCurves, StationResult } from "../../core/stationResult.ts";
 import type { Engine } from "../../engine/protocol.ts";
+import { compareSettings } from "../../sheet/compareSettings.ts";
 import { decaySettings } from "../../sheet/decaySettings.ts";
 import { fitKey } from "./caseViews.ts";
 import type { Argued, ArguedCase, Held } from "./session.ts";
@@ -27,7 +28,7 @@ export function argumentAsk({ history, reductions }: Held): ArgumentAsk | null {
     return [{ id, name: sheet.case, stations: reduced.stations, settings, key: fitKey(reduced, settings) }];
   });
   if (cases.length === 0) return null;
-  const { compare } = history.present.cases[0].sheet;
+  const compare = compareSettings(history.present.cases[0].sheet);
   return {
     key: JSON.stringify([cases.map(({ id, name, key }) => [id, name, key]), compare]),
     keys: Object.fromEntries(cases.map(({ id, key }) => [id, key])),
@@ -36,12 +37,12 @@ export function argumentAsk({ history, reductions }: Held): ArgumentAsk | null {
   };
 }
 
-/** Asks the worker. Curves stay here: a fit does not need them, and copying them would cost more than the fit. */
+/** Asks the worker. Of the curves only the spectra go along: nothing else is compared, and copying them costs time. */
 export async function argueCases(engine: Engine, ask: ArgumentAsk): Promise<Argued> {
   const argument = await engine.run("argue", {
     cases: ask.cases.map(({ name, stations, settings }) => ({
       name,
-      stations: stations.map((station) => ({ ...station, curves: null })),
+      stations: stations.map((station) => ({ ...station, curves: spectrumAlone(station.curves) })),
       settings,
     })),
     compare: ask.compare,
@@ -56,6 +57,15 @@ export async function argueCases(engine: Engine, ask: ArgumentAsk): Promise<Argu
     cases: Object.fromEntries(cases),
     comparisons: argument.comparisons,
   };
+}
+
+/** The spectrum of u as it is kept, without all that takes most of the room. */
+function spectrumAlone(curves: StationCurves | null): StationCurves | null {
+  if (curves === null) return null;
+  const { k1, E11, freedom, freedoms } = curves;
+  const none = new Float64Array(0);
+  const rest = { E22: null, E33: null, lag: none, rho_u: none, rho_v: null, rho_w: null };
+  return { k1, E11, freedom, ...(freedoms ? { freedoms } : {}), ...rest };
 }
 
 function withCurves(derived: readonly StationResult[], reduced: readonly StationResult[]): StationResult[] {

@@ -1,4 +1,4 @@
-import type { CompareSettings, Comparison } from "../comparison.ts";
+import { type CompareSettings, type Comparison, compareDefaults } from "../comparison.ts";
 import type { CentredLaw, LawProblem } from "../decay/lawProblem.ts";
 import { minimiseLaw } from "../decay/minimiseLaw.ts";
 import {
@@ -10,70 +10,98 @@ import {
 } from "./commonExponent.ts";
 import type { ComparedCase, ComparedLaw } from "./comparedCase.ts";
 
-/** How two cases are laid over one another, and how to do it again with moved station values. */
+/** Virtual origins of all cases by both ways of fitting them; null where a case has no law. */
+export interface Origins {
+  readonly own: readonly (number | null)[];
+  /** By laws with one exponent; null where that was not tried. */
+  readonly common: readonly (number | null)[] | null;
+}
+
+/** How the cases are laid over one another, and how to do it again with moved station values. */
 export interface Alignment {
   readonly align: CompareSettings["align"];
   readonly with: Comparison["aligned_with"];
+  /** One exponent for all cases that have a law. */
   readonly common: CommonExponent | null;
-  /** Why one exponent for both was not tried; null where it was. */
+  /** Why one exponent for all was not tried; null where it was. */
   readonly why: string | null;
-  /** Virtual origins of the aligned laws; null where a case has no law. */
-  readonly origins: readonly [number, number] | null;
-  /** Origins of the laws fitted anew to the station values that now stand in the cases' copies. */
-  readonly refit: () => readonly [number, number] | null;
+  readonly origins: Origins;
+  /** The laws fitted anew to the station values that now stand in the cases' copies. */
+  readonly refit: () => { readonly origins: Origins; readonly own: readonly (CentredLaw | null)[] };
 }
 
 /** A refit is followed to this share of a standard error. */
 const refitTolerance = 1e-3;
+const rejectedBelow = 0.05;
 
 /**
- * The virtual origins two cases are shifted by: those of laws with one common exponent unless that is rejected at 5 %,
- * then those of each case's own; or as the settings choose.
+ * The virtual origins that cases are shifted by: those of laws with one exponent for all, unless that is rejected at
+ * 5 %, then those of each case's own; or as the settings choose. Both are found, so that both can be shown.
+ * @param cases two or more; those without a law take no part
  */
 export function alignment(
-  [first, second]: readonly [ComparedCase, ComparedCase],
-  { align, exponent = "auto" }: CompareSettings,
+  cases: readonly ComparedCase[],
+  { align, exponent = compareDefaults.exponent }: CompareSettings,
 ): Alignment {
-  const [a, b] = [first.law, second.law];
-  if (a === null || b === null) {
-    const without = [a === null ? [first.name] : [], b === null ? [second.name] : []].flat();
-    const why = `${without.join(" and ")}: no law was fitted`;
-    return { align, with: "none", common: null, why, origins: null, refit: () => null };
-  }
-  const held = [a, b].some(({ fitted }) => fitted.fit.held.n !== null);
-  const common = held ? null : commonExponent([a.fitted, b.fitted]);
-  const why = held ? "the exponent of a case is held" : null;
-  const shared = common !== null && exponent !== "own" && (exponent === "common" || common.p >= 0.05);
-  const used = align === "x" ? "none" : shared ? "common n" : "own n";
-  if (common === null || !shared) {
-    const refit = () => [ownOrigin(a), ownOrigin(b)] as const;
-    return { align, with: used, common, why, origins: [a.fitted.fit.x0, b.fitted.fit.x0], refit };
-  }
-  const [lawA, lawB] = common.laws;
-  const copies: JointCase[] = [
-    { ...jointCase(a.fitted), problem: a.problem, law: lawA },
-    { ...jointCase(b.fitted), problem: b.problem, law: lawB },
-  ];
+  const laws = cases.map(({ law }) => law);
+  const fitted = laws.filter((law) => law !== null);
+  const why = withoutCommon(fitted);
+  const common = why === null ? commonExponent(fitted.map((law) => law.fitted)) : null;
+  const copies = fitted.map(
+    (law, i): JointCase => ({
+      ...jointCase(law.fitted),
+      problem: law.problem,
+      law: common?.laws[i] ?? law.fitted.fit.law,
+    }),
+  );
+  const spread = (found: readonly CentredLaw[]) =>
+    laws.map((law) => (law === null ? null : originOf(law, found[fitted.indexOf(law)])));
   const refit = () => {
-    const { laws } = jointFit(copies, common.n, refitTolerance);
-    return [origin(a, laws[0]), origin(b, laws[1])] as const;
+    const own = laws.map((law) => (law === null ? null : ownLaw(law)));
+    const joint = common === null ? null : jointFit(copies, common.n, refitTolerance);
+    const ownOrigins = own.map((found, i) => {
+      const law = laws[i];
+      return found === null || law === null ? null : originOf(law, found);
+    });
+    return { own, origins: { own: ownOrigins, common: joint === null ? null : spread(joint.laws) } };
   };
-  return { align, with: used, common, why, origins: [origin(a, lawA), origin(b, lawB)], refit };
+  return {
+    align,
+    with: align === "x" ? "none" : isShared(common, exponent) ? "common n" : "own n",
+    common,
+    why,
+    origins: {
+      own: laws.map((law) => law?.fitted.fit.x0 ?? null),
+      common: common === null ? null : spread(common.laws),
+    },
+    refit,
+  };
+}
+
+/** The origins that the cases are in fact shifted by. */
+export function usedOrigins(aligned: Pick<Alignment, "with">, { own, common }: Origins): Origins["own"] {
+  return aligned.with === "common n" && common !== null ? common : own;
+}
+
+function withoutCommon(fitted: readonly ComparedLaw[]): string | null {
+  if (fitted.length < 2) return "fewer than two cases have a law";
+  return fitted.some((law) => law.fitted.fit.held.n !== null) ? "the exponent of a case is held" : null;
+}
+
+function isShared(common: CommonExponent | null, exponent: CompareSettings["exponent"]): boolean {
+  if (common === null || exponent === "own") return false;
+  return exponent === "common" || common.p >= rejectedBelow;
 }
 
 /** The law of one case alone, fitted anew to the station values that now stand in its copy. */
-export function ownLaw({ fitted, problem }: ComparedLaw): CentredLaw {
+function ownLaw({ fitted, problem }: ComparedLaw): CentredLaw {
   return minimiseLaw(problem, fitted.fit.law, fitted.fit.held, refitTolerance).law;
 }
 
-function ownOrigin(law: ComparedLaw): number {
-  return origin(law, ownLaw(law));
+function originOf({ fitted, problem }: ComparedLaw, law: CentredLaw): number {
+  return fitted.fit.held.x0 ?? centredOrigin(problem, law);
 }
 
-function origin({ fitted, problem }: ComparedLaw, law: CentredLaw): number {
-  return fitted.fit.held.x0 ?? originOf(problem, law);
-}
-
-function originOf({ centre }: LawProblem, { kappa }: CentredLaw): number {
+function centredOrigin({ centre }: LawProblem, { kappa }: CentredLaw): number {
   return centre - 1 / kappa;
 }

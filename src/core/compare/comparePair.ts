@@ -1,102 +1,63 @@
 import {
+  type AlignedOrigins,
   type CaseInput,
-  type ComparedQuantity,
-  type ComparedRatio,
   type CompareSettings,
   type Comparison,
-  comparedQuantities,
+  compareDefaults,
 } from "../comparison.ts";
 import { bare, estimate, missing, type Quantity } from "../quantity.ts";
-import { type Alignment, alignment } from "./alignment.ts";
-import { comparedCase } from "./comparedCase.ts";
-import { type Overlay, overlay, type RatioCurve } from "./overlay.ts";
-import { type Resampled, resamplePair } from "./resamplePair.ts";
-import { type Judgement, verdicts } from "./verdicts.ts";
+import type { Alignment } from "./alignment.ts";
+import { type CommonExponent, commonExponent } from "./commonExponent.ts";
+import type { ComparedCase } from "./comparedCase.ts";
+import { compareSpectra } from "./compareSpectra.ts";
+import { equivalentBeyond } from "./equivalentBeyond.ts";
+import type { Overlay } from "./overlay.ts";
+import { noErrors, pairRatios } from "./pairRatios.ts";
+import type { LaidPair, Resampled } from "./resampleCases.ts";
 
 /** 97.5 % point of the normal distribution. */
 const normal = 1.959963984540054;
-const notTested = "the largest departure is shown, not tested";
-const noErrors = "the stations of a case carry no errors and are too few to show their scatter";
+
+/** Everything the comparison of one pair is put together from. */
+export interface PairFindings {
+  readonly inputs: readonly CaseInput[];
+  readonly cases: readonly ComparedCase[];
+  readonly aligned: Alignment;
+  readonly resampled: Resampled;
+  readonly pair: LaidPair;
+  /** Its place among the pairs resampled. */
+  readonly at: number;
+}
 
 /**
  * Two cases side by side, second against first: each shifted by its own virtual origin, ratios on the common range of
  * xi = (x - x0)/ell, intervals by resampling the station values and refitting both origins each time.
- * @param first    the case compared with
  * @param settings alignment and tolerance of the verdicts
  */
-export function comparePair(first: CaseInput, second: CaseInput, settings: CompareSettings): Comparison {
-  const cases = [comparedCase(first, settings.align), comparedCase(second, settings.align)] as const;
-  const aligned = alignment(cases, settings);
-  const laid = overlay(cases, aligned, [first, second]);
-  const resampled = resamplePair(cases, aligned, laid);
+export function comparePair(found: PairFindings, settings: CompareSettings): Comparison {
+  const { inputs, aligned, resampled, at } = found;
+  const { of, laid } = found.pair;
+  const [first, second] = [inputs[of[0]], inputs[of[1]]];
+  const spreads = resampled.pairs[at];
+  const { tolerance, quantities = compareDefaults.quantities } = settings;
+  const own = originsBy(found, "own");
+  const common = originsBy(found, "common");
+  const distance = (aligned.with === "common n" ? common : own)?.extra_distance;
   return {
     cases: [first.name, second.name],
     align: settings.align,
-    tolerance: settings.tolerance,
+    tolerance,
     overlap: laid.overlap,
     why: laid.why,
-    quantities: ratios(laid, resampled, settings.tolerance),
-    extra_distance: extraDistance(aligned, resampled, cases),
-    matched_distance: matchedDistance(laid, resampled),
-    common_n: commonN(aligned),
+    quantities: pairRatios(laid, spreads, tolerance),
+    equivalent_beyond: equivalentBeyond(laid, spreads, quantities, tolerance),
+    extra_distance: distance ?? missing(withoutLaw(found)),
+    ...matchedPlaces(laid, spreads.matched, spreads.intensity),
+    common_n: commonN(found),
+    origins: { own, common },
     aligned_with: aligned.with,
+    spectra: compareSpectra([first, second], found.pair, aligned),
   };
-}
-
-function ratios(laid: Overlay, resampled: Resampled, tolerance: number): Comparison["quantities"] {
-  const formed = comparedQuantities.flatMap((quantity) => {
-    const curve = laid.curves[quantity];
-    const spread = resampled.ratios[quantity];
-    return typeof curve === "string" || spread === null
-      ? []
-      : [{ quantity, logarithm: curve.mean, standard: spread.mean }];
-  });
-  const judged = verdicts(formed, tolerance);
-  const entries = comparedQuantities.map((quantity): [ComparedQuantity, ComparedRatio] => {
-    const at = formed.findIndex((ratio) => ratio.quantity === quantity);
-    const judgement = at < 0 ? null : judged[at];
-    return [quantity, ratioOf(laid.curves[quantity], resampled.ratios[quantity], judgement, laid)];
-  });
-  return Object.fromEntries(entries) as Comparison["quantities"];
-}
-
-function ratioOf(
-  curve: RatioCurve | string,
-  spread: Resampled["ratios"][ComparedQuantity],
-  judgement: Judgement | null,
-  laid: Overlay,
-): ComparedRatio {
-  const unjudged = { verdict: null, p_equivalent: null, p_different: null };
-  if (typeof curve === "string") {
-    const none = missing(curve);
-    return { ratio: none, largest: none, ...unjudged, curve: { xi: [], ratio: [], low: [], high: [] } };
-  }
-  const largest = curve.logarithm.reduce(
-    (most, value) => (Math.abs(value) > Math.abs(most) ? value : most),
-    0,
-  );
-  const end = (side: 1 | -1) =>
-    Array.from(curve.logarithm, (value, i) => {
-      const standard = spread?.curve[i] ?? null;
-      const at = standard === null ? Number.NaN : Math.exp(value + side * normal * standard);
-      return Number.isFinite(at) ? at : null;
-    });
-  return {
-    ratio: spread === null ? bare(Math.exp(curve.mean), noErrors) : logNormal(curve.mean, spread.mean),
-    largest: bare(Math.exp(largest), notTested),
-    ...(judgement ?? unjudged),
-    curve: {
-      xi: Array.from(curve.at, laid.shown),
-      ratio: Array.from(curve.logarithm, Math.exp),
-      low: end(-1),
-      high: end(1),
-    },
-  };
-}
-
-function logNormal(logarithm: number, standard: number): Quantity {
-  const [low, high] = [logarithm - normal * standard, logarithm + normal * standard].map(Math.exp);
-  return estimate(Math.exp(logarithm), low, high, { standard, freedom: null, scale: "log" });
 }
 
 function linearNormal(value: number, standard: number): Quantity {
@@ -104,29 +65,78 @@ function linearNormal(value: number, standard: number): Quantity {
   return estimate(value, value - reach, value + reach, { standard, freedom: null, scale: "linear" });
 }
 
-function extraDistance(
-  { origins, why }: Alignment,
-  { distance }: Resampled,
-  cases: Parameters<typeof alignment>[0],
-): Quantity {
-  if (origins === null) return missing(why ?? "a case has no virtual origin");
-  const value = origins[1] - origins[0];
-  const bothHeld = cases.every(({ law }) => law !== null && law.fitted.fit.held.x0 !== null);
-  if (bothHeld) return bare(value, "both origins are held, not fitted");
-  return distance === null
-    ? bare(value, "the refits do not settle on an origin")
-    : linearNormal(value, distance);
+/** Exponents and origins of the pair by one way of fitting; null where a case has no law, or the way was not tried. */
+function originsBy(found: PairFindings, way: "own" | "common"): AlignedOrigins | null {
+  const { aligned, resampled, inputs, cases, at } = found;
+  const { of } = found.pair;
+  const origins = aligned.origins[way];
+  const [a, b] = of.map((one) => origins?.[one] ?? null);
+  if (a === null || b === null) return null;
+  const held = of.map((one) => cases[one].law?.fitted.fit.held.x0 !== null);
+  const spreads = resampled.origins[way];
+  const origin = (one: 0 | 1, value: number): Quantity => {
+    const spread = spreads?.[of[one]] ?? null;
+    if (held[one]) return bare(value, "held, not fitted");
+    return spread === null ? bare(value, unsettled) : linearNormal(value, spread);
+  };
+  const spread = resampled.pairs[at].distance[way];
+  const apart = held.every(Boolean)
+    ? bare(b - a, "both origins are held, not fitted")
+    : spread === null
+      ? bare(b - a, unsettled)
+      : linearNormal(b - a, spread);
+  const exponent = (one: 0 | 1): Quantity =>
+    way === "common" && aligned.common !== null
+      ? sharedExponent(aligned.common)
+      : inputs[of[one]].decay.given_window.n;
+  return { n: [exponent(0), exponent(1)], x0: [origin(0, a), origin(1, b)], extra_distance: apart };
 }
 
-function matchedDistance({ matched }: Overlay, resampled: Resampled): Quantity {
-  if (typeof matched === "string") return missing(matched);
-  if (resampled.matched === null) return bare(matched.distance, noErrors);
-  return linearNormal(matched.distance, resampled.matched);
+const unsettled = "the refits do not settle on an origin";
+
+function sharedExponent({ n, low, high }: CommonExponent): Quantity {
+  return estimate(n, low ?? Number.NEGATIVE_INFINITY, high ?? Number.POSITIVE_INFINITY);
 }
 
-function commonN({ common, why }: Alignment): Comparison["common_n"] {
-  if (common === null)
-    return { value: null, low: null, high: null, p: null, why: why ?? "a case has no exponent" };
-  const { n, low, high, p, test, AICc } = common;
+/** x_B - x_A at equal Tu, and both places. */
+function matchedPlaces(
+  { matched }: Overlay,
+  spread: number | null,
+  ofIntensity: number | null,
+): Pick<Comparison, "matched_distance" | "matched"> {
+  if (typeof matched === "string") {
+    const none = missing(matched);
+    return { matched_distance: none, matched: { x: [none, none], Tu: none } };
+  }
+  const { x, logarithm, distance } = matched;
+  const told = (value: number) => (spread === null ? bare(value, noErrors) : linearNormal(value, spread));
+  const [low, high] = [-1, 1].map((side) =>
+    Math.exp(logarithm + side * normal * (ofIntensity ?? Number.NaN)),
+  );
+  return {
+    matched_distance: told(distance),
+    matched: {
+      x: [bare(x, "chosen, not measured"), told(x + distance)],
+      Tu:
+        ofIntensity === null ? bare(Math.exp(logarithm), noErrors) : estimate(Math.exp(logarithm), low, high),
+    },
+  };
+}
+
+/** One exponent for this pair. */
+function commonN(found: PairFindings): Comparison["common_n"] {
+  const laws = found.pair.of.map((one) => found.cases[one].law);
+  const fits = laws.flatMap((law) => (law === null ? [] : [law.fitted]));
+  const none = { value: null, low: null, high: null, p: null };
+  if (fits.length < 2) return { ...none, why: withoutLaw(found) };
+  if (fits.some(({ fit }) => fit.held.n !== null)) return { ...none, why: "the exponent of a case is held" };
+  // with two cases it has been found already
+  const two = found.cases.filter(({ law }) => law !== null).length === 2;
+  const { n, low, high, p, test, AICc } = (two ? found.aligned.common : null) ?? commonExponent(fits);
   return { value: n, low, high, p, test, AICc };
+}
+
+function withoutLaw({ cases, pair }: PairFindings): string {
+  const names = pair.of.filter((one) => cases[one].law === null).map((one) => cases[one].name);
+  return `${names.join(" and ")}: no law was fitted`;
 }

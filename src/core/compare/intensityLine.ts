@@ -34,3 +34,8 @@ export function intensityLine(x: ArrayLike<number>, y: ArrayLike<number>, x0: nu
 export function placeOfIntensity({ level, slope, x0 }: IntensityLine, logarithm: number): number {
   return x0 + Math.exp((level - logarithm) / slope);
 }
+
+/** ln Tu of the line at x above its origin. */
+export function intensityAt({ level, slope, x0 }: IntensityLine, x: number): number {
+  return level - slope * Math.log(x - x0);
+}

@@ -20,11 +20,26 @@ export function interpolate(
   }
 }
 
-/** Mean of a piecewise straight curve over its range (trapezoid, exact); its one value where the range is a point. */
-export function meanOver(s: ArrayLike<number>, y: ArrayLike<number>): number {
-  const last = s.length - 1;
-  if (!(s[last] > s[0])) return y[0];
+/**
+ * Mean of a piecewise straight curve over a part of its range (exact); its value there where the part is a point.
+ * @param s    ascending places
+ * @param from where the part begins; no lower than s[0]
+ * @param to   where it ends; no higher than the last s
+ */
+export function meanBetween(s: ArrayLike<number>, y: ArrayLike<number>, from: number, to: number): number {
   let area = 0;
-  for (let i = 0; i < last; i++) area += ((y[i] + y[i + 1]) / 2) * (s[i + 1] - s[i]);
-  return area / (s[last] - s[0]);
+  for (let i = 0; i < s.length - 1; i++) {
+    const low = Math.max(s[i], from);
+    const high = Math.min(s[i + 1], to);
+    if (high > low) area += (high - low) * valueAt(s, y, i, (low + high) / 2);
+  }
+  if (to > from) return area / (to - from);
+  let piece = 0;
+  while (piece < s.length - 2 && s[piece + 1] < from) piece++;
+  return s.length < 2 ? y[0] : valueAt(s, y, piece, from);
+}
+
+function valueAt(s: ArrayLike<number>, y: ArrayLike<number>, piece: number, at: number): number {
+  const width = s[piece + 1] - s[piece];
+  return width > 0 ? y[piece] + ((at - s[piece]) / width) * (y[piece + 1] - y[piece]) : y[piece];
 }

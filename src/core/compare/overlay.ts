@@ -2,8 +2,10 @@ import { type CaseInput, type ComparedQuantity, comparedQuantities } from "../co
 import type { Alignment } from "./alignment.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import type { ComparedSeries } from "./comparedSeries.ts";
-import { type IntensityLine, intensityLine, placeOfIntensity } from "./intensityLine.ts";
-import { interpolate, meanOver } from "./interpolate.ts";
+import { type IntensityLine, intensityLine } from "./intensityLine.ts";
+import { interpolate, meanBetween } from "./interpolate.ts";
+import { type MatchedIntensity, matchedIntensity } from "./matchedIntensity.ts";
+import { stretchesOf } from "./stretchesOf.ts";
 
 /** Two cases laid over one another on a common coordinate s: ln xi, x, or -ln Tu. */
 export interface Overlay {
@@ -12,6 +14,8 @@ export interface Overlay {
   readonly why: string | null;
   /** Where each quantity is compared, or why it cannot be. */
   readonly curves: Readonly<Record<ComparedQuantity, RatioCurve | string>>;
+  /** Stretches of the common range, in s. */
+  readonly stretches: readonly (readonly [number, number])[];
   readonly matched: MatchedIntensity | string;
   /** Coordinates of a case's stations once its origin is known (and the line of its intensity). */
   readonly coordinates: (at: 0 | 1, x0: number, line: IntensityLine | null, out: Float64Array) => void;
@@ -28,74 +32,82 @@ export interface RatioCurve {
   readonly mean: number;
 }
 
-/** The place of one intensity in both cases, on the line of each. */
-export interface MatchedIntensity {
-  readonly logarithm: number;
-  readonly distance: number;
+/** What two cases are laid over one another by. */
+export interface Laying {
+  readonly align: Alignment["align"];
+  /** Virtual origins; null where a case has no law. */
+  readonly origins: readonly [number | null, number | null];
+  /** x in the first case at which equal Tu is looked for; null: its body's, else the middle. */
+  readonly at: number | null;
 }
 
 /**
  * Lays two cases over one another: s = ln((x - x0)/ell), x, or -ln Tu on the line of each case's intensity.
  * The ratios are formed by straight interpolation in s on the range both cover; nothing is carried beyond it.
- * @param aligned origins of both
- * @param inputs  the same cases, for their reference lengths
+ * @param inputs the same cases, for their reference lengths
  */
 export function overlay(
   cases: readonly [ComparedCase, ComparedCase],
-  { align, origins, why }: Alignment,
+  { align, origins, at }: Laying,
   inputs: readonly [CaseInput, CaseInput],
 ): Overlay {
-  const lengths = inputs.map(({ decaySettings }) => decaySettings.referenceLength);
-  // with only one reference length the two are compared in the unit of x
-  const [ellA, ellB] = lengths.includes(null) ? [1, 1] : lengths.map((length) => length ?? 1);
-  const coordinates: Overlay["coordinates"] = (at, x0, line, out) => {
-    const { x } = cases[at];
-    const ell = at === 0 ? ellA : ellB;
+  const lengths = commonLengths(inputs);
+  const coordinates: Overlay["coordinates"] = (side, x0, line, out) => {
+    const { x } = cases[side];
     for (let i = 0; i < x.length; i++) {
       if (align === "x") out[i] = x[i];
-      else if (align === "x0" || line === null) out[i] = Math.log((x[i] - x0) / ell);
+      else if (align === "x0" || line === null) out[i] = Math.log((x[i] - x0) / lengths[side]);
       else out[i] = line.slope * Math.log(x[i] - x0) - line.level;
     }
   };
   const shown = shownFrom(align);
-  const lines = linesOf(cases, origins);
-  const matched = matchedIntensity(cases, lines);
+  const lines = cases.map((one, i) => lineOf(one, origins[i]));
+  const matched = matchedIntensity(cases, lines, at ?? inputs[0].decaySettings.body?.x ?? null, at !== null);
   const base = { matched, coordinates, shown };
-  const refused = refusal(align, origins, why, lines);
-  if (refused !== null) return { ...base, overlap: null, why: refused, curves: everyQuantity(() => refused) };
-  const s = cases.map(({ x }, at) => {
+  const refused = refusal(align, cases, origins, lines);
+  if (refused !== null) return { ...base, ...nothing(refused) };
+  const s = cases.map(({ x }, side) => {
     const out = new Float64Array(x.length);
-    coordinates(at === 0 ? 0 : 1, origins?.[at] ?? 0, lines[at], out);
+    coordinates(side === 0 ? 0 : 1, origins[side] ?? 0, lines[side], out);
     return out;
   });
   const low = Math.max(...s.map((own) => own[0] ?? Number.POSITIVE_INFINITY));
   const high = Math.min(...s.map((own) => own[own.length - 1] ?? Number.NEGATIVE_INFINITY));
-  if (!(high > low)) {
-    const apart = "the ranges of the two cases do not overlap";
-    return { ...base, overlap: null, why: apart, curves: everyQuantity(() => apart) };
-  }
+  if (!(high > low)) return { ...base, ...nothing("the ranges of the two cases do not overlap") };
   const curves = everyQuantity((quantity) =>
     align === "Tu" && quantity === "Tu"
       ? "the cases are laid over one another at equal Tu"
       : curve([cases[0].series[quantity], cases[1].series[quantity]], cases, s, low, high),
   );
   const ends = [shown(low), shown(high)].sort((a, b) => a - b);
-  return { ...base, overlap: [ends[0], ends[1]], why: null, curves };
+  const stretches = stretchesOf(s, [low, high]);
+  return { ...base, overlap: [ends[0], ends[1]], why: null, curves, stretches };
 }
 
-function shownFrom(align: Alignment["align"]): Overlay["shown"] {
+/** Reference lengths of both; with only one of them the two are compared in the unit of x. */
+export function commonLengths(inputs: readonly [CaseInput, CaseInput]): readonly [number, number] {
+  const [a, b] = inputs.map(({ decaySettings }) => decaySettings.referenceLength);
+  return a === null || b === null ? [1, 1] : [a, b];
+}
+
+function nothing(why: string): Pick<Overlay, "overlap" | "why" | "curves" | "stretches"> {
+  return { overlap: null, why, curves: everyQuantity(() => why), stretches: [] };
+}
+
+function shownFrom(align: Laying["align"]): Overlay["shown"] {
   if (align === "x") return (s) => s;
   return align === "x0" ? Math.exp : (s) => Math.exp(-s);
 }
 
 function refusal(
-  align: Alignment["align"],
-  origins: Alignment["origins"],
-  why: string | null,
+  align: Laying["align"],
+  cases: readonly ComparedCase[],
+  origins: Laying["origins"],
   lines: readonly (IntensityLine | null)[],
 ): string | null {
   if (align === "x") return null;
-  if (origins === null) return why;
+  const without = cases.filter((_, i) => origins[i] === null).map(({ name }) => name);
+  if (without.length > 0) return `${without.join(" and ")}: no law was fitted`;
   return align === "Tu" && lines.includes(null)
     ? "the intensity of a case does not fall along its window"
     : null;
@@ -133,33 +145,17 @@ function curve(
   interpolate(places[0], first.logarithm, at, a);
   interpolate(places[1], second.logarithm, at, b);
   const logarithm = b.map((value, i) => value - a[i]);
-  return { at, logarithm, mean: meanOver(at, logarithm) };
+  return { at, logarithm, mean: meanBetween(at, logarithm, at[0], at[at.length - 1]) };
 }
 
-/** The line of each case's intensity over its fitted stations; null where it has no law or no Tu. */
-function linesOf(cases: readonly ComparedCase[], origins: Alignment["origins"]): (IntensityLine | null)[] {
-  return cases.map(({ series }, i) => {
-    if (origins === null || typeof series.Tu === "string") return null;
-    const { x, logarithm, point } = series.Tu;
-    const fitted = x.map((_, at) => at).filter((at) => point[at] >= 0);
-    return intensityLine(
-      fitted.map((at) => x[at]),
-      fitted.map((at) => logarithm[at]),
-      origins[i],
-    );
-  });
-}
-
-/** The middle (in ln) of the intensities both windows hold. */
-function matchedIntensity(
-  cases: readonly ComparedCase[],
-  [a, b]: readonly (IntensityLine | null)[],
-): MatchedIntensity | string {
-  if (a === null || b === null) return "a case has no law or no falling intensity in its window";
-  const ranges = cases.map(({ series }) => (typeof series.Tu === "string" ? [0] : series.Tu.logarithm));
-  const low = Math.max(...ranges.map((range) => Math.min(...range)));
-  const high = Math.min(...ranges.map((range) => Math.max(...range)));
-  if (!(high >= low)) return "the windows of the two cases hold no intensity in common";
-  const logarithm = (low + high) / 2;
-  return { logarithm, distance: placeOfIntensity(b, logarithm) - placeOfIntensity(a, logarithm) };
+/** The line of a case's intensity over its fitted stations; null where it has no law or no Tu. */
+function lineOf({ series }: ComparedCase, x0: number | null): IntensityLine | null {
+  if (x0 === null || typeof series.Tu === "string") return null;
+  const { x, logarithm, point } = series.Tu;
+  const fitted = x.map((_, at) => at).filter((at) => point[at] >= 0);
+  return intensityLine(
+    fitted.map((at) => x[at]),
+    fitted.map((at) => logarithm[at]),
+    x0,
+  );
 }

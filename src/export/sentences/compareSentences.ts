@@ -1,18 +1,25 @@
 import { type ComparedQuantity, type Comparison, comparedQuantities } from "../../core/comparison.ts";
-import { type Quantity, scaled } from "../../core/quantity.ts";
+import type { Quantity } from "../../core/quantity.ts";
 import { formatNumber, formatRange, withUnit } from "../../figures/formatNumber.ts";
 import { decimalsOf } from "../../figures/formatQuantity.ts";
+import { beyondSentence } from "./beyondSentence.ts";
+import { distanceSentences } from "./distanceSentences.ts";
 import { type Piece, type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
-import { caseOf, lengthValue, percent, symbolOf } from "./shownValue.ts";
-import { capitalised, chained, listed, reason } from "./words.ts";
+import { caseOf, percent, symbolOf } from "./shownValue.ts";
+import { spectralDistanceSentences } from "./spectralDistanceSentences.ts";
+import { chained, listed, reason } from "./words.ts";
 
-/** The verdicts, what is not compared, and the distances; the cases are those of the comparison, in its order. */
+/**
+ * From where on the cases are equivalent, the verdicts, what is not compared, the distances and the spectra; the cases are
+ * those of the comparison, in its order.
+ */
 export function compareSentences(
   comparison: Comparison,
-  [first, second]: readonly [SentenceCase, SentenceCase],
+  cases: readonly [SentenceCase, SentenceCase],
 ): readonly Sentence[] {
-  const distances = distanceSentences(comparison, first, second);
+  const [first, second] = cases;
+  const distances = distanceSentences(comparison, cases);
   if (comparison.why !== null)
     return [
       say`${caseOf(first)} and ${caseOf(second)} cannot be compared: ${reason(comparison.why)}.`,
@@ -21,11 +28,13 @@ export function compareSentences(
   const of = (verdict: string | null) =>
     comparedQuantities.filter((key) => comparison.quantities[key].verdict === verdict);
   return [
+    beyondSentence(comparison, cases),
     ...verdictSentence(comparison, of("equivalent"), second),
     ...of("different").map((key) => differenceSentence(key, comparison, second)),
     ...undecidedSentence(comparison, of("undecided")),
     ...missingSentences(comparison),
     ...distances,
+    ...spectralDistanceSentences(comparison, cases),
   ];
 }
 
@@ -43,10 +52,10 @@ function verdictSentence(
   const at = places[align];
   if (keys.length === 0)
     return [
-      say`At ${at} nothing of ${caseOf(second)} is shown to be equivalent within ${percent(tolerance)}.`,
+      say`Averaged at ${at}, nothing of ${caseOf(second)} is shown to be equivalent within ${percent(tolerance)}.`,
     ];
   return [
-    say`At ${at} the cases are equivalent within ${percent(tolerance)} in ${listed(keys.map(symbolOf))}.`,
+    say`Averaged at ${at}, the cases are equivalent within ${percent(tolerance)} in ${listed(keys.map(symbolOf))}.`,
   ];
 }
 
@@ -78,7 +87,11 @@ function asChange(ratio: Quantity & { value: number }): {
   const decimals = decimalsOf({ value, low: least, high: most }, 2);
   return {
     larger,
-    value: { kind: "strong", text: withUnit(formatNumber(value, decimals), "%") },
+    value: {
+      kind: "strong",
+      text: withUnit(formatNumber(value, decimals), "%"),
+      about: { key: "ratio", quantity: ratio },
+    },
     interval:
       least === null || most === null
         ? []
@@ -104,40 +117,6 @@ function missingSentences({ quantities }: Comparison): Sentence[] {
     ([why, keys]) =>
       say`${listed(keys.map(symbolOf))} ${keys.length === 1 ? "is" : "are"} not compared: ${reason(why)}.`,
   );
-}
-
-function distanceSentences(
-  { extra_distance, matched_distance }: Comparison,
-  first: SentenceCase,
-  second: SentenceCase,
-): Sentence[] {
-  const origin = distanceSentence(
-    extra_distance,
-    second,
-    (size, where) =>
-      say`The origin of ${caseOf(second)} lies ${size} further ${where} than that of ${caseOf(first)}.`,
-  );
-  const matched = distanceSentence(
-    matched_distance,
-    second,
-    (size, where) => say`At equal intensity ${caseOf(second)} stands ${size} further ${where}.`,
-  );
-  return [...origin, ...matched];
-}
-
-/** A signed distance as a size and a direction; where its interval holds zero, that is said. */
-function distanceSentence(
-  distance: Quantity,
-  of: SentenceCase,
-  sentence: (size: Sentence, where: string) => Sentence,
-): Sentence[] {
-  if (distance.value === null) return [];
-  const upstream = distance.value < 0;
-  const size = lengthValue(scaled(distance, upstream ? -1 : 1), of);
-  const { low, high } = distance;
-  const open = low !== null && high !== null && low < 0 && high > 0;
-  const text = sentence(size, upstream ? "upstream" : "downstream");
-  return open ? [text, say`${capitalised("no shift is not excluded either")}.`] : [text];
 }
 
 /** Words for the note beside the tolerance. */

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { interpolate, meanOver } from "../../../src/core/compare/interpolate.ts";
+import { interpolate, meanBetween } from "../../../src/core/compare/interpolate.ts";
 import { expectClose } from "../../support/expectClose.ts";
 
 describe("interpolation of ln q on ln xi", () => {
@@ -19,14 +19,11 @@ describe("interpolation of ln q on ln xi", () => {
   });
   it("has the mean of a straight line in the middle of its range, however its places lie", () => {
     const s = [1, 1.01, 1.02, 3];
-    expectClose(
-      meanOver(
-        s,
-        s.map((value) => 5 * value),
-      ),
-      10,
-      { relative: 1e-14, because: "the trapezoid is exact" },
-    );
-    expect(meanOver([2], [7])).toBe(7);
+    const y = s.map((value) => 5 * value);
+    const because = "the trapezoid is exact";
+    expectClose(meanBetween(s, y, 1, 3), 10, { relative: 1e-14, because });
+    expectClose(meanBetween(s, y, 1.015, 2), 5 * 1.5075, { relative: 1e-14, because });
+    expectClose(meanBetween(s, y, 1.5, 1.5), 7.5, { relative: 1e-14, because });
+    expect(meanBetween([2], [7], 2, 2)).toBe(7);
   });
 });

@@ -175,15 +175,38 @@ describe("the sentences of two cases side by side", () => {
     expect(text).toContain("L11 and Re_λ are undecided: the data are too few for 10 %.");
     expect(text).toContain("η is not compared: the viscosity of the simulation is not known.");
   });
-  it("give the shift of the origin with its direction", () => {
+  it("open with the place from which on all chosen quantities agree, and with what the second case needs", () => {
+    expect(text).toMatch(
+      /^Beyond \(x − x0\)\/M = 24 screen and simulation are equivalent within 10 % in Tu and L11, and simulation needs 6\.1 M \(3\.2 to 9\.2\) less\./,
+    );
+  });
+  it("say that the whole common range agrees, or from no place on, with the reason", () => {
+    const beyond = madeComparison.equivalent_beyond;
+    const said = (equivalent_beyond: typeof beyond) =>
+      read(compareSentences({ ...madeComparison, equivalent_beyond }, [screen, simulation]));
+    expect(said({ ...beyond, from: 13, why: null })).toMatch(
+      /^Over the whole common range, \(x − x0\)\/M = 13 to 67, screen and simulation are equivalent/,
+    );
+    expect(
+      said({ ...beyond, from: null, why: "the stretch before departs by more than the tolerance" }),
+    ).toMatch(
+      /^From no place on are screen and simulation shown to be equivalent within 10 % in Tu and L11 at once: the stretch/,
+    );
+  });
+  it("give the shift of the origin with its direction, and beside it the distance at equal intensity", () => {
     expect(text).toContain(
-      "The origin of simulation lies 6.1 M (3.2 to 9.2) further upstream than that of screen.",
+      "The origin of simulation lies 6.1 M (3.2 to 9.2) further upstream than that of screen; where screen has Tu = 3.20 % (3.10 to 3.30), at x = 0.60 m, simulation has the same 6.0 M (3.6 to 8.8) further upstream.",
+    );
+  });
+  it("hold the spectra of the middle pair against chance, and count the pairs beyond it", () => {
+    expect(text).toContain(
+      "the spectra at (x − x0)/M = 37 lie D = 0.090 apart, no more than chance makes of two spectra of one turbulence (0.10, p = 0.60); of two such pairs of stations one lies farther apart",
     );
   });
   it("say that no shift is not excluded where the interval holds zero", () => {
     const unsure = { ...madeComparison, extra_distance: { value: -0.01, low: -0.1, high: 0.08 } };
     expect(read(compareSentences(unsure, [screen, simulation]))).toContain(
-      "No shift is not excluded either.",
+      "further upstream than that of screen (no shift is not excluded either)",
     );
   });
   it("count a smaller value in the direction of the change", () => {
