@@ -1,6 +1,7 @@
 import { assert, assertNever } from "../core/failure.ts";
 import type { CaseSheet } from "./caseSheet.ts";
 import { moveBody, setBody } from "./changeBody.ts";
+import { setReduction } from "./changeReduction.ts";
 import type { AddedFiles, Workspace, WorkspaceCase, WorkspaceChange } from "./workspace.ts";
 
 export const emptyWorkspace: Workspace = { schema: 1, title: "", cases: [], axis: "x", picked: [] };
@@ -31,6 +32,8 @@ export function changeWorkspace(workspace: Workspace, change: WorkspaceChange): 
       return setBody(workspace, change);
     case "move-body":
       return moveBody(workspace, change);
+    case "set-reduction":
+      return setReduction(workspace, change);
     case "place-file":
       return placeFile(workspace, change.caseId, change.name, change.x);
     case "set-axis":

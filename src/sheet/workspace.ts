@@ -1,4 +1,5 @@
 import type { CaseSheet, SheetBody, SheetFile } from "./caseSheet.ts";
+import type { ReductionChange } from "./changeReduction.ts";
 
 /** All that a user decides, one immutable value. Results are not in it: they follow from it and the files. */
 export interface Workspace {
@@ -61,6 +62,7 @@ export type WorkspaceChange =
   | ({ readonly kind: "set-body" } & BodyEdit)
   /** The marker of all bodies was moved. */
   | { readonly kind: "move-body"; readonly from: number; readonly to: number }
+  | ({ readonly kind: "set-reduction" } & ReductionChange)
   | { readonly kind: "place-file"; readonly caseId: string; readonly name: string; readonly x: number | null }
   | { readonly kind: "set-axis"; readonly axis: Axis }
   | { readonly kind: "pick"; readonly station: PickedStation }
