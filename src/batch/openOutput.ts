@@ -5,7 +5,7 @@ import { WrongArguments } from "./readArguments.ts";
 /** The folder that results go to. */
 export interface Output {
   /** Writes a file whole or not at all. */
-  write(name: string, text: string): void;
+  write(name: string, content: string | Uint8Array): void;
 }
 
 /**
@@ -36,9 +36,9 @@ export function openOutput(folder: string, names: readonly string[], inputs: rea
       `--out ${folder}: ${folderThere} there is a folder, and a file of that name is to be written`,
     );
   return {
-    write(name, text) {
+    write(name, content) {
       const path = join(folder, name);
-      writeFileSync(`${path}.part`, text);
+      writeFileSync(`${path}.part`, content);
       renameSync(`${path}.part`, path);
     },
   };

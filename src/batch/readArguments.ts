@@ -1,5 +1,6 @@
 import { availableParallelism } from "node:os";
 import { parseArgs } from "node:util";
+import type { Share } from "./shareStations.ts";
 
 /** What the command was asked to do. Paths are as written: relative to the folder it was called in. */
 export interface BatchArguments {
@@ -7,12 +8,24 @@ export interface BatchArguments {
   readonly out: string;
   /** Worker threads. */
   readonly jobs: number;
+  /** Null: all of the work. */
+  readonly share: Share | null;
 }
 
-export const usage = `Usage: npm run --silent batch -- SHEET.json [SHEET.json ...] --out DIR [--jobs N]
+/** To join what shares of the work have written. */
+export interface MergeArguments {
+  readonly folders: readonly string[];
+  readonly out: string;
+  readonly jobs: number;
+}
+
+export const usage = `Usage: npm run --silent batch -- SHEET.json [SHEET.json ...] --out DIR [--jobs N] [--shard I/N]
+       npm run --silent batch -- --merge DIR [DIR ...] --out DIR [--jobs N]
 
   SHEET.json   a case sheet; its files are found relative to it
   --out DIR    folder for results.json and one CASE-stations.csv per case; made if it is not there
+  --shard I/N  share I, from 1, of N: its stations alone, written to DIR/shard-I-of-N.bin
+  --merge      joins the shards in the folders named: the same results as without shards
   --jobs N     worker threads, 1 or more (default: ${availableParallelism()}, one for each core of this machine)
   --help       this text
 
@@ -25,16 +38,20 @@ export class WrongArguments extends Error {}
  * Reads the command line.
  * @param argv what follows the program's name
  * @returns the arguments, or "help" where the usage was asked for
- * @throws WrongArguments an unknown option, no sheet, no --out, a number of jobs that is none
+ * @throws WrongArguments an unknown option, no sheet or folder, no --out, a number of jobs or a share that is none
  */
-export function readArguments(argv: readonly string[]): BatchArguments | "help" {
+export function readArguments(argv: readonly string[]): BatchArguments | MergeArguments | "help" {
   const { values, positionals } = parse(argv);
   if (values.help) return "help";
-  for (const option of ["shard", "merge"] as const)
-    if (values[option] !== undefined) throw new WrongArguments(`--${option} is not there yet`);
-  if (positionals.length === 0) throw new WrongArguments("no case sheet was given");
-  if (values.out === undefined || values.out === "") throw new WrongArguments("--out DIR was not given");
-  return { sheets: positionals, out: values.out, jobs: readJobs(values.jobs) };
+  const { out, merge = false } = values;
+  if (merge && values.shard !== undefined) throw new WrongArguments("--shard and --merge do not go together");
+  if (positionals.length === 0)
+    throw new WrongArguments(merge ? "no folder of shards was given" : "no case sheet was given");
+  if (out === undefined || out === "") throw new WrongArguments("--out DIR was not given");
+  const jobs = readJobs(values.jobs);
+  return merge
+    ? { folders: positionals, out, jobs }
+    : { sheets: positionals, out, jobs, share: readShare(values.shard) };
 }
 
 function parse(argv: readonly string[]) {
@@ -54,6 +71,13 @@ function parse(argv: readonly string[]) {
     // parseArgs throws a TypeError whose first sentence names the option
     throw new WrongArguments(error instanceof Error ? error.message.split(". ")[0] : "unreadable arguments");
   }
+}
+
+function readShare(text: string | undefined): Share | null {
+  if (text === undefined) return null;
+  const [, part, of] = /^([1-9]\d{0,4})\/([1-9]\d{0,4})$/.exec(text)?.map(Number) ?? [];
+  if (!(part <= of)) throw new WrongArguments(`--shard takes I/N with I from 1 to N, found ${text}`);
+  return { part, of };
 }
 
 function readJobs(text: string | undefined): number {

@@ -22,6 +22,8 @@ export const failureCodes = [
   "sheet-invalid",
   "duplicate-case",
   "duplicate-file",
+  "missing-shard",
+  "bad-shard",
   "cancelled",
   "crashed",
 ] as const;
@@ -72,6 +74,11 @@ export class ReductionFailure extends Error {
   plain(): PlainFailure {
     return { code: this.code, ...this.facts, where: this.where };
   }
+}
+
+/** A failure that crossed as plain data, once more as what can be thrown. */
+export function revivedFailure({ code, where, ...facts }: PlainFailure): ReductionFailure {
+  return new ReductionFailure(code, facts, where);
 }
 
 /** "run_x0700.csv, line 48213, column 3: `6.1.4` is not a number. Leave the line out or mend it." */

@@ -1,5 +1,4 @@
-import type { PlainFailure } from "../core/failure.ts";
-import { ReductionFailure } from "../core/failure.ts";
+import { ReductionFailure, revivedFailure } from "../core/failure.ts";
 import type { Ask, Engine, Reply, RunOptions, TaskName, Tasks } from "./protocol.ts";
 
 /** One worker as the pool sees it: asked by messages, ended without being asked. */
@@ -135,7 +134,7 @@ class Pool {
     }
     seat.job = null;
     if (reply.kind === "answer") job.answer(reply.answer);
-    else job.fail(revived(reply.failure));
+    else job.fail(revivedFailure(reply.failure));
     this.#serve();
   }
 
@@ -157,10 +156,6 @@ class Pool {
     this.#seats.delete(seat);
     seat.channel.end();
   }
-}
-
-function revived({ code, where, ...facts }: PlainFailure): ReductionFailure {
-  return new ReductionFailure(code, facts, where);
 }
 
 function cancelled(): ReductionFailure {

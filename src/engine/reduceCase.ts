@@ -1,5 +1,5 @@
 import type { Place, PlainFailure } from "../core/failure.ts";
-import { assert, ReductionFailure } from "../core/failure.ts";
+import { assert, ReductionFailure, revivedFailure } from "../core/failure.ts";
 import type { Flag } from "../core/flag.ts";
 import type { SourceNote } from "../core/records.ts";
 import type { LinePart } from "../core/station/lines/linePart.ts";
@@ -29,12 +29,19 @@ export interface ReduceCaseOptions {
   readonly signal?: AbortSignal | undefined;
   /** Kept from call to call by whoever asks, so that what has not changed is not done again. */
   readonly cache?: ReductionCache;
+  /** What files are known to fail with, by the same keys. */
+  readonly failed?: ReadonlyMap<string, PlainFailure>;
 }
 
 /** Results by a key that changes with the file and with every setting that they depend on. */
 export interface ReductionCache {
-  readonly files: Map<string, FileReduction>;
-  readonly stations: Map<string, StationResult>;
+  readonly files: Kept<FileReduction>;
+  readonly stations: Kept<StationResult>;
+}
+/** As much of a Map as is asked for. */
+interface Kept<T> {
+  get(key: string): T | undefined;
+  set(key: string, value: T): unknown;
 }
 
 export interface CaseReduction {
@@ -58,7 +65,7 @@ export async function reduceCase(
   options: ReduceCaseOptions = {},
 ): Promise<CaseReduction> {
   assert(files.length === sheet.files.length, "every entry of a sheet needs its file");
-  const tried = await Promise.all(files.map((file, i) => reduceOne(engine, sheet, i, file, options)));
+  const tried = await Promise.all(files.map((_, i) => reduceOne(engine, { sheet, files }, i, options)));
   const read = tried.flatMap((end) => ("value" in end ? [end.value] : []));
   const finished = await finishStations(engine, read, reduceSettings(sheet), options);
   const made = finished.flatMap((end) => ("value" in end ? [end.value] : []));
@@ -80,20 +87,35 @@ interface KeyedReduction {
   readonly reduction: FileReduction;
 }
 
-async function reduceOne(
+/** The key that the reduction of entry `i` of a case is kept under. */
+export function reductionKey({ sheet, files }: CaseFiles, i: number): string {
+  const { name, fingerprint } = files[i];
+  return `${name} ${resultKey(fingerprint, readSettings(sheet, sheet.files[i]), reduceSettings(sheet))}`;
+}
+
+/**
+ * One file of a case, read and reduced.
+ * @param i its place among the sheet's entries
+ * @throws cancelled when the signal says so
+ */
+export async function reduceOne(
   engine: Engine,
-  sheet: CaseSheet,
+  of: CaseFiles,
   i: number,
-  file: SourceFile,
   options: ReduceCaseOptions,
 ): Promise<Attempt<KeyedReduction>> {
   const { cache, onProgress, onFailure, onFile, signal } = options;
-  const read = readSettings(sheet, sheet.files[i]);
-  const reduce = reduceSettings(sheet);
-  const key = `${file.name} ${resultKey(file.fingerprint, read, reduce)}`;
+  const file = of.files[i];
+  const key = reductionKey(of, i);
   const known = cache?.files.get(key);
   if (known) onProgress?.(file.bytes);
-  const work = () => engine.run("reduce", { file, read, reduce }, { onProgress, signal });
+  const work = () => {
+    const failure = options.failed?.get(key);
+    if (failure) throw revivedFailure(failure);
+    const read = readSettings(of.sheet, of.sheet.files[i]);
+    const reduce = reduceSettings(of.sheet);
+    return engine.run("reduce", { file, read, reduce }, { onProgress, signal });
+  };
   const end = known ? { value: known } : await attempt(work, options, { file: file.name });
   onFile?.(file);
   if ("failure" in end) return end;
@@ -136,7 +158,7 @@ type Attempt<T> = { readonly value: T } | { readonly failure: PlainFailure };
 
 /** What one file or station fails with is told; that the whole was cancelled ends everything. */
 async function attempt<T>(
-  work: () => Promise<T>,
+  work: () => T | Promise<T>,
   { onFailure, signal }: ReduceCaseOptions,
   where: Place,
 ): Promise<Attempt<T>> {

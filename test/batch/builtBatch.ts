@@ -1,4 +1,4 @@
-import { spawnSync } from "node:child_process";
+import { type ChildProcess, spawn, spawnSync } from "node:child_process";
 import { existsSync, mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join, resolve } from "node:path";
@@ -17,6 +17,8 @@ export interface BuiltBatch {
   /** thread.js beside main.js: what an engine on threads is started with. */
   readonly thread: URL;
   run(args: readonly string[], from: string, env?: Readonly<Record<string, string>>): Ended;
+  /** Begins and does not wait for the end. */
+  begin(args: readonly string[], from: string): ChildProcess;
   remove(): void;
 }
 
@@ -28,6 +30,8 @@ export async function buildBatch(): Promise<BuiltBatch> {
   return {
     thread: new URL(`file://${join(folder, "dist/thread.js")}`),
     run: (args, from, env = {}) => ended("node", [main, ...args], from, env),
+    begin: (args, from) =>
+      spawn("node", [main, ...args], { cwd: from, env: withoutCallersFolder(), stdio: "pipe" }),
     remove: () => rmSync(folder, { recursive: true }),
   };
 }
@@ -49,9 +53,13 @@ function ended(
   from: string,
   env: Readonly<Record<string, string>>,
 ): Ended {
-  // npm has set INIT_CWD for the tests themselves
-  const { INIT_CWD: _own, ...inherited } = process.env;
-  const options = { cwd: from, env: { ...inherited, ...env }, encoding: "utf8" as const };
+  const options = { cwd: from, env: { ...withoutCallersFolder(), ...env }, encoding: "utf8" as const };
   const { status, stdout, stderr } = spawnSync(command, args, options);
   return { code: status, stdout, stderr };
+}
+
+/** npm has set INIT_CWD for the tests themselves. */
+function withoutCallersFolder(): NodeJS.ProcessEnv {
+  const { INIT_CWD: _own, ...inherited } = process.env;
+  return inherited;
 }
