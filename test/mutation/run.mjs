@@ -35,9 +35,8 @@ const name = [folder, ...words].join("-");
 mkdirSync(reports, { recursive: true });
 const results = await new Stryker({
   mutate: mutated,
-  testRunner: "vitest",
-  vitest: { configFile: "test/mutation/vitest.config.ts" },
-  plugins: ["@stryker-mutator/vitest-runner", "./test/mutation/plugins.mjs"],
+  testRunner: "in-process",
+  plugins: ["./test/mutation/plugins.mjs"],
   ignorers: ["prose"],
   checkers: share < 1 ? ["sample"] : [],
   coverageAnalysis: "perTest",
@@ -45,7 +44,7 @@ const results = await new Stryker({
   concurrency: 1,
   timeoutMS: 10_000,
   timeoutFactor: 3,
-  // the runner strips types without checking them, so nothing need be switched off in the copies
+  // the bundler strips types without checking them, so nothing need be switched off in the copies
   disableTypeChecks: false,
   ignorePatterns: [
     "**",
@@ -56,7 +55,7 @@ const results = await new Stryker({
     ),
   ],
   tempDirName: join(reports, `copy-${process.pid}`),
-  reporters: ["html", "json"],
+  reporters: ["progress-append-only", "html", "json"],
   htmlReporter: { fileName: join(reports, `${name}.html`) },
   jsonReporter: { fileName: join(reports, `${name}.json`) },
   allowConsoleColors: false,

@@ -1,5 +1,5 @@
 import { relative } from "node:path";
-import { notDrawn } from "./plugins.mjs";
+import { notDrawn } from "./sample.mjs";
 
 /** Statuses that count, and the two of them that count as a kill: a mutant that never ends has been noticed. */
 const counted = ["Killed", "Timeout", "Survived", "NoCoverage"];
