@@ -1,3 +1,4 @@
+import { argumentLabels } from "./argumentLabels.ts";
 import { bodyLabels } from "./bodyLabels.ts";
 import { compareLabels } from "./compareLabels.ts";
 import { decayLabels } from "./decayLabels.ts";
@@ -43,6 +44,7 @@ export const catalogue: Readonly<Record<string, Label>> = Object.fromEntries(
     ...routeLabels,
     ...factLabels,
     ...decayLabels,
+    ...argumentLabels,
     ...compareLabels,
     ...bodyLabels,
     ...figureLabels,

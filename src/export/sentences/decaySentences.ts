@@ -3,6 +3,7 @@ import type { DecayResult } from "../../core/decayResult.ts";
 import { estimate } from "../../core/quantity.ts";
 import { formatProbability } from "../../figures/formatNumber.ts";
 import { type Sentence, say } from "./piece.ts";
+import { sensitivitySentence } from "./sensitivitySentence.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
 import {
   caseOf,
@@ -25,6 +26,7 @@ export function decaySentences(
   const laws = fitted.flatMap((of, i) => (of.decay === null ? [] : [lawPart(of, of.decay, i === 0)]));
   return [
     ...(laws.length === 0 ? [] : [say`${chained(laws)}.`]),
+    ...fitted.flatMap(sensitivitySentence),
     ...(comparison === null ? [] : commonExponent(comparison)),
     ...cases.filter(({ decay }) => decay !== null && !decay.law).map(noLawSentence),
   ];
