@@ -7,7 +7,7 @@ export interface RecordCut {
   /** Place of the probe across the stream; null where it is not known. */
   readonly y: number | null;
   readonly z: number | null;
-  /** Sample with which the record goes on, counted from 1 over all samples of the probe in the file. */
+  /** Sample with which the record goes on, counted from 1 over those of the probe in the file after its start-up. */
   readonly at: number;
   /**
    * backward: the older run is left out from `to` on, where the newer one begins · gap: nothing is correlated across

@@ -37,7 +37,7 @@ function rowsOf(count: number): string[] {
 }
 
 const textOf = (rows: readonly string[]) => `t,u\n${rows.join("\n")}\n`;
-const numbersOf = ({ plan: _plan, flags: _flags, ...numbers }: StationPart) => numbers;
+const numbersOf = ({ plan: _plan, flags: _flags, cuts: _cuts, ...numbers }: StationPart) => numbers;
 const codes = (part: StationPart) => part.flags.map(({ code }) => code);
 
 describe("a file whose simulation was restarted", () => {

@@ -1,11 +1,22 @@
+import type { OwnCut } from "./cutList.ts";
+
 /** A restart whose time reaches back into what was there already. */
-export interface BranchCut {
+interface Restart {
   /** Index of the newer run's first sample, counted over all samples of the file. */
   readonly sample: number;
   /** Its time. */
   readonly time: number;
   /** Samples of the older run that were left out. */
   readonly dropped: number;
+}
+export interface BranchCut extends Restart {
+  /** Time that the older run had reached. */
+  readonly from: number;
+}
+
+/** A restart as it is listed. */
+export function listedCut({ sample, time, from, dropped }: BranchCut): OwnCut {
+  return { at: sample + 1, kind: "backward", from, to: time, samples: dropped };
 }
 
 /** A sample of the older run goes where it lies within half a step of the restart, or later. */
@@ -15,8 +26,8 @@ export const cutTolerance = 0.5;
  * Leaves out what restarts have overtaken, once all restarts are known: a sample goes where any later run began
  * at its time or before. What a sequence of cuts would leave is the same.
  */
-export class CutSieve {
-  private readonly cuts: readonly BranchCut[];
+export class CutSieve<Cut extends Restart> {
+  private readonly cuts: readonly Cut[];
   /** Earliest restart from the i-th on, less the tolerance. */
   private readonly bounds: Float64Array;
   private readonly gone: Float64Array;
@@ -24,7 +35,7 @@ export class CutSieve {
   private next = 0;
 
   /** @param cuts  in order of `sample` */
-  constructor(cuts: readonly BranchCut[], step: number) {
+  constructor(cuts: readonly Cut[], step: number) {
     this.cuts = cuts;
     this.tolerance = cutTolerance * step;
     this.bounds = new Float64Array(cuts.length + 1).fill(Infinity);
@@ -47,7 +58,7 @@ export class CutSieve {
   }
 
   /** The cuts with the samples that each took. */
-  tally(): BranchCut[] {
+  tally(): Cut[] {
     return this.cuts.map((cut, j) => ({ ...cut, dropped: this.gone[j] }));
   }
 }

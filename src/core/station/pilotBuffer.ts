@@ -3,10 +3,12 @@ import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import { type BranchCut, cutTolerance } from "./branchCuts.ts";
 import { borrowColumn, returnColumn } from "./columnStore.ts";
+import { CutKeeper, type CutList } from "./cutList.ts";
 import { examineSteps } from "./examineSteps.ts";
 import { planRecord } from "./planRecord.ts";
 import { backwardTime, tooFew } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
+import { type PlaceOf, SamplePlaces } from "./samplePlaces.ts";
 import type { Component } from "./stationPart.ts";
 
 export interface PilotFacts {
@@ -18,8 +20,11 @@ export interface PilotFacts {
   /** Samples of the pilot. */
   readonly held: number;
   readonly cuts: readonly BranchCut[];
-  /** Samples that were sent once more under the same time. */
+  /** Samples that were sent once more under the same time, all and one by one. */
   readonly repeated: number;
+  readonly twice: CutList;
+  /** Index in the file of a sample of the pilot. */
+  readonly place: PlaceOf;
 }
 
 const smallest = 1 << 14;
@@ -45,6 +50,8 @@ export class PilotBuffer {
   private firstTime = 0;
   private readonly cuts: BranchCut[] = [];
   private repeated = 0;
+  private readonly twice = new CutKeeper();
+  private places = new SamplePlaces();
   /** Stamps alike are one sample sent twice; null: not known yet, for they may be rounded. */
   private oneSample: boolean | null = null;
 
@@ -54,13 +61,17 @@ export class PilotBuffer {
     this.startup = startup;
   }
 
-  /** Takes samples until it holds `limit`; returns the index in the block of the first it left. */
-  add(block: VelocityBlock, from: number, limit: number): number {
+  /**
+   * Takes samples until it holds `limit`; returns the index in the block of the first it left.
+   * @param place  of the block's samples in the file
+   */
+  add(block: VelocityBlock, from: number, limit: number, place: PlaceOf): number {
     let i = this.skip(block, from);
     if (i >= block.count) return i;
     if (this.columns.length === 0) this.open(block);
     while (i < block.count && this.count < limit) {
-      const to = this.endOfRun(block.t, i, Math.min(block.count, i + limit - this.count));
+      const to = this.endOfRun(block.t, i, Math.min(block.count, i + limit - this.count), place(i));
+      this.places.follow(this.count, place(i));
       this.copy(block, i, to);
       this.seen += to - i;
       i = to;
@@ -80,9 +91,15 @@ export class PilotBuffer {
     if (!(t[this.count - 1] > t[0])) return;
     this.oneSample = !examineSteps(t, this.count, this.origin).rounded;
     if (!this.oneSample) return;
+    const { of: placeOf } = this.places;
+    this.places = new SamplePlaces();
     let kept = 0;
     for (let i = 0; i < this.count; i++) {
-      if (i + 1 < this.count && t[i + 1] === t[i]) continue;
+      if (i + 1 < this.count && t[i + 1] === t[i]) {
+        this.twice.add({ at: placeOf(i + 1) + 1, kind: "repeated", from: t[i], to: t[i], samples: 1 });
+        continue;
+      }
+      this.places.follow(kept, placeOf(i));
       for (const column of this.columns) column[kept] = column[i];
       kept++;
     }
@@ -116,7 +133,7 @@ export class PilotBuffer {
 
   facts(): PilotFacts {
     const t = this.times();
-    const { components, skipped, count, cuts, repeated } = this;
+    const { components, skipped, count, cuts, repeated, twice, places } = this;
     if (count === 0) throw tooFew(0, 1, this.origin);
     return {
       components,
@@ -125,6 +142,8 @@ export class PilotBuffer {
       held: count,
       cuts,
       repeated,
+      twice: twice.list(),
+      place: places.of,
     };
   }
 
@@ -149,29 +168,32 @@ export class PilotBuffer {
   }
 
   /** Samples in order of time from `from` on, after those held; where it goes back, the older run is cut. */
-  private endOfRun(t: Float64Array | null, from: number, most: number): number {
+  private endOfRun(t: Float64Array | null, from: number, most: number, place: number): number {
     const held = this.times();
     if (t === null || held === null) return most;
     if (this.count > 0) {
       const last = held[this.count - 1];
-      if (t[from] < last) this.cut(held, t[from]);
-      else if (t[from] === last && this.oneSample) this.drop(1);
+      if (t[from] < last) this.cut(held, t[from], place);
+      else if (t[from] === last && this.oneSample) this.drop(t[from], place);
     }
     let to = from + 1;
     while (to < most && (t[to] > t[to - 1] || (t[to] === t[to - 1] && !this.oneSample))) to++;
     return to;
   }
 
-  private cut(held: Float64Array, time: number): void {
+  private cut(held: Float64Array, time: number, place: number): void {
     const bound = time - cutTolerance * recentStep(held, this.count);
     const before = this.count;
+    const from = held[before - 1];
     while (this.count > 0 && held[this.count - 1] > bound) this.count--;
-    this.cuts.push({ sample: this.seen, time, dropped: before - this.count });
+    this.cuts.push({ sample: place, time, from, dropped: before - this.count });
   }
 
-  private drop(samples: number): void {
-    this.count -= samples;
-    this.repeated += samples;
+  /** The newer of two samples under one time stands for both. */
+  private drop(time: number, place: number): void {
+    this.count--;
+    this.repeated++;
+    this.twice.add({ at: place + 1, kind: "repeated", from: time, to: time, samples: 1 });
   }
 
   private copy(block: VelocityBlock, from: number, to: number): void {

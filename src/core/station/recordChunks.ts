@@ -1,11 +1,13 @@
 import { assert } from "../failure.ts";
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { BranchCut } from "./branchCuts.ts";
+import { CutKeeper, type CutList } from "./cutList.ts";
 import { EvenSteps } from "./evenSteps.ts";
 import type { PilotFacts } from "./pilotBuffer.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { historyOf, RecordSums } from "./recordSums.ts";
 import { ResamplingResponse } from "./resamplingResponse.ts";
+import type { PlaceOf } from "./samplePlaces.ts";
 import { gapSteps, isEqualStep } from "./stepRule.ts";
 import { WeightedMoments } from "./weightedMoments.ts";
 
@@ -26,6 +28,8 @@ export interface ClosedRecord {
   /** Time that the gaps took. */
   readonly lost: number;
   readonly repeated: number;
+  /** The gaps and the repeated samples one by one. */
+  readonly seamList: CutList;
   /** Restarts past the pilot: what they overtook is among the sums, and the record has to be read once more. */
   readonly cuts: readonly BranchCut[];
   readonly response: ResamplingResponse;
@@ -59,6 +63,7 @@ export class RecordChunks {
   private gaps = 0;
   private lost = 0;
   private repeated = 0;
+  private readonly listed = new CutKeeper();
   private last: number | null = null;
 
   constructor(plan: RecordPlan, origin: RecordOrigin, facts: PilotFacts) {
@@ -78,16 +83,17 @@ export class RecordChunks {
   }
 
   /**
-   * @param raw  index of the block's first sample, counted over all samples of the file
+   * @param place  of the block's samples in the file
    * @throws not-a-number
    */
-  add(block: VelocityBlock, from: number, raw: number): void {
+  add(block: VelocityBlock, from: number, place: PlaceOf): void {
     for (let i = from; i < block.count; ) {
       if (block.t !== null && this.isRepeated(block.t[i])) {
-        this.replace(block, i++);
+        this.replace(block, i, place(i));
+        i++;
         continue;
       }
-      if (block.t !== null) this.step(block.t[i], raw + i);
+      if (block.t !== null) this.step(block.t[i], place(i));
       const to = this.endOfRun(block.t, i, block.count);
       this.take(block, i, to);
       i = to;
@@ -99,8 +105,8 @@ export class RecordChunks {
     this.flush();
     const { plan, samples, sums, unequal, gaps, lost, repeated, cuts, response, last, facts } = this;
     const duration = plan.weighted && last !== null ? last - facts.start - lost : samples * plan.step;
-    const counted = { samples, longest: this.longest, duration, unequal, gaps, lost, repeated, cuts };
-    return { sums, ...counted, lowestSpeed: this.lowest, response };
+    const counted = { samples, longest: this.longest, duration, unequal, gaps, lost, repeated };
+    return { sums, ...counted, seamList: this.listed.list(), cuts, lowestSpeed: this.lowest, response };
   }
 
   private isRepeated(time: number): boolean {
@@ -109,14 +115,16 @@ export class RecordChunks {
   }
 
   /** Whether the step to this time is the record's, a gap, or one back. */
-  private step(time: number, raw: number): void {
+  private step(time: number, place: number): void {
     const { last, plan } = this;
     this.last = time;
     if (last === null) return;
     if (time < last) {
-      this.cuts.push({ sample: raw, time, dropped: 0 });
+      this.cuts.push({ sample: place, time, from: last, dropped: 0 });
       this.seam();
     } else if (time - last > gapSteps * plan.step) {
+      const samples = Math.round((time - last) / plan.step) - 1;
+      this.listed.add({ at: place + 1, kind: "gap", from: last, to: time, samples });
       this.gaps++;
       this.lost += time - last;
       this.seam();
@@ -161,8 +169,10 @@ export class RecordChunks {
   }
 
   /** The newer of two samples under one time stands for both. */
-  private replace(block: VelocityBlock, i: number): void {
+  private replace(block: VelocityBlock, i: number, place: number): void {
     this.repeated++;
+    const time = block.t?.[i] ?? 0;
+    this.listed.add({ at: place + 1, kind: "repeated", from: time, to: time, samples: 1 });
     this.read(this.arrays(block), block.t, i);
     if (block.u[i] < this.lowest) this.lowest = block.u[i];
     this.even?.replace(this.sample);

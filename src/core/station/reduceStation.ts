@@ -11,6 +11,7 @@ import { usualTime } from "./recordTime.ts";
 import { sampling as samplingOf } from "./sampling.ts";
 import { stationBasis } from "./stationBasis.ts";
 import { stationCurves } from "./stationCurves.ts";
+import { stationCuts } from "./stationCuts.ts";
 import { replicates } from "./stationErrors.ts";
 import { stationFacts } from "./stationFacts.ts";
 import { stationFlags } from "./stationFlags.ts";
@@ -71,6 +72,7 @@ export function reduceStation(parts: readonly StationPart[], settings: ReduceSet
     blocks: divided.length > 0 ? null : table,
     facts,
     ...(compared ? { probes: compared.probes } : {}),
+    ...stationCuts(given.record.parts),
   };
 }
 

@@ -1,7 +1,8 @@
 import type { Flag } from "../flag.ts";
 import { jointLayout, pairIndex } from "../signal/jointMoments.ts";
 import type { ReduceSettings } from "../stationResult.ts";
-import type { BranchCut } from "./branchCuts.ts";
+import { type BranchCut, listedCut } from "./branchCuts.ts";
+import { joinCuts } from "./cutList.ts";
 import { replan } from "./planRecord.ts";
 import type { ClosedRecord, RecordChunks } from "./recordChunks.ts";
 import { wholeMoments } from "./recordCorrelation.ts";
@@ -40,7 +41,12 @@ export function settle(
     flags: [],
   });
   const all = [...cuts, ...facts.cuts];
-  const part = { ...sums, flags: recordFlags(record, closed, all, sums) };
+  const listed = joinCuts([{ first: all.map(listedCut), more: 0 }, facts.twice, closed.seamList]);
+  const part = {
+    ...sums,
+    flags: recordFlags(record, closed, all, sums),
+    ...(listed.first.length > 0 ? { cuts: listed } : {}),
+  };
   // a record that is its own pilot has nothing to differ from
   if (last || closed.samples === facts.held) return { part };
   const restarts = plan.cuts ?? [...facts.cuts, ...closed.cuts];

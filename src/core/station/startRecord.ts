@@ -1,9 +1,10 @@
 import type { RecordOrigin, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
-import { CutSieve } from "./branchCuts.ts";
+import { type BranchCut, CutSieve } from "./branchCuts.ts";
 import { PilotBuffer } from "./pilotBuffer.ts";
 import { RecordChunks } from "./recordChunks.ts";
 import type { RecordPlan } from "./recordPlan.ts";
+import type { PlaceOf } from "./samplePlaces.ts";
 import { settle } from "./settleRecord.ts";
 import type { StationPart } from "./stationPart.ts";
 
@@ -56,14 +57,14 @@ export function startRecord(
   function begin(): RecordChunks {
     pilot.settle();
     const opened = new RecordChunks(plan ?? pilot.plan(settings), origin, pilot.facts());
-    opened.add(pilot.block(), 0, 0);
+    opened.add(pilot.block(), 0, pilot.facts().place);
     pilot.release();
     return opened;
   }
   /** Fills the pilot; the index in the block of the first sample that it left, or null where it wants more. */
-  function fill(block: VelocityBlock): number | null {
+  function fill(block: VelocityBlock, place: PlaceOf): number | null {
     for (let from = 0; ; ) {
-      from = pilot.add(block, from, held);
+      from = pilot.add(block, from, held, place);
       if (!pilot.holds(held)) return null;
       // stamps alike may turn out to be one sample sent twice: then there is room again
       pilot.settle();
@@ -72,11 +73,13 @@ export function startRecord(
   }
   return {
     add(given) {
-      const block = sieve === null ? given : sifted(given, raw, sieve);
-      const from = record === null ? fill(block) : 0;
+      const { block, kept } = sieve === null ? { block: given, kept: null } : sifted(given, raw, sieve);
+      const before = raw;
+      const place = (i: number) => before + (kept === null ? i : kept[i]);
+      const from = record === null ? fill(block, place) : 0;
       if (from !== null) {
         record ??= begin();
-        record.add(block, from, raw);
+        record.add(block, from, place);
       }
       raw += given.count;
     },
@@ -87,13 +90,17 @@ export function startRecord(
   };
 }
 
-/** The samples of a block that no later run overtakes. */
-function sifted(block: VelocityBlock, raw: number, sieve: CutSieve): VelocityBlock {
+/** The samples of a block that no later run overtakes, and which of it they are; null: all. */
+function sifted(
+  block: VelocityBlock,
+  raw: number,
+  sieve: CutSieve<BranchCut>,
+): { block: VelocityBlock; kept: readonly number[] | null } {
   const { t, u, v, w } = block;
-  if (t === null) return block;
+  if (t === null) return { block, kept: null };
   const kept: number[] = [];
   for (let i = 0; i < block.count; i++) if (sieve.keeps(raw + i, t[i])) kept.push(i);
-  if (kept.length === block.count) return block;
+  if (kept.length === block.count) return { block, kept: null };
   const of = (column: Float64Array) => Float64Array.from(kept, (i) => column[i]);
-  return { count: kept.length, t: of(t), u: of(u), v: v && of(v), w: w && of(w) };
+  return { block: { count: kept.length, t: of(t), u: of(u), v: v && of(v), w: w && of(w) }, kept };
 }

@@ -1,6 +1,7 @@
 import type { Flag } from "../flag.ts";
 import type { RecordOrigin } from "../records.ts";
 import type { BlockTable, StationResult } from "../stationResult.ts";
+import type { CutList } from "./cutList.ts";
 import type { LinePart } from "./lines/linePart.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 
@@ -33,6 +34,8 @@ export interface StationPart {
   /** A record that repeats itself: the time after which u comes back, and how much alike. */
   readonly replay?: { readonly period: number; readonly peak: number } | null;
   readonly flags: readonly Flag[];
+  /** Where it was cut; left out where nowhere. */
+  readonly cuts?: CutList;
 }
 
 /** Lag products about the plan's reference, a list a component. */

@@ -37,15 +37,22 @@ export function timeFlags({ plan, closed, cuts, part, repeated }: TimeFacts): Fl
   return flags;
 }
 
-/** Every restart by itself: which time it went back to, and how much of the older run it cost. */
+/** Restarts that the flag tells by themselves; all stand in the list of cuts. */
+const mostTold = 3;
+
+/** The first restarts: which time each went back to, and how much of the older run it cost. */
 function cutText(cuts: readonly BranchCut[], repeated: number): string {
-  const list = cuts.map(
-    ({ sample, time, dropped }) =>
-      `at sample ${sample + 1} back to ${time} (${dropped} older samples left out)`,
-  );
+  const list = cuts
+    .slice(0, mostTold)
+    .map(
+      ({ sample, time, dropped }) =>
+        `at sample ${sample + 1} back to ${time} (${dropped} older samples left out)`,
+    );
   const times = cuts.length === 1 ? "once" : `${cuts.length} times`;
   const back =
-    cuts.length > 0 ? `Time runs backward ${times}, and the newer run is kept: ${list.join("; ")}.` : "";
+    cuts.length > 0
+      ? `Time runs backward ${times}, and the newer run is kept: ${list.join("; ")}${cuts.length > mostTold ? "; and so on" : ""}.`
+      : "";
   const twice =
     repeated > 0
       ? `${repeated} ${repeated === 1 ? "sample was" : "samples were"} sent once more under the same time: the newer one is kept.`

@@ -28,8 +28,8 @@ function picked(signal: Timed, indices: readonly number[]): Timed {
 
 const range = (from: number, to: number) => Array.from({ length: to - from }, (_, i) => from + i);
 const flagOf = (part: StationPart, code: Flag["code"]) => part.flags.find((flag) => flag.code === code);
-/** All that a part is made of but its plan and its flags. */
-const numbersOf = ({ plan: _plan, flags: _flags, ...numbers }: StationPart) => numbers;
+/** All that a part is made of but its plan, its flags and where it was cut. */
+const numbersOf = ({ plan: _plan, flags: _flags, cuts: _cuts, ...numbers }: StationPart) => numbers;
 
 /** A record read as a file would be: once more with a new plan where that is asked for. */
 function readAll(signal: Signal, pilot: number, cuts: readonly number[] = []): StationPart {
