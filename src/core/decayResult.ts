@@ -79,6 +79,19 @@ export interface PowerLaw {
   readonly flight?: Flight | null;
 }
 
+/** What speaks for a near field of which a rest remains in the window. */
+export interface NearFieldSigns {
+  /** Stations upstream of an automatic window that its chi-square left out. */
+  readonly left_out: number;
+  /** By how much the last of them departs from the law, as a share of q; null: none was left out. */
+  readonly departure: number | null;
+  /** A term that dies out along the window: its share of q at the first station, and that in its standard errors. */
+  readonly term: number | null;
+  readonly term_size: number | null;
+  /** Probability of a term at least that large on a pure law; null where the stations cannot tell one. */
+  readonly p: number | null;
+}
+
 /** A named exponent, and how probable data so far from it are. */
 export interface Hypothesis {
   readonly name: string;
@@ -121,6 +134,8 @@ export interface DecayResult {
   readonly hypotheses: readonly Hypothesis[];
   readonly law: PowerLaw | null;
   readonly points: readonly DecayPoint[];
+  /** Null or left out: there is no law. */
+  readonly near_field?: NearFieldSigns | null;
   /** Groups of common blocks behind the intervals, and the mean correlation of neighbours; null: each station for itself. */
   readonly together?: { readonly groups: number; readonly correlation: number } | null;
   /** Left out by a fit in the frame. */

@@ -46,6 +46,7 @@ export const flagCodes = [
   "u-varies",
   "flight-unknown",
   "window-without-plateau",
+  "near-field",
   "law-refused",
   "circular-route",
 ] as const;

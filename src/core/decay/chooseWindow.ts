@@ -14,6 +14,8 @@ export interface ChosenWindow {
   readonly reason: string;
   /** No window of five stations agrees with its sampling errors. */
   readonly withoutPlateau: boolean;
+  /** Stations before the first that chi-square alone left out; 0 where the window was set by hand. */
+  readonly leftOut: number;
 }
 
 /** An automatic window leaves at least this many stations. */
@@ -47,7 +49,11 @@ export function chooseWindow(
       const fitted = lawOf(to - count + 1, to);
       if ("refused" in fitted || (fitted.p ?? 0) <= 0.05) continue;
       const agrees = `whose scatter about one law agrees with its sampling errors (p = ${shown(fitted.p ?? 0)})`;
-      return chosen(to - count + 1, to, fitted, `the longest run of stations ${agrees}${settled.words}`);
+      const first = to - count + 1;
+      return {
+        ...chosen(first, to, fitted, `the longest run of stations ${agrees}${settled.words}`),
+        leftOut: first - settled.at,
+      };
     }
   }
   const none = "no run of five stations agrees with one law within its sampling errors";
@@ -58,7 +64,7 @@ export function chooseWindow(
 }
 
 function chosen(first: number, last: number, fitted: WindowFit | Refusal, reason: string): ChosenWindow {
-  return { first, last, fitted, reason, withoutPlateau: false };
+  return { first, last, fitted, reason, withoutPlateau: false, leftOut: 0 };
 }
 
 const shown = (p: number) => (p < 0.01 ? p.toExponential(0) : p.toFixed(2));

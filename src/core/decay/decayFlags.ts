@@ -10,6 +10,8 @@ import { speedVariation, steadySpeed } from "./speedVariation.ts";
 /** Below this ratio of the last x - x0 to the first, n and x0 are hardly told apart. */
 const shortSpan = 4;
 const fewStations = 5;
+/** A dying term that a pure law would show less often than this is told. */
+const suspicious = 0.02;
 
 /** All doubts about one case's decay, each with its figure. */
 export function decayFlags(
@@ -106,6 +108,7 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
       code: "window-without-plateau",
       text: "No run of five stations agrees with one law within its sampling errors.",
     });
+  flags.push(...aboutNearField(decay));
   if (p !== null && p < 0.05)
     flags.push({
       code: "chi-square-fails",
@@ -119,6 +122,40 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
     });
   return flags;
 }
+
+/**
+ * A rest of a near field smaller than the scatter passes the chi-square of the window, and the union of its intervals may
+ * then not hold the truth.
+ */
+function aboutNearField({ near_field }: DecayResult): Flag[] {
+  if (!near_field) return [];
+  const { left_out, departure, term, term_size, p } = near_field;
+  const code = "near-field" as const;
+  if (left_out > 0) {
+    const many =
+      left_out === 1
+        ? "One station upstream of the window leaves"
+        : `${left_out} stations upstream of the window leave`;
+    const last = departure === null ? "" : `, the last of them by ${percent(departure)}`;
+    return [
+      {
+        code,
+        text: `${many} the law${last}. What makes them leave dies out gradually: a rest below the scatter may remain in the window and turn n and x0.`,
+        value: left_out,
+      },
+    ];
+  }
+  if (p === null || term === null || term_size === null || p >= suspicious) return [];
+  return [
+    {
+      code,
+      text: `A term that dies out along the window, ${percent(term)} at its first station, would fit better by ${Math.abs(term_size).toFixed(1)} standard errors (p = ${p.toPrecision(1)}): n drifts as the window begins later.`,
+      value: term_size,
+    },
+  ];
+}
+
+const percent = (share: number) => `${(100 * share).toPrecision(2)} %`;
 
 function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string }): boolean {
   return (why_low !== undefined) !== (why_high !== undefined);

@@ -63,5 +63,6 @@ function givenWindow(
     fitted: fitWindow(inside, settings, flight),
     reason: "set by hand",
     withoutPlateau: false,
+    leftOut: 0,
   };
 }

@@ -13,6 +13,7 @@ import { growthExponent } from "./growthExponent.ts";
 import { hypotheses } from "./hypotheses.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
 import { laterWindows } from "./laterWindows.ts";
+import { nearFieldSigns } from "./nearFieldSigns.ts";
 import { unionOfWindows } from "./unionOfWindows.ts";
 import { unlikeProbes } from "./unlikeProbes.ts";
 import { withCommonBlocks } from "./withCommonBlocks.ts";
@@ -59,6 +60,7 @@ export function fitDecay(stations: readonly StationResult[], settings: DecaySett
     growth: { m: growth(usedStations, law) },
     hypotheses: hypotheses(windows, settings),
     law,
+    near_field: law === null || "refused" in fitted ? null : nearFieldSigns(fitted, blocks, points, window),
     points: found.points.map((point) => decayPoint(point, perSpeed, used.includes(point))),
     flags: [],
   };
