@@ -108,5 +108,20 @@ export const figureLabels: readonly Label[] = [
     "1",
     "k₁ E₁₂/(u′v′); its area over ln k₁ is the correlation coefficient of u and v",
   ),
+  label(
+    "block_mean",
+    'U_{"block"}/U',
+    "mean of a block",
+    "1",
+    "mean of u over a block, over that of the record",
+    { digits: 4 },
+  ),
+  label(
+    "block_variance",
+    'k_{"block"}/k',
+    "variance of a block",
+    "1",
+    "variance within a block, all components together, over the mean of all blocks",
+  ),
   label("r/L11", "r/L_{11}", "separation over integral scale", "1", "r = U τ over the integral length"),
 ];

@@ -7,7 +7,7 @@ export function AdoptedRoutes({ cases }: { cases: readonly CaseView[] }) {
   return cases.map((view) => {
     const reasons = new Set(view.stations.flatMap(({ facts }) => facts.dissipationReason ?? []));
     return [...reasons].map((reason) => (
-      <p className="reason" key={view.id + reason}>
+      <p key={view.id + reason}>
         <CaseMark mark={view.mark} /> {view.name}: <RichText text={reason} />.
       </p>
     ));

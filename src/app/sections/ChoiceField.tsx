@@ -8,7 +8,8 @@ export function ChoiceField<T extends string>({
   onChange,
 }: {
   label: ReactNode;
-  value: T;
+  /** Null where several cases are meant and differ. */
+  value: T | null;
   choices: Readonly<Record<T, string>>;
   onChange: (value: T) => void;
 }) {
@@ -19,12 +20,17 @@ export function ChoiceField<T extends string>({
       <label htmlFor={id}>{label}</label>
       <select
         id={id}
-        value={value}
+        value={value ?? ""}
         onChange={(event) => {
           const chosen = keys.find((key) => key === event.target.value);
           if (chosen !== undefined) onChange(chosen);
         }}
       >
+        {value === null && (
+          <option value="" disabled>
+            they differ
+          </option>
+        )}
         {keys.map((key) => (
           <option value={key} key={key}>
             {choices[key]}

@@ -16,7 +16,10 @@ import { flagGroups } from "./flagGroups.ts";
 import { Questions } from "./Questions.tsx";
 import { ReducingState } from "./ReadingState.tsx";
 import { RecordsTable } from "./RecordsTable.tsx";
+import { ReductionChoices } from "./ReductionChoices.tsx";
+import { ReductionFold } from "./ReductionFold.tsx";
 import { SectionFrame } from "./SectionFrame.tsx";
+import { StartUpFold } from "./StartUpFold.tsx";
 
 /** What was read, from where, what is wrong with it, and what is still asked. */
 export function RecordsSection({
@@ -41,8 +44,13 @@ export function RecordsSection({
   const groups = flagGroups(cases);
   const work = cases.flatMap((view) => (view.work ? [view.work] : []));
   const failures = cases.flatMap((view) => view.reduced?.failures ?? []);
-  const notes =
-    groups.length === 0
+  const notes = [
+    {
+      name: "Choices",
+      fact: "how records are reduced",
+      body: <ReductionChoices cases={cases} onChange={onChange} />,
+    },
+    ...(groups.length === 0
       ? []
       : [
           {
@@ -50,7 +58,8 @@ export function RecordsSection({
             fact: String(groups.length),
             body: <FlagNotes groups={groups} unit={unitOf("L", cases[0].of.sheet.units)} />,
           },
-        ];
+        ]),
+  ];
   return (
     <SectionFrame section={sectionOf("records")} notes={notes}>
       {work.length > 0 ? (
@@ -75,6 +84,8 @@ export function RecordsSection({
       <AsideList aside={held.aside} />
       <FilesFold cases={cases} previews={held.previews} />
       <ChecksFold cases={cases} />
+      <ReductionFold />
+      <StartUpFold onChange={onChange} />
       <DurationFold />
     </SectionFrame>
   );

@@ -6,6 +6,7 @@ import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
+import { middleStation } from "./middleStation.ts";
 import { QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
@@ -80,12 +81,4 @@ const notTried: Quantity = { value: null, why: "needs a record" };
 
 function placeOf({ along, units }: CaseView, { x }: StationResult): string {
   return withUnit(formatPosition(x), unitOf(along === "t" ? "T" : "L", units));
-}
-
-/** The middle station of the window: away from the near field and from the noise at the end. */
-function middleStation({ stations, decay }: CaseView): StationResult | undefined {
-  const used = stations.filter(
-    ({ x }) => decay?.points.some((point) => point.used && point.x === x) ?? false,
-  );
-  return used[Math.floor(used.length / 2)];
 }
