@@ -123,6 +123,7 @@ function plainDecay(decay: DecayResult) {
     stations: decay.stations,
     speed: decay.speed,
     coordinate: decay.coordinate ?? "x",
+    near_field: decay.near_field ?? null,
     n: plainQuantity(decay.n),
     x0: plainQuantity(decay.x0),
     A: plainQuantity(decay.A),
