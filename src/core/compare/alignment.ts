@@ -1,4 +1,5 @@
 import { type CompareSettings, type Comparison, compareDefaults } from "../comparison.ts";
+import { placeBack } from "../decay/flightCourse.ts";
 import type { CentredLaw, LawProblem } from "../decay/lawProblem.ts";
 import { minimiseLaw } from "../decay/minimiseLaw.ts";
 import {
@@ -10,7 +11,7 @@ import {
 } from "./commonExponent.ts";
 import type { ComparedCase, ComparedLaw } from "./comparedCase.ts";
 
-/** Virtual origins of all cases by both ways of fitting them; null where a case has no law. */
+/** Virtual origins of all cases, along what each law runs along, by both ways of fitting; null without a law. */
 export interface Origins {
   readonly own: readonly (number | null)[];
   /** By laws with one exponent; null where that was not tried. */
@@ -76,6 +77,13 @@ export function alignment(
     },
     refit,
   };
+}
+
+/** Origins along what each law runs along, as places in x. */
+export function originsBack(cases: readonly ComparedCase[], { own, common }: Origins): Origins {
+  const back = (origins: Origins["own"]) =>
+    origins.map((at, i) => (at === null ? null : placeBack(cases[i].flight, at)));
+  return { own: back(own), common: common === null ? null : back(common) };
 }
 
 /** The origins that the cases are in fact shifted by. */

@@ -6,7 +6,7 @@ import {
   compareDefaults,
 } from "../comparison.ts";
 import { bare, estimate, missing, type Quantity } from "../quantity.ts";
-import type { Alignment } from "./alignment.ts";
+import { type Alignment, originsBack } from "./alignment.ts";
 import { type CommonExponent, commonExponent } from "./commonExponent.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import { compareSpectra } from "./compareSpectra.ts";
@@ -69,7 +69,7 @@ function linearNormal(value: number, standard: number): Quantity {
 function originsBy(found: PairFindings, way: "own" | "common"): AlignedOrigins | null {
   const { aligned, resampled, inputs, cases, at } = found;
   const { of } = found.pair;
-  const origins = aligned.origins[way];
+  const origins = originsBack(cases, aligned.origins)[way];
   const [a, b] = of.map((one) => origins?.[one] ?? null);
   if (a === null || b === null) return null;
   const held = of.map((one) => cases[one].law?.fitted.fit.held.x0 !== null);

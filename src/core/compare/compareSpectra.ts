@@ -1,4 +1,5 @@
 import type { CaseInput, ComparedSpectra, SpectrumPair } from "../comparison.ts";
+import { placeAlong } from "../decay/flightCourse.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type Alignment, usedOrigins } from "./alignment.ts";
 import { kolmogorovSpectrum } from "./kolmogorovSpectrum.ts";
@@ -31,10 +32,11 @@ export function compareSpectra(
   const places = inputs.map((input, i): Place[] => {
     const origin = origins[of[i]];
     if (origin === null) return [];
+    const { flight = null } = input.decay;
     const used = new Set(input.decay.points.filter((point) => point.used).map(({ x }) => x));
     return input.stations
-      .filter(({ x }) => used.has(x) && x > origin)
-      .map((station) => ({ station, xi: (station.x - origin) / lengths[i] }));
+      .map((station) => ({ station, xi: (placeAlong(flight, station.x) - origin) / lengths[i] }))
+      .filter(({ station, xi }) => used.has(station.x) && xi > 0);
   });
   const without = inputs.filter((_, i) => origins[of[i]] === null).map(({ name }) => name);
   if (without.length > 0) return none(`${without.join(" and ")}: no law was fitted`);

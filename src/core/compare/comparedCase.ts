@@ -6,9 +6,10 @@ import {
 } from "../comparison.ts";
 import { type CommonBlocks, commonBlocks } from "../decay/commonBlocks.ts";
 import { fitWindow, type WindowFit } from "../decay/fitWindow.ts";
+import { placeAlong } from "../decay/flightCourse.ts";
 import { type CentredLaw, type LawProblem, lawProblem, powerLawDefaults } from "../decay/lawProblem.ts";
 import { withCommonBlocks } from "../decay/withCommonBlocks.ts";
-import type { DecayPoint } from "../decayResult.ts";
+import type { DecayPoint, Flight } from "../decayResult.ts";
 import { type ComparedSeries, comparedSeries } from "./comparedSeries.ts";
 
 /** One case made ready: its law fitted anew from the points of its fit, and its quantities along the stations. */
@@ -19,6 +20,10 @@ export interface ComparedCase {
   readonly series: Readonly<Record<ComparedQuantity, ComparedSeries | string>>;
   /** Stations compared, in order of x. */
   readonly x: readonly number[];
+  /** Their places along what the law runs along: x, or the time of flight as a length. */
+  readonly along: readonly number[];
+  /** Null where the law runs along x. */
+  readonly flight: Flight | null;
 }
 
 export interface ComparedLaw {
@@ -29,7 +34,8 @@ export interface ComparedLaw {
   readonly measured: Float64Array;
   /** Standard deviation of each station's ln q: sampling, or scatter where that is larger or alone. */
   readonly error: Float64Array;
-  readonly x: readonly number[];
+  /** Stations fitted. */
+  readonly count: number;
   /** Where the stations were sampled together: what moves them at once. */
   readonly blocks: CommonBlocks | null;
 }
@@ -47,26 +53,30 @@ export function comparedCase(input: CaseInput, align: CompareSettings["align"]):
   const series = Object.fromEntries(
     comparedQuantities.map((quantity) => [quantity, comparedSeries(input, stations, quantity)]),
   ) as Record<ComparedQuantity, ComparedSeries | string>;
+  const { flight = null, law } = input.decay;
   return {
     name: input.name,
-    law: input.decay.law === null ? null : comparedLaw(input, used),
+    law: law === null ? null : comparedLaw(input, used, flight),
     series,
     x: stations.map(({ x }) => x),
+    along: stations.map(({ x }) => placeAlong(flight, x)),
+    flight,
   };
 }
 
 function comparedLaw(
   { stations, decay, decaySettings }: CaseInput,
   used: readonly DecayPoint[],
+  flight: Flight | null,
 ): ComparedLaw | null {
   const places = new Set(used.map(({ x }) => x));
   const inWindow = [...stations].filter(({ x }) => places.has(x)).sort((a, b) => a.x - b.x);
   const blocks = inWindow.length === used.length ? commonBlocks(inWindow, decay, decaySettings) : null;
-  const fitted = withCommonBlocks(fitWindow(used, decaySettings), blocks, 0);
+  const fitted = withCommonBlocks(fitWindow(used, decaySettings, flight), blocks, 0);
   if ("refused" in fitted) return null;
   const errors = used.map((point) => point.smoothedError).filter((error) => error !== null);
   const known = errors.length === used.length ? errors : null;
-  const x = used.map((point) => point.x);
+  const x = used.map((point) => placeAlong(flight, point.x));
   const problem = lawProblem(
     { x, q: used.map((point) => point.q), error: known },
     { ...powerLawDefaults, residuals: decaySettings.residuals, length: fitted.fit.length },
@@ -76,7 +86,14 @@ function comparedLaw(
     if (known !== null) return known[i] * root;
     return problem.linear ? root / point.q : root;
   });
-  return { fitted, problem, measured: problem.y.slice(), error: Float64Array.from(error), x, blocks };
+  return {
+    fitted,
+    problem,
+    measured: problem.y.slice(),
+    error: Float64Array.from(error),
+    count: x.length,
+    blocks,
+  };
 }
 
 /** Overwrites the station values of a law's copy with measured ones moved by `shift` in ln q. */

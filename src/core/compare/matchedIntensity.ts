@@ -1,3 +1,4 @@
+import { placeAlong, placeBack } from "../decay/flightCourse.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import { type IntensityLine, intensityAt, placeOfIntensity } from "./intensityLine.ts";
 
@@ -29,18 +30,19 @@ export function matchedIntensity(
   const [ofA, ofB] = cases.map(({ series }) => (typeof series.Tu === "string" ? null : series.Tu));
   if (!ofA || !ofB) return "a case has no intensity";
   if (at !== null) {
-    const found = matchedAt(a, b, at, [ofA.x, ofB.x]);
+    const found = matchedAt(cases, a, b, at, [ofA.x, ofB.x]);
     if (typeof found !== "string" || chosen) return found;
   }
   const low = Math.max(...[ofA, ofB].map(({ logarithm }) => Math.min(...logarithm)));
   const high = Math.min(...[ofA, ofB].map(({ logarithm }) => Math.max(...logarithm)));
   if (!(high >= low)) return "the windows of the two cases hold no intensity in common";
   const logarithm = (low + high) / 2;
-  const x = placeOfIntensity(a, logarithm);
-  return { x, logarithm, distance: placeOfIntensity(b, logarithm) - x };
+  const [x, place] = [a, b].map((line, i) => placeBack(cases[i].flight, placeOfIntensity(line, logarithm)));
+  return { x, logarithm, distance: place - x };
 }
 
 function matchedAt(
+  cases: readonly ComparedCase[],
   a: IntensityLine,
   b: IntensityLine,
   at: number,
@@ -48,8 +50,8 @@ function matchedAt(
 ): MatchedIntensity | string {
   if (at < xA[0] || at > xA[xA.length - 1])
     return "the place chosen for equal Tu lies outside the stations of the case held against";
-  const logarithm = intensityAt(a, at);
-  const place = placeOfIntensity(b, logarithm);
+  const logarithm = intensityAt(a, placeAlong(cases[0].flight, at));
+  const place = placeBack(cases[1].flight, placeOfIntensity(b, logarithm));
   if (!(place >= xB[0] && place <= xB[xB.length - 1]))
     return "the other case reaches the intensity of the chosen place nowhere among its stations";
   return { x: at, logarithm, distance: place - at };

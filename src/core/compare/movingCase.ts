@@ -1,5 +1,6 @@
 import { type ComparedQuantity, comparedQuantities } from "../comparison.ts";
 import { drawTogether } from "../decay/drawTogether.ts";
+import { placeAlong } from "../decay/flightCourse.ts";
 import type { CentredLaw } from "../decay/lawProblem.ts";
 import { type SeededRandom, seededRandom } from "../signal/seededRandom.ts";
 import { type ComparedCase, logSlopes, moveStations } from "./comparedCase.ts";
@@ -32,7 +33,7 @@ export interface MovingSeries {
 
 /** @param seed of this case alone: what is drawn for it does not depend on the others */
 export function movingCase(source: ComparedCase, seed: number): MovingCase {
-  const count = source.law?.x.length ?? 0;
+  const count = source.law?.count ?? 0;
   const baseSlopes = new Float64Array(count);
   if (source.law) logSlopes(source.law.problem, source.law.fitted.fit.law, baseSlopes);
   const series = comparedQuantities.map((quantity) => [quantity, movingSeries(source, quantity)]);
@@ -93,10 +94,11 @@ export function moveSeries(moving: MovingCase, law: CentredLaw | null): void {
 
 /** The line of the intensity drawn; null where there is none. */
 export function movedLine({ source, ofQ }: MovingCase, x0: number | null): IntensityLine | null {
-  const { Tu } = source.series;
+  const { flight, series } = source;
+  const { Tu } = series;
   if (typeof Tu === "string" || x0 === null) return null;
   const fitted = Tu.point.map((_, i) => i).filter((i) => Tu.point[i] >= 0);
-  const x = fitted.map((i) => Tu.x[i]);
+  const x = fitted.map((i) => placeAlong(flight, Tu.x[i]));
   const y = fitted.map((i) => Tu.logarithm[i] + ofQ[Tu.point[i]] / 2);
   return intensityLine(x, y, x0);
 }

@@ -1,4 +1,5 @@
 import { type CaseInput, type ComparedQuantity, comparedQuantities } from "../comparison.ts";
+import { placeAlong } from "../decay/flightCourse.ts";
 import type { Alignment } from "./alignment.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import type { ComparedSeries } from "./comparedSeries.ts";
@@ -35,7 +36,7 @@ export interface RatioCurve {
 /** What two cases are laid over one another by. */
 export interface Laying {
   readonly align: Alignment["align"];
-  /** Virtual origins; null where a case has no law. */
+  /** Virtual origins along what the laws run along; null where a case has no law. */
   readonly origins: readonly [number | null, number | null];
   /** x in the first case at which equal Tu is looked for; null: its body's, else the middle. */
   readonly at: number | null;
@@ -53,11 +54,11 @@ export function overlay(
 ): Overlay {
   const lengths = commonLengths(inputs);
   const coordinates: Overlay["coordinates"] = (side, x0, line, out) => {
-    const { x } = cases[side];
+    const { x, along } = cases[side];
     for (let i = 0; i < x.length; i++) {
       if (align === "x") out[i] = x[i];
-      else if (align === "x0" || line === null) out[i] = Math.log((x[i] - x0) / lengths[side]);
-      else out[i] = line.slope * Math.log(x[i] - x0) - line.level;
+      else if (align === "x0" || line === null) out[i] = Math.log((along[i] - x0) / lengths[side]);
+      else out[i] = line.slope * Math.log(along[i] - x0) - line.level;
     }
   };
   const shown = shownFrom(align);
@@ -149,12 +150,12 @@ function curve(
 }
 
 /** The line of a case's intensity over its fitted stations; null where it has no law or no Tu. */
-function lineOf({ series }: ComparedCase, x0: number | null): IntensityLine | null {
+function lineOf({ series, flight }: ComparedCase, x0: number | null): IntensityLine | null {
   if (x0 === null || typeof series.Tu === "string") return null;
   const { x, logarithm, point } = series.Tu;
   const fitted = x.map((_, at) => at).filter((at) => point[at] >= 0);
   return intensityLine(
-    fitted.map((at) => x[at]),
+    fitted.map((at) => placeAlong(flight, x[at])),
     fitted.map((at) => logarithm[at]),
     x0,
   );

@@ -1,4 +1,5 @@
 import { type ComparedQuantity, comparedQuantities } from "../comparison.ts";
+import { placeAlong, placeBack } from "../decay/flightCourse.ts";
 import { type IntensityLine, intensityAt, placeOfIntensity } from "./intensityLine.ts";
 import { interpolate, meanBetween } from "./interpolate.ts";
 import type { MovingCase, MovingSeries } from "./movingCase.ts";
@@ -57,13 +58,14 @@ export function pairSamples(
   const s = sides.map(({ source }) => new Float64Array(source.x.length));
   const matched = new Float64Array(typeof laid.matched === "string" ? 0 : resamples);
   const intensity = new Float64Array(matched.length);
+  const chosen = typeof laid.matched === "string" ? 0 : placeAlong(sides[0].source.flight, laid.matched.x);
   return {
     add(draw, origins, lines) {
       const [a, b] = lines;
       if (typeof laid.matched !== "string" && a && b) {
-        const level = intensityAt(a, laid.matched.x);
+        const level = intensityAt(a, chosen);
         intensity[draw] = level;
-        matched[draw] = placeOfIntensity(b, level) - laid.matched.x;
+        matched[draw] = placeBack(sides[1].source.flight, placeOfIntensity(b, level)) - laid.matched.x;
       }
       laid.coordinates(0, origins[0] ?? 0, a, s[0]);
       laid.coordinates(1, origins[1] ?? 0, b, s[1]);

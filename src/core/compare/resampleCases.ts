@@ -1,4 +1,4 @@
-import { type Alignment, type Origins, usedOrigins } from "./alignment.ts";
+import { type Alignment, type Origins, originsBack, usedOrigins } from "./alignment.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import { movedLine, moveLaw, moveSeries, movingCase } from "./movingCase.ts";
 import type { Overlay } from "./overlay.ts";
@@ -44,7 +44,7 @@ export function resampleCases(
   for (let draw = 0; draw < resamples; draw++) {
     for (const one of moving) moveLaw(one);
     const { origins, own } = aligned.refit();
-    drawn.push(origins);
+    drawn.push(originsBack(cases, origins));
     moving.forEach((one, i) => {
       moveSeries(one, own[i]);
     });
