@@ -188,13 +188,15 @@ describe("a coarse signal", () => {
       0,
       3000,
     );
-    expect(coarse.finish().points).toEqual(Float64Array.from({ length: 3000 }, (_, i) => i));
+    const { points } = coarse.finish();
+    expect(points.length).toBe(3000);
+    expect(points.every((value, i) => value === i)).toBe(true);
   });
   it("of more than 2^18 points is averaged by pairs", () => {
     const coarse = new CoarseSignal(1);
     const count = (1 << 18) + 4;
     coarse.add(
-      Float64Array.from({ length: count }, (_, i) => i),
+      new Float64Array(count).map((_, i) => i),
       0,
       count,
     );
@@ -304,9 +306,10 @@ describe("large arrays that are lent", () => {
     expect(borrowColumn(550_000)).toBe(columns[7]);
     expect(borrowColumn(600_000)).toBe(columns[3]);
     const fresh = borrowColumn(1_000_000);
-    expect(columns.includes(fresh)).toBe(false);
+    expect(columns.some((column) => column === fresh)).toBe(false);
     expect(fresh.length).toBe(1_000_000);
     for (const at of [0, 4, 8, 6, 5]) expect(borrowColumn(300_000)).toBe(columns[at]);
-    expect(columns.includes(borrowColumn(1000))).toBe(false);
+    const small = borrowColumn(1000);
+    expect(columns.some((column) => column === small)).toBe(false);
   });
 });

@@ -265,7 +265,7 @@ describe("the steps of a record", () => {
 describe("what restarts overtook", () => {
   it("goes where any later run began at its time or half a step after, and is told by the run that took it", () => {
     const random = seededRandom(8);
-    for (let turn = 0; turn < 40; turn++) {
+    for (let turn = 0; turn < 10; turn++) {
       const cuts = Array.from({ length: 3 }, (_, j) => ({
         sample: 10 * (j + 1) + Math.floor(8 * random.uniform()),
         time: Math.round(60 * random.uniform()) / 2,
@@ -273,12 +273,16 @@ describe("what restarts overtook", () => {
       }));
       const sieve = new CutSieve(cuts, 1);
       const dropped = [0, 0, 0];
+      const kept: boolean[] = [];
+      const wanted: boolean[] = [];
       for (let i = 0; i < 60; i++) {
         const time = Math.round(80 * random.uniform()) / 2;
         const by = cuts.findIndex((cut) => cut.sample > i && time > cut.time - 0.5);
         if (by >= 0) dropped[by]++;
-        expect(sieve.keeps(i, time)).toBe(by < 0);
+        wanted.push(by < 0);
+        kept.push(sieve.keeps(i, time));
       }
+      expect(kept).toEqual(wanted);
       expect(sieve.tally()).toEqual(cuts.map((cut, j) => ({ ...cut, dropped: dropped[j] })));
     }
   });

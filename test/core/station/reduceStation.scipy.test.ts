@@ -1,10 +1,11 @@
 import { describe, expect, it } from "vitest";
+import { type Estimate, isEstimate, type Quantity } from "../../../src/core/quantity.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
 import scipy from "../../reference/scipy/station.json" with { type: "json" };
 import { expectClose } from "../../support/expectClose.ts";
 import { type Signal, stationOf } from "./records.ts";
 
-const { samples, step, viscosity, segment, noise } = scipy.settings;
+const { samples, step, viscosity, segments, noise } = scipy.settings;
 
 /** The generator of make_station.py. */
 function uniform(seed: number): Float64Array {
@@ -41,6 +42,12 @@ function record(level: number): Required<Omit<Signal, "t">> {
   };
 }
 
+function quantityAt(station: StationResult, name: string): Estimate {
+  const found = (station as unknown as Record<string, Quantity>)[name] ?? station.routes[name];
+  if (!isEstimate(found)) throw new Error(`${name} is missing`);
+  return found;
+}
+
 /** The station's value of a key of the fixture: of the result itself, its routes or its facts. */
 function numberAt(station: StationResult, name: string): number | null | undefined {
   const own = (station as unknown as Record<string, unknown>)[name] ?? station.routes[name];
@@ -53,12 +60,12 @@ const searched: Record<string, { relative: number; because: string }> = {
   T_int_model: { relative: 1e-6, because: "a minimum is found to the root of the rounding" },
 };
 const sums = { relative: 1e-9, absolute: 1e-14, because: "two correct double computations" };
-const elsewhere = ["cospectrum_first", "derivativeStep"];
+const elsewhere = ["cospectrum_first", "derivativeStep", "errors"];
 
 describe.each([
-  ["clean", 0],
-  ["noisy", noise],
-] as const)(`a %s record of three components against ${scipy.made_with}`, (kind, level) => {
+  ["clean", 0, segments[0]],
+  ["noisy", noise, segments[1]],
+] as const)(`a %s record of three components against ${scipy.made_with}`, (kind, level, segment) => {
   const signal = record(level);
   const wanted: Record<string, unknown> = scipy[kind];
   const station = stationOf(
@@ -82,6 +89,12 @@ describe.each([
       else expectClose(found, Number(value), searched[name] ?? sums);
     },
   );
+  it.each(Object.entries(scipy[kind].errors))("has the error and the ends of its %s", (name, wanted) => {
+    const found = quantityAt(station, name);
+    [found.error?.standard, found.low, found.high].forEach((value, i) => {
+      expectClose(value, wanted[i], sums);
+    });
+  });
   it("has its co-spectrum of u and v", () => {
     const expected = scipy[kind].cospectrum_first;
     const scale = Math.max(...expected.map(Math.abs));
