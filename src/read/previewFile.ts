@@ -139,5 +139,5 @@ function numbersOf(form: TableForm, { index, scale }: Column): number[] {
 
 function estimateRows(head: Head, form: TableForm): number {
   if (head.whole) return form.headRows.length;
-  return Math.round((head.bytes / head.characters) * form.headRows.length);
+  return Math.round((head.textBytes / head.characters) * form.headRows.length);
 }

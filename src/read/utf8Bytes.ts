@@ -1,4 +1,5 @@
 import type { ByteSource } from "./byteSource.ts";
+import { expandedBytes } from "./expandedBytes.ts";
 import { decoderFor } from "./wholeLines.ts";
 
 /**
@@ -13,8 +14,7 @@ export async function* utf8Bytes(
   let start: Uint8Array | null = new Uint8Array(0);
   let wide: TextDecoder | null = null;
   const encoder = new TextEncoder();
-  for await (const chunk of source.stream()) {
-    onBytes?.(chunk.length);
+  for await (const chunk of expandedBytes(source, onBytes)) {
     if (start === null) {
       yield wide === null ? chunk : encoder.encode(wide.decode(chunk, { stream: true }));
       continue;

@@ -1,5 +1,6 @@
 import { ReductionFailure } from "../core/failure.ts";
 import type { ByteSource } from "./byteSource.ts";
+import { expandedBytes } from "./expandedBytes.ts";
 
 /** Some whole lines of a file. */
 export interface LineChunk {
@@ -48,8 +49,7 @@ async function* decoded(
 ): AsyncGenerator<{ text: string; ended: boolean }> {
   let decoder: TextDecoder | null = null;
   let start = new Uint8Array(0);
-  for await (const chunk of source.stream()) {
-    onBytes?.(chunk.length);
+  for await (const chunk of expandedBytes(source, onBytes)) {
     if (decoder === null) {
       start = joined(start, chunk);
       if (start.length < 2) continue;
