@@ -1,6 +1,6 @@
 import { labelOf } from "../../core/catalogue.ts";
+import { lawDistance } from "../../core/decay/lawDistance.ts";
 import type { Flag } from "../../core/flag.ts";
-import { isEstimate } from "../../core/quantity.ts";
 import { withReference } from "../../core/symbolRuns.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { concernOf } from "../../figures/flagConcern.ts";
@@ -24,6 +24,8 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
   const shown = columns.filter((column) => column.why === null);
   const decimals = positionDecimals(view.stations.map((station) => station.x));
   const distances = distancesOf(view);
+  const runsAlong = along === "t" ? "t" : view.decay?.law?.flight ? "s" : "x";
+  const distanceKey = `(${runsAlong}-${runsAlong}0)/ell`;
   return (
     <>
       <TableScroll label="Stations">
@@ -36,7 +38,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
               </th>
               {distances && (
                 <th scope="col">
-                  <SymbolText runs={withReference(labelOf("(x-x0)/ell").symbol, view.symbol)} />
+                  <SymbolText runs={withReference(labelOf(distanceKey).symbol, view.symbol)} />
                 </th>
               )}
               {shown.map((column) => (
@@ -142,7 +144,7 @@ function isUsed({ decay }: CaseView, x: number): boolean {
 }
 
 function distancesOf({ stations, decay, length }: CaseView): string[] | null {
-  const origin = decay?.x0;
-  if (!origin || !isEstimate(origin) || length === null) return null;
-  return stations.map((station) => formatNumber((station.x - origin.value) / length, 1));
+  const law = decay?.law;
+  if (!law || length === null) return null;
+  return stations.map((station) => formatNumber(lawDistance(law, station.x) / length, 1));
 }
