@@ -13,6 +13,7 @@ import "./styles/parts.css";
 import "./styles/table.css";
 import "./styles/controls.css";
 import "./styles/reduction.css";
+import "./styles/body.css";
 import "./styles/states.css";
 import "./styles/narrow.css";
 import "./styles/print.css";

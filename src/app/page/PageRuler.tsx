@@ -1,6 +1,7 @@
 import { useCallback, useMemo } from "react";
 import { useStore } from "zustand";
 import { unitOf } from "../../core/unitText.ts";
+import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { Ruler } from "../ruler/Ruler.tsx";
 import type { RulerProps } from "../ruler/rulerProps.ts";
 import type { CaseView } from "../session/caseView.ts";
@@ -9,6 +10,7 @@ import type { PageStore } from "../session/pageStore.ts";
 import type { PageWork } from "../session/pageWork.ts";
 import { pickLetters } from "./pickLetters.ts";
 import { createRulerCases } from "./rulerCases.ts";
+import { useRulerBody } from "./useRulerBody.ts";
 
 /** The ruler over the page's state: what is in the hand is a draft, what rests is a change of the workspace. */
 export function PageRuler({
@@ -20,7 +22,7 @@ export function PageRuler({
   cases: readonly CaseView[];
   work: PageWork;
 }) {
-  const { session, late, hover, dispatch, setDraft, dropDraft, setHover } = useStore(store);
+  const { session, late, hover, plans, dispatch, setDraft, dropDraft, setHover } = useStore(store);
   const lanes = useMemo(createRulerCases, []);
   const workspace = heldOf(session)?.history.present;
   const picked = useMemo(() => pickLetters(workspace?.picked ?? []), [workspace?.picked]);
@@ -40,13 +42,19 @@ export function PageRuler({
     },
     [dispatch, setDraft, dropDraft],
   );
+  const onChange = useCallback(
+    (change: WorkspaceChange) => dispatch({ kind: "changed", change }),
+    [dispatch],
+  );
+  const { body, onBody } = useRulerBody(cases, onChange);
   const sheet = workspace?.cases[0]?.sheet;
   return (
     <Ruler
-      cases={lanes(cases, late !== null, heldOf(session)?.previews ?? noPreviews)}
+      cases={lanes(cases, late !== null, heldOf(session)?.previews ?? noPreviews, plans)}
       axis={workspace?.axis ?? "x"}
       units={sheet ? unitOf(sheet.along === "t" ? "T" : "L", sheet.units) : "m"}
       along={sheet?.along ?? "x"}
+      body={body}
       picked={picked}
       hovered={hover}
       onWindow={onWindow}
@@ -58,6 +66,7 @@ export function PageRuler({
         })
       }
       onHoldOrigin={onHoldOrigin}
+      onBody={onBody}
       onHover={(caseId, x) => setHover(x === null ? null : { caseId, x })}
       onShowStation={showStation}
       onCancelReading={() => work.cancel()}

@@ -1,8 +1,10 @@
 import { isEstimate, missing } from "../../core/quantity.ts";
 import type { Preview } from "../../core/records.ts";
 import type { StationResult } from "../../core/stationResult.ts";
+import { bestPlans } from "../../export/sentences/narrowingSentences.ts";
+import { arguedOf } from "../../figures/arguedOf.ts";
 import { lawTuFactor } from "../ruler/lawTuFactor.ts";
-import type { LaneState, RulerCase, RulerStation } from "../ruler/rulerProps.ts";
+import type { LaneState, RulerCase, RulerPlan, RulerStation } from "../ruler/rulerProps.ts";
 import { bytesText } from "../sections/bytesText.ts";
 import type { CaseView } from "../session/caseView.ts";
 
@@ -14,19 +16,20 @@ export function createRulerCases(): (
   cases: readonly CaseView[],
   late: boolean,
   previews: readonly Preview[],
+  plans: boolean,
 ) => readonly RulerCase[] {
-  const kept = new WeakMap<CaseView, { late: boolean; lane: RulerCase }>();
-  return (cases, late, previews) =>
+  const kept = new WeakMap<CaseView, { late: boolean; plans: boolean; lane: RulerCase }>();
+  return (cases, late, previews, plans) =>
     cases.map((view) => {
       const known = kept.get(view);
-      if (known?.late === (late && view.stale)) return known.lane;
-      const lane = laneOf(view, late, previews);
-      kept.set(view, { late: late && view.stale, lane });
+      if (known?.late === (late && view.stale) && known.plans === plans) return known.lane;
+      const lane = laneOf(view, late, previews, plans);
+      kept.set(view, { late: late && view.stale, plans, lane });
       return lane;
     });
 }
 
-function laneOf(view: CaseView, late: boolean, previews: readonly Preview[]): RulerCase {
+function laneOf(view: CaseView, late: boolean, previews: readonly Preview[], plans: boolean): RulerCase {
   const { decay, stations, of } = view;
   return {
     id: view.id,
@@ -43,7 +46,12 @@ function laneOf(view: CaseView, late: boolean, previews: readonly Preview[]): Ru
     length: view.length,
     symbol: view.symbol,
     state: stateOf(view, late),
+    ...(plans ? { plans: plansOf(view) } : {}),
   };
+}
+
+function plansOf(view: CaseView): readonly RulerPlan[] {
+  return bestPlans(arguedOf(view)?.argument.narrowing ?? []).map(({ kind, x }) => ({ kind, x }));
 }
 
 function stationOf(station: StationResult): RulerStation {

@@ -16,6 +16,7 @@ const named = [
   { id: "spectra", short: "Spectra", name: "Spectra and correlations" },
   { id: "balance", short: "Balance", name: "Dissipation balance" },
   { id: "compare", short: "Side by side", name: "Side by side" },
+  { id: "body", short: "Body", name: "At the body" },
   { id: "table", short: "Table", name: "Table and export" },
 ] as const;
 

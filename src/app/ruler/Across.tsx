@@ -25,12 +25,15 @@ export function Across({ cases, maps, width, height, body, onBody, hover, gestur
   const hoverMap = hover && maps[cases.findIndex(({ id }) => id === hover.caseId)];
   const hoverPx = hover && hoverMap ? hoverMap.at + hoverMap.perX * hover.x : null;
   const caught = caughtPx(gesture);
-  const first = maps.find((map) => map !== null) ?? null;
+  const places = cases.map((_, i) =>
+    body === null ? null : body.places ? (body.places[i] ?? null) : body.x,
+  );
+  const first = maps.find((map, i) => map !== null && places[i] !== null) ?? null;
   const foot = head + cases.length * height;
   return (
     <div className="ruler-across">
       <svg width={width} height={foot} aria-hidden="true" focusable="false">
-        {body && <path className="ruler-body-line" d={bodyLine(body.x, maps, width, height)} />}
+        {body && <path className="ruler-body-line" d={bodyLine(places, maps, width, height)} />}
         {hoverPx !== null && <path className="ruler-hover" d={`M${hoverPx} ${head}V${foot}`} />}
         {caught !== null && <path className="ruler-caught" d={`M${caught} ${head}V${foot + 6}`} />}
       </svg>
@@ -40,10 +43,16 @@ export function Across({ cases, maps, width, height, body, onBody, hover, gestur
 }
 
 /** One line through all lanes; on an axis that shifts the cases, a piece in each lane at its own place. */
-function bodyLine(x: number, maps: readonly (LaneMap | null)[], width: number, height: number): string {
+function bodyLine(
+  places: readonly (number | null)[],
+  maps: readonly (LaneMap | null)[],
+  width: number,
+  height: number,
+): string {
   return maps
     .map((map, i) => {
-      if (map === null) return "";
+      const x = places[i];
+      if (map === null || x === null) return "";
       const px = map.at + map.perX * x;
       if (px < 0 || px > width) return "";
       const top = head + i * height;

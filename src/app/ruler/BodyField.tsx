@@ -2,6 +2,8 @@ import { useRef } from "react";
 
 interface BodyFieldProps {
   readonly px: number;
+  /** It ends there instead of beginning there. */
+  readonly before: boolean;
   readonly x: number;
   readonly name: string;
   /** Null: left as it was. */
@@ -9,7 +11,7 @@ interface BodyFieldProps {
 }
 
 /** The body's position as a number to type, in place of its name. What is no number changes nothing. */
-export function BodyField({ px, x, name, onDone }: BodyFieldProps) {
+export function BodyField({ px, before, x, name, onDone }: BodyFieldProps) {
   const ended = useRef(false);
   const end = (text: string) => {
     if (ended.current) return;
@@ -20,7 +22,7 @@ export function BodyField({ px, x, name, onDone }: BodyFieldProps) {
   };
   return (
     <input
-      className="ruler-body-field"
+      className={`ruler-body-field${before ? " before" : ""}`}
       style={{ left: px }}
       aria-label={`Position of ${name}`}
       inputMode="decimal"

@@ -15,13 +15,22 @@ interface BodyMarkProps {
   readonly onBody: ((x: number, phase: Phase) => void) | null;
 }
 
-/** The body: a dot above the lanes, to scale where it is wide enough, and its name. */
+/** Px that the name needs beside the dot: with less on its right it stands on the left. */
+const nameRoom = 110;
+
+/** The body: a dot above the lanes, to scale where it is wide enough, and its name; off the scale, at its edge. */
 export function BodyMark({ body, map, width, scale, onBody }: BodyMarkProps) {
-  const px = map.at + map.perX * body.x;
-  if (px < 0 || px > width) return null;
-  const size = Math.max(7, (body.chord ?? 0) * map.perX);
+  const at = map.at + map.perX * body.x;
+  const px = Math.min(Math.max(at, 0), width);
+  const size = px === at ? Math.max(7, (body.chord ?? 0) * map.perX) : 7;
   const shown = { ...scale, decimals: Math.max(scale.decimals, positionDecimals([body.x])) };
-  const label = { px: px + size / 2 + 5, text: withUnit(formatNumber(body.x, shown.decimals), scale.units) };
+  const place = withUnit(formatNumber(body.x, shown.decimals), scale.units);
+  const before = px + size / 2 + nameRoom > width;
+  const label = {
+    px: before ? px - size / 2 - 5 : px + size / 2 + 5,
+    before,
+    text: at > width ? `${place} →` : at < 0 ? `← ${place}` : place,
+  };
   return (
     <>
       <span className="ruler-dot" style={{ left: px, width: size }} aria-hidden="true" />
@@ -37,15 +46,22 @@ export function BodyMark({ body, map, width, scale, onBody }: BodyMarkProps) {
 interface MovableBodyProps extends BodyMarkProps {
   readonly onBody: (x: number, phase: Phase) => void;
   readonly px: number;
-  readonly label: { readonly px: number; readonly text: string };
+  readonly label: BodyLabel;
+}
+
+interface BodyLabel {
+  readonly px: number;
+  /** It ends there instead of beginning there. */
+  readonly before: boolean;
+  readonly text: string;
 }
 
 /** The grip on the dot: a slider; Enter turns the name into a field. */
 function MovableBody({ body, map, width, scale, onBody, px, label }: MovableBodyProps) {
   const [typing, setTyping] = useState(false);
   const slider = useRef<HTMLDivElement>(null);
-  const span = width / map.perX;
-  const grip = useBodyGrip({ x: body.x, span, perX: map.perX, onBody, onType: () => setTyping(true) });
+  const ends: readonly [number, number] = [-map.at / map.perX, (width - map.at) / map.perX];
+  const grip = useBodyGrip({ x: body.x, ends, perX: map.perX, onBody, onType: () => setTyping(true) });
   const typed = (x: number | null) => {
     setTyping(false);
     if (x !== null) onBody(x, "rest");
@@ -61,14 +77,14 @@ function MovableBody({ body, map, width, scale, onBody, px, label }: MovableBody
         tabIndex={0}
         aria-label={`Body, ${body.name}`}
         aria-orientation="horizontal"
-        aria-valuemin={-map.at / map.perX}
-        aria-valuemax={(width - map.at) / map.perX}
+        aria-valuemin={Math.min(ends[0], body.x)}
+        aria-valuemax={Math.max(ends[1], body.x)}
         aria-valuenow={body.x}
         aria-valuetext={`${spokenPlace(body.x, scale)}. Enter to type a number.`}
         {...grip}
       />
       {typing ? (
-        <BodyField px={label.px} x={body.x} name={body.name} onDone={typed} />
+        <BodyField {...label} x={body.x} name={body.name} onDone={typed} />
       ) : (
         <BodyName name={body.name} {...label} />
       )}
@@ -76,9 +92,9 @@ function MovableBody({ body, map, width, scale, onBody, px, label }: MovableBody
   );
 }
 
-function BodyName({ name, px, text }: { name: string; px: number; text: string }) {
+function BodyName({ name, px, before, text }: BodyLabel & { name: string }) {
   return (
-    <span className="ruler-body-name" style={{ left: px }}>
+    <span className={`ruler-body-name${before ? " before" : ""}`} style={{ left: px }}>
       {name}
       <span className="long">, {text}</span>
     </span>

@@ -1,6 +1,7 @@
 import { useMemo } from "react";
 import { bandPath, bandShape, cutBand, sidePath } from "./bandShape.ts";
 import { OriginDrawing } from "./OriginDrawing.tsx";
+import { PlanMark } from "./PlanMark.tsx";
 import type { RulerCase, RulerPick } from "./rulerProps.ts";
 import type { LaneMap } from "./rulerScale.ts";
 import { StationTick } from "./StationTick.tsx";
@@ -43,6 +44,9 @@ export function LaneDrawing(props: LaneDrawingProps) {
       {one.law && one.x0.value !== null && <OriginDrawing {...props} />}
       {picks.map(({ x, letter }) => (
         <Pick key={x} px={at(x)} letter={letter} height={height} />
+      ))}
+      {one.plans?.map(({ kind, x }) => (
+        <PlanMark key={`${kind} ${x}`} kind={kind} px={at(x)} width={width} height={height} />
       ))}
       {ghost && <BracketLine edge={ghost.edge} px={edgePx(ghost, at)} height={height} look="before" />}
       {window && (

@@ -68,7 +68,7 @@ function FilledRuler({ column, width, ...props }: FilledProps) {
           width={width}
           height={view.height}
           body={props.body ?? null}
-          onBody={props.onBody ?? null}
+          onBody={props.onBody ? view.moveBody : null}
           hover={view.hover ?? props.hovered ?? null}
           gesture={gesture}
           scale={spokenScale}

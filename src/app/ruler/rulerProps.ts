@@ -64,6 +64,14 @@ export interface RulerCase {
   /** Symbol of ell, "M". */
   readonly symbol: string;
   readonly state: LaneState;
+  /** Where one more measurement would narrow the intervals most, while that is asked for. */
+  readonly plans?: readonly RulerPlan[];
+}
+
+/** A station to be added, or one whose record is to be doubled. */
+export interface RulerPlan {
+  readonly kind: "station" | "record";
+  readonly x: number;
 }
 
 export interface RulerStation {
@@ -90,6 +98,10 @@ export interface RulerBody {
   readonly name: string;
   /** Streamwise length: the dot is drawn to scale when that gives 7 px or more. */
   readonly chord?: number | null;
+  /** Where it stands in each case, where that differs; null: nowhere. The dot is that of the first that has one. */
+  readonly places?: readonly (number | null)[];
+  /** What is met there, for the live region: "Tu 3.34 percent in screen". */
+  readonly readings?: string;
 }
 
 export interface RulerPick {

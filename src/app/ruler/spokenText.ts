@@ -1,7 +1,8 @@
 import { isEstimate } from "../../core/quantity.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
+import { positionDecimals } from "../../figures/positionDecimals.ts";
 import { exponentReading, originReading } from "./readings.ts";
-import type { RulerCase, RulerStation } from "./rulerProps.ts";
+import type { RulerBody, RulerCase, RulerStation } from "./rulerProps.ts";
 import { type Edge, edgeStation } from "./snapWindow.ts";
 
 /** What the ruler is said to show: unit of x and the decimals that tell its stations apart. */
@@ -76,6 +77,13 @@ export function lawSpoken(one: RulerCase, units: string): string {
   const interval = n.interval === null ? "" : `, 95 percent ${n.interval}`;
   const x0 = isEstimate(one.x0) ? `; virtual origin ${withSpokenUnit(originReading(one, units))}` : "";
   return `n ${n.value}${interval}${x0}.`;
+}
+
+/** "Body, 0.90 metres; Tu 3.34 percent in screen." */
+export function bodySpoken({ x, readings = "" }: RulerBody, scale: SpokenScale): string {
+  const decimals = Math.max(scale.decimals, positionDecimals([x]));
+  const place = `Body, ${spokenPlace(x, { ...scale, decimals })}`;
+  return readings === "" ? `${place}.` : `${place}; ${readings}.`;
 }
 
 function withSpokenUnit({ value, unit }: { readonly value: string; readonly unit: string }): string {

@@ -3,10 +3,10 @@ import { positionDecimals } from "../../figures/positionDecimals.ts";
 import type { Axis } from "../../sheet/workspace.ts";
 import { axisChoices } from "./axisChoices.ts";
 import { laneHeight } from "./laneHeight.ts";
-import type { RulerCase, RulerProps } from "./rulerProps.ts";
+import type { Phase, RulerCase, RulerProps } from "./rulerProps.ts";
 import { type RulerScale, rulerScale } from "./rulerScale.ts";
 import type { Edge, StationWindow } from "./snapWindow.ts";
-import { lawSpoken } from "./spokenText.ts";
+import { bodySpoken, lawSpoken } from "./spokenText.ts";
 import { useLaneActions } from "./useLaneActions.ts";
 import { useMedia } from "./useMedia.ts";
 import { useSlide } from "./useSlide.ts";
@@ -18,10 +18,10 @@ export type RulerView = ReturnType<typeof useRulerView>;
 
 /** All that the ruler works out from its props, and the little it keeps: what is moved, pointed at, stepped. */
 export function useRulerView(props: RulerProps, width: number) {
-  const { cases, units, onWindow } = props;
+  const { cases, onWindow } = props;
   const { choices, axis, decimals } = useAxis(props);
   const computed = useMemo(() => rulerScale(cases, axis, width), [cases, axis, width]);
-  const { spoken, say } = useLawSpoken(cases, units);
+  const { spoken, say } = useRulerVoice(props, decimals);
   const { gesture, ...moves } = useWindowGesture({ cases, scale: computed, onWindow, rested: say });
   const [active, setActive] = useState<{ caseId: string; edge: Edge } | null>(null);
   const [hover, setHover] = useState<{ caseId: string; x: number } | null>(null);
@@ -42,9 +42,13 @@ export function useRulerView(props: RulerProps, width: number) {
     onWindow(active.caseId, window, "rest", false);
     say(active.caseId);
   };
+  const moveBody = (x: number, phase: Phase) => {
+    props.onBody?.(x, phase);
+    if (phase !== "drag") say(bodyVoice);
+  };
   return {
     ...{ choices, axis, decimals, scale, maps, height, gesture, ghosts, hover, spoken, actions },
-    ...{ windowOf, stepping, step },
+    ...{ windowOf, stepping, step, moveBody },
   };
 }
 
@@ -59,8 +63,12 @@ function useAxis({ cases, units, along = "x", axis: wanted }: RulerProps) {
   return { choices, axis, decimals };
 }
 
-function useLawSpoken(cases: readonly RulerCase[], units: string) {
+/** In place of a case's id: it is the body that is spoken of. */
+const bodyVoice = "body of all cases";
+
+function useRulerVoice({ cases, units, body }: RulerProps, decimals: number) {
   const text = useStable((caseId: string) => {
+    if (caseId === bodyVoice) return body ? bodySpoken(body, { units, decimals }) : "";
     const one = cases.find(({ id }) => id === caseId);
     if (one === undefined) return "";
     return one.state.kind === "stale" ? null : lawSpoken(one, units);

@@ -12,6 +12,7 @@ import type { PageWork } from "../session/pageWork.ts";
 import type { Held } from "../session/session.ts";
 import { AdoptedRoutes } from "./AdoptedRoutes.tsx";
 import { ArgumentSection } from "./ArgumentSection.tsx";
+import { BodySection } from "./BodySection.tsx";
 import { CompareSection } from "./CompareSection.tsx";
 import { DecaySection } from "./DecaySection.tsx";
 import { DefinitionPanel } from "./DefinitionPanel.tsx";
@@ -19,6 +20,7 @@ import { Fold } from "./Fold.tsx";
 import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
 import { findingsOf } from "./findings.ts";
 import { InvariantsBlock } from "./InvariantsBlock.tsx";
+import { NarrowingFold } from "./NarrowingFold.tsx";
 import { PageFoot } from "./PageFoot.tsx";
 import { RecordsSection } from "./RecordsSection.tsx";
 import {
@@ -46,7 +48,7 @@ export function Argument({
   cases: readonly CaseView[];
   narrow: boolean;
 }) {
-  const { dispatch, late, setHover } = useStore(store);
+  const { dispatch, late, setHover, setPlans } = useStore(store);
   const workspace = held.history.present;
   const comparisons = held.argued?.comparisons ?? noComparisons;
   const { tolerance } = workspace.cases[0].sheet.compare;
@@ -83,7 +85,9 @@ export function Argument({
       />
       {reduced.length > 0 && (
         <>
-          <DecaySection {...shared} sentences={findings.decay} onChange={change} />
+          <DecaySection {...shared} sentences={findings.decay} onChange={change}>
+            <NarrowingFold cases={folded} onMarks={setPlans} />
+          </DecaySection>
           <ArgumentSection
             id="isotropy"
             {...shared}
@@ -128,6 +132,14 @@ export function Argument({
             settings={workspace.cases[0].sheet.compare}
             onChange={change}
           />
+          {folded.length > 0 && (
+            <BodySection
+              cases={folded}
+              late={late !== null}
+              figureNumber={firstRatioFigure + comparisons.length}
+              onChange={change}
+            />
+          )}
           <TableSection
             cases={reduced}
             exports={exports}
@@ -142,6 +154,8 @@ export function Argument({
 }
 
 const noComparisons = [] as const;
+/** Number of the first figure of ratios: those behind it follow. */
+const firstRatioFigure = 6;
 
 function spoken(cases: readonly CaseView[], { records, decay }: ReturnType<typeof findingsOf>): string {
   if (cases.some((view) => view.work)) return "";

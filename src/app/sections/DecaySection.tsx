@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import type { Sentence } from "../../export/sentences/piece.ts";
 import { decayFigure } from "../../figures/decayFigure.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
@@ -32,11 +33,14 @@ export function DecaySection({
   sentences,
   stale,
   onChange,
+  children,
 }: {
   cases: readonly CaseView[];
   sentences: readonly Sentence[];
   stale: boolean;
   onChange: (change: WorkspaceChange) => void;
+  /** Further folds. */
+  children?: ReactNode;
 }) {
   const fitted = cases.filter(({ decay }) => decay !== null && decay.points.length > 0);
   const notes: Note[] = [
@@ -67,6 +71,7 @@ export function DecaySection({
           <HypothesisTable cases={fitted} />
         </Fold>
       )}
+      {children}
     </ArgumentSection>
   );
 }

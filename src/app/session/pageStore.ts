@@ -21,6 +21,8 @@ export interface PageState {
   readonly session: Session;
   readonly drafts: readonly Draft[];
   readonly hover: Hover | null;
+  /** Whether the ruler marks where one more measurement would narrow the intervals most. */
+  readonly plans: boolean;
   /** Key of the argument the worker has been at for more than a moment; null while nothing is late. */
   readonly late: string | null;
   /** A sentence about what just could not be done; null when there is none. */
@@ -29,6 +31,7 @@ export interface PageState {
   setDraft(draft: Draft): void;
   dropDraft(caseId: string): void;
   setHover(hover: Hover | null): void;
+  setPlans(plans: boolean): void;
   setLate(key: string | null): void;
   setNotice(notice: string | null): void;
 }
@@ -41,6 +44,7 @@ export function createPageStore() {
     session: { kind: "empty" },
     drafts: [],
     hover: null,
+    plans: false,
     late: null,
     notice: null,
     dispatch: (event) => set((state) => ({ session: nextSession(state.session, event) })),
@@ -49,6 +53,7 @@ export function createPageStore() {
     dropDraft: (caseId) =>
       set((state) => ({ drafts: state.drafts.filter((each) => each.caseId !== caseId) })),
     setHover: (hover) => set({ hover }),
+    setPlans: (plans) => set({ plans }),
     setLate: (late) => set({ late }),
     setNotice: (notice) => set({ notice }),
   }));

@@ -1,6 +1,7 @@
 import type { Criterion } from "../decayArgument.ts";
 import { bare, type Estimate, estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { type SeededRandom, seededRandom } from "../signal/seededRandom.ts";
+import { notHeld } from "./notHeld.ts";
 
 /** A condition: what must lie between which ends. */
 export interface Condition {
@@ -51,7 +52,7 @@ export function criterion(
     const holds = known.map(({ value }) => reading(value, condition));
     const at = firstHolding(holds);
     const end = towards === "start" ? "last" : "first";
-    if (at === null) return missing(`not held at the ${end} station that carries it`);
+    if (at === null) return notHeld(end);
     const spread = resampled(known, reading, condition);
     return spread === null
       ? bare(known[at].x, "these values carry no errors to draw them anew by")

@@ -72,7 +72,8 @@ describe("the page", () => {
       "5Spectra and correlations",
       "6Dissipation balance",
       "7Side by side",
-      "8Table and export",
+      "8At the body",
+      "9Table and export",
     ]);
   });
 
