@@ -24,6 +24,9 @@ export interface FormattedQuantity {
   readonly why?: string;
 }
 
+/** So many digits are asked for where a count is shown as it is. */
+const everyDigit = 12;
+
 /** Formats by the catalogue: percent, mm and digits where no interval sets them. */
 export function formatQuantity(quantity: Quantity, label: Label, units: Units): FormattedQuantity {
   const { factor, unit } = displayOf(label, units);
@@ -40,7 +43,7 @@ export function formatScaled(
   const power = powerOfTen(Math.max(Math.abs(value), Math.abs(low ?? 0), Math.abs(high ?? 0)));
   const ten = power === null ? 1 : 10 ** power;
   const shown = { value: value / ten, low: end(low, ten), high: end(high, ten) };
-  const decimals = decimalsOf(shown, digits);
+  const decimals = digits >= everyDigit && Number.isInteger(shown.value) ? 0 : decimalsOf(shown, digits);
   const why = quantity.why_low ?? quantity.why_high;
   return {
     value: formatNumber(shown.value, decimals),

@@ -56,8 +56,9 @@ interface FieldsProps {
 
 function Fields({ cases, sheets, edit }: FieldsProps) {
   const unit = unitOf("L", sheets[0].units);
-  const has = (...layouts: readonly CaseSheet["layout"][]) =>
-    sheets.some(({ layout }) => layouts.includes(layout));
+  const records = sheets.filter(({ layout }) => layout !== "profile");
+  const series = sheets.filter(({ layout }) => layout === "series");
+  const lines = sheets.filter(({ layout }) => layout === "lines");
   return (
     <>
       <CommonChoice
@@ -67,9 +68,12 @@ function Fields({ cases, sheets, edit }: FieldsProps) {
         sheets={sheets}
         onChange={(kind) => edit({ kind: kind === "none" ? null : kind })}
       />
-      {has("series", "lines") && (
+      {records.length > 0 && (
         <>
-          <StartUpField cases={cases} onChange={(startup) => edit({ startup })} />
+          <StartUpField
+            cases={cases.filter((view) => view.of.sheet.layout !== "profile")}
+            onChange={(startup) => edit({ startup })}
+          />
           <CommonChoice
             label={
               <>
@@ -78,18 +82,18 @@ function Fields({ cases, sheets, edit }: FieldsProps) {
             }
             choices={integralRoutes}
             of={({ reduce }) => reduce.integralScale}
-            sheets={sheets}
+            sheets={records}
             onChange={(integralScale) => edit({ reduce: { integralScale } })}
           />
         </>
       )}
-      {has("series") && <SeriesFields sheets={sheets} edit={edit} />}
-      {has("lines") && (
+      {series.length > 0 && <SeriesFields sheets={series} edit={edit} />}
+      {lines.length > 0 && (
         <CommonChoice
           label="lines close on themselves"
           choices={yesNo}
           of={({ periodic }) => `${periodic}`}
-          sheets={sheets}
+          sheets={lines}
           onChange={(periodic) => edit({ periodic: asAnswer(periodic) })}
         />
       )}
