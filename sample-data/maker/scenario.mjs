@@ -5,7 +5,8 @@
  */
 export const mesh = 0.025;
 export const viscosity = 1.51e-5;
-export const body = { x: 0.9, chord: 0.01, Tu: 0.025, L11: 0.012 };
+/** A tube of 10 mm; it should see Tu = 2.5 % and an integral scale of 1.2 diameters (L11 of a sheet counts chords). */
+export const body = { x: 0.9, chord: 0.01, Tu: 0.025, L11: 1.2 };
 
 /** A law k = U² A ((x - x0)/M)^-n from the intensity it gives at the body. */
 function lawThrough(tuAtBody, { U, n, x0 }) {
