@@ -1,5 +1,5 @@
 // How often the 95 % intervals of a decay law hold the truth, over synthetic profiles: node bundle.mjs ASK
-// ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "excesses"}, {"kind": "together",
+// ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "fields"}, {"kind": "together",
 // "profiles", "rhos"}, {"kind": "refits", "profiles", "rounds"} or {"kind": "profiles", "profiles"}. Prints one line of JSON.
 import { fitDecay } from "../../src/core/decay/fitDecay.ts";
 import { fitPowerLaw } from "../../src/core/decay/fitPowerLaw.ts";
@@ -63,24 +63,39 @@ function coverCell({ scatter, span, stations, known: told }: Cell, profiles: num
   return tally;
 }
 
-/** Automatic windows where a near field exceeds the law by a share at x = 6 that dies out over six lengths. */
-function coverWindows(excess: number, profiles: number, seed: number) {
+/** A near field of so much at x = 6: dying out like an exponential of length 6 or 15, or like a power of x. */
+interface NearFieldCase {
+  form: "exp(-(x - 6)/6)" | "exp(-(x - 6)/15)" | "(x/6)^-3";
+  excess: number;
+}
+
+const forms: Record<NearFieldCase["form"], (x: number) => number> = {
+  "exp(-(x - 6)/6)": (x) => Math.exp(-(x - 6) / 6),
+  "exp(-(x - 6)/15)": (x) => Math.exp(-(x - 6) / 15),
+  "(x/6)^-3": (x) => (x / 6) ** -3,
+};
+
+/** Automatic windows with a near field before them, and how often the flag tells it. */
+function coverWindows({ form, excess }: NearFieldCase, profiles: number, seed: number) {
   const random = seededRandom(seed);
   const xs = spacedFrom(0, 6, 100, 16);
   const error = 0.005;
-  const [given, union] = [startTally(profiles), startTally(profiles)];
+  const [given, union, silent] = [startTally(profiles), startTally(profiles), startTally(0)];
   let begins = 0;
   for (let profile = 0; profile < profiles; profile++) {
     const stations = xs.map((x) => {
-      const q = law(x) * (1 + excess * Math.exp(-(x - 6) / 6)) * Math.exp(error * random.gaussian());
+      const q = law(x) * (1 + excess * forms[form](x)) * Math.exp(error * random.gaussian());
       return stationAt(x, { q: known(q, error) });
     });
     const decay = fitDecay(stations, plainSettings);
     begins += decay.window[0] / profiles;
     add(given, decay.given_window.n, decay.given_window.x0);
     add(union, decay.n, decay.x0);
+    if (decay.flags.some(({ code }) => code === "near-field")) continue;
+    silent.profiles++;
+    add(silent, decay.n, decay.x0);
   }
-  return { excess, begins, given, union };
+  return { form, excess, begins, given, union, silent };
 }
 
 /** Stations sampled together, their neighbours correlated by rho; taken as such, as each for itself, or told by the data. */
@@ -131,15 +146,14 @@ function timeRefits(profiles: number, rounds: number) {
 
 type Request =
   | { kind: "cells"; profiles: number; cells: Cell[]; seeds: number[] }
-  | { kind: "windows"; profiles: number; excesses: number[] }
+  | { kind: "windows"; profiles: number; fields: NearFieldCase[] }
   | { kind: "together"; profiles: number; rhos: number[] }
   | { kind: "profiles"; profiles: number }
   | { kind: "refits"; profiles: number; rounds: number };
 
 function answer(ask: Request): unknown {
   if (ask.kind === "cells") return ask.cells.map((cell, i) => coverCell(cell, ask.profiles, ask.seeds[i]));
-  if (ask.kind === "windows")
-    return ask.excesses.map((excess, i) => coverWindows(excess, ask.profiles, 7 + i));
+  if (ask.kind === "windows") return ask.fields.map((field, i) => coverWindows(field, ask.profiles, 7 + i));
   if (ask.kind === "together")
     return ask.rhos.map((rho) => ({
       rho,

@@ -13,6 +13,19 @@ const unionBar = 0.95;
 /** Most that 2000 refits may take, CPU milliseconds and share of the peer. */
 const refitBars = { milliseconds: 30, share: 0.12 };
 
+/** The first is the pure law; two are as a grid was designed; the others die out more slowly or otherwise. */
+const nearFields = [
+  { form: "exp(-(x - 6)/6)", excess: 0 },
+  { form: "exp(-(x - 6)/6)", excess: 0.3 },
+  { form: "exp(-(x - 6)/6)", excess: 1 },
+  { form: "exp(-(x - 6)/6)", excess: 0.03 },
+  { form: "exp(-(x - 6)/6)", excess: 0.1 },
+  { form: "(x/6)^-3", excess: 0.3 },
+  { form: "(x/6)^-3", excess: 1 },
+  { form: "exp(-(x - 6)/15)", excess: 0.3 },
+  { form: "exp(-(x - 6)/15)", excess: 1 },
+];
+
 export async function run(tools) {
   const bundle = await tools.bundle("coverDecay");
   const ask = async (question) => {
@@ -78,17 +91,32 @@ function cellRow({ scatter, span, stations, known }, { n, x0, open, refused }) {
 const percent = (share) => (100 * share).toFixed(1);
 
 async function printWindows(tools, ask) {
-  const found = await ask({ kind: "windows", profiles, excesses: [0, 0.3, 1] });
+  const found = await ask({ kind: "windows", profiles, fields: nearFields });
   console.log(
-    `\nAutomatic windows: 16 stations at x/M = 6 to 100, 0.5 %, q = (x - 3)^-1.25 (1 + excess exp(-(x - 6)/6)); bar ${100 * unionBar} % on the union for the pure law`,
+    `\nAutomatic windows: 16 stations at x/M = 6 to 100, 0.5 %, q = (x - 3)^-1.25 (1 + excess form); bar ${100 * unionBar} % on the union for the pure law; ` +
+      "flagged: the flag near-field is raised; silent: the union where it is not",
   );
   tools.table(
-    ["near field", "begins at", "given: n %", "x0 %", "union: n %", "x0 %", ""],
-    found.map(({ excess, begins, given, union }) => [
+    [
+      "near field",
+      "form",
+      "begins at",
+      "given: n %",
+      "x0 %",
+      "union: n %",
+      "x0 %",
+      "",
+      "flagged %",
+      "silent: n %",
+    ],
+    found.map(({ form, excess, begins, given, union, silent }) => [
       `${(100 * excess).toFixed(0)} %`,
+      excess === 0 ? "" : form,
       begins.toFixed(1),
       ...[given.n, given.x0, union.n, union.x0].map((held) => percent(held / profiles)),
       excess > 0 || Math.min(union.n, union.x0) >= unionBar * profiles ? "" : "OUTSIDE",
+      percent(1 - silent.profiles / profiles),
+      silent.profiles < 20 ? "few" : percent(silent.n / silent.profiles),
     ]),
   );
 }

@@ -56,6 +56,20 @@ describe("decaying isotropic turbulence AGARD HOM02 (A. A. Wray 1997, AGARD-AR-3
     expectClose(decay.A.value, 0.26937, { relative: 5e-4, because: "A follows t0" });
   });
 
+  // SciPy 1.17.1; the script beside the fixture is make_published.py
+  it("has the standard errors of ln A, n and x0 that curve_fit has, and odr", () => {
+    const { HOM02 } = JSON.parse(readFileSync(reference("scipy/published.json"), "utf8"));
+    const covariance = decay.law?.covariance ?? [];
+    const own = [0, 8, 4].map((at) => Math.sqrt(covariance[at]));
+    for (const by of ["curve_fit", "odr"])
+      own.forEach((deviation, i) => {
+        expectClose(deviation, HOM02[by].deviations[i], {
+          relative: 1e-6,
+          because: "both differentiate numerically",
+        });
+      });
+  });
+
   it("leaves a residual standard deviation of 4.6e-4 in ln K", () => {
     const { law, points } = decay;
     if (law === null) throw new Error("no law");
