@@ -10,16 +10,18 @@ import type { CaseView } from "../session/caseView.ts";
 import type { PageStore } from "../session/pageStore.ts";
 import type { PageWork } from "../session/pageWork.ts";
 import type { Held } from "../session/session.ts";
-import { AdoptedRoutes } from "./AdoptedRoutes.tsx";
 import { ArgumentSection } from "./ArgumentSection.tsx";
 import { BodySection } from "./BodySection.tsx";
 import { CompareSection } from "./CompareSection.tsx";
 import { DecaySection } from "./DecaySection.tsx";
 import { DefinitionPanel } from "./DefinitionPanel.tsx";
+import { DissipationNote } from "./DissipationNote.tsx";
 import { Fold } from "./Fold.tsx";
 import { balanceNotes, balancePicture, isotropyNotes, isotropyPicture, scalesPicture } from "./figures.tsx";
 import { findingsOf } from "./findings.ts";
+import { IntegralScaleNote } from "./IntegralScaleNote.tsx";
 import { InvariantsBlock } from "./InvariantsBlock.tsx";
+import { LinesNote } from "./LinesNote.tsx";
 import { NarrowingFold } from "./NarrowingFold.tsx";
 import { PageFoot } from "./PageFoot.tsx";
 import { RecordsSection } from "./RecordsSection.tsx";
@@ -55,7 +57,10 @@ export function Argument({
   const findings = useMemo(() => findingsOf(cases, comparisons, tolerance), [cases, comparisons, tolerance]);
   const change = (changed: WorkspaceChange) => dispatch({ kind: "changed", change: changed });
   const exports = pageExports(cases, held);
-  const stale = late !== null && cases.some((view) => view.stale);
+  // an argument is told late after a moment; a reduction takes longer than that
+  const stale = cases.some((view) =>
+    view.work === null ? late !== null && view.stale : view.stations.length > 0,
+  );
   const reduced = cases.filter((view) => view.stations.length > 0);
   const shared = { cases: reduced, stale };
   // the many numbers of the folds follow a bracket once it rests
@@ -85,7 +90,13 @@ export function Argument({
       />
       {reduced.length > 0 && (
         <>
-          <DecaySection {...shared} sentences={findings.decay} onChange={change}>
+          <DecaySection
+            {...shared}
+            late={late !== null}
+            comparisons={comparisons}
+            sentences={findings.decay}
+            onChange={change}
+          >
             <NarrowingFold cases={folded} onMarks={setPlans} />
           </DecaySection>
           <ArgumentSection
@@ -97,12 +108,20 @@ export function Argument({
           >
             <Fold name="Small scales, stress tensor, skewness and flatness">
               <InvariantsBlock cases={folded} />
+              <LinesNote cases={folded} />
               <StationRoutes label="Anisotropy" cases={folded} columns={anisotropyColumns} />
               <StationRoutes label="Skewness and flatness" cases={folded} columns={momentColumns} />
             </Fold>
           </ArgumentSection>
-          <ArgumentSection id="scales" {...shared} sentences={findings.scales} figure={scalesPicture}>
+          <ArgumentSection
+            id="scales"
+            {...shared}
+            sentences={findings.scales}
+            figure={scalesPicture}
+            notes={[{ name: "Integral scale", body: <IntegralScaleNote cases={folded} onChange={change} /> }]}
+          >
             <Fold name="Integral scale by every route, transverse scales">
+              <LinesNote cases={folded} />
               <StationRoutes label="Integral scales by route" cases={folded} columns={integralColumns} />
             </Fold>
           </ArgumentSection>
@@ -112,10 +131,13 @@ export function Argument({
             {...shared}
             sentences={findings.balance}
             figure={balancePicture}
-            notes={balanceNotes}
+            notes={[
+              { name: "Adopted", body: <DissipationNote cases={folded} onChange={change} /> },
+              ...balanceNotes,
+            ]}
           >
             <Fold name="Dissipation and gradients by every route">
-              <AdoptedRoutes cases={reduced} />
+              <LinesNote cases={folded} />
               <StationRoutes
                 label="Dissipation of every station by route"
                 cases={folded}

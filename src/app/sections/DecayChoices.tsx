@@ -13,6 +13,11 @@ import { SymbolText } from "./SymbolText.tsx";
 
 const quantities = { auto: "automatic", k: "k", uu: "⟨u²⟩", q: "q as given" } as const;
 const residuals = { log: "logarithmic", linear: "linear" } as const;
+const coordinates = {
+  auto: "as U asks",
+  x: "x",
+  flight: "time of flight",
+} as const;
 const weights = { sampling: "sampling errors", equal: "equal" } as const;
 
 /** The choices behind the fits, as a small list; Change opens the controls in its place. */
@@ -56,6 +61,12 @@ function ChoiceList({ cases }: { cases: readonly CaseView[] }) {
       </dd>
       <dt>residuals</dt>
       <dd>{said((fit) => residuals[fit.residuals])}</dd>
+      {cases.some(({ along }) => along !== "t") && (
+        <>
+          <dt>runs along</dt>
+          <dd>{said((_, view) => coordinateText(view))}</dd>
+        </>
+      )}
       <dt>weights</dt>
       <dd>{said((fit, view) => weights[view.decay?.weights ?? fit.weights])}</dd>
       <dt>
@@ -104,6 +115,14 @@ function ChoicesForm({
         choices={weights}
         onChange={(weights) => all({ weights })}
       />
+      {cases.some(({ along }) => along !== "t") && (
+        <ChoiceField
+          label="runs along"
+          value={fit.coordinate}
+          choices={coordinates}
+          onChange={(coordinate) => all({ coordinate })}
+        />
+      )}
       {cases.map(({ id, name, of }) => (
         <fieldset key={id} className="case-choices">
           <legend>{name}</legend>
@@ -165,6 +184,13 @@ function FittedQuantities({ cases }: { cases: readonly CaseView[] }) {
       {assumption !== "none" && `, ${assumed[assumption]}`}
     </span>
   ));
+}
+
+/** What the law of a case runs along, as it worked out. */
+function coordinateText({ decay, along, of }: CaseView): string {
+  if (along === "t" || decay?.coordinate === "t") return "time";
+  const taken = decay?.coordinate === "flight" ? "time of flight" : "x";
+  return of.sheet.fit.coordinate === "auto" ? `${taken}, as U asks` : taken;
 }
 
 const held = (value: number | null, unit: string) =>

@@ -1,4 +1,5 @@
 import type { ReactNode } from "react";
+import type { Comparison } from "../../core/comparison.ts";
 import type { Sentence } from "../../export/sentences/piece.ts";
 import { decayFigure } from "../../figures/decayFigure.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
@@ -6,8 +7,9 @@ import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
 import { DecayChoices } from "./DecayChoices.tsx";
-import { FitTable, HypothesisTable } from "./FitTable.tsx";
-import { Fold } from "./Fold.tsx";
+import { DecayFolds } from "./DecayFolds.tsx";
+import { FlagNotes } from "./FlagNotes.tsx";
+import { flagGroups } from "./flagGroups.ts";
 import { NoLaw } from "./NoLaw.tsx";
 import type { Note } from "./SectionFrame.tsx";
 
@@ -21,8 +23,9 @@ const figure: SectionFigure = {
       (<i>a</i>) Energy against distance from the virtual origin. Filled: inside the fit window; open:
       outside; the law is thin where it is extended. Below, residuals from the law; an open arrowhead stands
       for one beyond the strip. Bars: 95 %. (<i>b</i>) Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
-      <sub>0</sub> in the chosen window; bars: their adopted 95 % intervals, for an automatic window the union
-      over later starts; dashed: exponents of the classical hypotheses.
+      <sub>0</sub> in the chosen window, the contours of the profile itself (dotted and empty while they are
+      those of the window before); bars: their adopted 95 % intervals, for an automatic window the union over
+      later starts; dashed: exponents of the classical hypotheses.
     </>
   ),
 };
@@ -32,12 +35,17 @@ export function DecaySection({
   cases,
   sentences,
   stale,
+  late,
+  comparisons,
   onChange,
   children,
 }: {
   cases: readonly CaseView[];
   sentences: readonly Sentence[];
   stale: boolean;
+  /** True while the argument has been waited for longer than a moment. */
+  late: boolean;
+  comparisons: readonly Comparison[];
   onChange: (change: WorkspaceChange) => void;
   /** Further folds. */
   children?: ReactNode;
@@ -51,6 +59,7 @@ export function DecaySection({
         : "window set by hand",
       body: <DecayChoices cases={cases} onChange={onChange} />,
     },
+    ...flagNotes(fitted),
     ...correlationNote(fitted),
   ];
   return (
@@ -65,15 +74,17 @@ export function DecaySection({
       {cases.map((view) => (
         <NoLaw view={view} onChange={onChange} key={view.id} />
       ))}
-      {fitted.length > 0 && (
-        <Fold name="Fits, other routes, hypotheses">
-          <FitTable cases={fitted} />
-          <HypothesisTable cases={fitted} />
-        </Fold>
-      )}
+      {fitted.length > 0 && <DecayFolds comparisons={comparisons} late={late} onChange={onChange} />}
       {children}
     </ArgumentSection>
   );
+}
+
+/** The doubts about the laws, beside them. */
+function flagNotes(cases: readonly CaseView[]): Note[] {
+  const groups = flagGroups(cases.map((view) => ({ ...view, stations: [], reduced: null })));
+  if (groups.length === 0) return [];
+  return [{ name: "Flags", fact: String(groups.length), body: <FlagNotes groups={groups} unit="" /> }];
 }
 
 /** From this size on, n and x0 cannot be read apart. */

@@ -1,13 +1,20 @@
-import { labelOf, type Run } from "../../core/catalogue.ts";
+import type { ReactNode } from "react";
+import { labelOf } from "../../core/catalogue.ts";
 import type { DecayResult } from "../../core/decayResult.ts";
-import type { Quantity } from "../../core/quantity.ts";
-import { exponentText } from "../../export/sentences/decaySentences.ts";
-import { formatDigits, formatProbability } from "../../figures/formatNumber.ts";
+import type { FlagCode } from "../../core/flag.ts";
+import { bare, missing, type Quantity } from "../../core/quantity.ts";
+import { withReference } from "../../core/symbolRuns.ts";
+import { sensitivityOf } from "../../export/sentences/sensitivitySentence.ts";
+import type { FigureTable } from "../../figures/figureSpec.ts";
+import { endsOf } from "../../figures/stationPoints.ts";
 import type { CaseView } from "../session/caseView.ts";
-import { CaseMark } from "./CaseMark.tsx";
+import { CaseHeads } from "./CaseHeads.tsx";
 import { Definition } from "./Definition.tsx";
-import { QuantityCells } from "./QuantityText.tsx";
+import { originManner } from "./fitNumber.ts";
+import { Pennant } from "./Pennant.tsx";
+import { type Manner, QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
+import { TableSave } from "./TableSave.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
 interface Line {
@@ -15,152 +22,119 @@ interface Line {
   /** Key of the label: its symbol and its definition. */
   readonly label: string;
   readonly of: (decay: DecayResult) => Quantity;
-  /** Given in multiples of the reference length, where there is one. */
-  readonly inLengths?: true;
+  /** Doubts that are about this number. */
+  readonly flags?: readonly FlagCode[];
 }
 
+const onExponent: readonly FlagCode[] = [
+  ...(["short-span", "few-stations", "held-origin", "half-open", "chi-square-fails"] as const),
+  ...(["window-without-plateau", "equal-weights"] as const),
+];
+const onOrigin = onExponent.filter((code) => code !== "held-origin");
+const whole = "a statistic of this fit: it has no interval";
+const statistic = (value: number | null, why: string) => (value === null ? missing(why) : bare(value, whole));
+
 const lines: readonly Line[] = [
-  { name: "exponent", label: "n", of: (decay) => decay.n },
-  { name: "virtual origin", label: "x0", of: (decay) => decay.x0, inLengths: true },
-  { name: "coefficient", label: "A", of: (decay) => decay.A },
-  { name: "given this window", label: "n", of: (decay) => decay.given_window.n },
-  { name: "given this window", label: "x0", of: (decay) => decay.given_window.x0, inLengths: true },
-  { name: "line of the Taylor scale", label: "n", of: (decay) => decay.lambda_route.n },
-  { name: "line of the Taylor scale", label: "x0", of: (decay) => decay.lambda_route.x0, inLengths: true },
-  { name: "law of the dissipation", label: "n", of: (decay) => decay.epsilon_route.n },
-  { name: "growth of the integral scale", label: "m", of: (decay) => decay.growth.m },
+  { name: "exponent", label: "n", of: ({ n }) => n, flags: onExponent },
+  { name: "virtual origin", label: "x0", of: ({ x0 }) => x0, flags: onOrigin },
+  { name: "coefficient", label: "A", of: ({ A }) => A },
+  { name: "given this window", label: "n", of: ({ given_window }) => given_window.n },
+  { name: "given this window", label: "x0", of: ({ given_window }) => given_window.x0 },
+  { name: "sensitivity", label: "dn/dx0", of: sensitivityOf },
+  {
+    name: "correlation of n and x0",
+    label: "correlation_n_x0",
+    of: ({ correlation_n_x0 }) => statistic(correlation_n_x0, "one of the two is held, or there is no law"),
+  },
+  {
+    name: "reduced χ²",
+    label: "chi2_reduced",
+    of: ({ chi2_reduced }) => statistic(chi2_reduced, "no station is left over, or there is no law"),
+  },
+  {
+    name: "probability of a larger χ²",
+    label: "p",
+    of: ({ p }) => statistic(p, "all stations weigh alike: the scatter is what tells the errors"),
+  },
 ];
 
-/** The fit of every case: exponent, origin and coefficient, then the same by other routes. */
+/** The fit of every case: exponent, origin and coefficient, how they are tied, and how well the law fits. */
 export function FitTable({ cases }: { cases: readonly CaseView[] }) {
   const fitted = cases.flatMap((view) => (view.decay ? [{ view, decay: view.decay }] : []));
   return (
-    <TableScroll label="Fits">
-      <table className="data dense">
-        <CaseHeads cases={fitted.map(({ view }) => view)} first="Fit" />
-        <tbody>
-          {lines.map(({ name, label, of, inLengths }) => (
-            <tr key={name + label}>
-              <th scope="row" className="text">
-                {name}{" "}
-                <Definition of={label}>
-                  <SymbolText runs={labelOf(label).symbol} />
-                </Definition>
-              </th>
-              {fitted.map(({ view, decay }) => (
-                <QuantityCells
-                  key={view.id}
-                  quantity={of(decay)}
-                  label={label}
-                  units={view.of.sheet.units}
-                  {...(inLengths && view.length !== null
-                    ? { per: { length: view.length, symbol: view.symbol } }
-                    : {})}
-                />
-              ))}
-            </tr>
-          ))}
-          <PlainLine
-            name="correlation of"
-            symbol={[{ text: "n, x" }, { text: "0", place: "sub", upright: true }]}
-            texts={fitted.map(({ decay }) => numberText(decay.correlation_n_x0, 2))}
-          />
-          <PlainLine
-            name="reduced"
-            symbol={[{ text: "χ" }, { text: "2", place: "sup", upright: true }]}
-            texts={fitted.map(({ decay }) => numberText(decay.chi2_reduced, 2))}
-          />
-        </tbody>
-      </table>
-    </TableScroll>
-  );
-}
-
-/** Exponents of the classical hypotheses, each with the probability of data so far from it. */
-export function HypothesisTable({ cases }: { cases: readonly CaseView[] }) {
-  const fitted = cases.flatMap((view) => (view.decay ? [{ view, decay: view.decay }] : []));
-  const names = fitted[0]?.decay.hypotheses ?? [];
-  return (
-    <TableScroll label="Hypotheses">
-      <table className="data dense">
-        <CaseHeads cases={fitted.map(({ view }) => view)} first="Exponent held at" />
-        <tbody>
-          {names.map(({ name, n }) => (
-            <tr key={name}>
-              <th scope="row" className="text">
-                {exponentText(n)} {name}
-              </th>
-              {fitted.map(({ view, decay }) => (
-                <HypothesisCells
-                  key={view.id}
-                  p={decay.hypotheses.find((each) => each.name === name)?.p ?? null}
-                />
-              ))}
-            </tr>
-          ))}
-        </tbody>
-      </table>
-    </TableScroll>
-  );
-}
-
-/** Below this probability the data exclude an exponent; above it nothing is confirmed. */
-const level = 0.05;
-
-function HypothesisCells({ p }: { p: number | null }) {
-  return (
     <>
-      <td>{p === null ? "–" : formatProbability(p)}</td>
-      <td className="pm">{p === null ? "" : p < level ? "excluded" : "not excluded"}</td>
+      <TableScroll label="Fits">
+        <table className="data dense">
+          <CaseHeads cases={fitted.map(({ view }) => view)} first="Fit" />
+          <tbody>
+            {lines.map(({ name, label, of, flags = [] }) => (
+              <tr key={name + label}>
+                <th scope="row" className="text">
+                  {name}{" "}
+                  <Definition of={label}>
+                    <SymbolText runs={labelOf(label).symbol} />
+                  </Definition>
+                </th>
+                {fitted.map(({ view, decay }) => (
+                  <QuantityCells
+                    key={view.id}
+                    quantity={of(decay)}
+                    {...mannerOf(label, view)}
+                    beside={<Doubts decay={decay} codes={flags} />}
+                  />
+                ))}
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </TableScroll>
+      <PerLength cases={fitted.map(({ view }) => view)} />
+      <TableSave name="fits" table={() => fitsTable(cases)} />
     </>
   );
 }
 
-function CaseHeads({ cases, first }: { cases: readonly CaseView[]; first: string }) {
+function mannerOf(label: string, view: CaseView): Manner {
+  return label === "x0" ? originManner(view) : { label, units: view.units };
+}
+
+/** What the sensitivity is counted in. */
+function PerLength({ cases }: { cases: readonly CaseView[] }) {
+  const [view] = cases;
+  if (view === undefined) return null;
+  const step: ReactNode =
+    view.length === null ? "unit of x" : <SymbolText runs={withReference([{ text: "ℓ" }], view.symbol)} />;
   return (
-    <thead>
-      <tr>
-        <th scope="col">{first}</th>
-        {cases.map((view) => (
-          <th scope="colgroup" colSpan={2} key={view.id}>
-            <CaseMark mark={view.mark} /> {view.name}
-          </th>
-        ))}
-      </tr>
-    </thead>
+    <p className="small-print">
+      The sensitivity is the change of n for each {step} that the origin lies farther downstream.
+    </p>
   );
 }
 
-function PlainLine({
-  name,
-  symbol,
-  texts,
-}: {
-  name: string;
-  symbol?: readonly Run[];
-  texts: readonly string[];
-}) {
+function Doubts({ decay, codes }: { decay: DecayResult; codes: readonly FlagCode[] }) {
+  const text = decay.flags
+    .filter(({ code }) => codes.includes(code))
+    .map((flag) => flag.text)
+    .join(" ");
+  if (text === "") return null;
   return (
-    <tr>
-      <th scope="row" className="text">
-        {name} {symbol && <SymbolText runs={symbol} />}
-      </th>
-      {texts.map((text, i) => (
-        // biome-ignore lint/suspicious/noArrayIndexKey: one cell a case, in the order of the cases
-        <PlainCells text={text} key={i} />
-      ))}
-    </tr>
+    <span className="cell-flag" title={text}>
+      <Pennant />
+      <span className="spoken">{text}</span>
+    </span>
   );
 }
 
-function PlainCells({ text }: { text: string }) {
-  return (
-    <>
-      <td>{text}</td>
-      <td className="pm" />
-    </>
-  );
+function fitsTable(cases: readonly CaseView[]): FigureTable {
+  return {
+    heading: ["case", "number", "of", "value", "low", "high"],
+    rows: cases.flatMap(({ name: of, decay }) =>
+      decay === null
+        ? []
+        : lines.map(({ name, label, of: numberOf }) => {
+            const { value, low, high } = endsOf(numberOf(decay));
+            return [of, name, label, value, low, high];
+          }),
+    ),
+  };
 }
-
-const numberText = (value: number | null, digits: number) =>
-  value === null ? "–" : formatDigits(value, digits);

@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { labelOf } from "../../core/catalogue.ts";
 import type { Quantity } from "../../core/quantity.ts";
 import type { Units } from "../../core/unitText.ts";
@@ -19,6 +20,8 @@ export interface Manner {
 interface Cells extends Manner {
   readonly quantity: Quantity;
   readonly at?: FoundNumber;
+  /** What stands behind the value: the sign of a doubt. */
+  readonly beside?: ReactNode;
 }
 
 export function formatted(quantity: Quantity, { label, units, per }: Manner): FormattedQuantity {
@@ -34,7 +37,7 @@ export function valueText({ value, power }: FormattedQuantity): string {
 }
 
 /** A value and its interval as two cells of a table; the reason of a gap spans both. */
-export function QuantityCells({ quantity, at, ...manner }: Cells) {
+export function QuantityCells({ quantity, at, beside, ...manner }: Cells) {
   const shown = formatted(quantity, manner);
   if (quantity.value === null)
     return (
@@ -48,6 +51,7 @@ export function QuantityCells({ quantity, at, ...manner }: Cells) {
         <NumberButton of={manner.label} quantity={quantity} at={at}>
           {withUnit(valueText(shown), manner.per ? shown.unit : "")}
         </NumberButton>
+        {beside}
       </td>
       <td className="pm">{shown.interval ?? "–"}</td>
     </>

@@ -1,0 +1,113 @@
+import { memo, useCallback } from "react";
+import { labelOf } from "../../core/catalogue.ts";
+import { unitOf } from "../../core/unitText.ts";
+import { plainText } from "../../export/sentences/piece.ts";
+import { routeSentences } from "../../export/sentences/routeSentences.ts";
+import { routeWords } from "../../export/sentences/routeWords.ts";
+import { arguedOf } from "../../figures/arguedOf.ts";
+import type { FigureOptions } from "../../figures/figureSpec.ts";
+import { routesFigure } from "../../figures/routesFigure.ts";
+import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import type { CaseView } from "../session/caseView.ts";
+import { CaseMark } from "./CaseMark.tsx";
+import { FigureBlock } from "./FigureBlock.tsx";
+import { NumberField } from "./NumberField.tsx";
+import { PairCells } from "./PairCells.tsx";
+import { PairHeads } from "./PairHeads.tsx";
+import { RichText } from "./RichText.tsx";
+import { SaidSentences } from "./SaidSentences.tsx";
+import { SentenceText } from "./SentenceText.tsx";
+import { SymbolText } from "./SymbolText.tsx";
+import { TableScroll } from "./TableScroll.tsx";
+
+/** Every way to n and x0 over the same window: drawn, tabled, and where they part said. */
+export const RoutesBody = memo(function RoutesBody({
+  cases,
+  onChange,
+}: {
+  cases: readonly CaseView[];
+  onChange: (change: WorkspaceChange) => void;
+}) {
+  const build = useCallback((options: FigureOptions) => routesFigure(cases, options), [cases]);
+  return (
+    <>
+      <SaidSentences sentences={routeSentences(cases)} />
+      <FigureBlock
+        name="Figure 2 (continued)"
+        title="Exponent and origin by every route"
+        widthMm={178}
+        build={build}
+        caption={caption}
+      />
+      <RoutesTable cases={cases} />
+      <div className="fields">
+        {cases.map(({ id, name, of }) => (
+          <NumberField
+            key={id}
+            label={
+              <>
+                {name}: another <OriginSymbol along={of.sheet.along} /> to try
+              </>
+            }
+            unit={unitOf(of.sheet.along === "t" ? "T" : "L", of.sheet.units)}
+            placeholder="none"
+            value={of.sheet.fit.otherX0}
+            onChange={(otherX0) =>
+              onChange({ kind: "edit-sheet", caseId: id, edit: { fit: { ...of.sheet.fit, otherX0 } } })
+            }
+          />
+        ))}
+      </div>
+    </>
+  );
+});
+
+function OriginSymbol({ along }: { along: "x" | "t" }) {
+  return <SymbolText runs={labelOf(along === "t" ? "t0" : "x0").symbol} />;
+}
+
+const caption = (
+  <>
+    (<i>a</i>) Exponent and (<i>b</i>) origin by every route over the same window. Bars: 95 %; one that runs
+    into the frame goes on beyond it, or has no end there. Open: held, not fitted. Shaded: the interval
+    adopted. A row without a mark: refused, or not to be had; the table says why.
+  </>
+);
+
+function RoutesTable({ cases }: { cases: readonly CaseView[] }) {
+  return (
+    <TableScroll label="Exponent and origin by every route">
+      <table className="data dense">
+        <PairHeads view={cases[0]} first="Route" last="rests on" />
+        {cases.map((view) => (
+          <tbody key={view.id}>
+            <tr>
+              <th scope="rowgroup" colSpan={6}>
+                <CaseMark mark={view.mark} /> {view.name}
+              </th>
+            </tr>
+            {(arguedOf(view)?.argument.routes ?? []).map(({ key, n, x0, note }) => (
+              <tr key={key}>
+                <th scope="row" className="text">
+                  <SentenceText sentence={routeWords(key)} />
+                </th>
+                <PairCells
+                  view={view}
+                  n={n}
+                  x0={x0}
+                  rows={[
+                    ["route", plainText(routeWords(key))],
+                    ["rests on", note],
+                  ]}
+                />
+                <td className="text wrap note-cell">
+                  <RichText text={note} />
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        ))}
+      </table>
+    </TableScroll>
+  );
+}
