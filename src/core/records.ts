@@ -35,6 +35,12 @@ export interface ColumnChoice {
 }
 export type ColumnChoices = Readonly<Partial<Record<Role, ColumnChoice>>>;
 
+/**
+ * What time stamps with too few digits are taken for, where they agree with a constant step: "even", that step stands
+ * in their place; "written", they are what they say; "ask", it is not decided, and what needs the step is missing.
+ */
+export type RoundedTimes = "ask" | "even" | "written";
+
 /** How one file is read. What is null is recognised from the file itself. */
 export interface ReadSettings {
   readonly layout: Layout;
@@ -46,6 +52,8 @@ export interface ReadSettings {
   readonly heading: number | null;
   /** Time between samples where the file has no time column, in the case's unit; null: from the file. */
   readonly step: number | null;
+  /** Time stamps with too few digits; left out: "ask". */
+  readonly times?: RoundedTimes;
   /** Tokens that mean "no value". */
   readonly missing: readonly string[];
   /** Position given by the sheet, in the case's unit; null: from the file. */

@@ -38,7 +38,11 @@ export async function reduceFile(
   const kept = source.bytes > pilotSamples * leastRowBytes ? columns.write(key) : null;
   const first: Probe[] = [];
   const start = (origin: RecordOrigin, plan: RecordPlan | null) =>
-    ({ origin, reducer: startRecord(origin, reduce, { plan }), end: null }) satisfies Probe;
+    ({
+      origin,
+      reducer: startRecord(origin, reduce, { plan, ...(read.times ? { times: read.times } : {}) }),
+      end: null,
+    }) satisfies Probe;
   const summary = await readRecords(
     source,
     read,

@@ -1,5 +1,5 @@
 import type { ComparedQuantity } from "../core/comparison.ts";
-import type { Layout, Role, Separator } from "../core/records.ts";
+import type { Layout, Role, RoundedTimes, Separator } from "../core/records.ts";
 import type { IntegralScaleRoute } from "../core/stationResult.ts";
 
 /**
@@ -59,6 +59,8 @@ export interface SheetRead {
   readonly decimal: "." | "," | null;
   readonly heading: number | null;
   readonly step: number | null;
+  /** What time stamps with too few digits are taken for. */
+  readonly times: RoundedTimes;
   readonly missing: readonly string[];
 }
 export interface SheetReduce {

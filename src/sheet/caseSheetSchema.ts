@@ -104,6 +104,7 @@ export const caseSheetSchema = keyed({
         standard.read.heading,
       ),
       step: v.optional(v.nullable(positive), standard.read.step),
+      times: v.optional(oneOf("ask", "even", "written"), standard.read.times),
       missing: v.optional(v.array(v.string("a text"), "a list of texts"), [...standard.read.missing]),
     },
     {},

@@ -22,7 +22,7 @@ export const defaultCaseSheet: CaseSheet = {
     otherX0: null,
   },
   kind: null,
-  read: { separator: null, decimal: null, heading: null, step: null, missing: [] },
+  read: { separator: null, decimal: null, heading: null, step: null, times: "ask", missing: [] },
   zero: 0,
   simultaneous: "auto",
   periodic: "auto",

@@ -1,5 +1,7 @@
 import { describe, expect, it } from "vitest";
+import type { RoundedTimes } from "../../src/core/records.ts";
 import { seededRandom } from "../../src/core/signal/seededRandom.ts";
+import { reduceStation } from "../../src/core/station/reduceStation.ts";
 import { pilotSamples } from "../../src/core/station/startRecord.ts";
 import type { ColumnStore } from "../../src/engine/columnStore.ts";
 import { memoryColumnStore } from "../../src/engine/columnStore.ts";
@@ -9,6 +11,7 @@ import type { ByteSource } from "../../src/read/byteSource.ts";
 import { defaultCaseSheet } from "../../src/sheet/defaultCaseSheet.ts";
 import { readSettings } from "../../src/sheet/readSettings.ts";
 import { reduceSettings } from "../../src/sheet/reduceSettings.ts";
+import { expectClose } from "../support/expectClose.ts";
 
 /** A file in memory that counts how often it is read from its beginning to its end. */
 function fileOf(name: string, text: string) {
@@ -69,6 +72,32 @@ describe("a record whose pilot does not stand for the whole", () => {
     expect(kept.parts[0].samples).toBe(u.length);
     expect(kept.bytes).toBe(fromColumns.source.bytes);
   }, 60_000);
+});
+
+describe("a file whose time stamps have too few digits", () => {
+  const u = noise(
+    6000,
+    () => 12,
+    () => 1,
+  );
+  const rows = u.map((value, i) => `${(i / 300).toFixed(3)},${value.toFixed(4)}`);
+  const { source } = fileOf("few.csv", `t,u\n${rows.join("\n")}\n`);
+  const taken = async (times: RoundedTimes) => {
+    const sheet = { ...defaultCaseSheet, read: { ...defaultCaseSheet.read, times } };
+    const ask = { ...askOf(source, 1), read: readSettings(sheet, { path: "few.csv", x: 1 }) };
+    const { parts } = await reduceFile(source, ask, memoryColumnStore(0), () => {});
+    return reduceStation(parts, ask.reduce);
+  };
+
+  it("is read as the sheet says: asked about, even, or as written", async () => {
+    expect((await taken("ask")).T_int).toMatchObject({ value: null });
+    const even = await taken("even");
+    expectClose(even.facts.step, 1 / 300, { relative: 1e-6, because: "a line through 6000 stamps" });
+    expectClose(even.T_int.value, 12 / 300, { relative: 0.15, because: "500 integral times" });
+    const written = await taken("written");
+    expect(written.flags.map(({ code }) => code)).toContain("unequal-steps");
+    expectClose(written.T_int.value, even.T_int.value ?? 0, { relative: 0.1, because: "the same record" });
+  });
 });
 
 describe("a file of several probes", () => {

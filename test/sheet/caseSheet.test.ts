@@ -65,7 +65,7 @@ describe("a case sheet", () => {
       reference: { length: 0.025, symbol: "M" },
       columns,
       fit: { window: [0.3, 2], x0: 0.08 },
-      read: { separator: ";", decimal: ",", missing: ["-999"] },
+      read: { separator: ";", decimal: ",", times: "even", missing: ["-999"] },
       reduce: { taylorCorrection: false, probes: "all" },
       body: { x: 1.2, chord: 0.3 },
       kind: "les",
@@ -79,6 +79,7 @@ describe("a case sheet", () => {
       decimal: ",",
       heading: null,
       step: null,
+      times: "even",
       missing: ["-999"],
     });
     expect(sheet.reduce).toMatchObject({ taylorCorrection: false, probes: "all" });

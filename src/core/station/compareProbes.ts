@@ -45,14 +45,14 @@ export function compareProbes(
   scale: number | null,
   { probes: wanted = "agreeing" }: Pick<ReduceSettings, "probes"> = {},
 ): ProbeComparison {
-  const { parts, repeats } = record;
+  const { parts, repeats, untimed } = record;
   const leaves = probeLeaves(record, scale);
   const readings = parts.map(({ origin }, i): ProbeReading => {
     const { U, lnRms } = leaves[i];
     return {
       ...{ file: origin.file, y: origin.y, z: origin.z },
-      U: probeQuantity(U.value, leavesError(U, "linear", repeats)),
-      u_rms: probeQuantity(Math.exp(lnRms.value), leavesError(lnRms, "log", repeats)),
+      U: probeQuantity(U.value, leavesError(U, "linear", repeats), untimed),
+      u_rms: probeQuantity(Math.exp(lnRms.value), leavesError(lnRms, "log", repeats), untimed),
       agrees: null,
       departs: [],
     };

@@ -1,5 +1,5 @@
 import { ReductionFailure } from "../failure.ts";
-import type { RecordOrigin } from "../records.ts";
+import type { RecordOrigin, RoundedTimes } from "../records.ts";
 import { roundedStep } from "./roundedTimes.ts";
 import { gapSteps, isEqualStep, printQuantum } from "./stepRule.ts";
 
@@ -23,10 +23,16 @@ const probe = 4096;
  * @param t       time stamps, s, ascending; null: the origin's step holds
  * @param count   stamps, ≥ 2
  * @param origin  where the record came from
+ * @param times   "written": stamps with few digits are taken for what they say
  * @returns       step, last printed digit, and how many steps are unequal
  * @throws no-time
  */
-export function examineSteps(t: Float64Array | null, count: number, origin: RecordOrigin): StepFacts {
+export function examineSteps(
+  t: Float64Array | null,
+  count: number,
+  origin: RecordOrigin,
+  times: RoundedTimes = "even",
+): StepFacts {
   const whole = [0, count] as const;
   if (t === null) {
     if (origin.step === null || !(origin.step > 0)) throw withoutStep(origin);
@@ -40,7 +46,7 @@ export function examineSteps(t: Float64Array | null, count: number, origin: Reco
   }
   const median = medianStep(t, count);
   const longest = longestStretch(t, count, gapSteps * median);
-  const rounded = roundedStep(t, ...longest, quantum);
+  const rounded = times === "written" ? null : roundedStep(t, ...longest, quantum);
   if (rounded !== null) return { step: rounded, quantum, rounded: true, unequal: 0, longest };
   const step = meanWithin(t, count, gapSteps * median);
   if (countUnequal(t, count, step) === 0) return { step, quantum, rounded: false, unequal: 0, longest };

@@ -23,17 +23,16 @@ export interface IntegralTimes {
  * @param correlation  of the station; null where its records hold no lag products
  * @param spectra      of the station, or null
  * @param adopted      route that the user chose
+ * @param why          why there is no correlation
  * @see   Pope (2000) §3.6; Tennekes & Lumley (1972) §6.4
  */
 export function integralTimes(
   correlation: JoinedCorrelation | null,
   spectra: JoinedSpectra | null,
   adopted: ReduceSettings["integralScale"],
+  why = "the records hold no lag products, so there is no correlation",
 ): IntegralTimes {
-  if (correlation === null) {
-    const why = "the records hold no lag products, so there is no correlation";
-    return { routes: allRoutes(why), tauStar: null, scale: null };
-  }
+  if (correlation === null) return { routes: allRoutes(why), tauStar: null, scale: null };
   const { step } = correlation;
   const variance = correlation.covariance[0][0];
   const rho = correlation.covariance[0].map((value) => value / variance);

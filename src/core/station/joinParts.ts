@@ -10,7 +10,9 @@ import type { Component, StationPart } from "./stationPart.ts";
 export interface JoinedRecord {
   /** In an order that does not depend on that of arrival. */
   readonly parts: readonly StationPart[];
-  /** Those of the parts that have spectra, all with one step. */
+  /** Why nothing that needs the time between samples can be had; null where it can. */
+  readonly untimed: string | null;
+  /** Those of the parts that have spectra, all with one step; none where the record is untimed. */
   readonly spectral: readonly StationPart[];
   readonly components: readonly Component[];
   /** Sampled at the same times: blocks are averaged across probes, and left out together. */
@@ -53,9 +55,12 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
   const total = parts.reduce((sum, part) => sum + part.samples, 0);
   const partMeans = parts.map((part) => components.map((name) => meanOf(part, name)));
   const step = parts[0].step;
+  const untimed = parts.some(({ plan }) => plan.unconfirmed) ? unconfirmed : null;
+  const timed = untimed === null ? parts : [];
   return {
     parts,
-    spectral: parts.filter((part) => part.lags !== null && Math.abs(part.step / step - 1) < 1e-6),
+    untimed,
+    spectral: timed.filter((part) => part.lags !== null && Math.abs(part.step / step - 1) < 1e-6),
     components,
     together,
     samples: total,
@@ -76,6 +81,9 @@ export function joinParts(given: readonly StationPart[], settings: ReduceSetting
     blockSamples: parts[0].blocks.blockSamples,
   };
 }
+
+const unconfirmed =
+  'the time stamps have too few digits, and it is not confirmed that the steps are even: set read.times to "even" or "written"';
 
 /** Of records taken at once, the one that comes back first. */
 function shortestReplay(parts: readonly StationPart[]): StationPart {

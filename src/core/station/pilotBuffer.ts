@@ -1,5 +1,5 @@
 import { assert, ReductionFailure } from "../failure.ts";
-import type { RecordOrigin, VelocityBlock } from "../records.ts";
+import type { RecordOrigin, RoundedTimes, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import { type BranchCut, cutTolerance } from "./branchCuts.ts";
 import { borrowColumn, returnColumn } from "./columnStore.ts";
@@ -39,6 +39,7 @@ const recent = 1000;
 export class PilotBuffer {
   private readonly origin: RecordOrigin;
   private readonly startup: number;
+  private readonly rounded: RoundedTimes;
   /** Measured components, then t where there is one. */
   private columns: Float64Array[] = [];
   private components: readonly Component[] = ["u"];
@@ -55,8 +56,12 @@ export class PilotBuffer {
   /** Stamps alike are one sample sent twice; null: not known yet, for they may be rounded. */
   private oneSample: boolean | null = null;
 
-  /** @param startup  time left out at the start, s */
-  constructor(origin: RecordOrigin, startup: number) {
+  /**
+   * @param startup  time left out at the start, s
+   * @param rounded  what time stamps with too few digits are taken for
+   */
+  constructor(origin: RecordOrigin, startup: number, rounded: RoundedTimes) {
+    this.rounded = rounded;
     this.origin = origin;
     this.startup = startup;
   }
@@ -89,7 +94,7 @@ export class PilotBuffer {
     if (t === null || this.oneSample !== null || !hasEqual(t, this.count)) return;
     // one time in all of them is no time at all, which the plan refuses
     if (!(t[this.count - 1] > t[0])) return;
-    this.oneSample = !examineSteps(t, this.count, this.origin).rounded;
+    this.oneSample = !examineSteps(t, this.count, this.origin, this.rounded).rounded;
     if (!this.oneSample) return;
     const { of: placeOf } = this.places;
     this.places = new SamplePlaces();
@@ -111,7 +116,7 @@ export class PilotBuffer {
   plan(settings: ReduceSettings): RecordPlan {
     const columns = this.columns.slice(0, this.components.length);
     try {
-      return planRecord({ count: this.count, t: this.times(), columns }, this.origin, settings);
+      return planRecord({ count: this.count, t: this.times(), columns }, this.origin, settings, this.rounded);
     } catch (error) {
       const [first] = this.cuts;
       const short = error instanceof ReductionFailure && error.code === "too-few-samples";

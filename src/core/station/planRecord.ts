@@ -1,4 +1,4 @@
-import type { RecordOrigin } from "../records.ts";
+import type { RecordOrigin, RoundedTimes } from "../records.ts";
 import { mostBlocks } from "../signal/blockList.ts";
 import { startLagProducts } from "../signal/lagProducts.ts";
 import { startWelch } from "../signal/welch.ts";
@@ -34,10 +34,15 @@ const shortSegment = 2;
  * What a record's pilot decides for all of it: step, lags, segments, blocks.
  * @throws too-few-samples, constant-signal, no-time
  */
-export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceSettings): RecordPlan {
+export function planRecord(
+  pilot: Pilot,
+  origin: RecordOrigin,
+  settings: ReduceSettings,
+  rounded: RoundedTimes = "even",
+): RecordPlan {
   if (pilot.count < fewestSamples) throw tooFew(pilot.count, fewestSamples, origin);
   const u = pilot.columns[0];
-  const facts = examineSteps(pilot.t, pilot.count, origin);
+  const facts = examineSteps(pilot.t, pilot.count, origin, rounded);
   const weighted = facts.unequal > 0;
   const [from, to] = facts.longest;
   const reference = pilot.columns.map((column) => mean(column, pilot.count));
@@ -59,6 +64,7 @@ export function planRecord(pilot: Pilot, origin: RecordOrigin, settings: ReduceS
   const times = { step: facts.step, weighted, quantum: facts.quantum, rounded: facts.rounded };
   return {
     ...times,
+    ...(facts.rounded && rounded === "ask" ? { unconfirmed: true } : {}),
     reference,
     slope,
     centre,

@@ -70,7 +70,8 @@ export function leavesError(
   return error === null ? null : { ...error, standard: error.standard * Math.sqrt(repeats), scale };
 }
 
-export function probeQuantity(value: number, error: StandardError | null): Quantity {
-  if (error === null) return bare(value, `the record is shorter than ${shortestRecord} integral times`);
-  return withError(value, error);
+/** @param untimed  why no record is given an error, where there is such a reason */
+export function probeQuantity(value: number, error: StandardError | null, untimed: string | null): Quantity {
+  if (error !== null) return withError(value, error);
+  return bare(value, untimed ?? `the record is shorter than ${shortestRecord} integral times`);
 }

@@ -13,6 +13,8 @@ export interface RecordPlan {
   readonly quantum: number;
   /** The stamps have too few digits and agree with a constant step: samples are counted, not timed. */
   readonly rounded?: boolean;
+  /** Nobody has said yet that such stamps stand for a constant step. */
+  readonly unconfirmed?: boolean;
   /** Restarts that reach back in time, for another reading: what they overtook is left out. */
   readonly cuts?: readonly BranchCut[];
   /** It was made for the whole record: a reading with it is the last. */

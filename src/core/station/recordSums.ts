@@ -123,7 +123,14 @@ export class RecordSums {
   private replay(): Required<StationPart>["replay"] {
     const { points, length } = this.coarse.finish();
     const found = replayPeriod(points);
-    return found && { period: found.period * length * this.plan.step, peak: found.peak };
+    const step = length * this.plan.step;
+    return (
+      found && {
+        period: found.period * step,
+        peak: found.peak,
+        revival: { from: found.from * step, step, rho: found.rho },
+      }
+    );
   }
 
   part(facts: PartFacts): StationPart {

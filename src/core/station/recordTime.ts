@@ -1,3 +1,4 @@
+import type { JoinedRecord } from "./joinParts.ts";
 import { recordCorrelation } from "./recordCorrelation.ts";
 import type { StationPart } from "./stationPart.ts";
 import { zeroCrossing } from "./zeroCrossing.ts";
@@ -18,7 +19,8 @@ export function recordTime(part: StationPart): number | null {
  * which what they differ in does not touch.
  * @returns s; null where none of them has one
  */
-export function usualTime(parts: readonly StationPart[]): number | null {
+export function usualTime({ parts, untimed }: Pick<JoinedRecord, "parts" | "untimed">): number | null {
+  if (untimed !== null) return null;
   const times = parts.flatMap((part) => recordTime(aboutItself(part)) ?? []).sort((a, b) => a - b);
   return times[times.length >> 1] ?? null;
 }

@@ -38,8 +38,7 @@ import { type StructureSums, structureSums } from "./structureSums.ts";
 export function reduceStation(parts: readonly StationPart[], settings: ReduceSettings): StationResult {
   assert(parts.length > 0, "a station has at least one record");
   const given = stationBasis(parts, settings);
-  const compared =
-    parts.length > 1 ? compareProbes(given.record, usualTime(given.record.parts), settings) : null;
+  const compared = parts.length > 1 ? compareProbes(given.record, usualTime(given.record), settings) : null;
   const basis =
     compared === null || compared.kept.length === parts.length
       ? given
@@ -86,7 +85,7 @@ function valueContext(
     components: record.components,
     column,
     means: record.means,
-    step: record.step,
+    step: record.untimed === null ? record.step : null,
     viscosity: settings.kinematicViscosity,
     referenceSpeed: settings.referenceSpeed,
     taylorCorrection: settings.taylorCorrection,

@@ -6,6 +6,9 @@ export interface Replay {
   readonly period: number;
   /** Correlation with itself one period later. */
   readonly peak: number;
+  /** Correlation from `from` on, a number a point: the revival with its surroundings. */
+  readonly from: number;
+  readonly rho: Float64Array;
 }
 
 /** Correlation from which on a signal is said to come back, and how many of its own standard errors it must be. */
@@ -18,6 +21,8 @@ const low = 0.3;
 const almost = 0.8;
 /** Integral times below which a record is too short to tell. */
 const fewest = 40;
+/** Integral times kept on either side of a revival, for the eye. */
+const around = 6;
 
 /**
  * Whether a signal repeats itself: a correlation that was lost and comes back, at a lag of up to half the record,
@@ -49,7 +54,10 @@ export function replayPeriod(x: Float64Array): Replay | null {
   let highest = 0;
   for (let l = from; l < half; l++) if (isPeak(l)) highest = Math.max(highest, rho[l]);
   for (let l = from; l < half; l++) {
-    if (isPeak(l) && rho[l] >= almost * highest) return { period: vertex(rho, l), peak: rho[l] };
+    if (!isPeak(l) || rho[l] < almost * highest) continue;
+    const reach = Math.ceil(around * scale);
+    const first = Math.max(0, l - reach);
+    return { period: vertex(rho, l), peak: rho[l], from: first, rho: rho.slice(first, l + reach + 1) };
   }
   return null;
 }

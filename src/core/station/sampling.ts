@@ -27,7 +27,9 @@ const fewestInPeriod = 5;
  */
 export function sampling(record: JoinedRecord, times: IntegralTimes): Sampling {
   if (times.scale === null) {
-    const why = "the integral time is not known, and with it not how many independent samples there are";
+    const why =
+      record.untimed ??
+      "the integral time is not known, and with it not how many independent samples there are";
     return { integralTimes: null, groups: null, scaleError: null, why };
   }
   const integralTimes = record.span / times.scale;

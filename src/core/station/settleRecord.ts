@@ -63,7 +63,8 @@ function nextPlan(
   closed: ClosedRecord,
   settings: ReduceSettings,
 ): RecordPlan | null {
-  if (closed.unequal > 0 && !plan.weighted) return { ...plan, weighted: true, rounded: false };
+  if (closed.unequal > 0 && !plan.weighted)
+    return { ...plan, weighted: true, rounded: false, unconfirmed: false };
   const slope = settings.detrend === "linear" ? wholeSlope(part) : plan.slope;
   if (part.lags !== null && leansOtherwise(part, slope)) return { ...plan, slope };
   const time = recordTime(part);

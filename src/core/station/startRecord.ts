@@ -1,4 +1,4 @@
-import type { RecordOrigin, VelocityBlock } from "../records.ts";
+import type { RecordOrigin, RoundedTimes, VelocityBlock } from "../records.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import { type BranchCut, CutSieve } from "./branchCuts.ts";
 import { PilotBuffer } from "./pilotBuffer.ts";
@@ -30,8 +30,10 @@ export interface RecordOptions {
   readonly plan: RecordPlan | null;
   /** Samples of the pilot. */
   readonly pilot: number;
+  /** What time stamps with too few digits are taken for. */
+  readonly times: RoundedTimes;
 }
-export const recordDefaults: RecordOptions = { startup: 0, plan: null, pilot: pilotSamples };
+export const recordDefaults: RecordOptions = { startup: 0, plan: null, pilot: pilotSamples, times: "ask" };
 
 /**
  * Begins the reduction of one probe's record. Results depend on the samples and on nothing else: in whichever
@@ -46,8 +48,8 @@ export function startRecord(
   settings: ReduceSettings,
   options: Partial<RecordOptions> = {},
 ): RecordReducer {
-  const { startup, plan, pilot: length } = { ...recordDefaults, ...options };
-  const pilot = new PilotBuffer(origin, startup);
+  const { startup, plan, pilot: length, times } = { ...recordDefaults, ...options };
+  const pilot = new PilotBuffer(origin, startup, times);
   const sieve = plan?.cuts === undefined ? null : new CutSieve(plan.cuts, plan.step);
   const held = plan === null ? length : 1;
   let record: RecordChunks | null = null;

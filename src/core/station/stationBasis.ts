@@ -17,5 +17,6 @@ export function stationBasis(parts: readonly StationPart[], settings: ReduceSett
   const record = joinParts(parts, settings);
   const correlation = joinCorrelations(record, settings.correlation === "unbiased");
   const spectra = joinSpectra(record);
-  return { record, correlation, spectra, times: integralTimes(correlation, spectra, settings.integralScale) };
+  const times = integralTimes(correlation, spectra, settings.integralScale, record.untimed ?? undefined);
+  return { record, correlation, spectra, times };
 }

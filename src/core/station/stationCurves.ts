@@ -46,7 +46,17 @@ export function stationCurves(
     rho_u: thinned(correlation.covariance[0], lags.every, lags.count),
     rho_v: rho("v"),
     rho_w: rho("w"),
+    ...revivalOf(record),
   };
+}
+
+/** Around the period of a replayed record, where the correlation revives. */
+function revivalOf({ parts }: JoinedRecord): Pick<StationCurves, "revival"> {
+  const found = parts.find(({ replay }) => replay?.revival !== undefined)?.replay;
+  if (!found?.revival) return {};
+  const { from, step, rho } = found.revival;
+  const lag = Float64Array.from(rho, (_, i) => from + i * step);
+  return { revival: { period: found.period, peak: found.peak, lag, rho: rho.slice() } };
 }
 
 function localOf({ density, size, step }: JoinedSpectra, U: number, [v, w]: readonly [number, number]) {

@@ -13,7 +13,7 @@ export function stationFacts(material: StationMaterial, values: Record<ValueName
   const factors = U > 0 ? taylorFactors(uu, v2, w2, U, settings.taylorCorrection) : null;
   const sum = spectra?.density[0].reduce((total, value) => total + value, 0);
   return {
-    step: record.step,
+    step: record.untimed === null ? record.step : null,
     integralTimes: sampling.integralTimes,
     groups: sampling.groups?.count ?? 0,
     segment: spectra?.size ?? null,

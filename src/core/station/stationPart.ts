@@ -32,10 +32,20 @@ export interface StationPart {
   /** Mean of all records of the same probe less the plan's reference, a number a component; absent: the record's own. */
   readonly commonRest?: readonly number[];
   /** A record that repeats itself: the time after which u comes back, and how much alike. */
-  readonly replay?: { readonly period: number; readonly peak: number } | null;
+  readonly replay?: RecordReplay | null;
   readonly flags: readonly Flag[];
   /** Where it was cut; left out where nowhere. */
   readonly cuts?: CutList;
+}
+
+/** How a record comes back. */
+export interface RecordReplay {
+  /** s. */
+  readonly period: number;
+  /** Correlation with itself one period later. */
+  readonly peak: number;
+  /** Correlation around the period, from the lag `from` on at equal steps; left out of parts that were made without. */
+  readonly revival?: { readonly from: number; readonly step: number; readonly rho: Float64Array };
 }
 
 /** Lag products about the plan's reference, a list a component. */

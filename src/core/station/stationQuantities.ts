@@ -38,6 +38,7 @@ export function valueQuantities(material: StationMaterial): Record<ValueName, Qu
 const structural = /^epsilon_(?:second|third)-order$/;
 const needsViscosity = /^epsilon|^eta$|Re_|_epsilon/;
 const needsSpectrum = /gradient|^epsilon|lambda|^eta$|S_dudx|^K_|_epsilon/;
+const needsTime = /gradient|^epsilon|lambda|^eta$|S_dudx|^K_|_over_T|_ratio$/;
 const ofTensor = /^(?:anisotropy|barycentric)|vw$/;
 const lateralOf =
   /^(?:isotropy_u|skewness_|flatness_|gradient_|K_|rho_u)?([vw])$|^u?([vw])w?$|^([vw])\3$|^L_([vw])_ratio$/;
@@ -50,6 +51,7 @@ function absence(name: ValueName, material: StationMaterial): string {
   if (lacking !== undefined) return `${lacking} was not measured`;
   if (needsViscosity.test(name) && !structural.test(name) && settings.kinematicViscosity === null)
     return "no kinematic viscosity is given";
+  if (record.untimed !== null && needsTime.test(name)) return record.untimed;
   if (!(all.whole.U > 0))
     return "the mean velocity is not positive, so time is not to be turned into distance";
   if (needsSpectrum.test(name) && spectra === null)
@@ -91,7 +93,8 @@ export function lateralLength(
 ): Quantity {
   const c = record.components.indexOf(name);
   if (c < 0) return missing(`${name} was not measured`);
-  if (correlation === null) return missing("the records hold no lag products, so there is no correlation");
+  if (correlation === null)
+    return missing(record.untimed ?? "the records hold no lag products, so there is no correlation");
   if (times.tauStar === null) return missing("the correlation of u does not fall to zero");
   const covariance = correlation.covariance[c];
   const area = (areaUpTo(covariance, times.tauStar / correlation.step) * correlation.step) / covariance[0];
@@ -102,7 +105,7 @@ export function lateralLength(
 export function inertialDissipation({ record, spectra, all }: StationMaterial): Quantity {
   const U = record.means[0];
   if (spectra === null || !(U > 0))
-    return missing("no piece of a record holds a whole segment of the spectrum");
+    return missing(record.untimed ?? "no piece of a record holds a whole segment of the spectrum");
   const unit = (2 * Math.PI) / (U * spectra.size * spectra.step);
   const k1 = Float64Array.from({ length: spectra.size / 2 }, (_, i) => (i + 1) * unit);
   const E11 = spectra.density[0].subarray(1).map((value) => (value * U) / (2 * Math.PI));

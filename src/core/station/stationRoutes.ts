@@ -75,7 +75,7 @@ function expectedDifferences({
   const found = gradients.find(({ name }) => name === "u");
   const { U, uu, vv, ww } = all.whole;
   if (found === undefined || !(U > 0)) {
-    const none = missing("the spectrum shows nothing above its noise floor");
+    const none = missing(record.untimed ?? "the spectrum shows nothing above its noise floor");
     return { gradient_difference2_expected: none, gradient_difference4_expected: none };
   }
   const [v2, w2] = lateral(uu, vv, ww);

@@ -9,8 +9,8 @@ export interface ValueContext {
   readonly column: Readonly<Record<string, number>>;
   /** Mean of each component in the whole record: the sums are about it. */
   readonly means: readonly number[];
-  /** Time between samples, s. */
-  readonly step: number;
+  /** Time between samples, s; null where it is not known. */
+  readonly step: number | null;
   readonly viscosity: number | null;
   readonly referenceSpeed: number | null;
   readonly taylorCorrection: boolean;
@@ -141,6 +141,8 @@ export function taylorFactors(
 
 /** Mean squares by differences, not corrected for what a difference loses, and the derivative skewness. */
 function differences(sums: Float64Array, { column, step }: ValueContext, speedSquared: number) {
+  const unknown = Number.NaN;
+  if (step === null) return { gradient_difference2: unknown, gradient_difference4: unknown, S_dudx: unknown };
   const at = (name: string) => sums[column[name]];
   const square = at("derivative_squared") / at("derivatives");
   return {

@@ -31,8 +31,11 @@ export function timeFlags({ plan, closed, cuts, part, repeated }: TimeFacts): Fl
     flags.push({ code: "unequal-steps", text, value: loss });
   }
   if (plan.rounded) {
-    const text = `The time stamps have too few digits and agree with a constant step of ${plan.step.toPrecision(7)} within half a digit: it stands in their place.`;
-    flags.push({ code: "rounded-times", text, value: plan.quantum / plan.step });
+    const found = `The time stamps have too few digits and agree with a constant step of ${plan.step.toPrecision(7)} within half a digit`;
+    const text = plan.unconfirmed
+      ? `${found}. Until read.times says "even" or "written", what needs the time between samples is missing.`
+      : `${found}: it stands in their place.`;
+    flags.push({ code: "rounded-times", text, value: plan.step });
   }
   return flags;
 }
