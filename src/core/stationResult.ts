@@ -137,6 +137,13 @@ export interface StationCurves {
   readonly rho_u: Float64Array;
   readonly rho_v: Float64Array | null;
   readonly rho_w: Float64Array | null;
+  /** Of a replayed record: the correlation of u around the lag at which it comes back. */
+  readonly revival?: {
+    readonly period: number;
+    readonly peak: number;
+    readonly lag: Float64Array;
+    readonly rho: Float64Array;
+  };
 }
 
 /** Spectra averaged over bands of a twentieth of a decade, where they can be differentiated. */
