@@ -23,6 +23,10 @@ export function headActions({
   const add = { name: "Add files", run: () => picker.current?.files() };
   if (held === null) return [look];
   const { past, future } = held.history;
+  const save = async () => {
+    const { saveWorkspace } = await import("../keeping/saveWorkspace.ts");
+    saveWorkspace(held);
+  };
   return [
     add,
     {
@@ -37,6 +41,7 @@ export function headActions({
       disabled: future.length === 0,
       title: "Control Shift Z",
     },
+    { name: "Save workspace", run: () => void save() },
     look,
   ];
 }

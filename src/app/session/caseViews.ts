@@ -2,6 +2,7 @@ import type { DecayResult, DecaySettings } from "../../core/decayResult.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import { decaySettings } from "../../sheet/decaySettings.ts";
 import type { WorkspaceCase } from "../../sheet/workspace.ts";
+import { caseKey } from "./caseKey.ts";
 import type { CaseView } from "./caseView.ts";
 import { fitNow } from "./fitNow.ts";
 import type { Draft } from "./pageStore.ts";
@@ -87,9 +88,11 @@ function viewOf({ of, reduced, argued, draft, work }: Ground, before: CaseView |
   };
   if (reduced === null || reduced.stations.length === 0)
     return { ...base, stations: [], decay: null, stale: work !== null };
+  // reduced with other settings, and its records may not be here to be reduced with these
+  const late = work !== null || reduced.key !== caseKey(of);
   const settings = drafted(decaySettings(sheet), draft);
   const fit = fitOf(reduced, settings, of.id, argued, draft !== null);
-  if (fit) return { ...base, ...fit, stale: work !== null };
+  if (fit) return { ...base, ...fit, stale: late };
   // the worker is at it: what is known stays, and is marked where it belongs to other settings
   const known = before !== null && before.reduced === reduced && before.decay !== null;
   return known

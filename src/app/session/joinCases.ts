@@ -20,7 +20,7 @@ export function joinCases(
   { cases: planned, leftOut, warnings }: DropPlan,
   here: readonly WorkspaceCase[],
   byName: ReadonlyMap<string, SourceFile>,
-  drop: number,
+  drop: string,
 ): JoinedCases {
   const out = {
     cases: [] as Omit<WorkspaceCase, "mark">[],

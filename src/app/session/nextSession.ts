@@ -40,6 +40,9 @@ export function nextSession(session: Session, event: SessionEvent): Session {
       return withHistory(session, (held) => undo(held.history));
     case "redone":
       return withHistory(session, (held) => redo(held.history));
+    case "restored":
+      // work that is under way goes on: it would tell of cases that are not there any more
+      return session.kind === "reducing" ? session : { kind: "ready", held: event.held };
     case "argued":
       return withHeld(session, (held) => ({ ...held, argued: event.argued }));
     default:

@@ -1,5 +1,6 @@
 import type { Engine } from "../../engine/protocol.ts";
 import type { ReductionCache } from "../../engine/reduceCase.ts";
+import type { WorkspaceCase } from "../../sheet/workspace.ts";
 import { type ArgumentAsk, argueCases, argumentAsk } from "./argueCases.ts";
 import { caseKey } from "./caseKey.ts";
 import type { DroppedFile } from "./openDrop.ts";
@@ -29,6 +30,8 @@ export function startPageWork(store: PageStore, engine: Engine): PageWork {
   const cache: ReductionCache = { files: new Map(), stations: new Map() };
   const running = new Map<string, { key: string; abort: AbortController }>();
   const resumed = new Set<string>();
+  /** Keys of cases that cannot be reduced anew: it is said once. */
+  const lacking = new Set<string>();
   let arguing: string | null = null;
 
   function reduceWhatIsAsked(held: Held): void {
@@ -40,6 +43,11 @@ export function startPageWork(store: PageStore, engine: Engine): PageWork {
       const wanted = known?.key !== key || (resumed.has(of.id) && !known.complete);
       const at = running.get(of.id);
       if (!wanted || at?.key === key) continue;
+      if (lacksRecords(of, held)) {
+        if (!lacking.has(key)) store.getState().setNotice(lackingText(of.sheet.case));
+        lacking.add(key);
+        continue;
+      }
       at?.abort.abort(superseded);
       const abort = new AbortController();
       const run = { key, abort };
@@ -108,4 +116,15 @@ export function startPageWork(store: PageStore, engine: Engine): PageWork {
       engine.close();
     },
   };
+}
+
+/** A page that came back, or a colleague's, may be without the bytes of its records. */
+function lacksRecords({ sources }: WorkspaceCase, { files }: Held): boolean {
+  return sources.some(
+    ({ name, fingerprint }) => !files.some((file) => file.name === name && file.fingerprint === fingerprint),
+  );
+}
+
+function lackingText(name: string): string {
+  return `The records of ${name} are not in this browser, so the numbers shown are those of the settings before. Drop the same files again, and they are reduced anew.`;
 }

@@ -3,6 +3,8 @@ import type { Preview } from "../../core/records.ts";
 import type { Engine, SourceFile } from "../../engine/protocol.ts";
 import type { DropPlan } from "../../sheet/dropPlan.ts";
 import type { WorkspaceCase } from "../../sheet/workspace.ts";
+import { isWorkspaceFile } from "../keeping/isWorkspaceFile.ts";
+import { freshToken } from "./freshToken.ts";
 import { joinCases } from "./joinCases.ts";
 import { heldOf } from "./nextSession.ts";
 import { asSources, type DroppedFile } from "./openDrop.ts";
@@ -24,8 +26,25 @@ export async function runDrop(
   const files = await dropped;
   if (files.length === 0) return store.getState().setNotice("The drop held no files.");
   await untilIdle(store);
-  const { dispatch, setNotice } = store.getState();
-  setNotice(null);
+  store.getState().setNotice(null);
+  const records = await withoutWorkspace(store, files);
+  if (records.length > 0) await planRecords(store, engine, records);
+}
+
+/** Opens the workspace of a drop, if it holds one; what else it holds. */
+async function withoutWorkspace(store: PageStore, files: readonly DroppedFile[]): Promise<DroppedFile[]> {
+  const rest: DroppedFile[] = [];
+  for (const each of files) {
+    if (/\.json$/i.test(each.path) && (await isWorkspaceFile(each.file))) {
+      const { openWorkspaceFile } = await import("../keeping/openWorkspaceFile.ts");
+      await openWorkspaceFile(store, each);
+    } else rest.push(each);
+  }
+  return rest;
+}
+
+async function planRecords(store: PageStore, engine: Engine, files: readonly DroppedFile[]): Promise<void> {
+  const { dispatch } = store.getState();
   dispatch({
     kind: "offered",
     files: files.length,
@@ -65,25 +84,29 @@ async function firstLook(engine: Engine, file: SourceFile): Promise<Preview | Pl
   }
 }
 
-let dropCount = 0;
-
 function asPlan(
   planned: DropPlan,
   sources: readonly SourceFile[],
   looks: readonly (readonly [string, Preview | PlainFailure])[],
   here: readonly WorkspaceCase[],
 ): Plan {
-  dropCount++;
   const byName = new Map(sources.map((source) => [source.name, source]));
-  const { cases, additions, leftOut, warnings } = joinCases(planned, here, byName, dropCount);
+  const { cases, additions, leftOut, warnings } = joinCases(planned, here, byName, freshToken());
   const used = new Set([...cases, ...additions].flatMap((each) => each.sources.map(({ name }) => name)));
   return {
     cases,
     additions,
-    files: sources.filter(({ name }) => used.has(name)),
+    files: sources.filter((source) => used.has(source.name) || isOfCase(source, here)),
     previews: looks.flatMap(([name, look]) => ("code" in look || !used.has(name) ? [] : [look])),
     aside: { leftOut, failures: planned.failures, warnings },
   };
+}
+
+/** A file of a case whose records were not here: it comes back to it. */
+function isOfCase({ name, fingerprint }: SourceFile, here: readonly WorkspaceCase[]): boolean {
+  return here.some(({ sources }) =>
+    sources.some((source) => source.name === name && source.fingerprint === fingerprint),
+  );
 }
 
 function untilIdle(store: PageStore): Promise<void> {

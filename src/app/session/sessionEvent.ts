@@ -1,5 +1,5 @@
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
-import type { Argued, Plan, Reduced, Work } from "./session.ts";
+import type { Argued, Held, Plan, Reduced, Work } from "./session.ts";
 
 /** Everything that can happen to a session. */
 export type SessionEvent =
@@ -22,4 +22,6 @@ export type SessionEvent =
   | { readonly kind: "changed"; readonly change: WorkspaceChange }
   | { readonly kind: "undone" }
   | { readonly kind: "redone" }
-  | { readonly kind: "argued"; readonly argued: Argued };
+  | { readonly kind: "argued"; readonly argued: Argued }
+  /** The page as it was left comes back, or a workspace file was opened. */
+  | { readonly kind: "restored"; readonly held: Held };
