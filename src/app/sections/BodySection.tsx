@@ -21,7 +21,7 @@ import { placedBodies } from "./bodyRows.ts";
 import { DevelopmentFold } from "./DevelopmentFold.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { Finding } from "./Finding.tsx";
-import { Reasoning } from "./Reasoning.tsx";
+import { SaidSentences } from "./SaidSentences.tsx";
 import { type Note, SectionFrame } from "./SectionFrame.tsx";
 import { TargetTable } from "./TargetTable.tsx";
 
@@ -44,7 +44,7 @@ export function BodySection({
   return (
     <SectionFrame section={sectionOf("body")} notes={notesOf(cases, wanted, onChange)}>
       <Finding sentences={findingOf(cases, wanted)} stale={stale} />
-      <Reasoning sentences={beyondTargetSentences(wanted)} />
+      <SaidSentences sentences={beyondTargetSentences(wanted)} />
       {wanted.length === 0 ? (
         <NoBody cases={cases} onChange={onChange} />
       ) : (

@@ -17,7 +17,7 @@ export function BodyTable({ placed }: { placed: readonly PlacedBody[] }) {
   const chords = placed.some(({ body }) => body.chord !== null);
   return (
     <TableScroll label="At the body">
-      <table className="data dense">
+      <table className="data dense first-fixed">
         <thead>
           <tr>
             <th scope="col">At the body</th>

@@ -9,7 +9,7 @@ import { DevelopmentTable } from "./DevelopmentTable.tsx";
 import { DrawnFold } from "./DrawnFold.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { NumberField } from "./NumberField.tsx";
-import { Reasoning } from "./Reasoning.tsx";
+import { SaidSentences } from "./SaidSentences.tsx";
 
 /** From where on the flow has developed, each criterion by itself, at a tolerance that can be set. */
 export function DevelopmentFold({
@@ -29,7 +29,7 @@ export function DevelopmentFold({
     <DrawnFold name="Development length" fact={`each criterion by itself, within ${percent}\u202f%`}>
       {() => (
         <>
-          <Reasoning sentences={developmentSentences(argued)} />
+          <SaidSentences sentences={developmentSentences(argued)} />
           <div className="fields development-fields">
             <NumberField
               label="within"

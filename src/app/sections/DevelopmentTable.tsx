@@ -40,7 +40,7 @@ export function DevelopmentTable({ cases }: { cases: readonly CaseView[] }) {
   const unit = unitOf(along === "t" ? "T" : "L", view.units);
   return (
     <TableScroll label="Development length by criterion">
-      <table className="data dense">
+      <table className="data dense first-fixed">
         <thead>
           <tr>
             <th scope="col" rowSpan={2} className="text">

@@ -11,7 +11,7 @@ import { CaseMark } from "./CaseMark.tsx";
 import { Definition } from "./Definition.tsx";
 import { DrawnFold } from "./DrawnFold.tsx";
 import { NumberButton } from "./NumberButton.tsx";
-import { Reasoning } from "./Reasoning.tsx";
+import { SaidSentences } from "./SaidSentences.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
@@ -43,7 +43,7 @@ function Plans({ cases, onMarks }: { cases: readonly CaseView[]; onMarks: (shown
   const unit = unitOf(along === "t" ? "T" : "L", units);
   return (
     <>
-      <Reasoning sentences={narrowingSentences(cases)} />
+      <SaidSentences sentences={narrowingSentences(cases)} />
       <TableScroll label="What would narrow the intervals">
         <table className="data dense">
           <thead>

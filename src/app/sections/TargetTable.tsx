@@ -3,7 +3,7 @@ import { labelOf } from "../../core/catalogue.ts";
 import type { BodyArgument } from "../../core/decayArgument.ts";
 import type { Quantity } from "../../core/quantity.ts";
 import { unitOf } from "../../core/unitText.ts";
-import { targetKey, targetNumber } from "../../export/sentences/bodySentences.ts";
+import { leastMissPlace, targetKey, targetNumber } from "../../export/sentences/bodySentences.ts";
 import { formatDigits, formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { BodyCells } from "./BodyCells.tsx";
 import type { PlacedBody } from "./bodyRows.ts";
@@ -24,7 +24,7 @@ export function TargetTable({ placed }: { placed: readonly PlacedBody[] }) {
   if (keys.length === 0) return null;
   return (
     <TableScroll label="Targets at the body">
-      <table className="data dense">
+      <table className="data dense first-fixed">
         <thead>
           <tr>
             <th scope="col">Targets</th>
@@ -111,8 +111,9 @@ function BothRow({ placed }: { placed: readonly PlacedBody[] }) {
         const times = (factor: number) => formatDigits(factor, 3);
         return (
           <td key={one.view.id} colSpan={2} className="text wrap">
-            {formatPosition(both.x.value)}: <SymbolText runs={labelOf("Tu").symbol} /> {times(both.Tu)} times,{" "}
-            <SymbolText runs={labelOf("L11_chord").symbol} /> {times(both.L11_chord)} times the target
+            {formatPosition(leastMissPlace(both.x.value))}: <SymbolText runs={labelOf("Tu").symbol} />{" "}
+            {times(both.Tu)} times, <SymbolText runs={labelOf("L11_chord").symbol} /> {times(both.L11_chord)}{" "}
+            times the target
           </td>
         );
       })}

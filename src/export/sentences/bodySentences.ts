@@ -127,12 +127,17 @@ export function targetKey({ along }: Pick<SentenceCase, "along">): string {
   return along === "t" ? "target_time" : "target_place";
 }
 
+/** A place among two thousand that were tried: three digits are what it has. */
+export function leastMissPlace(x: number): number {
+  return Number(x.toPrecision(3));
+}
+
 function bothSentences(placed: readonly Placed[]): Sentence[] {
   const parts = placed.flatMap(({ of, body: { both } }) => {
     if (both === null || both.x.value === null) return [];
     const at: Piece = {
       kind: "strong",
-      text: position(both.x.value, of),
+      text: position(leastMissPlace(both.x.value), of),
       about: { key: "least_miss", quantity: both.x },
     };
     const times = (factor: number) => formatDigits(factor, 3);
