@@ -2,10 +2,10 @@ import type { DecayRoute, FlightFit, RouteDisagreement } from "../decayArgument.
 import type { DecayPoint, DecayResult, DecaySettings, Flight } from "../decayResult.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { fitWindow, windowQuantity } from "./fitWindow.ts";
 import { placeAlong, quantityBack } from "./flightCourse.ts";
 import { relativeLine, zeroOfLine } from "./relativeLine.ts";
+import { studentReach } from "./studentReach.ts";
 
 /**
  * Every way to n and x0 in use, side by side over the same window: where they part beyond their intervals, the law,
@@ -137,7 +137,7 @@ function straightLineRoute(
   const known = told && chiSquareTail(line.sum, line.freedom) >= 0.05;
   const x0 = zeroOfLine(
     line,
-    studentQuantile(0.975, known ? null : line.freedom),
+    studentReach(known ? null : line.freedom),
     known ? 1 : line.sum / line.freedom,
     "its slope is not told from zero: any origin fits",
   );

@@ -1,6 +1,5 @@
 import type { DecayPoint, DecayResult, DecaySettings, PowerLaw } from "../decayResult.ts";
 import { missing, scaled } from "../quantity.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { commonBlocks } from "./commonBlocks.ts";
 import { decayFlags } from "./decayFlags.ts";
@@ -14,6 +13,7 @@ import { hypotheses } from "./hypotheses.ts";
 import { lambdaRoute } from "./lambdaRoute.ts";
 import { laterWindows } from "./laterWindows.ts";
 import { nearFieldSigns } from "./nearFieldSigns.ts";
+import { studentReach } from "./studentReach.ts";
 import { unionOfWindows } from "./unionOfWindows.ts";
 import { unlikeProbes } from "./unlikeProbes.ts";
 import { withCommonBlocks } from "./withCommonBlocks.ts";
@@ -111,7 +111,7 @@ function powerLaw(window: WindowFit, perSpeed: number): PowerLaw {
     n: fit.n,
     length: fit.length,
     covariance: withOriginInX(covariance, rateAlong(flight, x0)),
-    quantile: studentQuantile(0.975, freedom),
+    quantile: studentReach(freedom),
     freedom,
     flight,
   };

@@ -1,13 +1,11 @@
 import type { DecaySettings, Flight } from "../decayResult.ts";
 import { bare, type Quantity } from "../quantity.ts";
-import { chiSquareQuantile } from "../signal/distributions/chiSquareQuantile.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
-import { fQuantile } from "../signal/distributions/fQuantile.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { fitPowerLaw, type PowerLawFit } from "./fitPowerLaw.ts";
 import { placeAlong, quantityBack } from "./flightCourse.ts";
 import type { JackknifedLaw } from "./jackknifeLaw.ts";
 import { profileInterval } from "./profileInterval.ts";
+import { studentReach } from "./studentReach.ts";
 
 /** A law fitted to the stations of one window, with all that is said given that window. */
 export interface WindowFit {
@@ -43,8 +41,6 @@ export interface Refusal {
 }
 
 const numerals = ["no station", "one station", "two stations", "three stations", "four stations"];
-/** Chi-square of one number at 95 %. */
-const oneNumber = chiSquareQuantile(0.95, 1);
 
 /**
  * The law of one window, or why there is none.
@@ -83,14 +79,15 @@ export function fitWindow(
   const p = fit.errorsKnown ? chiSquareTail(fit.residualSum, fit.freedom) : null;
   const scattered = p === null || p < 0.05;
   const variance = scattered ? fit.residualSum / fit.freedom : 1;
+  const quantile = studentReach(scattered ? fit.freedom : null);
   return {
     fit,
     flight,
     p,
     scattered,
     variance,
-    drop: scattered ? variance * fQuantile(0.95, 1, fit.freedom) : oneNumber,
-    quantile: studentQuantile(0.975, scattered ? fit.freedom : null),
+    drop: variance * quantile ** 2,
+    quantile,
   };
 }
 
@@ -148,8 +145,7 @@ export function windowQuantity(window: WindowFit, key: "n" | "x0" | "A"): Quanti
   const asPlace = (quantity: Quantity) => (key === "x0" ? quantityBack(flight, quantity) : quantity);
   if (key !== "A" && fit.held[key] !== null) return asPlace(bare(value, "held, not fitted"));
   const { ratio, freedom } = inflation(window, key);
-  const drop =
-    window.together === undefined ? window.drop : studentQuantile(0.975, freedom) ** 2 * ratio * variance;
+  const drop = window.together === undefined ? window.drop : studentReach(freedom) ** 2 * ratio * variance;
   const ends = profileInterval(fit, key, drop);
   const standard = Math.sqrt((fit.unitCovariance?.[diagonal[key]] ?? 0) * variance * ratio);
   const scale: "log" | "linear" = key === "A" ? "log" : "linear";

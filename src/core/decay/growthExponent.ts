@@ -1,10 +1,10 @@
 import type { PowerLaw } from "../decayResult.ts";
 import { bare, estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { lawDistance } from "./lawDistance.ts";
 import { relativeError } from "./relativeError.ts";
 import { straightLine } from "./straightLine.ts";
+import { studentReach } from "./studentReach.ts";
 
 /**
  * Exponent of a length that grows from the origin of the decay law:
@@ -40,6 +40,6 @@ export function growthExponent(x: readonly number[], lengths: readonly Quantity[
   const standard = Math.sqrt(variance * line.varianceOfSlope + byOrigin ** 2 * law.covariance[4]);
   if (!Number.isFinite(standard)) return bare(line.slope, "these stations stand too close together");
   const freedom = known ? null : line.freedom;
-  const reach = studentQuantile(0.975, freedom) * standard;
+  const reach = studentReach(freedom) * standard;
   return estimate(line.slope, line.slope - reach, line.slope + reach, { standard, freedom, scale: "linear" });
 }

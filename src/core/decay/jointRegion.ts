@@ -26,7 +26,7 @@ export function jointRegion(window: WindowFit): JointRegion | null {
   if (fit.held.n !== null || fit.held.x0 !== null || fit.unitCovariance === null) return null;
   const axes = axesOf(window);
   if (axes === null) return null;
-  return { contours: levels.map((level) => contour(window, axes, level)) };
+  return { contours: levels.map((level) => contour(window, axes, level, dropOf(window, level))) };
 }
 
 /** Rise of the sum of squares at a joint level of two numbers. */
@@ -58,10 +58,10 @@ function axesOf({ fit }: WindowFit): Axes | null {
     : null;
 }
 
-function contour(window: WindowFit, axes: Axes, level: number): Contour {
+function contour(window: WindowFit, axes: Axes, level: number, drop: number): Contour {
   const { fit } = window;
   const { problem, law } = fit;
-  const root = Math.sqrt(dropOf(window, level));
+  const root = Math.sqrt(drop);
   const least = Math.max(kappaFloor(problem) * 2, 1 / (farthest * problem.span));
   const most = kappaLimit(problem) * (1 - 1e-6);
   const n: number[] = [];
@@ -92,13 +92,12 @@ function contour(window: WindowFit, axes: Axes, level: number): Contour {
     n.push((law.b + reach * byB) / kappa);
     x0.push(placeBack(window.flight, problem.centre - 1 / kappa));
   }
-  return { level, n, x0, closed, ellipse: ellipse(window, level) };
+  return { level, n, x0, closed, ellipse: ellipse(window, drop) };
 }
 
-/** The ellipse of the covariance about the best n and x0 at a joint level. */
-function ellipse(window: WindowFit, level: number): Contour["ellipse"] {
+/** The ellipse of the covariance about the best n and x0 at the same drop. */
+function ellipse(window: WindowFit, drop: number): Contour["ellipse"] {
   const { fit, variance } = window;
-  const drop = dropOf(window, level);
   const plain = (fit.unitCovariance ?? []).map((value) => value * drop);
   const own = window.together?.covariance;
   const scale = drop / variance / Math.max(inflation(window, "n").ratio, inflation(window, "x0").ratio);

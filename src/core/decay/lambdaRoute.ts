@@ -1,13 +1,13 @@
 import type { DecayResult, DecaySettings, Flight } from "../decayResult.ts";
 import { isEstimate, missing, type Quantity } from "../quantity.ts";
 import { chiSquareTail } from "../signal/distributions/chiSquareTail.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import { decayQuantity, decayValue } from "./decayQuantity.ts";
 import { placeAlong, quantityBack } from "./flightCourse.ts";
 import { relativeError } from "./relativeError.ts";
 import { relativeLine, zeroOfLine } from "./relativeLine.ts";
 import type { StraightLine } from "./straightLine.ts";
+import { studentReach } from "./studentReach.ts";
 
 type Route = DecayResult["lambda_route"];
 
@@ -53,7 +53,7 @@ export function lambdaRoute(
   if (line === null || !(line.slope > 0)) return both(missing("Lambda² does not grow along these stations"));
   const known = errors.length === points.length && chiSquareTail(line.sum, line.freedom) >= 0.05;
   const variance = known ? 1 : line.sum / line.freedom;
-  const quantile = studentQuantile(0.975, known ? null : line.freedom);
+  const quantile = studentReach(known ? null : line.freedom);
   return {
     n: exponent(line, (10 * nu) / U, quantile, variance),
     x0: quantityBack(

@@ -1,10 +1,10 @@
 import type { Narrowing } from "../decayArgument.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import type { FitPoint, WindowFit } from "./fitWindow.ts";
 import { placeAlong, placeBack } from "./flightCourse.ts";
 import { lawCovariance } from "./lawCovariance.ts";
 import { lawProblem, powerLawDefaults } from "./lawProblem.ts";
+import { studentReach } from "./studentReach.ts";
 
 /** One station of a plan: where it stands along the law, and the standard error of its ln q up to a common factor. */
 interface Planned {
@@ -38,7 +38,7 @@ export function narrowing(points: readonly FitPoint[], window: WindowFit): Narro
     if (after === null) return [];
     // one station more also tells the scatter better
     const freedom = fit.freedom + plan.length - present.length;
-    const quantile = scattered ? studentQuantile(0.975, freedom) / studentQuantile(0.975, fit.freedom) : 1;
+    const quantile = scattered ? studentReach(freedom) / studentReach(fit.freedom) : 1;
     const width = (key: "n" | "x0") => (before[key] > 0 ? quantile * Math.sqrt(after[key] / before[key]) : 1);
     return [{ kind, x: placeBack(flight, x), n: width("n"), x0: width("x0") }];
   };

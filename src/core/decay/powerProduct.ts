@@ -1,6 +1,6 @@
 import { bare, type Estimate, estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import { relativeError } from "./relativeError.ts";
+import { studentReach } from "./studentReach.ts";
 
 /** A quantity and the power it is raised to. */
 export type Power = readonly [Quantity, number];
@@ -38,6 +38,6 @@ export function powerProduct(factor: number, powers: readonly Power[]): Quantity
 
 /** A positive value whose logarithm has a standard error: value · exp(± t se). */
 export function logEstimate(value: number, standard: number, freedom: number | null): Quantity {
-  const spread = Math.exp(studentQuantile(0.975, freedom) * standard);
+  const spread = Math.exp(studentReach(freedom) * standard);
   return estimate(value, value / spread, value * spread, { standard, freedom, scale: "log" });
 }

@@ -1,9 +1,9 @@
 import type { PowerLaw } from "../decayResult.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
-import { studentQuantile } from "../signal/distributions/studentQuantile.ts";
 import type { StationResult } from "../stationResult.ts";
 import type { BodyCurve } from "./bodyCurves.ts";
 import { relativeError } from "./relativeError.ts";
+import { studentReach } from "./studentReach.ts";
 
 const halvings = 60;
 
@@ -39,7 +39,7 @@ export function targetPlace(
   if (error === null || slope === 0) return bare(at, "the stations beside it carry no interval");
   const value = curve.at(at);
   const freedom = isEstimate(value) ? (value.error?.freedom ?? null) : (law?.freedom ?? null);
-  const reach = studentQuantile(0.975, freedom) * Math.abs(error / slope);
+  const reach = studentReach(freedom) * Math.abs(error / slope);
   return { value: at, low: at - reach, high: at + reach };
 }
 
