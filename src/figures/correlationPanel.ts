@@ -1,10 +1,10 @@
 import type { Data } from "plotly.js";
 import { labelOf } from "../core/catalogue.ts";
 import { displayOf } from "../core/unitText.ts";
-import { caseMark } from "./caseMark.ts";
 import { drawingOf } from "./drawing.ts";
 import type { FigureOptions, PickedCurve } from "./figureSpec.ts";
 import { lineWeight } from "./lineWeight.ts";
+import { openRing } from "./openRing.ts";
 import { pageNote } from "./pageNote.ts";
 import { levelLine } from "./pageShapes.ts";
 import { type Box, type Decor, linearAxis, type Panel, placeY } from "./panel.ts";
@@ -64,24 +64,7 @@ function correlationOf(picked: PickedCurve, scaled: boolean, factor: number): Co
 }
 
 function zeroRing({ picked, zero }: Correlation, end: number, options: FigureOptions): Partial<Data>[] {
-  if (zero === null || zero > end) return [];
-  const { mm, pt } = drawingOf(options);
-  const sign = caseMark(options.tokens, picked.of.mark);
-  return [
-    {
-      type: "scatter",
-      mode: "markers",
-      x: [zero],
-      y: [0],
-      hoverinfo: "skip",
-      marker: {
-        symbol: sign.marker,
-        size: mm(1.3),
-        color: options.tokens.paper,
-        line: { color: sign.colour, width: pt(0.6) },
-      },
-    } as Partial<Data>,
-  ];
+  return zero === null || zero > end ? [] : [openRing({ x: zero, y: 0 }, picked.of.mark, options)];
 }
 
 function levels(panel: Panel, options: FigureOptions): Partial<Decor> {

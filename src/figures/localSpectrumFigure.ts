@@ -22,15 +22,24 @@ interface Line {
   readonly y: readonly (number | null)[];
 }
 
-/** Local slope of the picked spectra, and E22 against what it would be in isotropic flow, scale by scale. */
+/** Local slope of the picked spectra, and E22 and E33 against what they would be in isotropic flow, scale by scale. */
 export function localSpectrumFigure(picked: readonly PickedCurve[], options: FigureOptions): FigureSpec {
   const there = picked.filter(({ station }) => station.curves?.local !== undefined);
   const scaled = there.every(({ station }) => station.L11.value !== null);
   const across = labelOf(scaled ? "k1_L11" : "k1");
-  const lines = [slopeLines, ratioLines].map((of) => there.flatMap((one) => of(one, scaled)));
-  const cells = placeCells(2, 54, options);
-  const slope = panelOf(lines[0], "local_slope", slopes, cells.boxes[0], "a");
-  const ratio = panelOf(lines[1], "E22_over_isotropic", ratios, cells.boxes[1], "b");
+  const all = [
+    { key: "local_slope", range: slopes, level: inertial, lines: linesOf(slopeLines) },
+    { key: "E22_over_isotropic", range: ratios, level: 1, lines: linesOf(ratioLines("E22")) },
+    { key: "E33_over_isotropic", range: ratios, level: 1, lines: linesOf(ratioLines("E33")) },
+  ];
+  const shown = all.filter(({ lines }, i) => i === 0 || lines.length > 0);
+  const cells = placeCells(shown.length, 54, options);
+  const panels = shown.map(({ key, range, lines }, i) =>
+    panelOf(lines, key, range, cells.boxes[i], shown.length > 1 ? "abc"[i] : ""),
+  );
+  function linesOf(of: (picked: PickedCurve, scaled: boolean) => Line[]): Line[] {
+    return there.flatMap((one) => of(one, scaled));
+  }
   function panelOf(
     of: readonly Line[],
     key: string,
@@ -40,7 +49,10 @@ export function localSpectrumFigure(picked: readonly PickedCurve[], options: Fig
   ): Panel {
     return {
       box,
-      x: logAxis(logRange(lines.flat().flatMap(({ x }) => [...x])), symbolHtml(across.symbol)),
+      x: logAxis(
+        logRange(all.flatMap(({ lines }) => lines.flatMap(({ x }) => [...x]))),
+        symbolHtml(across.symbol),
+      ),
       y: linearAxis(range, symbolHtml(labelOf(key).symbol)),
       traces: of.map(({ picked: one, x, y }) =>
         caseLine(x, y, one.of.mark, options, { weightPt: lineWeight(one, there), dashed: true }),
@@ -53,22 +65,16 @@ export function localSpectrumFigure(picked: readonly PickedCurve[], options: Fig
       key: "spectrum-local",
       widthMm: cells.widthMm,
       heightMm: cells.heightMm,
-      panels: [slope, ratio],
+      panels,
       decor: joinDecor(
-        { shapes: [...levelLine(slope, inertial, options), ...levelLine(ratio, 1, options, false)] },
-        legend(pickedRows(there, options), slope, options),
+        ...shown.map(({ level }, i) => ({ shapes: levelLine(panels[i], level, options, i === 0) })),
+        legend(pickedRows(there, options), panels[0], options),
       ),
       table: {
         heading: ["case", "x", across.key, "quantity", "value"],
-        rows: lines.flatMap((each, i) =>
-          each.flatMap(({ picked: one, x, y }) =>
-            x.map((value, j) => [
-              one.of.name,
-              one.station.x,
-              value,
-              i === 0 ? "local_slope" : "E22_over_isotropic",
-              y[j],
-            ]),
+        rows: shown.flatMap(({ key, lines }) =>
+          lines.flatMap(({ picked: one, x, y }) =>
+            x.map((value, j) => [one.of.name, one.station.x, value, key, y[j]]),
           ),
         ),
       },
@@ -83,13 +89,17 @@ function slopeLines(picked: PickedCurve, scaled: boolean): Line[] {
   return [{ picked, x: placesOf(picked, local.k1, scaled), y: [...local.slope].map(inside(slopes)) }];
 }
 
-function ratioLines(picked: PickedCurve, scaled: boolean): Line[] {
-  const local = picked.station.curves?.local;
-  if (!local?.E22) return [];
-  const { E22, E22_isotropic } = local;
-  const y = [...E22].map((value, i) => (E22_isotropic[i] > 0 ? value / E22_isotropic[i] : null));
-  return [{ picked, x: placesOf(picked, local.k1, scaled), y: y.map(inside(ratios)) }];
-}
+const ratioLines =
+  (of: "E22" | "E33") =>
+  (picked: PickedCurve, scaled: boolean): Line[] => {
+    const local = picked.station.curves?.local;
+    const measured = local?.[of];
+    if (!local || !measured) return [];
+    const y = [...measured].map((value, i) =>
+      local.E22_isotropic[i] > 0 ? value / local.E22_isotropic[i] : null,
+    );
+    return [{ picked, x: placesOf(picked, local.k1, scaled), y: y.map(inside(ratios)) }];
+  };
 
 function placesOf({ station }: PickedCurve, k1: Float64Array, scaled: boolean): number[] {
   const unit = scaled ? (station.L11.value ?? 1) : 1;

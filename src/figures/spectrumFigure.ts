@@ -2,8 +2,10 @@ import { labelOf, type Run } from "../core/catalogue.ts";
 import { unitOf } from "../core/unitText.ts";
 import { assembleFigure } from "./assembleFigure.ts";
 import { logRange } from "./axisRange.ts";
+import { barsOf } from "./barsOf.ts";
 import { placeCells } from "./cells.ts";
 import { correlationPanel } from "./correlationPanel.ts";
+import { coSpectrumAcross, coSpectrumCurves, coSpectrumPanel } from "./coSpectrum.ts";
 import { drawingOf } from "./drawing.ts";
 import type { FigureOptions, FigureSpec, FigureTable, PickedCurve } from "./figureSpec.ts";
 import { formatPosition, withUnit } from "./formatNumber.ts";
@@ -12,6 +14,7 @@ import { lineWeight } from "./lineWeight.ts";
 import { pageNote } from "./pageNote.ts";
 import { levelLine } from "./pageShapes.ts";
 import { type Box, type Decor, joinDecor, logAxis, type Panel, placeY } from "./panel.ts";
+import { revivalPanel } from "./revivalPanel.ts";
 import {
   possibleForm,
   type SpectrumCurve,
@@ -34,33 +37,60 @@ const labels = {
   dimensional: ["k1", "E11"],
 } as const;
 
-/** Spectra of the picked stations, and their autocorrelations with the first zero ringed. */
+/**
+ * Spectra of the picked stations, or co-spectra of u and v, and their autocorrelations with the first zero ringed; where
+ * a record is replayed, the correlation around the lag at which it comes back.
+ */
 export function spectrumFigure(
   picked: readonly PickedCurve[],
   options: FigureOptions,
   wanted: SpectrumForm = "compensated",
-  component: SpectrumOf = "E11",
+  component: SpectrumOf | "E12" = "E11",
 ): FigureSpec {
-  const form = possibleForm(picked, wanted);
-  const curves = spectrumCurves(picked, form, component);
-  const cells = placeCells(2, 66, options);
-  const spectra = spectraPanel(curves, form, component, cells.boxes[0], options);
+  const revived = picked.filter(({ station }) => station.curves?.revival !== undefined);
+  const cells = placeCells(revived.length > 0 ? 3 : 2, 66, options);
+  const first = firstPanel(picked, options, wanted, component, cells.boxes[0]);
   const correlation = correlationPanel(picked, cells.boxes[1], "b", options);
+  const revival = revived.length > 0 ? [revivalPanel(revived, cells.boxes[2], "c", options)] : [];
   return assembleFigure(
     {
       key: "spectra",
       widthMm: cells.widthMm,
       heightMm: cells.heightMm,
-      panels: [spectra, correlation.panel],
+      panels: [first.panel, correlation.panel, ...revival.map(({ panel }) => panel)],
       decor: joinDecor(
-        form === "compensated" && component === "E11" ? plateauLine(spectra, options) : {},
+        first.decor,
         correlation.decor,
+        ...revival.map(({ decor }) => decor),
         legend(pickedRows(picked, options), correlation.panel, options),
       ),
-      table: spectrumTable(curves, form, component),
+      table: first.table,
     },
     options,
   );
+}
+
+function firstPanel(
+  picked: readonly PickedCurve[],
+  options: FigureOptions,
+  wanted: SpectrumForm,
+  component: SpectrumOf | "E12",
+  box: Box,
+): { panel: Panel; decor: Partial<Decor>; table: FigureTable } {
+  if (component === "E12") {
+    const curves = coSpectrumCurves(picked);
+    const table = curveTable(curves, coSpectrumAcross(picked), "E12_premultiplied");
+    return { ...coSpectrumPanel(curves, picked, box, options), table };
+  }
+  const form = possibleForm(picked, wanted);
+  const curves = spectrumCurves(picked, form, component);
+  const panel = spectraPanel(curves, form, component, box, options);
+  const [across, up] = labels[form];
+  return {
+    panel,
+    decor: form === "compensated" && component === "E11" ? plateauLine(panel, options) : {},
+    table: curveTable(curves, across, up.replace("E11", component)),
+  };
 }
 
 function spectraPanel(
@@ -99,15 +129,6 @@ function spectraPanel(
   };
 }
 
-/** Every so many bands one bar: the intervals of neighbours are alike. */
-const barEvery = 3;
-
-/** Upright strokes from low to high, as one broken line. */
-function barsOf(x: readonly number[], low: readonly number[], high: readonly number[]) {
-  const shown = x.flatMap((_, i) => (i % barEvery === 0 ? [i] : []));
-  return [shown.flatMap((i) => [x[i], x[i], null]), shown.flatMap((i) => [low[i], high[i], null])] as const;
-}
-
 const velocities = { E11: "u", E22: "v", E33: "w" } as const;
 
 /** A symbol written for u, of another component: E11 -> E22, ⟨u²⟩ -> ⟨v²⟩. */
@@ -143,13 +164,7 @@ export function pickedRows(picked: readonly PickedCurve[], options: FigureOption
   }));
 }
 
-function spectrumTable(
-  curves: readonly SpectrumCurve[],
-  form: SpectrumForm,
-  component: SpectrumOf,
-): FigureTable {
-  const [across, up] = labels[form];
-  const name = up.replace("E11", component);
+function curveTable(curves: readonly SpectrumCurve[], across: string, name: string): FigureTable {
   return {
     heading: ["case", "x", across, name, `${name}_low`, `${name}_high`],
     rows: curves.flatMap(({ picked, x, y, low, high }) =>

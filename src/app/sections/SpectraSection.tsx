@@ -13,6 +13,9 @@ import { CaseMark } from "./CaseMark.tsx";
 import { ChoiceField } from "./ChoiceField.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { Fold } from "./Fold.tsx";
+import { LocalNumbers } from "./LocalNumbers.tsx";
+import { lineMeanings } from "./lineMeaning.ts";
+import { RichText } from "./RichText.tsx";
 
 const forms = {
   compensated: "compensated",
@@ -21,7 +24,12 @@ const forms = {
   dimensional: "dimensional",
 } as const;
 type Form = keyof typeof forms;
-const components = { E11: "of u, E₁₁", E22: "of v, E₂₂", E33: "of w, E₃₃" } as const;
+const components = {
+  E11: "of u, E₁₁",
+  E22: "of v, E₂₂",
+  E33: "of w, E₃₃",
+  E12: "co-spectrum of u and v, E₁₂",
+} as const;
 type Component = keyof typeof components;
 
 /** Spectra and correlations of the stations picked on the ruler. */
@@ -54,13 +62,7 @@ export function SpectraSection({
     title: "Spectra and autocorrelations of the picked stations",
     widthMm: 178,
     build,
-    caption: (
-      <>
-        (<i>a</i>) One-sided spectra {components[component]}, {forms[form]}, in bands; upright strokes: 95 %
-        by chi-square; thin: further downstream. (<i>b</i>) Autocorrelation; ringed: its first zero, the limit
-        of the integral.
-      </>
-    ),
+    caption: <Caption form={form} component={component} curves={curves} />,
   };
   const notes = [
     {
@@ -69,7 +71,9 @@ export function SpectraSection({
       body: (
         <>
           <PickedList curves={curves} cases={cases} onChange={onChange} />
-          <ChoiceField label="spectra" value={form} choices={forms} onChange={setForm} />
+          {component !== "E12" && (
+            <ChoiceField label="spectra" value={form} choices={forms} onChange={setForm} />
+          )}
           <ChoiceField label="component" value={component} choices={components} onChange={setComponent} />
         </>
       ),
@@ -100,6 +104,7 @@ export function SpectraSection({
             build={buildLocal}
             caption={localCaption}
           />
+          <LocalNumbers curves={curves} />
         </Fold>
       )}
     </ArgumentSection>
@@ -108,10 +113,52 @@ export function SpectraSection({
 
 const localCaption = (
   <>
-    (<i>a</i>) Local slope of the spectrum of u over bands; dashed: −5/3. (<i>b</i>) Spectrum of v over the
-    one that the spectrum of u implies in isotropic flow.
+    (<i>a</i>) <RichText text="Local slope of E₁₁ over bands; dashed: −5/3." /> (<i>b</i>), (<i>c</i>){" "}
+    <RichText text="Spectra of v and w over the one that E₁₁ implies in isotropic flow." />
   </>
 );
+
+/** What the panels show, in the form and of the component that were chosen. */
+function Caption({
+  form,
+  component,
+  curves,
+}: {
+  form: Form;
+  component: Component;
+  curves: readonly CurveOfCase[];
+}) {
+  const revived = curves.some(({ station }) => station.curves?.revival !== undefined);
+  const meanings = new Set(
+    curves.flatMap(({ station }) => lineMeanings(station.facts.lines?.along ?? "x") ?? []),
+  );
+  return (
+    <>
+      (<i>a</i>){" "}
+      <RichText
+        text={
+          component === "E12"
+            ? "Co-spectrum of u and v, k₁ E₁₂/(u′v′), in bands: equal areas carry equal shares of the correlation; upright strokes: 95 %, without the quadrature part;"
+            : `One-sided spectra ${components[component]}, ${forms[form]}, in bands; upright strokes: 95 % by chi-square;`
+        }
+      />{" "}
+      thin: further downstream. (<i>b</i>) Autocorrelation; ringed: its first zero, the limit of the integral.
+      {revived && (
+        <>
+          {" "}
+          (<i>c</i>) The correlation revives where the inflow is replayed; ringed: the period, which is all
+          that counts of the record.
+        </>
+      )}
+      {[...meanings].map((text) => (
+        <span key={text}>
+          {" "}
+          On <RichText text={text} />.
+        </span>
+      ))}
+    </>
+  );
+}
 
 /** A picked station with what the sentences and the figure need of its case. */
 interface CurveOfCase extends PickedCurve {

@@ -43,6 +43,18 @@ describe("a box of inflow that is replayed", () => {
       because: "the integral time of ten copies is that of one but for its ends",
     });
   });
+  it("shows its correlation lost before the period, and whole again at it", () => {
+    const revival = ten.curves?.revival;
+    if (revival === undefined) throw new Error("no revival");
+    const top = revival.rho.indexOf(Math.max(...revival.rho));
+    expectClose(revival.lag[top], revival.period, {
+      relative: 5e-3,
+      because: "a point of the coarse signal",
+    });
+    expectClose(revival.rho[top], 1, { relative: 0.05, because: "the box comes back without noise" });
+    expect(Math.abs(revival.rho[0])).toBeLessThan(0.3);
+    expect(once.curves?.revival).toBeUndefined();
+  });
   // over many boxes, so that the error of an error is small
   const pairs = Array.from({ length: 10 }, (_, i) => {
     const copy = box(100 + i);
