@@ -31,18 +31,14 @@ export async function bundleTest(file) {
   return output[0].code;
 }
 
-/** In one module a file still finds what lies beside it; coverage is counted in the first run only. */
+/** In one module a file still finds what lies beside it. */
 const ownPlaces = {
   name: "own-places",
   enforce: "pre",
   transform: (code, id) => {
     if (id.includes("node_modules") || id.endsWith(".json")) return null;
-    const placed = code
+    return code
       .replaceAll("import.meta.url", JSON.stringify(pathToFileURL(id).href))
       .replaceAll("import.meta.dirname", JSON.stringify(dirname(id)));
-    return placed.replace(
-      /function stryCov_\w+\(\) \{/,
-      (start) => `${start}\n  if (!globalThis.__stryker__.covering) return;`,
-    );
   },
 };

@@ -1,6 +1,7 @@
 // How mutants are run, and what is left out: prose, and whatever a seeded sample does not draw.
 import { InProcessRunner } from "./inProcessRunner.mjs";
 import { Sample } from "./sample.mjs";
+import { survivor } from "./summary.mjs";
 
 /**
  * Text that a person reads (the reason a number is missing, the message of a flag or an assertion): it has a blank
@@ -16,8 +17,16 @@ const prose = {
   },
 };
 
+/** Survivors as they are found: a run may take long. */
+class Survivors {
+  onMutantTested(mutant) {
+    if (mutant.status === "Survived" || mutant.status === "NoCoverage") console.log(survivor(mutant));
+  }
+}
+
 export const strykerPlugins = [
   { kind: "Ignore", name: "prose", value: prose },
   { kind: "TestRunner", name: "in-process", injectableClass: InProcessRunner },
+  { kind: "Reporter", name: "survivors", injectableClass: Survivors },
   { kind: "Checker", name: "sample", injectableClass: Sample },
 ];

@@ -70,7 +70,7 @@ const results = await new Stryker({
     ),
   ],
   tempDirName: join(reports, `copy-${process.pid}`),
-  reporters: ["progress-append-only", "html", "json"],
+  reporters: ["survivors", "progress-append-only", "html", "json"],
   htmlReporter: { fileName: join(reports, `${name}.html`) },
   jsonReporter: { fileName: join(reports, `${name}.json`) },
   allowConsoleColors: false,

@@ -41,7 +41,8 @@ function intervalOf(mutants) {
   return `95 %: ${(100 * (middle - half)).toFixed(1)} to ${(100 * (middle + half)).toFixed(1)}, of a sample`;
 }
 
-function survivor({ status, fileName, location, mutatorName, replacement }) {
+/** One mutant in one line. */
+export function survivor({ status, fileName, location, mutatorName, replacement }) {
   const { line, column } = location.start;
   const text = String(replacement ?? "")
     .replace(/\s+/g, " ")
