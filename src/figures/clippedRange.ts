@@ -2,31 +2,37 @@ import type { Quantity } from "../core/quantity.ts";
 import { linearRange, present } from "./axisRange.ts";
 import { endsOf } from "./stationPoints.ts";
 
-/** Beyond a value so many widths of its interval are still shown. */
-const shownWidths = 3;
+/** Beyond an adopted interval so many widths of that given the window are still shown. */
+const shownWidths = 4;
+
+/** What must be seen whole, and the width that counts about it. */
+export interface Kept {
+  readonly adopted: Quantity;
+  readonly given: Quantity;
+  /** The unit of the axis, in the quantities' own. */
+  readonly unit: number;
+}
 
 /**
  * A range for numbers of which a few lie far off: all that lies within some widths of the adopted intervals; what is
  * farther runs out of the frame.
- * @param values  all that is drawn, in the unit of the axis
- * @param adopted what must be seen whole, times `factor` in the unit of the axis
+ * @param values all that is drawn, in the unit of the axis
  */
-export function clippedRange(
-  values: readonly (number | null)[],
-  adopted: readonly Quantity[],
-  factor = 1,
-): [number, number] {
-  const kept = adopted
-    .map((quantity) => present(Object.values(endsOf(quantity))))
-    .filter((of) => of.length > 0);
-  if (kept.length === 0) return linearRange(values);
-  const bounds = kept.map((ends): [number, number] => {
-    const [low, high] = [Math.min(...ends) * factor, Math.max(...ends) * factor];
-    const room = shownWidths * Math.max(high - low, 0.02 * Math.abs(high));
-    return [low - room, high + room];
+export function clippedRange(values: readonly (number | null)[], kept: readonly Kept[]): [number, number] {
+  const whole = kept.flatMap(({ adopted, given, unit }) => {
+    const ends = present(Object.values(endsOf(adopted))).map((end) => end / unit);
+    if (ends.length === 0) return [];
+    const own = present(Object.values(endsOf(given))).map((end) => end / unit);
+    const [low, high] = [Math.min(...ends), Math.max(...ends)];
+    const width = own.length > 1 ? Math.max(...own) - Math.min(...own) : high - low;
+    const room = shownWidths * Math.max(width, 0.02 * Math.abs(high));
+    return [{ low, high, least: low - room, most: high + room }];
   });
-  const least = Math.min(...bounds.map(([low]) => low));
-  const most = Math.max(...bounds.map(([, high]) => high));
-  const inside = present(values).map((value) => Math.min(Math.max(value, least), most));
-  return linearRange(inside, { include: kept.flat().map((end) => end * factor) });
+  if (whole.length === 0) return linearRange(values);
+  const least = Math.min(...whole.map((one) => one.least));
+  const most = Math.max(...whole.map((one) => one.most));
+  return linearRange(
+    present(values).map((value) => Math.min(Math.max(value, least), most)),
+    { include: whole.flatMap(({ low, high }) => [low, high]) },
+  );
 }

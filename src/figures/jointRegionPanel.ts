@@ -3,11 +3,11 @@ import { withReference } from "../core/symbolRuns.ts";
 import { unitOf } from "../core/unitText.ts";
 import { linearRange, present } from "./axisRange.ts";
 import type { FigureCase, FigureOptions } from "./figureSpec.ts";
-import { jointRegionsOf, type Regions, shownPart } from "./jointRegions.ts";
+import { jointRegionsOf, shownPart } from "./jointRegions.ts";
 import { uprightLine } from "./pageShapes.ts";
 import { type Box, type Decor, linearAxis, type Panel } from "./panel.ts";
 import { regionNotes } from "./regionNotes.ts";
-import { type Best, bestFit, regionTraces } from "./regionTraces.ts";
+import { bestFit, detailTraces, type FittedRegion, intervalBars, regionTraces } from "./regionTraces.ts";
 import { isDivided, referenceSymbol, titleWithUnit } from "./streamwise.ts";
 import { symbolHtml } from "./symbolHtml.ts";
 import { linearTicks } from "./ticks.ts";
@@ -35,15 +35,15 @@ export function jointRegionPanel(
     const best = bestFit(of);
     return best === null ? [] : [{ of, best, regions: jointRegionsOf(of) }];
   });
-  const reach = (key: "n" | "x0") =>
-    fitted.flatMap(({ of, best, regions }) => [
-      ...ends(of.decay, key),
-      ...outlines(regions, best, key, detail),
-    ]);
+  const reach = (key: "n" | "x0") => fitted.flatMap((one) => shownReach(one, key, detail));
   const x = linearAxis(exponentRange(reach("n")), "<i>n</i>");
   const yRange = linearRange(reach("x0"), { margin: 0.12 });
   const y = linearAxis(yRange, originTitle(cases, options), { ticks: linearTicks(...yRange, 6) });
-  const traces = fitted.flatMap((one) => regionTraces(one, ends, options, detail));
+  const traces = fitted.flatMap((one) =>
+    detail
+      ? detailTraces(one, options)
+      : [...regionTraces(one, options), ...intervalBars(one, ends, options)],
+  );
   const panel: Panel = { box, x, y, traces, letter };
   return {
     panel,
@@ -54,10 +54,23 @@ export function jointRegionPanel(
   };
 }
 
-function outlines(regions: Regions | null, best: Best, key: "n" | "x0", detail: boolean): readonly number[] {
-  if (regions === null) return [];
-  const shown = [regions.outer, ...(detail ? regions.ellipses : [])];
-  return shown.flatMap((region) => shownPart(region, best.x0)[key]);
+/** Beyond a region so many times its own width is still shown of the bars of the adopted intervals. */
+const barsShown = 1;
+
+/** What the axis has to hold of one case: its regions, and the bars as far as they are near them. */
+function shownReach(
+  { of, best, regions }: FittedRegion,
+  key: "n" | "x0",
+  detail: boolean,
+): readonly number[] {
+  const adopted = ends(of.decay, key);
+  if (regions === null) return adopted;
+  const outlines = [regions.outer, ...(detail ? regions.ellipses : [])];
+  const own = outlines.flatMap((region) => shownPart(region, best.x0)[key]);
+  if (detail) return own;
+  const [low, high] = [Math.min(...own), Math.max(...own)];
+  const room = barsShown * (high - low);
+  return [...own, ...adopted.map((end) => Math.min(Math.max(end, low - room), high + room))];
 }
 
 /** Holds the regions and, where they are near, the exponents that theories name. */

@@ -70,8 +70,7 @@ function exponentPanel(shown: readonly Local[], x: PanelAxis, box: Box, options:
   const points = shown.map((one) => pointsOf(one, one.local.exponent));
   const range = clippedRange(
     points.flat().flatMap(({ y, low, high }) => [y, low, high]),
-    shown.map(({ decay }) => decay.n),
-    1,
+    shown.map(({ decay: { n } }) => ({ adopted: n, given: n, unit: 1 })),
   );
   return {
     box,

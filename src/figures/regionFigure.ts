@@ -11,7 +11,7 @@ import { caseLine, loneMarker } from "./stationTrace.ts";
 import { linearTicks } from "./ticks.ts";
 
 /** Of the scan upstream of the first station, so many times the least scatter is still shown. */
-const scatterShown = 20;
+const scatterShown = 8;
 
 /**
  * The joint region of n and x0 by profile, by covariance and by refits; beside it the classical scan: scatter of ln q about

@@ -26,21 +26,22 @@ export interface FittedRegion {
 /** Value and ends of an adopted interval, as far as there are ends. */
 type Ends = (decay: FigureCase["decay"], key: "n" | "x0") => readonly number[];
 
-/** Regions, adopted intervals and best fit of one case; in detail the refits and the ellipses too. */
-export function regionTraces(
-  { of, best, regions }: FittedRegion,
-  ends: Ends,
-  options: FigureOptions,
-  detail: boolean,
-): Partial<Data>[] {
+/** Regions and best fit of one case. */
+export function regionTraces({ of, best, regions }: FittedRegion, options: FigureOptions): Partial<Data>[] {
   return [
-    ...(regions === null || !detail ? [] : [cloudTrace(regions, of.mark, options)]),
     ...(regions === null ? [] : outlineTraces(regions, of.mark, options)),
-    ...(regions === null || !detail
-      ? []
-      : regions.ellipses.map((one) => ellipseTrace(one, of.mark, options))),
-    ...intervalBars(of, best, ends, options),
     loneMarker({ x: best.n, y: best.x0 }, of.mark, options, 1.8),
+  ];
+}
+
+/** The same with the refits under and the ellipses of the covariance over them. */
+export function detailTraces(one: FittedRegion, options: FigureOptions): Partial<Data>[] {
+  const { of, regions } = one;
+  if (regions === null) return regionTraces(one, options);
+  return [
+    cloudTrace(regions, of.mark, options),
+    ...regionTraces(one, options),
+    ...regions.ellipses.map((ellipse) => ellipseTrace(ellipse, options)),
   ];
 }
 
@@ -64,8 +65,10 @@ function outlineTraces(
   })) as Partial<Data>[];
 }
 
-function ellipseTrace({ n, x0 }: Region, mark: number, options: FigureOptions): Partial<Data> {
-  return caseLine(n, x0, mark, options, { weightPt: 0.4, dashed: false });
+function ellipseTrace({ n, x0 }: Region, options: FigureOptions): Partial<Data> {
+  const { pt } = drawingOf(options);
+  const line = { color: options.tokens.ink2, width: pt(0.4), dash: "solid" };
+  return { ...caseLine(n, x0, 0, options, { weightPt: 0.4, dashed: false }), line } as Partial<Data>;
 }
 
 function cloudTrace({ cloud }: Regions, mark: number, options: FigureOptions): Partial<Data> {
@@ -77,15 +80,19 @@ function cloudTrace({ cloud }: Regions, mark: number, options: FigureOptions): P
     hoverinfo: "skip",
     marker: {
       symbol: "circle",
-      size: drawingOf(options).mm(0.5),
+      size: drawingOf(options).mm(0.6),
       color: caseMark(options.tokens, mark).colour,
-      opacity: 0.45,
+      opacity: 0.6,
     },
   } as Partial<Data>;
 }
 
 /** The adopted intervals of n and x0 as thin bars: they may reach further than the region of this one window. */
-function intervalBars(of: FigureCase, best: Best, ends: Ends, options: FigureOptions): Partial<Data>[] {
+export function intervalBars(
+  { of, best }: FittedRegion,
+  ends: Ends,
+  options: FigureOptions,
+): Partial<Data>[] {
   const bars = { weightPt: 0.6, dashed: false };
   const [n, x0] = [ends(of.decay, "n").slice(1), ends(of.decay, "x0").slice(1)];
   const level = (values: readonly number[], at: number) => values.map(() => at);

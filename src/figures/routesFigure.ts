@@ -1,9 +1,8 @@
 import type { Annotations, Data, Shape } from "plotly.js";
-import { type DecayRoute, type RouteKey, routeKeys } from "../core/decayArgument.ts";
+import { type DecayRoute, routeKeys } from "../core/decayArgument.ts";
 import type { Quantity } from "../core/quantity.ts";
 import { type ArguedDecay, arguedOf } from "./arguedOf.ts";
 import { assembleFigure } from "./assembleFigure.ts";
-import { caseMark } from "./caseMark.ts";
 import { clippedRange } from "./clippedRange.ts";
 import { drawingOf } from "./drawing.ts";
 import type { FigureCase, FigureOptions, FigureSpec, FigureTable } from "./figureSpec.ts";
@@ -15,7 +14,6 @@ import { type Box, joinDecor, linearAxis, type Panel } from "./panel.ts";
 import { routeNames } from "./routeNames.ts";
 import { endsOf } from "./stationPoints.ts";
 import { caseLine, stationTrace } from "./stationTrace.ts";
-import { faded } from "./tokens.ts";
 
 const namesMm = 30;
 const topMm = 2.4;
@@ -34,7 +32,7 @@ export function routesFigure(cases: readonly FigureCase[], options: FigureOption
     const argued = arguedOf(of);
     return argued === null ? [] : [{ of, argued }];
   });
-  const keys = routeKeys.filter((key) => routed.some(({ argued }) => routeOf(argued, key)));
+  const keys = rowKeys.filter((key) => routed.some(({ argued }) => rowOf(argued, key)));
   const height = keys.length * (rowMm.first + rowMm.more * Math.max(routed.length - 1, 0)) + topMm + footMm;
   const stacked = options.stacked || options.widthMm < 120;
   const { widthMm } = options;
@@ -70,12 +68,17 @@ export function routesFigure(cases: readonly FigureCase[], options: FigureOption
   );
 }
 
-const routeOf = ({ argument }: ArguedDecay, key: RouteKey): DecayRoute | undefined =>
-  argument.routes.find((route) => route.key === key);
+/** The adopted numbers over those of each route. */
+const rowKeys = ["adopted", ...routeKeys] as const;
+type RowKey = (typeof rowKeys)[number];
+
+function rowOf({ decay, argument }: ArguedDecay, key: RowKey): Pick<DecayRoute, "n" | "x0"> | undefined {
+  return key === "adopted" ? decay : argument.routes.find((route) => route.key === key);
+}
 
 function routePanel(
   routed: readonly Routed[],
-  keys: readonly RouteKey[],
+  keys: readonly RowKey[],
   of: "n" | "x0",
   box: Box,
   letter: string,
@@ -84,17 +87,20 @@ function routePanel(
   const unitOf = ({ argued }: Routed) => (of === "n" ? 1 : (argued.decay.law?.length ?? 1));
   const lines = routed.map((one, i) =>
     keys.flatMap((key, row) => {
-      const route = routeOf(one.argued, key);
-      if (route === undefined) return [];
+      const found = rowOf(one.argued, key);
+      if (found === undefined) return [];
       const within = (0.62 * (i + 0.5 - routed.length / 2)) / Math.max(routed.length, 1);
-      return [{ y: keys.length - row - 0.5 - within, ...over(route[of], unitOf(one)) }];
+      return [{ y: keys.length - row - 0.5 - within, ...over(found[of], unitOf(one)) }];
     }),
   );
   const x = linearAxis(
     clippedRange(
       lines.flat().flatMap(({ value, low, high }) => [value, low, high]),
-      routed.map(({ argued }) => argued.decay[of]),
-      1 / (routed[0] ? unitOf(routed[0]) : 1),
+      routed.map((one) => ({
+        adopted: one.argued.decay[of],
+        given: one.argued.decay.given_window[of],
+        unit: unitOf(one),
+      })),
     ),
     of === "n"
       ? "<i>n</i>"
@@ -111,10 +117,7 @@ function routePanel(
       ticks: { major: [], text: [], minor: [] },
       labels: false,
     },
-    traces: [
-      ...routed.flatMap((one) => adoptedBand(one, of, unitOf(one), keys.length, options)),
-      ...routed.flatMap((one, i) => routeTraces(one.of, lines[i], x.range, options)),
-    ],
+    traces: routed.flatMap((one, i) => routeTraces(one.of, lines[i], x.range, options)),
     letter: keys.length > 0 ? letter : "",
   };
 }
@@ -163,22 +166,6 @@ function routeTraces(
   ];
 }
 
-/** The adopted interval over all rows. */
-function adoptedBand(
-  { of, argued }: Routed,
-  key: "n" | "x0",
-  unit: number,
-  rows: number,
-  options: FigureOptions,
-): Partial<Data>[] {
-  const { low, high } = endsOf(argued.decay[key]);
-  if (low === null || high === null) return [];
-  const ends = [low, high, high, low, low].map((end) => end / unit);
-  const fill = { fill: "toself", fillcolor: faded(caseMark(options.tokens, of.mark).colour, 0.1) };
-  const outline = caseLine(ends, [0, 0, rows, rows, 0], of.mark, options, { weightPt: 0, dashed: false });
-  return [{ ...outline, mode: "none", ...fill } as Partial<Data>];
-}
-
 function rowRules({ box }: Panel, rows: number, options: FigureOptions): Partial<Shape>[] {
   const line = { color: options.tokens.rule, width: drawingOf(options).pt(0.5) };
   return Array.from({ length: Math.max(rows - 1, 0) }, (_, i) => {
@@ -187,14 +174,19 @@ function rowRules({ box }: Panel, rows: number, options: FigureOptions): Partial
   });
 }
 
-function rowNames({ box }: Panel, keys: readonly RouteKey[], options: FigureOptions): Partial<Annotations>[] {
+function rowNames({ box }: Panel, keys: readonly RowKey[], options: FigureOptions): Partial<Annotations>[] {
   const { numeral } = drawingOf(options);
   return keys.map((key, row) =>
-    pageNote(routeNames[key], box.left - 2, box.top - ((row + 0.5) * (box.top - box.bottom)) / keys.length, {
-      xanchor: "right",
-      yanchor: "middle",
-      font: numeral,
-    }),
+    pageNote(
+      key === "adopted" ? key : routeNames[key],
+      box.left - 2,
+      box.top - ((row + 0.5) * (box.top - box.bottom)) / keys.length,
+      {
+        xanchor: "right",
+        yanchor: "middle",
+        font: numeral,
+      },
+    ),
   );
 }
 
@@ -213,12 +205,21 @@ function routesTable(routed: readonly Routed[]): FigureTable {
       "why_no_n",
       "why_no_x0",
     ],
-    rows: routed.flatMap(({ of, argued }) =>
-      argued.argument.routes.map(({ name, n, x0, note }) => {
-        const [exponent, origin] = [endsOf(n), endsOf(x0)];
-        const numbers = [exponent.value, exponent.low, exponent.high, origin.value, origin.low, origin.high];
-        return [of.name, name, ...numbers, note, whyOf(n), whyOf(x0)];
-      }),
+    rows: routed.flatMap(({ of, argued: { decay, argument } }) =>
+      [{ name: "adopted", n: decay.n, x0: decay.x0, note: null }, ...argument.routes].map(
+        ({ name, n, x0, note }) => {
+          const [exponent, origin] = [endsOf(n), endsOf(x0)];
+          const numbers = [
+            exponent.value,
+            exponent.low,
+            exponent.high,
+            origin.value,
+            origin.low,
+            origin.high,
+          ];
+          return [of.name, name, ...numbers, note, whyOf(n), whyOf(x0)];
+        },
+      ),
     ),
   };
 }

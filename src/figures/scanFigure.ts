@@ -90,8 +90,11 @@ function scanPanel(
   const along = streamwiseTitle(cases, axis, options);
   const range = clippedRange(
     points.flat().flatMap(({ y, low, high }) => [y, low, high]),
-    scanned.map(({ argued }) => argued.decay[plan.of]),
-    plan.of === "n" ? 1 : 1 / (scanned[0]?.length ?? 1),
+    scanned.map(({ argued: { decay }, length }) => ({
+      adopted: decay[plan.of],
+      given: decay.given_window[plan.of],
+      unit: plan.of === "n" ? 1 : length,
+    })),
   );
   const panel: Panel = {
     box,

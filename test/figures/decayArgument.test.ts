@@ -153,14 +153,14 @@ describe("the routes", () => {
   it("have a row each, and the numbers of the results", () => {
     const spec = routesFigure([cases[0]], options);
     const routes = cases[0].decay?.argument?.routes ?? [];
-    expect(column(spec, "route")).toEqual(routes.map(({ name }) => name));
-    expect(column(spec, "n_low")).toEqual(routes.map(({ n }) => (n.value === null ? null : n.low)));
+    expect(column(spec, "route")).toEqual(["adopted", ...routes.map(({ name }) => name)]);
+    expect(column(spec, "n_low").slice(1)).toEqual(routes.map(({ n }) => (n.value === null ? null : n.low)));
   });
   it("show a held number by an open marker and no bar", () => {
     const spec = routesFigure([cases[0]], options);
     const [exponents] = traces(spec).filter(({ mode, name }) => mode === "markers" && name === "screen");
     const held = cases[0].decay?.argument?.routes.findIndex(({ key }) => key === "straight-line") ?? -1;
-    expect(fills(exponents.marker)[held]).toBe(lightTokens.paper);
+    expect(fills(exponents.marker)[held + 1]).toBe(lightTokens.paper);
     expect(fills(exponents.marker)[0]).toBe(lightTokens.cases[0]);
   });
   it("gain a row for another origin that is asked about, with the exponent that origin would give", () => {

@@ -97,7 +97,9 @@ function PlaceCells({
   const decimals = positionDecimals(view.stations.map(({ x }) => x));
   const unit = unitOf(view.along === "t" ? "T" : "L", view.units);
   const { low, high, why_low } = place;
-  const interval = low === null || high === null ? null : formatRange(low, high, decimals);
+  const interval = low === null || high === null || low === high ? null : formatRange(low, high, decimals);
+  const none =
+    low !== null && low === high ? "all stations drawn anew by their errors gave this place" : why_low;
   const text = `${side === "start" ? "from" : "up to"} ${formatPosition(place.value)}`;
   return (
     <>
@@ -111,7 +113,7 @@ function PlaceCells({
             shown: `${withUnit(formatPosition(place.value), unit)}${interval === null ? "" : ` (${interval})`}`,
             rows: [
               ["asked", criterion.words],
-              ...(interval === null && why_low !== undefined ? [["no interval", why_low] as const] : []),
+              ...(interval === null && none !== undefined ? [["interval", none] as const] : []),
             ],
           }}
         >

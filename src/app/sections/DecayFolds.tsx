@@ -4,6 +4,7 @@ import { counted } from "../../export/sentences/words.ts";
 import { arguedOf } from "../../figures/arguedOf.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { RestedCases } from "../page/restedCases.ts";
+import { useStable } from "../ruler/useStable.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ArguedBlock } from "./ArguedBlock.tsx";
 import { DrawnFold } from "./DrawnFold.tsx";
@@ -24,8 +25,9 @@ export function DecayFolds({
   onChange: (change: WorkspaceChange) => void;
 }) {
   const cases = useArgued();
+  const lawful = useMemo(() => cases.filter((view) => arguedOf(view)?.decay.law), [cases]);
+  const change = useStable(onChange);
   if (cases.length === 0) return null;
-  const lawful = cases.filter((view) => arguedOf(view)?.decay.law);
   const fold = (name: string, fact: string, body: () => ReactNode) => (
     <DrawnFold name={name} fact={fact}>
       {() => (
@@ -41,7 +43,7 @@ export function DecayFolds({
         <ScanBody cases={cases} />
       ))}
       {fold("Routes", factOf(cases), () => (
-        <RoutesBody cases={cases} onChange={onChange} />
+        <RoutesBody cases={cases} onChange={change} />
       ))}
       {lawful.length > 0 &&
         fold("Joint region", "profile, covariance, refits", () => <RegionBody cases={lawful} />)}

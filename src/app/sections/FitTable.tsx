@@ -32,6 +32,7 @@ const onExponent: readonly FlagCode[] = [
 ];
 const onOrigin = onExponent.filter((code) => code !== "held-origin");
 const whole = "a statistic of this fit: it has no interval";
+const alike = "all stations weigh alike: the scatter is what tells the errors";
 const statistic = (value: number | null, why: string) => (value === null ? missing(why) : bare(value, whole));
 
 const lines: readonly Line[] = [
@@ -42,19 +43,20 @@ const lines: readonly Line[] = [
   { name: "given this window", label: "x0", of: ({ given_window }) => given_window.x0 },
   { name: "sensitivity", label: "dn/dx0", of: sensitivityOf },
   {
-    name: "correlation of n and x0",
+    name: "correlation",
     label: "correlation_n_x0",
     of: ({ correlation_n_x0 }) => statistic(correlation_n_x0, "one of the two is held, or there is no law"),
   },
   {
     name: "reduced χ²",
     label: "chi2_reduced",
-    of: ({ chi2_reduced }) => statistic(chi2_reduced, "no station is left over, or there is no law"),
+    of: ({ chi2_reduced, weights }) =>
+      statistic(chi2_reduced, weights === "equal" ? alike : "no station is left over, or there is no law"),
   },
   {
     name: "probability of a larger χ²",
     label: "p",
-    of: ({ p }) => statistic(p, "all stations weigh alike: the scatter is what tells the errors"),
+    of: ({ p }) => statistic(p, alike),
   },
 ];
 
@@ -103,10 +105,15 @@ function PerLength({ cases }: { cases: readonly CaseView[] }) {
   const [view] = cases;
   if (view === undefined) return null;
   const step: ReactNode =
-    view.length === null ? "unit of x" : <SymbolText runs={withReference([{ text: "ℓ" }], view.symbol)} />;
+    view.length === null ? (
+      "unit of the axis"
+    ) : (
+      <SymbolText runs={withReference([{ text: "ℓ" }], view.symbol)} />
+    );
   return (
     <p className="small-print">
-      The sensitivity is the change of n for each {step} that the origin lies farther downstream.
+      The sensitivity is the change of <i className="sym">n</i> for each {step} that the origin lies farther
+      downstream.
     </p>
   );
 }

@@ -22,10 +22,12 @@ export const FitsBody = memo(function FitsBody({
   return (
     <>
       <FitTable cases={argued} />
-      <SaidSentences sentences={argued.map(hypothesisSentence)} />
+      {argued.map((view) => (
+        <SaidSentences sentences={[hypothesisSentence(view)]} key={view.id} />
+      ))}
       <HypothesisTable cases={argued} />
       <CommonExponentTable cases={argued} comparisons={comparisons} />
-      <SaidSentences sentences={growthSentences(argued)} />
+      <SaidSentences sentences={argued.flatMap(growthSentences)} />
       <GrowthTable cases={argued} />
     </>
   );

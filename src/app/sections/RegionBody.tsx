@@ -56,9 +56,9 @@ export const RegionBody = memo(function RegionBody({ cases }: { cases: readonly 
 const caption = (
   <>
     (<i>a</i>) Joint 68 % and 95 % regions as contours of the profile, filled; thin: the ellipses that the
-    covariance has in their place; dots: refits of stations drawn anew, shown and not adopted; bars: the
-    intervals adopted. (<i>b</i>) The classical scan: rms of the residuals of ln <i>q</i> about the best line,
-    all stations alike, against the origin it is drawn from; marked: the least.
+    covariance has in their place; dots: refits of stations drawn anew, shown and not adopted. (<i>b</i>) The
+    classical scan: rms of the residuals of ln <i>q</i> about the best line, all stations alike, against the
+    origin it is drawn from; marked: the least.
   </>
 );
 

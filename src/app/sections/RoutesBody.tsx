@@ -31,7 +31,9 @@ export const RoutesBody = memo(function RoutesBody({
   const build = useCallback((options: FigureOptions) => routesFigure(cases, options), [cases]);
   return (
     <>
-      <SaidSentences sentences={routeSentences(cases)} />
+      {cases.map((view) => (
+        <SaidSentences sentences={routeSentences(view)} key={view.id} />
+      ))}
       <FigureBlock
         name="Figure 2 (continued)"
         title="Exponent and origin by every route"
@@ -86,6 +88,7 @@ function RoutesTable({ cases }: { cases: readonly CaseView[] }) {
                 <CaseMark mark={view.mark} /> {view.name}
               </th>
             </tr>
+            <AdoptedRow view={view} />
             {(arguedOf(view)?.argument.routes ?? []).map(({ key, n, x0, note }) => (
               <tr key={key}>
                 <th scope="row" className="text">
@@ -109,5 +112,23 @@ function RoutesTable({ cases }: { cases: readonly CaseView[] }) {
         ))}
       </table>
     </TableScroll>
+  );
+}
+
+function AdoptedRow({ view }: { view: CaseView }) {
+  const decay = arguedOf(view)?.decay;
+  if (decay === undefined) return null;
+  const note =
+    decay.windowChosen === "auto"
+      ? "union of the intervals of later starts"
+      : "joint fit in the window given";
+  return (
+    <tr>
+      <th scope="row" className="text">
+        adopted
+      </th>
+      <PairCells view={view} n={decay.n} x0={decay.x0} rows={[["interval", note]]} />
+      <td className="text wrap note-cell">{note}</td>
+    </tr>
   );
 }

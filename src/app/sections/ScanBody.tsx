@@ -12,7 +12,9 @@ export const ScanBody = memo(function ScanBody({ cases }: { cases: readonly Case
   const build = useCallback((options: FigureOptions) => scanFigure(cases, options), [cases]);
   return (
     <>
-      <SaidSentences sentences={scanSentences(cases)} />
+      {cases.map((view) => (
+        <SaidSentences sentences={scanSentences(view)} key={view.id} />
+      ))}
       <FigureBlock
         name="Figure 2"
         title="Exponent and origin against the first and the last station used"

@@ -58,7 +58,8 @@ export function developed(
   all = Number.POSITIVE_INFINITY,
 ): Condition {
   const values = stations.map(({ S_dudx }) => S_dudx);
-  return { key: "S_dudx", words: `skewness of du/dx below ${bound}`, values, low: -all, high: bound };
+  const words = `skewness of du/dx below ${String(bound).replace("-", "\u2212")}`;
+  return { key: "S_dudx", words, values, low: -all, high: bound };
 }
 
 /** A quantity within a share of its last value, the mean of the last three; unknown with fewer than four. */

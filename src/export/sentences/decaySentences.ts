@@ -15,7 +15,7 @@ import {
   symbolOf,
   valueWithInterval,
 } from "./shownValue.ts";
-import { capitalised, chained, counted, reason } from "./words.ts";
+import { capitalised, chained, counted, listed, reason } from "./words.ts";
 
 /** The law of every case with its intervals and window, the common exponent, and why a law is not given. */
 export function decaySentences(
@@ -82,15 +82,21 @@ export function windowSentence(of: SentenceCase): Sentence {
   return say`${caseOf(of)}: window ${stretch(decay.window, of)}, ${how}, ${counted(decay.stations, "station")}. ${capitalised(reason(decay.windowReason))}.`;
 }
 
-/** "In screen the Saffman exponent 1.20 is not excluded (p = 0.06); the Loitsyansky exponent …" */
+/** "In screen n = 6/5 (Saffman, p = 0.06) is not excluded; 10/7 (Loitsyansky, p < 0.001) is excluded by these data …" */
 export function hypothesisSentence(of: SentenceCase): Sentence {
-  const tested = of.decay?.hypotheses.filter(({ p }) => p !== null) ?? [];
+  const tested = of.decay?.hypotheses.flatMap(({ p, ...rest }) => (p === null ? [] : [{ ...rest, p }])) ?? [];
   if (tested.length === 0) return [];
-  const parts = tested.map(({ name, n, p }) => {
-    const verdict = (p ?? 0) < 0.05 ? "is excluded by these data in this window" : "is not excluded";
-    return say`the exponent ${exponentText(n)} (${name}) ${verdict} (${probabilityText(p ?? 0)})`;
-  });
-  return say`In ${caseOf(of)} ${chained(parts)}.`;
+  const named = (those: typeof tested) =>
+    listed(those.map(({ name, n, p }) => say`${exponentText(n)} (${name}, ${probabilityText(p)})`));
+  const verbs = (those: typeof tested) => (those.length === 1 ? "is" : "are");
+  const [kept, excluded] = [tested.filter(({ p }) => p >= 0.05), tested.filter(({ p }) => p < 0.05)];
+  const parts = [
+    ...(kept.length === 0 ? [] : [say`${named(kept)} ${verbs(kept)} not excluded`]),
+    ...(excluded.length === 0
+      ? []
+      : [say`${named(excluded)} ${verbs(excluded)} excluded by these data in this window`]),
+  ];
+  return say`In ${caseOf(of)} ${symbolOf("n")} = ${chained(parts)}.`;
 }
 
 /** 6/5, 10/7 and the like as fractions, others with two decimals. */

@@ -7,21 +7,20 @@ import { listed } from "./words.ts";
 
 const exponents = { L11: "m", lambda: "m_lambda", Re_lambda: "m_Re_lambda" } as const;
 
-/** Which scales grow as the exponent of the energy asks, and which part from it. */
-export function growthSentences(cases: readonly SentenceCase[]): readonly Sentence[] {
-  return cases.flatMap((of) => {
-    const growths = arguedOf(of)?.argument.growths.filter(({ agrees }) => agrees !== null) ?? [];
-    const agreed = growths.filter(({ agrees }) => agrees === true);
-    const parted = growths.filter(({ agrees }) => agrees === false);
-    return [
-      ...(agreed.length === 0
-        ? []
-        : [
-            say`In ${caseOf(of)} ${listed(agreed.map(({ key }) => symbolOf(key)))} ${agreed.length === 1 ? "grows" : "grow"} as ${symbolOf("n")} and a constant ${symbolOf("C_epsilon")} ask, within the intervals.`,
-          ]),
-      ...parted.map((growth) => partedSentence(of, growth)),
-    ];
-  });
+/** Which scales of a case grow as the exponent of the energy asks, and which part from it. */
+export function growthSentences(of: SentenceCase): readonly Sentence[] {
+  const growths = arguedOf(of)?.argument.growths.filter(({ agrees }) => agrees !== null) ?? [];
+  const agreed = growths.filter(({ agrees }) => agrees === true);
+  const parted = growths.filter(({ agrees }) => agrees === false);
+  const names = listed(agreed.map(({ key }) => symbolOf(key)));
+  return [
+    ...(agreed.length === 0
+      ? []
+      : [
+          say`In ${caseOf(of)} ${names} ${agreed.length === 1 ? "grows" : "grow"} as ${symbolOf("n")} and a constant ${symbolOf("C_epsilon")} ask, within the intervals.`,
+        ]),
+    ...parted.map((growth) => partedSentence(of, growth)),
+  ];
 }
 
 function partedSentence(of: SentenceCase, { key, exponent, implied }: Growth): Sentence {

@@ -1,47 +1,46 @@
-import type { DecayArgument, RouteDisagreement } from "../../core/decayArgument.ts";
+import type { DecayRoute, RouteDisagreement, RouteKey } from "../../core/decayArgument.ts";
 import { arguedOf } from "../../figures/arguedOf.ts";
 import { type Sentence, say } from "./piece.ts";
 import { routeWords } from "./routeWords.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
 import { caseOf, lengthValue, symbolOf, valueWithInterval } from "./shownValue.ts";
-import { chained, counted } from "./words.ts";
+import { listed } from "./words.ts";
 
-/** So many pairs are named; the table has the rest. */
-const named = 3;
-
-/** Whether the routes of each case agree within their intervals, and which do not. */
-export function routeSentences(cases: readonly SentenceCase[]): readonly Sentence[] {
-  return cases.flatMap((of) => {
-    const argued = arguedOf(of);
-    return argued === null || argued.decay.law === null ? [] : ofCase(of, argued.argument);
-  });
-}
-
-function ofCase(of: SentenceCase, argument: DecayArgument): Sentence[] {
-  const { disagreements } = argument;
-  const [exponent, origin] = [symbolOf("n"), symbolOf(of.along === "t" ? "t0" : "x0")];
+/** Whether the routes of a case agree within their intervals, and which part from which. */
+export function routeSentences(of: SentenceCase): readonly Sentence[] {
+  const argued = arguedOf(of);
+  if (argued === null || argued.decay.law === null) return [];
+  const { routes, disagreements } = argued.argument;
+  const [exponent, origin] = [symbolOf("n"), symbolOf(originKey(of))];
   if (disagreements.length === 0)
     return [
       say`In ${caseOf(of)} no two routes part on ${exponent} or ${origin} beyond their 95 % intervals.`,
     ];
-  const shown = disagreements.slice(0, named).map((one) => pair(of, argument, one));
-  const more = disagreements.length - shown.length;
-  const rest = more > 0 ? `; and ${counted(more, "further pair")}` : "";
-  return [say`In ${caseOf(of)} these routes part beyond their 95 % intervals: ${chained(shown)}${rest}.`];
+  return (["n", "x0"] as const).flatMap((what) => {
+    const pairs = disagreements.filter((one) => one.of === what);
+    return partedFrom(pairs).map(({ route, others }) => {
+      const value = (key: RouteKey) => shownOf(of, routes, key, what);
+      return say`In ${caseOf(of)} the route "${routeWords(route)}" gives ${symbolOf(what === "n" ? "n" : originKey(of))} = ${value(route)}, beyond the interval of ${listed(others.map((key) => say`${routeWords(key)}, ${value(key)}`))}.`;
+    });
+  });
 }
 
-/** "on n the joint fit, 1.25 (1.20 to 1.31), and the fall of ε, 1.40 (1.35 to 1.45)" */
-function pair(
-  of: SentenceCase,
-  { routes }: DecayArgument,
-  { routes: keys, of: what }: RouteDisagreement,
-): Sentence {
-  const value = (key: (typeof keys)[number]) => {
-    const quantity = routes.find((route) => route.key === key)?.[what];
-    if (quantity === undefined) return routeWords(key);
-    const number = what === "n" ? valueWithInterval(quantity, "n", of.units) : lengthValue(quantity, of);
-    return say`${routeWords(key)}, ${number}`;
-  };
-  const symbol = symbolOf(what === "n" ? "n" : of.along === "t" ? "t0" : "x0");
-  return say`on ${symbol} ${value(keys[0])}, and ${value(keys[1])}`;
+const originKey = ({ along }: SentenceCase) => (along === "t" ? "t0" : "x0");
+
+/** The fewest routes that stand on one side of all pairs: each with those it parts from. */
+function partedFrom(pairs: readonly RouteDisagreement[]): { route: RouteKey; others: RouteKey[] }[] {
+  if (pairs.length === 0) return [];
+  const counts = new Map<RouteKey, number>();
+  for (const { routes } of pairs) for (const key of routes) counts.set(key, (counts.get(key) ?? 0) + 1);
+  // of two that stand in as many pairs the later route is the one that assumes more
+  const route = [...counts].reduce((best, one) => (one[1] >= best[1] ? one : best))[0];
+  const own = pairs.filter(({ routes }) => routes.includes(route));
+  const others = own.map(({ routes: [a, b] }) => (a === route ? b : a));
+  return [{ route, others }, ...partedFrom(pairs.filter((pair) => !own.includes(pair)))];
+}
+
+function shownOf(of: SentenceCase, routes: readonly DecayRoute[], key: RouteKey, what: "n" | "x0"): Sentence {
+  const quantity = routes.find((route) => route.key === key)?.[what];
+  if (quantity === undefined) return [];
+  return what === "n" ? valueWithInterval(quantity, "n", of.units) : lengthValue(quantity, of);
 }

@@ -4,23 +4,21 @@ import { type ArguedDecay, arguedOf } from "../../figures/arguedOf.ts";
 import { probabilityText, windowSentence } from "./decaySentences.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
-import { caseOf, coordinate, position, symbolOf, valueWithInterval } from "./shownValue.ts";
+import { coordinate, position, symbolOf, valueWithInterval } from "./shownValue.ts";
 import { listed } from "./words.ts";
 
-/** Why each window is where it is, what a station more upstream would do, and what physics says of its start and end. */
-export function scanSentences(cases: readonly SentenceCase[]): readonly Sentence[] {
-  return cases.flatMap((of) => {
-    const argued = arguedOf(of);
-    if (argued === null) return [];
-    const { scan } = argued.argument;
-    const whole = { ...of, decay: argued.decay };
-    return [
-      windowSentence(whole),
-      ...earlierStart(whole, argued),
-      ...sideOf(whole, scan.start, argued.decay.window[0], "start"),
-      ...sideOf(whole, scan.end, argued.decay.window[1], "end"),
-    ];
-  });
+/** Why a window is where it is, what a station more upstream would do, and what physics says of its start and end. */
+export function scanSentences(of: SentenceCase): readonly Sentence[] {
+  const argued = arguedOf(of);
+  if (argued === null) return [];
+  const { scan } = argued.argument;
+  const whole = { ...of, decay: argued.decay };
+  return [
+    windowSentence(whole),
+    ...earlierStart(whole, argued),
+    ...sideOf(whole, scan.start, argued.decay.window[0], "start"),
+    ...sideOf(whole, scan.end, argued.decay.window[1], "end"),
+  ];
 }
 
 /** "One station earlier, from 0.25 m, n would be 1.31 (1.27 to 1.35), outside the interval adopted (p = 0.002)." */
@@ -69,19 +67,15 @@ function sideOf(
   const never = asked
     .filter(({ notContradicted }) => notContradicted.value === null)
     .map(({ words }) => words);
-  const asks = side === "start" ? "By physics the start is in doubt" : "By physics the end is in doubt";
+  const ends = side === "start" ? "last" : "first";
   if (late.length === 0 && never.length === 0)
     return [
-      say`All that physics asks of the ${side} is met at ${coordinate(of)} = ${position(end, of)} in ${caseOf(of)}.`,
+      say`What physics asks of the ${side} is contradicted by no interval at ${coordinate(of)} = ${position(end, of)}.`,
     ];
   return [
     ...(late.length === 0
       ? []
-      : [say`${asks} in ${caseOf(of)}: within the window only is held ${listed(late)}.`]),
-    ...(never.length === 0
-      ? []
-      : [
-          say`Not held at the ${side === "start" ? "last" : "first"} station of ${caseOf(of)}: ${listed(never)}.`,
-        ]),
+      : [say`Physics puts the ${side} in doubt: inside the window only is held ${listed(late)}.`]),
+    ...(never.length === 0 ? [] : [say`Not held at the ${ends} station: ${listed(never)}.`]),
   ];
 }

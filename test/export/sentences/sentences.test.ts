@@ -64,7 +64,7 @@ describe("the sentence of the decay", () => {
   });
   it("says of each hypothesis whether these data exclude it", () => {
     expect(read([hypothesisSentence(screen)])).toBe(
-      "In screen the exponent 6/5 (Saffman) is not excluded (p = 0.06); the exponent 10/7 (Loitsyansky) is excluded by these data in this window (p < 0.001).",
+      "In screen n = 6/5 (Saffman, p = 0.06) is not excluded; 10/7 (Loitsyansky, p < 0.001) is excluded by these data in this window.",
     );
   });
   it("writes theoretical exponents as fractions", () => {
