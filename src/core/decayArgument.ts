@@ -11,6 +11,7 @@ export interface DecayArgument {
   readonly originScan: OriginScan | null;
   readonly local: LocalDecay | null;
   readonly growths: readonly Growth[];
+  readonly dissipationConstant: DissipationConstant;
   readonly development: Development;
   /** Null where no position of a body is given. */
   readonly body: BodyArgument | null;
@@ -142,6 +143,18 @@ export interface Growth {
   readonly implied: Quantity;
   /** Whether the two intervals meet; null where either lacks one. */
   readonly agrees: boolean | null;
+}
+
+/** Whether C_epsilon stays the same along the window. */
+export interface DissipationConstant {
+  /** c of C_epsilon ~ (x - x0)^c. */
+  readonly exponent: Quantity;
+  /** Whether the interval of c holds 0; null where it has none. */
+  readonly constant: boolean | null;
+  /** Geometric mean over the window. */
+  readonly mean: Quantity;
+  /** Probability of a larger chi-square about that mean; null where stations carry no intervals. */
+  readonly p: number | null;
 }
 
 /** What a body at a place meets. */

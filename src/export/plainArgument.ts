@@ -33,6 +33,7 @@ export function plainArgument(argument: DecayArgument | undefined): PlainArgumen
     body: body === null ? {} : plain(body),
     decay: {
       growths: plain(rest.growths),
+      C_epsilon: plain(rest.dissipationConstant),
       region: plain(rest.region),
       bootstrap: plain(withoutCloud(rest.bootstrap)),
       routes: plain(rest.routes),

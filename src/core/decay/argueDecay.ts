@@ -6,6 +6,7 @@ import { bootstrapLaw } from "./bootstrapLaw.ts";
 import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
 import { decayRoutes, routeDisagreements } from "./decayRoutes.ts";
 import { developmentLength } from "./developmentLength.ts";
+import { dissipationConstant } from "./dissipationConstant.ts";
 import { fitWindow, type WindowFit } from "./fitWindow.ts";
 import { flightFit } from "./flightFit.ts";
 import { growths } from "./growths.ts";
@@ -52,6 +53,7 @@ export function argueDecay(
           ),
     local: decay.law === null ? null : localDecay(decay.points, decay.law),
     growths: growths(inWindow, decay),
+    dissipationConstant: dissipationConstant(inWindow, decay.law),
     development: developmentLength(stations, decay, settings),
     body: body ? atBody(stations, decay, settings, body) : null,
     narrowing: window === null ? [] : narrowing(points, window),

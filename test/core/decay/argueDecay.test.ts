@@ -173,6 +173,26 @@ describe("growth of the scales", () => {
     expectClose(growth("L11")?.implied.value, 1 - law.n / 2, { relative: 1e-6, because });
     for (const { agrees } of exact.argument.growths) expect(agrees).toBe(true);
   });
+  it("sees C_epsilon stay as it is where m is 1 - n/2: L11 epsilon/u'³ does not change then", () => {
+    // epsilon ~ xi^-(n + 1), u'³ ~ xi^(-3n/2), L11 ~ xi^(1 - n/2)
+    const withConstant = (drift: number) =>
+      scattered.map((station, i) => ({
+        ...station,
+        C_epsilon: known(0.6 * ((xs[i] - law.x0) / (xs[0] - law.x0)) ** drift, 0.02),
+      }));
+    const level = argued(withConstant(0)).argument.dissipationConstant;
+    expectClose(level.mean.value, 0.6, { relative: 1e-12, because: "all stations have it" });
+    expect(level.constant).toBe(true);
+    expect(level.p).toBeGreaterThan(0.99);
+    const drifting = argued(withConstant(0.2)).argument.dissipationConstant;
+    expect(holds(drifting.exponent, 0.2)).toBe(true);
+    expect(drifting.constant).toBe(false);
+    expect(drifting.p).toBeLessThan(0.001);
+  });
+  it("has no C_epsilon where no station carries one, with the reason", () => {
+    const { mean, p, constant, exponent } = exact.argument.dissipationConstant;
+    expect([mean.value, p, constant, exponent.value]).toEqual([null, null, null, null]);
+  });
   it("says where a length grows otherwise", () => {
     const slow = argued(lawStations({ ...law, m: 0.2 }, xs, 0.01)).argument.growths;
     expect(slow.find((one) => one.key === "L11")?.agrees).toBe(false);
