@@ -5,6 +5,8 @@ import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { NumberField } from "./NumberField.tsx";
+import { roundedTimes } from "./roundedTimes.ts";
+import { TimesQuestion } from "./TimesQuestion.tsx";
 
 interface Ask {
   readonly view: CaseView;
@@ -36,6 +38,7 @@ export function Questions({
       </h3>
       <p className="ask">{askText(view, missing.length)}</p>
       <SheetFields view={view} onChange={onChange} />
+      <TimesQuestion view={view} onChange={onChange} />
       {view.reduced?.failures.some(({ code }) => code === "no-time") && (
         <div className="fields positions">
           <NumberField
@@ -166,13 +169,15 @@ function missingPositions({ reduced }: CaseView): string[] {
     .map((failure) => failure.where.file ?? "");
 }
 
-function askText({ of, reduced }: CaseView, positions: number): string {
+function askText(view: CaseView, positions: number): string {
+  const { of, reduced } = view;
   const open = [
     of.sheet.kinematicViscosity === null ? "scales and dissipation need a viscosity" : null,
     of.sheet.reference.length === null
       ? "distances are given in metres until a reference length is typed"
       : null,
     reduced?.failures.some(({ code }) => code === "no-time") ? "records without times need the step" : null,
+    roundedTimes(view) === null ? null : "rounded time stamps need a word",
     positions > 0 ? `${positions === 1 ? "one file names" : `${positions} files name`} no position` : null,
   ].filter((each) => each !== null);
   if (open.length === 0)

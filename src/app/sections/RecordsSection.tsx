@@ -18,6 +18,7 @@ import { ReducingState } from "./ReadingState.tsx";
 import { RecordsTable } from "./RecordsTable.tsx";
 import { ReductionChoices } from "./ReductionChoices.tsx";
 import { ReductionFold } from "./ReductionFold.tsx";
+import { roundedTimes } from "./roundedTimes.ts";
 import { SectionFrame } from "./SectionFrame.tsx";
 import { StartUpFold } from "./StartUpFold.tsx";
 
@@ -91,7 +92,7 @@ export function RecordsSection({
   );
 }
 
-/** Cases without a sheet are asked at once, until that is closed; the others where it is wanted. */
+/** Cases without a sheet, or with an open question, are asked at once until that is closed; the others where it is wanted. */
 function CaseQuestions({
   cases,
   onChange,
@@ -102,7 +103,7 @@ function CaseQuestions({
   onSave: (view: CaseView) => void;
 }) {
   const [chosen, choose] = useState<Readonly<Record<string, boolean>>>({});
-  const isOpen = ({ id, of }: CaseView) => chosen[id] ?? !of.fromSheet;
+  const isOpen = (view: CaseView) => chosen[view.id] ?? (!view.of.fromSheet || roundedTimes(view) !== null);
   const closed = cases.filter((view) => !isOpen(view));
   return (
     <>

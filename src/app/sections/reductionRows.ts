@@ -13,6 +13,8 @@ export const dissipations = {
 } as const;
 export const yesNo = { auto: "automatic", true: "yes", false: "no" } as const;
 
+export const stamps = { ask: "ask", even: "constant step", written: "as written" } as const;
+
 type Said = (sheet: CaseSheet) => string | null;
 const ofSeries =
   (text: (sheet: CaseSheet) => string): Said =>
@@ -42,6 +44,10 @@ const rows: readonly (readonly [name: string, said: Said])[] = [
   ],
   ["Taylor", ofSeries(({ reduce }) => (reduce.taylorCorrection ? "corrected" : "not corrected"))],
   ["ε", ({ reduce }) => dissipations[reduce.dissipation]],
+  [
+    "rounded times",
+    ({ layout, read }) => (layout === "series" && read.times !== "ask" ? stamps[read.times] : null),
+  ],
   // what is seldom set is listed once it is
   ["sampled together", ({ simultaneous }) => (simultaneous === "auto" ? null : yesNo[`${simultaneous}`])],
   [

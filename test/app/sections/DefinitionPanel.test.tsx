@@ -1,12 +1,15 @@
-import { fireEvent, render, screen, within } from "@testing-library/react";
+import { act, fireEvent, render, screen, within } from "@testing-library/react";
 import { describe, expect, it } from "vitest";
 import { DefinitionPanel } from "../../../src/app/sections/DefinitionPanel.tsx";
+import { DefinitionDoor, type OpenDefinition } from "../../../src/app/sections/definitionContext.ts";
 import { FitTable } from "../../../src/app/sections/FitTable.tsx";
+import { NumberButton } from "../../../src/app/sections/NumberButton.tsx";
 import { StationTable } from "../../../src/app/sections/StationTable.tsx";
 import { tableKeys } from "../../../src/app/sections/stationColumns.ts";
-import { missing } from "../../../src/core/quantity.ts";
+import { estimate, missing } from "../../../src/core/quantity.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
-import { stationAt, viewOf } from "../fixtures.ts";
+import { madeComparison } from "../../figures/madeComparison.ts";
+import { decayOf, stationAt, viewOf } from "../fixtures.ts";
 
 const flag = { code: "resolution" as const, text: "Gradients are resolved to k1 eta 0.7 only." };
 const station: StationResult = {
@@ -65,5 +68,56 @@ describe("the definition behind a number", () => {
     const marked = [...document.querySelectorAll(".cell-flag")];
     expect(marked.length).toBeGreaterThan(0);
     expect(marked.every((each) => each.textContent?.includes(flag.text))).toBe(true);
+  });
+
+  it("of a ratio of two cases gives what they are aligned by, the common range and its tests", () => {
+    const ratio = estimate(1.08, 1.02, 1.14);
+    const comparison = { ...madeComparison, quantities: { ...madeComparison.quantities } };
+    comparison.quantities.L11 = { ...comparison.quantities.L11, ratio };
+    render(
+      <DefinitionPanel cases={[view]} comparisons={[comparison]}>
+        <NumberButton of="ratio" quantity={ratio}>
+          1.08
+        </NumberButton>
+      </DefinitionPanel>,
+    );
+    fireEvent.click(screen.getByRole("button", { name: "1.08" }));
+    expect(panel().textContent).toContain("integral length scale");
+    expect(panel().textContent).toContain("aligned");
+    expect(panel().textContent).toContain("1.08 (1.02 to 1.14)");
+  });
+
+  it("opens for a reading in the head, which stands outside of the page's argument", () => {
+    const door: { current: OpenDefinition | null } = { current: null };
+    render(
+      <DefinitionDoor value={door}>
+        <DefinitionPanel cases={[view]}>nothing</DefinitionPanel>
+      </DefinitionDoor>,
+    );
+    const { n } = view.decay ?? decayOf([]);
+    act(() => door.current?.({ key: "n", quantity: n }, document.body));
+    expect(panel().textContent).toContain("decay exponent of the energy");
+    expect(panel().textContent).toContain("profile likelihood");
+  });
+
+  it("says on lateral lines which component an index stands for", () => {
+    const lines = {
+      ...{ along: "y" as const, points: 64, spacing: 0.001, length: 0.064, periodic: true, parallel: 1 },
+      ...{ snapshots: 40, independentSnapshots: 30, independentSamples: 90, snapshotCorrelation: 0.1 },
+    };
+    const of = stationAt(0.4, {
+      facts: { ...stationAt(0.4).facts, lines },
+      routes: { K_v: estimate(1, 0.9, 1.1) },
+    });
+    const onLines = viewOf([of]);
+    render(
+      <DefinitionPanel cases={[onLines]}>
+        <NumberButton of="K_v" quantity={of.routes.K_v}>
+          1.00
+        </NumberButton>
+      </DefinitionPanel>,
+    );
+    fireEvent.click(screen.getByRole("button", { name: "1.00" }));
+    expect(panel().textContent).toContain("formed with u, a component across the line, against v along y");
   });
 });
