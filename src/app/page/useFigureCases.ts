@@ -1,6 +1,7 @@
-import { type RefObject, useContext } from "react";
+import { type RefObject, useContext, useMemo } from "react";
 import type { CaseView } from "../session/caseView.ts";
 import { RestedCases } from "./restedCases.ts";
+import { createStillCases } from "./stillCases.ts";
 import { useInView } from "./useInView.ts";
 import { useThrottled } from "./useThrottled.ts";
 
@@ -9,7 +10,7 @@ const pause = 90;
 
 /**
  * The cases a section's figures are drawn from: those in the hand while the section is in view, a few times
- * a second; those at rest while it is not.
+ * a second; those at rest while it is not. A body that is moved leaves them as they are.
  */
 export function useFigureCases(
   section: RefObject<Element | null>,
@@ -17,5 +18,6 @@ export function useFigureCases(
 ): readonly CaseView[] {
   const rested = useContext(RestedCases);
   const inView = useInView(section);
-  return useThrottled(inView ? live : rested, pause);
+  const still = useMemo(createStillCases, []);
+  return useThrottled(still(inView ? live : rested), pause);
 }

@@ -73,14 +73,23 @@ function numberPart(
 const lengthOf = (body: BodyArgument) => (body.chord === null ? body.at.L11 : body.L11_chord);
 const lengthKey = (body: BodyArgument) => (body.chord === null ? "L11" : "L11_chord");
 
+/** "Tu and L11 cannot be given at x = 3.00 m in screen and simulation: the place lies beyond …" */
 function missingSentences(placed: readonly Placed[]): Sentence[] {
-  return (["Tu", "L11"] as const).flatMap((key) =>
-    placed.flatMap(({ of, body }) => {
+  const lacking = placed.flatMap(({ of, body }) =>
+    (["Tu", "L11"] as const).flatMap((key) => {
       const found = body.at[key];
-      if (found.value !== null) return [];
-      return [say`${symbolOf(key)} cannot be given there for ${caseOf(of)}: ${reason(found.why)}.`];
+      return found.value === null ? [{ of, x: body.x, key, why: reason(found.why) }] : [];
     }),
   );
+  const groups = [...new Set(lacking.map(({ x, why }) => `${x} ${why}`))].map((group) =>
+    lacking.filter(({ x, why }) => `${x} ${why}` === group),
+  );
+  return groups.map((group) => {
+    const { of, x, why } = group[0];
+    const symbols = [...new Set(group.map(({ key }) => key))].map(symbolOf);
+    const names = [...new Set(group.map((each) => each.of))].map(caseOf);
+    return say`${listed(symbols)} cannot be given at ${placeOf(of, x)} in ${listed(names)}: ${why}.`;
+  });
 }
 
 /** "The target Tu = 2.5 % is met at 1.37 m (…) in screen, and is not in simulation: it is 1.2 times …" */
