@@ -16,7 +16,7 @@ export function bandAverage(
     if (count > 0) {
       out.k1.push(sumK / count);
       out.E.push(sumE / count);
-      out.freedom.push(count === 1 ? sumF : sumF * correlated(count));
+      out.freedom.push(sumF * correlated(count));
     }
     [count, sumK, sumE, sumF] = [0, 0, 0, 0];
   };
@@ -40,5 +40,5 @@ export function bandAverage(
  * @see Harris (1978), Proc. IEEE 66, 51: correlation 2/3 and 1/6 of the window's shifted kernels
  */
 function correlated(m: number): number {
-  return m / (m + 2 * (m - 1) * (4 / 9) + (m > 2 ? (2 * (m - 2)) / 36 : 0));
+  return m / (m + 2 * (m - 1) * (4 / 9) + (2 * Math.max(m - 2, 0)) / 36);
 }

@@ -41,3 +41,9 @@ it("a long prime length keeps its digits", () => {
   expectClose(found[2 * 1234], size / 2, { relative: 1e-11, because: "a cosine is in one bin alone" });
   expect(Math.abs(found[2 * 1235])).toBeLessThan(1e-8);
 });
+
+it.each([1, 0, -4, 2.5])("there is no transform of %d points", (size) => {
+  expect(() => anyFourier(size)).toThrow(/transform/);
+});
+
+it("a length is planned once", () => expect(anyFourier(12)).toBe(anyFourier(12)));

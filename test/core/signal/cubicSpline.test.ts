@@ -1,4 +1,4 @@
-import { describe, it } from "vitest";
+import { describe, expect, it } from "vitest";
 import { splineAt, splineSecond } from "../../../src/core/signal/cubicSpline.ts";
 import scipy from "../../reference/scipy/splines.json" with { type: "json" };
 import { expectClose } from "../../support/expectClose.ts";
@@ -35,6 +35,16 @@ describe("a natural spline", () => {
       x.map((place) => 4 - 3 * place),
     );
     for (const place of [0, 0.12, 1.4, 8.5, 9]) expectClose(found.at(place), 4 - 3 * place, rounding);
+  });
+  it("through the first points of longer arrays reads and writes none beyond", () => {
+    const [x, y] = [Float64Array.of(0, 1, 3, 99, 100), Float64Array.of(2, 1, 4, 7, -7)];
+    const [second, work] = [new Float64Array(5).fill(8), new Float64Array(5).fill(9)];
+    splineSecond(x, y, 3, second, work);
+    const short = new Float64Array(3);
+    splineSecond(x.subarray(0, 3), y.subarray(0, 3), 3, short, new Float64Array(3));
+    expect(Array.from(second)).toEqual([...short, 8, 8]);
+    expect([short[0], short[2]]).toEqual([0, 0]);
+    expect(Array.from(work.subarray(3))).toEqual([9, 9]);
   });
   it("over a tent of three points bends by -3 at its top, and stands at 11/16 half way up", () => {
     const tent = spline([0, 1, 2], [0, 1, 0]);

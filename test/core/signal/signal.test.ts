@@ -166,6 +166,29 @@ describe("lag products", () => {
       }
     },
   );
+  it("of two records parted by a restart are those of each, added", () => {
+    const lags = startLagProducts(64, 16, 1);
+    const row = new Float64Array(64);
+    lags.add(x, 0, 208);
+    lags.restart();
+    lags.add(x, 208, 512);
+    lags.flush(row);
+    row.forEach((value, l) => {
+      let sum = 0;
+      for (let i = l; i < 512; i++) if (i < 208 || i - l >= 208) sum += x[i] * x[i - l];
+      expectClose(value, sum, { absolute: 1e-10, because: "rounding of some hundred terms" });
+    });
+  });
+  it("taken in at its place in a chunk are the same: a record that begins within one", () => {
+    const lags = startLagProducts(32, 16, 1);
+    const row = new Float64Array(32);
+    lags.add(x, 0, 11, 5);
+    lags.add(x, 11, 200);
+    lags.flush(row);
+    row.forEach((value, l) => {
+      expectClose(value, direct(l, 0, 200), { absolute: 1e-10, because: "rounding of some hundred terms" });
+    });
+  });
 });
 
 describe("Welch spectrum", () => {
