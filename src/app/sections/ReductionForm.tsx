@@ -8,7 +8,7 @@ import type { CaseView } from "../session/caseView.ts";
 import { ChoiceField } from "./ChoiceField.tsx";
 import { CommonChoice } from "./CommonChoice.tsx";
 import { CommonNumber } from "./CommonNumber.tsx";
-import { dissipations, kinds, stamps, yesNo } from "./reductionRows.ts";
+import { dissipations, kinds, probesTaken, stamps, yesNo } from "./reductionRows.ts";
 import { StartUpField } from "./StartUpField.tsx";
 import { SymbolText } from "./SymbolText.tsx";
 import { integralRoutes } from "./stationSettings.ts";
@@ -177,6 +177,13 @@ function SeriesFields({ sheets, edit }: Pick<FieldsProps, "sheets" | "edit">) {
         onChange={(size) =>
           edit({ reduce: { segment: size === "auto" ? null : 2 ** Number(size.slice(2)) } })
         }
+      />
+      <CommonChoice
+        label="probes at one position that count"
+        choices={probesTaken}
+        of={({ reduce }) => reduce.probes}
+        sheets={sheets}
+        onChange={(probes) => edit({ reduce: { probes } })}
       />
       <CommonChoice
         label="rounded time stamps"

@@ -13,6 +13,7 @@ export const dissipations = {
 } as const;
 export const yesNo = { auto: "automatic", true: "yes", false: "no" } as const;
 
+export const probesTaken = { agreeing: "those that agree", all: "all of them" } as const;
 export const stamps = { ask: "ask", even: "constant step", written: "as written" } as const;
 
 type Said = (sheet: CaseSheet) => string | null;
@@ -47,6 +48,11 @@ const rows: readonly (readonly [name: string, said: Said])[] = [
   [
     "rounded times",
     ({ layout, read }) => (layout === "series" && read.times !== "ask" ? stamps[read.times] : null),
+  ],
+  [
+    "probes",
+    ({ layout, reduce }) =>
+      layout === "series" && reduce.probes === "all" ? probesTaken[reduce.probes] : null,
   ],
   // what is seldom set is listed once it is
   ["sampled together", ({ simultaneous }) => (simultaneous === "auto" ? null : yesNo[`${simultaneous}`])],
