@@ -26,6 +26,8 @@ const viscosity = async (page: Page, value: string) => {
   await field.fill(value);
   await field.press("Enter");
 };
+/** A busy machine is given time. */
+const patient = { timeout: 60_000 };
 /** What is kept is written once nothing has happened for a moment. */
 const kept = (page: Page) => page.waitForTimeout(1500);
 
@@ -51,7 +53,7 @@ describe("a page that was worked on", () => {
     await page.reload();
     await settled(page);
     expect(await numbers(page)).toEqual(before);
-    await expect.poll(() => page.getByRole("button", { name: "Undo" }).isEnabled()).toBe(true);
+    await expect.poll(() => page.getByRole("button", { name: "Undo" }).isEnabled(), patient).toBe(true);
   });
 
   it("reduces its records with other settings without another drop", async () => {
@@ -64,7 +66,7 @@ describe("a page that was worked on", () => {
     expect(await numbers(page)).not.toEqual(before);
     await page.getByRole("button", { name: "Undo" }).click();
     await settled(page);
-    await expect.poll(() => numbers(page)).toEqual(before);
+    await expect.poll(() => numbers(page), patient).toEqual(before);
   });
 
   it("is not written over by a second tab, which says so", async () => {
@@ -107,7 +109,7 @@ describe("a workspace file dropped on a page elsewhere", () => {
     await dropFiles(other.page, records);
     await settled(other.page);
     await expect
-      .poll(async () => (await numbers(other.page)).get(".cases[0].stations[0].Re_lambda.value"))
+      .poll(async () => (await numbers(other.page)).get(".cases[0].stations[0].Re_lambda.value"), patient)
       .not.toBe(before.get(".cases[0].stations[0].Re_lambda.value"));
   });
 
