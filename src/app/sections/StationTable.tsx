@@ -3,6 +3,7 @@ import { lawDistance } from "../../core/decay/lawDistance.ts";
 import type { Flag } from "../../core/flag.ts";
 import { withReference } from "../../core/symbolRuns.ts";
 import { unitOf } from "../../core/unitText.ts";
+import { type StationColumn, stationColumn, tableKeys } from "../../export/stationColumns.ts";
 import { concernOf } from "../../figures/flagConcern.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
 import { positionDecimals } from "../../figures/positionDecimals.ts";
@@ -13,7 +14,6 @@ import { NumberButton } from "./NumberButton.tsx";
 import { Pennant } from "./Pennant.tsx";
 import { RichText } from "./RichText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
-import { type StationColumn, stationColumn, tableKeys } from "./stationColumns.ts";
 import { TableScroll } from "./TableScroll.tsx";
 import { UnitText } from "./UnitText.tsx";
 

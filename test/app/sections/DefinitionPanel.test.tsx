@@ -5,9 +5,9 @@ import { DefinitionDoor, type OpenDefinition } from "../../../src/app/sections/d
 import { FitTable } from "../../../src/app/sections/FitTable.tsx";
 import { NumberButton } from "../../../src/app/sections/NumberButton.tsx";
 import { StationTable } from "../../../src/app/sections/StationTable.tsx";
-import { tableKeys } from "../../../src/app/sections/stationColumns.ts";
 import { estimate, missing } from "../../../src/core/quantity.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
+import { tableKeys } from "../../../src/export/stationColumns.ts";
 import { madeComparison } from "../../figures/madeComparison.ts";
 import { decayOf, stationAt, viewOf } from "../fixtures.ts";
 

@@ -1,10 +1,10 @@
-import { labelOf } from "../../core/catalogue.ts";
-import type { Estimate, Quantity } from "../../core/quantity.ts";
-import { isEstimate } from "../../core/quantity.ts";
-import type { StationResult } from "../../core/stationResult.ts";
-import { displayOf, type Units } from "../../core/unitText.ts";
-import { decimalsForDigits, formatNumber } from "../../figures/formatNumber.ts";
-import { decimalsOf } from "../../figures/formatQuantity.ts";
+import { labelOf } from "../core/catalogue.ts";
+import type { Estimate, Quantity } from "../core/quantity.ts";
+import { isEstimate } from "../core/quantity.ts";
+import type { StationResult } from "../core/stationResult.ts";
+import { displayOf, type Units } from "../core/unitText.ts";
+import { decimalsForDigits, formatNumber } from "../figures/formatNumber.ts";
+import { decimalsOf } from "../figures/formatQuantity.ts";
 
 /** The quantities of the page's station table, in order; the files for scripts hold all of them. */
 export const tableKeys = [
