@@ -114,7 +114,7 @@ function inflowIntensity(
   if (law === null) return none("there is no law");
   const [there, here] = [lawAt(law, from), lawAt(law, x)];
   if (there === null || here === null)
-    return none("the first station, or the body, lies upstream of the virtual origin");
+    return none("the first station, or the body, lies before the virtual origin");
   const standard = Math.sqrt(lawChangeVariance(law, from, x)) / 2;
   const value = Tu * Math.sqrt(there / here);
   return { x: from, Tu: logEstimate(value, standard, law.freedom ?? null), extrapolated: true };

@@ -76,7 +76,7 @@ function interpolated(
 function whyNot({ x }: LogSeries, at: number, reason: Quantity | undefined): string {
   if (x.length === 0) return reason?.value === null ? reason.why : "no station carries it";
   return at < x[0]
-    ? "the place lies upstream of the first station that carries it"
+    ? "the place lies before the first station that carries it"
     : "the place lies beyond the last station that carries it";
 }
 

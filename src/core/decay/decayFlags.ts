@@ -83,11 +83,13 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
   const { law, p, stations, chi2_reduced } = decay;
   if (law === null) return [];
   const flags: Flag[] = [];
+  const { along } = settings;
+  const later = along === "t" ? "later" : "farther downstream";
   const sensitivity = originSensitivity(law, decay.window);
   const traded =
     settings.n !== null || sensitivity === null
       ? ""
-      : ` Were x0 one unit of x farther downstream, n would change by ${sensitivity.toPrecision(2)}.`;
+      : ` Were ${along}0 one unit of ${along} ${later}, n would change by ${sensitivity.toPrecision(2)}.`;
   if (stations < fewStations)
     flags.push({
       code: "few-stations",
@@ -99,10 +101,10 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
   if (ratio < shortSpan)
     flags.push({
       code: "short-span",
-      text: `The last x - x0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.${traded}`,
+      text: `The last ${along} - ${along}0 is ${ratio.toFixed(1)} times the first: n and x0 trade against each other.${traded}`,
       value: ratio,
     });
-  if (settings.x0 !== null) flags.push(heldOrigin(sensitivity));
+  if (settings.x0 !== null) flags.push(heldOrigin(sensitivity, `${later} by one unit of ${along}`));
   if (window.withoutPlateau)
     flags.push({
       code: "window-without-plateau",
@@ -129,13 +131,13 @@ function aboutLaw(decay: DecayResult, window: ChosenWindow, settings: DecaySetti
  */
 function aboutNearField({ near_field }: DecayResult): Flag[] {
   if (!near_field) return [];
-  const { left_out, departure, term, term_size, p } = near_field;
+  const { left_out, departure, term_size, p } = near_field;
   const code = "near-field" as const;
   if (left_out > 0) {
     const many =
       left_out === 1
-        ? "One station upstream of the window leaves"
-        : `${left_out} stations upstream of the window leave`;
+        ? "One station before the window leaves"
+        : `${left_out} stations before the window leave`;
     const last = departure === null ? "" : `, the last of them by ${percent(departure)}`;
     return [
       {
@@ -145,11 +147,11 @@ function aboutNearField({ near_field }: DecayResult): Flag[] {
       },
     ];
   }
-  if (p === null || term === null || term_size === null || p >= suspicious) return [];
+  if (p === null || term_size === null || p >= suspicious) return [];
   return [
     {
       code,
-      text: `A term that dies out along the window, ${percent(term)} at its first station, would fit better by ${Math.abs(term_size).toFixed(1)} standard errors (p = ${p.toPrecision(1)}): n drifts as the window begins later.`,
+      text: `A term that dies out along the window would fit better by ${Math.abs(term_size).toFixed(1)} standard errors (p = ${p.toPrecision(1)}): n drifts as the window begins later.`,
       value: term_size,
     },
   ];
@@ -162,11 +164,11 @@ function isHalfOpen({ why_low, why_high }: { why_low?: string; why_high?: string
 }
 
 /** Had the origin been held elsewhere. */
-function heldOrigin(slope: number | null): Flag {
+function heldOrigin(slope: number | null, step: string): Flag {
   if (slope === null) return { code: "held-origin", text: "The origin is held at the first station." };
   return {
     code: "held-origin",
-    text: `The origin is held: were it held farther downstream by one unit of x, n would change by ${slope.toPrecision(2)}.`,
+    text: `The origin is held: were it held ${step}, n would change by ${slope.toPrecision(2)}.`,
     value: slope,
   };
 }

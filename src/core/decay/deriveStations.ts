@@ -53,7 +53,7 @@ function dissipationOfDecay(station: StationResult, decay: DecayResult, settings
   if (x < decay.window[0] - slack || x > decay.window[1] + slack)
     return missing("the station lies outside the fit window, where the law was not fitted");
   const q = lawAt(law, x);
-  if (q === null) return missing("the station lies upstream of the virtual origin");
+  if (q === null) return missing("the station lies before the virtual origin");
   if (settings.along === "x" && !law.flight && !isEstimate(station.U))
     return missing("no mean velocity at this station");
   const energy = q * (decay.speed ?? 1) ** 2 * (quantity === "uu" ? 3 / 2 : 1);

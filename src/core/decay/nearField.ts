@@ -25,21 +25,17 @@ const lengths = [0.5, 1, 2];
  * from the other side.
  * @param window a law, in log or linear residuals
  * @param blocks of its stations; null: each station for itself
- * @returns      the length with the largest score, its p times the number of lengths (Bonferroni); null where the stations
- *               do not tell such a term from A, n and x0
+ * @returns      the length with the largest score, its p times the number of lengths (Bonferroni); null where n or x0 is
+ *               held, since a term would then show that it is held elsewhere, and where the stations do not tell such a
+ *               term from A, n and x0
  * @see          Rao (1948), Proc. Camb. Phil. Soc. 44, 50
  */
 export function nearField(window: WindowFit, blocks: CommonBlocks | null = null): NearField | null {
   const { fit } = window;
-  if (fit.freedom < 2) return null;
   const { problem, law, held } = fit;
+  if (fit.freedom < 2 || held.n !== null || held.x0 !== null) return null;
   evaluateLaw(problem, law, held);
-  const free = [
-    problem.byC,
-    ...(held.n === null ? [problem.byB] : []),
-    ...(held.x0 === null ? [tied(fit)] : []),
-  ];
-  const basis = orthonormal(free);
+  const basis = orthonormal([problem.byC, problem.byB, problem.byKappa]);
   const reach = problem.first - fit.x0;
   const found = lengths.flatMap((share) => {
     const term = problem.d.map(
@@ -63,12 +59,6 @@ export function nearField(window: WindowFit, blocks: CommonBlocks | null = null)
   });
   if (judged.length === 0) return null;
   return judged.reduce((best, one) => (Math.abs(one.size) > Math.abs(best.size) ? one : best));
-}
-
-/** Derivative by the origin: with n held the slope at the centre goes with it, b = n kappa. */
-function tied({ problem, held }: WindowFit["fit"]): Float64Array {
-  const { n } = held;
-  return n === null ? problem.byKappa : problem.byKappa.map((value, i) => value + n * problem.byB[i]);
 }
 
 /** Standard error of the score along a direction, and its freedom. */

@@ -16,7 +16,7 @@ const innerTolerance = 1e-4;
 
 const whys = {
   x0: {
-    low: "the fit hardly worsens as the origin moves upstream without end: too short a span to bound it",
+    low: "the fit hardly worsens as the origin moves away without end: too short a span to bound it",
     high: "the fit hardly worsens up to the first station: these stations do not bound the origin from above",
   },
   n: {

@@ -54,7 +54,7 @@ describe("what a body meets", () => {
     const beyond = at(exact, { x: 3 });
     expect(beyond.at.L11).toMatchObject({ value: null, why: expect.stringMatching(/beyond the last/) });
     expect(beyond.at.Tu.value).toBeNull();
-    expect(at(exact, { x: 0.1 }).at.Tu).toMatchObject({ why: expect.stringMatching(/upstream/) });
+    expect(at(exact, { x: 0.1 }).at.Tu).toMatchObject({ why: expect.stringMatching(/before the first/) });
   });
   it("holds the truth 95 times in 100: intensity, length, and the places that meet their targets", () => {
     const random = seededRandom(5);
