@@ -12,6 +12,8 @@ import { linearTicks } from "./ticks.ts";
 
 /** Of the scan upstream of the first station, so many times the least scatter is still shown. */
 const scatterShown = 8;
+/** With more cases than this one panel holds the regions of all. */
+const mostApart = 2;
 
 /**
  * The joint region of n and x0 by profile, by covariance and by refits; beside it the classical scan: scatter of ln q about
@@ -19,15 +21,18 @@ const scatterShown = 8;
  */
 export function regionFigure(cases: readonly FigureCase[], options: FigureOptions): FigureSpec {
   const argued = cases.filter((of) => arguedOf(of) !== null);
-  const cells = placeCells(2, 66, options, { ...usualRoom, top: 4.4 });
-  const { panel, decor } = jointRegionPanel(argued, cells.boxes[0], "a", options, true);
+  // few cases have a panel each: their regions are small beside the distance between them
+  const groups = argued.length <= mostApart ? argued.map((of) => [of]) : [argued];
+  const cells = placeCells(groups.length + 1, 66, options, { ...usualRoom, top: 4.4 });
+  const regions = groups.map((group, i) => jointRegionPanel(group, cells.boxes[i], "abc"[i], options, true));
+  const scan = scanPanel(argued, cells.boxes[groups.length], "abc"[groups.length], options);
   return assembleFigure(
     {
       key: "joint-region",
       widthMm: cells.widthMm,
       heightMm: cells.heightMm,
-      panels: [panel, scanPanel(argued, cells.boxes[1], options)],
-      decor: joinDecor(decor),
+      panels: [...regions.map(({ panel }) => panel), scan],
+      decor: joinDecor(...regions.map(({ decor }) => decor)),
       table: regionTable(argued),
     },
     options,
@@ -44,7 +49,7 @@ function scanOf(of: FigureCase): { x0: number[]; rms: number[]; least: number } 
   return { x0: scan.x0.map((place) => place / length), rms, least: rms.indexOf(Math.min(...rms)) };
 }
 
-function scanPanel(cases: readonly FigureCase[], box: Box, options: FigureOptions): Panel {
+function scanPanel(cases: readonly FigureCase[], box: Box, letter: string, options: FigureOptions): Panel {
   const scans = cases.flatMap((of) => {
     const scan = scanOf(of);
     return scan === null ? [] : [{ of, scan }];
@@ -64,7 +69,7 @@ function scanPanel(cases: readonly FigureCase[], box: Box, options: FigureOption
       caseLine(scan.x0, scan.rms, mark, options, { weightPt: 0.95, dashed: true }),
       loneMarker({ x: scan.x0[scan.least], y: scan.rms[scan.least] }, mark, options, 1.8),
     ]),
-    letter: "b",
+    letter,
   };
 }
 

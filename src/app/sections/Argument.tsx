@@ -2,6 +2,7 @@ import { use, useMemo } from "react";
 import { useStore } from "zustand";
 import { plainText } from "../../export/sentences/piece.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureNumbers } from "../page/figureNumbers.ts";
 import { LiveRegion } from "../page/LiveRegion.tsx";
 import { pageExports } from "../page/pageExports.ts";
 import { RestedCases } from "../page/restedCases.ts";
@@ -158,7 +159,7 @@ export function Argument({
             <BodySection
               cases={folded}
               late={late !== null}
-              figureNumber={firstRatioFigure + comparisons.length}
+              figureNumber={figureNumbers.ratios + comparisons.length}
               onChange={change}
             />
           )}
@@ -176,8 +177,6 @@ export function Argument({
 }
 
 const noComparisons = [] as const;
-/** Number of the first figure of ratios: those behind it follow. */
-const firstRatioFigure = 6;
 
 function spoken(cases: readonly CaseView[], { records, decay }: ReturnType<typeof findingsOf>): string {
   if (cases.some((view) => view.work)) return "";

@@ -4,6 +4,7 @@ import type { Sentence } from "../../export/sentences/piece.ts";
 import { decayFigure } from "../../figures/decayFigure.ts";
 import { formatNumber } from "../../figures/formatNumber.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
 import { DecayChoices } from "./DecayChoices.tsx";
@@ -14,7 +15,7 @@ import { NoLaw } from "./NoLaw.tsx";
 import type { Note } from "./SectionFrame.tsx";
 
 const figure: SectionFigure = {
-  name: "Figure 1",
+  name: figureName("decay"),
   title: "Decay of the energy, with the joint regions of exponent and origin",
   widthMm: 178,
   build: decayFigure,

@@ -1,6 +1,7 @@
 import { useCallback } from "react";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { invariantsFigure } from "../../figures/invariantsFigure.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { FigureBlock } from "./FigureBlock.tsx";
 
@@ -13,7 +14,7 @@ export function InvariantsBlock({ cases }: { cases: readonly CaseView[] }) {
   if (withTensor(cases).length === 0) return null;
   return (
     <FigureBlock
-      name="Figure 2 (continued)"
+      name={figureName("isotropy", true)}
       title="Invariants of the anisotropy tensor"
       widthMm={86}
       build={build}

@@ -1,6 +1,7 @@
 import { memo, useCallback } from "react";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { localDecayFigure } from "../../figures/localDecayFigure.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { FigureBlock } from "./FigureBlock.tsx";
 
@@ -9,7 +10,7 @@ export const LocalBody = memo(function LocalBody({ cases }: { cases: readonly Ca
   const build = useCallback((options: FigureOptions) => localDecayFigure(cases, options), [cases]);
   return (
     <FigureBlock
-      name="Figure 1 (continued)"
+      name={figureName("decay", true)}
       title="Local exponent and compensated energy"
       widthMm={178}
       build={build}

@@ -6,6 +6,7 @@ import type { FigureOptions, FigureTable } from "../../figures/figureSpec.ts";
 import { formatCount } from "../../figures/formatNumber.ts";
 import { regionFigure } from "../../figures/regionFigure.ts";
 import { endsOf } from "../../figures/stationPoints.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
@@ -20,7 +21,7 @@ export const RegionBody = memo(function RegionBody({ cases }: { cases: readonly 
   return (
     <>
       <FigureBlock
-        name="Figure 1 (continued)"
+        name={figureName("decay", true)}
         title="Joint region by profile, covariance and refits; scatter against the origin"
         widthMm={178}
         build={build}
@@ -55,10 +56,10 @@ export const RegionBody = memo(function RegionBody({ cases }: { cases: readonly 
 
 const caption = (
   <>
-    (<i>a</i>) Joint 68 % and 95 % regions as contours of the profile, filled; thin: the ellipses that the
-    covariance has in their place; dots: refits of stations drawn anew, shown and not adopted. (<i>b</i>) The
-    classical scan: rms of the residuals of ln <i>q</i> about the best line, all stations alike, against the
-    origin it is drawn from; marked: the least.
+    Joint 68 % and 95 % regions as contours of the profile, filled; thin: the ellipses that the covariance has
+    in their place; dots: refits of stations drawn anew, shown and not adopted. Last panel: the classical
+    scan, rms of the residuals of ln <i>q</i> about the best line, all stations alike, against the origin it
+    is drawn from; marked: the least.
   </>
 );
 

@@ -8,6 +8,7 @@ import { arguedOf } from "../../figures/arguedOf.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { routesFigure } from "../../figures/routesFigure.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
@@ -35,14 +36,14 @@ export const RoutesBody = memo(function RoutesBody({
         <SaidSentences sentences={routeSentences(view)} key={view.id} />
       ))}
       <FigureBlock
-        name="Figure 2 (continued)"
+        name={figureName("window", true)}
         title="Exponent and origin by every route"
         widthMm={178}
         build={build}
         caption={caption}
       />
       <RoutesTable cases={cases} />
-      <div className="fields">
+      <div className="fields argued-fields">
         {cases.map(({ id, name, of }) => (
           <NumberField
             key={id}

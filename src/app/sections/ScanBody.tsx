@@ -2,6 +2,7 @@ import { memo, useCallback } from "react";
 import { scanSentences } from "../../export/sentences/scanSentences.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { scanFigure } from "../../figures/scanFigure.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ConditionsTable } from "./ConditionsTable.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
@@ -16,7 +17,7 @@ export const ScanBody = memo(function ScanBody({ cases }: { cases: readonly Case
         <SaidSentences sentences={scanSentences(view)} key={view.id} />
       ))}
       <FigureBlock
-        name="Figure 2"
+        name={figureName("window")}
         title="Exponent and origin against the first and the last station used"
         widthMm={178}
         build={build}

@@ -6,6 +6,7 @@ import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { localSpectrumFigure } from "../../figures/localSpectrumFigure.ts";
 import { spectrumFigure } from "../../figures/spectrumFigure.ts";
 import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import { pickLetters } from "../page/pickLetters.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
@@ -58,7 +59,7 @@ export function SpectraSection({
   const curves = useMemo(() => pickedCurves(cases, picked), [cases, picked]);
   const sentences = useMemo(() => spectrumSentences(curves), [curves]);
   const figure: SectionFigure = {
-    name: "Figure 4",
+    name: figureName("spectra"),
     title: "Spectra and autocorrelations of the picked stations",
     widthMm: 178,
     build,
@@ -98,7 +99,7 @@ export function SpectraSection({
       {curves.some(({ station }) => station.curves?.local) && (
         <Fold name="Local slope, isotropy scale by scale">
           <FigureBlock
-            name="Figure 4 (continued)"
+            name={figureName("spectra", true)}
             title="Local slope of the spectra, and E22 against isotropy"
             widthMm={178}
             build={buildLocal}

@@ -1,13 +1,14 @@
 import { balanceFigure } from "../../figures/balanceFigure.ts";
 import { isotropyFigure } from "../../figures/isotropyFigure.ts";
 import { scalesFigure } from "../../figures/scalesFigure.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { SectionFigure } from "./ArgumentSection.tsx";
 import { RouteTable } from "./RouteTable.tsx";
 import type { Note } from "./SectionFrame.tsx";
 
 /** The figures that need nothing but the cases, with their captions. */
 export const isotropyPicture: SectionFigure = {
-  name: "Figure 2",
+  name: figureName("isotropy"),
   title: "Ratios of the rms velocities along the stream",
   widthMm: 178,
   build: isotropyFigure,
@@ -20,7 +21,7 @@ export const isotropyPicture: SectionFigure = {
 };
 
 export const scalesPicture: SectionFigure = {
-  name: "Figure 3",
+  name: figureName("scales"),
   title: "Length scales and Taylor Reynolds number along the stream",
   widthMm: 178,
   build: scalesFigure,
@@ -35,7 +36,7 @@ export const scalesPicture: SectionFigure = {
 };
 
 export const balancePicture: SectionFigure = {
-  name: "Figure 5",
+  name: figureName("balance"),
   title: "Dissipation of the decay over that of the gradients",
   widthMm: 86,
   build: balanceFigure,
