@@ -290,9 +290,10 @@ describe("doubts about a station", () => {
   });
   it("are told of a spectrum that rises to its end", () => {
     const white = whiteNoise(count, 6);
-    const rising = smooth(count, 8).map(
-      (value, i) => 10 + value + 0.05 * (white[i] - white[Math.max(0, i - 1)]),
-    );
+    const rising = smooth(count, 8).map((value, i) => {
+      const bend = i < 2 ? 0 : white[i] - 2 * white[i - 1] + white[i - 2];
+      return 10 + value + 0.03 * bend;
+    });
     const found = reduceStation([partOf({ u: rising })], settings);
     expect(flagOf(found, "aliasing")?.value).toBeGreaterThan(0.1);
     expect(codes(station)).not.toContain("aliasing");
