@@ -1,17 +1,20 @@
 import type { Label } from "./catalogue.ts";
 import { label } from "./label.ts";
 
+const common = "common practice, no source";
 const corrsin = "Comte-Bellot and Corrsin (1966)";
 
 /** What a body meets, where a flow has developed, and what one more measurement would do. */
 export const bodyLabels: readonly Label[] = [
-  label("chord", "c", "chord of the body", "L", "streamwise length of the body"),
+  label("chord", "c", "chord of the body", "L", "streamwise length of the body", {}, common),
   label(
     "L11_chord",
     "L_{11}/c",
     "integral scale over chord",
     "1",
     "L₁₁ where the body stands, over its chord",
+    {},
+    common,
   ),
   label(
     "chord_change",
@@ -19,6 +22,8 @@ export const bodyLabels: readonly Label[] = [
     "change over the chord",
     "1",
     "the quantity at the end of the chord over the same at its beginning, in the empty stream",
+    {},
+    common,
   ),
   label(
     "target_place",
@@ -26,6 +31,8 @@ export const bodyLabels: readonly Label[] = [
     "place that meets a target",
     "L",
     "where the quantity passes its target: Tu by the law inside the window and between stations outside, L₁₁ by the line of its growth",
+    {},
+    common,
   ),
   label(
     "target_time",
@@ -33,6 +40,8 @@ export const bodyLabels: readonly Label[] = [
     "time at which a target is met",
     "T",
     "when the quantity passes its target: Tu by the law inside the window and between stations outside",
+    {},
+    common,
   ),
   label(
     "least_miss",
@@ -40,6 +49,8 @@ export const bodyLabels: readonly Label[] = [
     "smallest miss of both targets",
     "L",
     "the place at which the larger of both misses, counted as factors, is least",
+    {},
+    common,
   ),
   label(
     "Tu_inflow",
