@@ -82,7 +82,7 @@ export const figureLabels: readonly Label[] = [
   ),
   label(
     "local_slope",
-    "d ln E_{11}/d ln k_{1}",
+    'd "ln" E_{11}/d "ln" k_{1}',
     "local slope of the spectrum",
     "1",
     "d ln E₁₁/d ln k₁ over bands",

@@ -34,7 +34,7 @@ export function revivalPanel(
       [Math.min(...places), Math.max(...places)],
       scaled ? symbolHtml(labelOf("r/L11").symbol) : titleWithUnit(symbolHtml(lag.symbol), unit),
     ),
-    y: linearAxis([Math.min(-0.15, ...values) - 0.05, 1], symbolHtml(labelOf("rho").symbol)),
+    y: linearAxis([Math.min(-0.15, ...values) - 0.05, 1.1], symbolHtml(labelOf("rho").symbol)),
     traces: [
       ...curves.map(({ one, x, y }) =>
         caseLine(x, y, one.of.mark, options, { weightPt: lineWeight(one, revived), dashed: true }),

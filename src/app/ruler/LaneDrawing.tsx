@@ -28,7 +28,8 @@ export function LaneDrawing(props: LaneDrawingProps) {
   const { one, map, width, height, window, ghost, picks } = props;
   const at = (x: number) => map.at + map.perX * x;
   const ends = window === null ? null : ([at(window[0]) - bracketGap, at(window[1]) + bracketGap] as const);
-  const waits = one.law === null || one.state.kind === "reading";
+  // a case that is read anew keeps what it had until there is more
+  const waits = one.law === null;
   return (
     <svg className="ruler-drawing" width={width} height={height} aria-hidden="true" focusable="false">
       {ends && (

@@ -4,6 +4,7 @@ import { spectrumSentences } from "../../export/sentences/spectrumSentences.ts";
 import type { FigureOptions, PickedCurve } from "../../figures/figureSpec.ts";
 import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import { localSpectrumFigure } from "../../figures/localSpectrumFigure.ts";
+import { possibleForm } from "../../figures/spectrumCurves.ts";
 import { spectrumFigure } from "../../figures/spectrumFigure.ts";
 import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
 import { figureName } from "../page/figureNumbers.ts";
@@ -63,7 +64,7 @@ export function SpectraSection({
     title: "Spectra and autocorrelations of the picked stations",
     widthMm: 178,
     build,
-    caption: <Caption form={form} component={component} curves={curves} />,
+    caption: <Caption form={possibleForm(curves, form)} component={component} curves={curves} />,
   };
   const notes = [
     {

@@ -1,4 +1,4 @@
-import { use, useCallback, useState } from "react";
+import { use, useCallback, useMemo, useState } from "react";
 import { unitOf } from "../../core/unitText.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { formatDigits, formatPosition, withUnit } from "../../figures/formatNumber.ts";
@@ -11,6 +11,7 @@ import { ChoiceField } from "./ChoiceField.tsx";
 import { DrawnFold } from "./DrawnFold.tsx";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { startUpOffer } from "./startUpOffer.ts";
+import { useSettled } from "./useSettled.ts";
 
 /** How records begin: block means and variances against time, the transient that was found, and what is left out. */
 export function StartUpFold({ onChange }: { onChange: (change: WorkspaceChange) => void }) {
@@ -46,11 +47,13 @@ function Beginnings({ cases, onChange }: Shown) {
   const station = recorded.find(({ x }) => String(x) === place) ?? usual;
   const { startup } = view.of.sheet;
   const unit = unitOf(view.along === "t" ? "T" : "L", view.units);
-  const build = useCallback(
-    (options: FigureOptions) =>
-      startUpFigure({ of: view, station, startup, proposed: offer?.time ?? null }, options),
+  const now = useMemo(
+    () => ({ of: view, station, startup, proposed: offer?.time ?? null }),
     [view, station, startup, offer?.time],
   );
+  // blocks belong to the start-up that they were reduced with
+  const shown = useSettled(now, view.work === null);
+  const build = useCallback((options: FigureOptions) => startUpFigure(shown, options), [shown]);
   return (
     <>
       <div className="fields">
@@ -105,7 +108,7 @@ function Answers({ view, onChange }: { view: CaseView; onChange: Shown["onChange
       <span>
         <CaseMark mark={view.mark} /> {view.name}:{" "}
         {startup === 0 ? "nothing is left out" : `${withUnit(formatDigits(startup, 3), time)} are left out`}
-        {offer === null && ", and every record goes on as it begins"}
+        {view.work === null && offer === null && ", and every record goes on as it begins"}
       </span>
       {offer !== null && (
         <button type="button" className="action" onClick={() => leaveOut(offer.time)}>

@@ -7,8 +7,12 @@ export interface StartUpOffer {
   readonly station: StationResult;
 }
 
-/** What the checks propose to leave out of a case's records; null where every record begins as it goes on. */
-export function startUpOffer({ stations, of }: CaseView): StartUpOffer | null {
+/**
+ * What the checks propose to leave out of a case's records; null where every record begins as it goes on, and while
+ * they are reduced anew.
+ */
+export function startUpOffer({ stations, of, work }: CaseView): StartUpOffer | null {
+  if (work !== null) return null;
   const found = stations.flatMap((station) => {
     const flag = station.flags.find(({ code }) => code === "start-up");
     // told from the first sample kept: what is left out already comes before it
