@@ -127,7 +127,11 @@ function energiesWithout(
     for (let j = 0; j <= groups; j++)
       energy[j] += (factor * (square[j] - sum[j] ** 2 / weight[j])) / weight[j];
   }
-  const moves = Float64Array.from({ length: groups }, (_, j) => Math.log(energy[j] / energy[groups]));
+  // two logarithms: the ratio of two energies below zero would pass for a sound one
+  const moves = Float64Array.from(
+    { length: groups },
+    (_, j) => Math.log(energy[j]) - Math.log(energy[groups]),
+  );
   return moves.every(Number.isFinite) ? moves : null;
 }
 
