@@ -16,7 +16,10 @@ const costs = join(bundles, "costs.json");
  */
 export class InProcessRunner {
   constructor() {
-    this.files = testsOf(process.env.MUTATION_TESTS.split(","));
+    this.files = testsOf(
+      process.env.MUTATION_TESTS.split(","),
+      process.env.MUTATION_WITHOUT_FILES.split(","),
+    );
     this.scripts = new Map();
   }
 

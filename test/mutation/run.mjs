@@ -3,6 +3,7 @@
 //   npm run mutation -- decay fitDecay crossing     the files whose path holds one of these words
 //   npm run mutation -- decay --share 0.3 --seed 2  a random part of the mutants
 //   npm run mutation -- signal --tests core/signal,core/station   the tests that may kill (else those of the folder)
+//   npm run mutation -- decay --without argueDecay,flight         test files left out, as too slow: a lower bound
 // Prints a table and the survivors; keeps both, and a page to click through, in reports/mutation (ignored).
 import { mkdirSync, readdirSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
@@ -12,7 +13,12 @@ import { summary } from "./summary.mjs";
 
 const { values, positionals } = parseArgs({
   allowPositionals: true,
-  options: { share: { type: "string" }, seed: { type: "string" }, tests: { type: "string" } },
+  options: {
+    share: { type: "string" },
+    seed: { type: "string" },
+    tests: { type: "string" },
+    without: { type: "string" },
+  },
 });
 const [folder, ...words] = positionals;
 const share = Number(values.share ?? "1");
@@ -42,6 +48,7 @@ const statistical = [
 ];
 process.env.MUTATION_WITHOUT = statistical.join("|");
 process.env.MUTATION_TESTS = values.tests ?? `core/${folder}`;
+process.env.MUTATION_WITHOUT_FILES = values.without ?? "";
 process.env.MUTATION_SHARE = String(share);
 process.env.MUTATION_SEED = values.seed ?? "1";
 
