@@ -4,7 +4,7 @@ import { positionDecimals } from "../../figures/positionDecimals.ts";
 import { BodyField } from "./BodyField.tsx";
 import type { Phase, RulerBody } from "./rulerProps.ts";
 import type { LaneMap } from "./rulerScale.ts";
-import { type SpokenScale, spokenPlace } from "./spokenText.ts";
+import { bodyName, type SpokenScale, spokenPlace } from "./spokenText.ts";
 import { useBodyGrip } from "./useBodyGrip.ts";
 
 interface BodyMarkProps {
@@ -75,7 +75,7 @@ function MovableBody({ body, map, width, scale, onBody, px, label }: MovableBody
         style={{ left: px }}
         role="slider"
         tabIndex={0}
-        aria-label={`Body, ${body.name}`}
+        aria-label={bodyName(body)}
         aria-orientation="horizontal"
         aria-valuemin={Math.min(ends[0], body.x)}
         aria-valuemax={Math.max(ends[1], body.x)}

@@ -79,6 +79,11 @@ export function lawSpoken(one: RulerCase, units: string): string {
   return `n ${n.value}${interval}${x0}.`;
 }
 
+/** "Body, heated tube"; "Body" where it has no name of its own. */
+export function bodyName({ name }: RulerBody): string {
+  return name === "body" ? "Body" : `Body, ${name}`;
+}
+
 /** "Body, 0.90 metres; Tu 3.34 percent in screen." */
 export function bodySpoken({ x, readings = "" }: RulerBody, scale: SpokenScale): string {
   const decimals = Math.max(scale.decimals, positionDecimals([x]));

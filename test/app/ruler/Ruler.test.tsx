@@ -1,6 +1,7 @@
 import { act, fireEvent, render, screen, within } from "@testing-library/react";
 import userEvent from "@testing-library/user-event";
 import { beforeEach, describe, expect, it, vi } from "vitest";
+import { expectClose } from "../../support/expectClose.ts";
 import { KeptRuler, lawless, rulerSpies, screenCase, simulationCase } from "./rulerFixture.tsx";
 
 let spies = rulerSpies();
@@ -274,6 +275,52 @@ describe("the body", () => {
     await userEvent.clear(screen.getByRole("textbox", { name: "Position of heated tube" }));
     await userEvent.keyboard("1,05{Enter}");
     expect(spies.onBody.mock.lastCall).toEqual([1.05, "rest"]);
+  });
+  it("goes 1 % of the scale with an arrow, 5 % with Shift, and stays on the scale", async () => {
+    show([screenCase()], body);
+    const grip = slider("Body, heated tube");
+    const [low, high] = ["aria-valuemin", "aria-valuemax"].map((end) => Number(grip.getAttribute(end)));
+    grip.focus();
+    const moved = async (keys: string) => {
+      await userEvent.keyboard(keys);
+      return Number(spies.onBody.mock.lastCall?.[0]) - 0.9;
+    };
+    const grain = { relative: 0.05, because: "places by hand keep a thousandth of the scale" };
+    expectClose(await moved("{ArrowLeft}"), -(high - low) / 100, grain);
+    expectClose(await moved("{Shift>}{ArrowRight}{/Shift}"), (high - low) / 20, grain);
+    show([screenCase()], { body: { x: high, name: "edge" } });
+    slider("Body, edge").focus();
+    expectClose((await moved("{ArrowRight}")) + 0.9, high, { relative: 1e-3, because: "the same grain" });
+  });
+  it("off the scale stands at its edge, with an arrow, and its name on the side that has room", () => {
+    const { container } = show([screenCase()], { body: { x: 40, name: "far" } });
+    expect(slider("Body, far").getAttribute("aria-valuetext")).toContain("40.00 metres");
+    const name = container.querySelector(".ruler-body-name");
+    expect(name?.textContent).toContain("→");
+    expect(name?.classList.contains("before")).toBe(true);
+  });
+  it("is said once it rests, with what is met there", async () => {
+    show([screenCase()], { body: { x: 0.9, name: "body", readings: "Tu 3.34 percent in screen" } });
+    slider("Body").focus();
+    await userEvent.keyboard("{ArrowRight}");
+    await vi.waitFor(() =>
+      expect(document.querySelector(".ruler .spoken")?.textContent).toBe(
+        "Body, 0.90 metres; Tu 3.34 percent in screen.",
+      ),
+    );
+  });
+  it("is drawn in each lane where it stands there, and in none where it does not", () => {
+    const lines = (places: readonly (number | null)[]) => {
+      const { container, unmount } = show([screenCase(), simulationCase()], {
+        body: { x: 0.9, name: "body", places },
+      });
+      const path = container.querySelector(".ruler-body-line")?.getAttribute("d") ?? "";
+      unmount();
+      return path.split("M").slice(1);
+    };
+    expect(lines([0.9, null])).toHaveLength(1);
+    const [first, second] = lines([0.9, 1.2]).map((piece) => Number.parseFloat(piece));
+    expect(second).toBeGreaterThan(first);
   });
   it("keeps its place when what is typed is no number", async () => {
     show([screenCase()], body);
