@@ -5,6 +5,8 @@ export interface DecayArgument {
   readonly scan: WindowScan;
   /** Null where x0 or n is held, or there is no law. */
   readonly region: JointRegion | null;
+  /** Null where x0 or n is held, there is no law, or one start alone leaves five stations. */
+  readonly everyStart: EveryStart | null;
   readonly bootstrap: Bootstrap | null;
   readonly routes: readonly DecayRoute[];
   readonly disagreements: readonly RouteDisagreement[];
@@ -18,6 +20,13 @@ export interface DecayArgument {
   readonly narrowing: readonly Narrowing[];
   /** Null where U varies by no more than 1 %, or does not count. */
   readonly flight: FlightFit | null;
+}
+
+/** Union of the intervals over every start of the window that leaves five stations. */
+export interface EveryStart {
+  readonly starts: number;
+  readonly n: Quantity;
+  readonly x0: Quantity;
 }
 
 /** n and x0 against the first and the last station used; and what physics says of both ends. */

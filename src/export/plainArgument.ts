@@ -35,6 +35,7 @@ export function plainArgument(argument: DecayArgument | undefined): PlainArgumen
       growths: plain(rest.growths),
       C_epsilon: plain(rest.dissipationConstant),
       region: plain(rest.region),
+      every_start: plain(rest.everyStart),
       bootstrap: plain(withoutCloud(rest.bootstrap)),
       routes: plain(rest.routes),
       disagreements: plain(rest.disagreements),

@@ -1,6 +1,7 @@
 // How often the 95 % intervals of a decay law hold the truth, over synthetic profiles: node bundle.mjs ASK
 // ASK is JSON: {"kind": "cells", "profiles", "seeds", "cells"}, {"kind": "windows", "profiles", "fields"}, {"kind": "together",
 // "profiles", "rhos"}, {"kind": "refits", "profiles", "rounds"} or {"kind": "profiles", "profiles"}. Prints one line of JSON.
+import { everyStart } from "../../src/core/decay/everyStart.ts";
 import { fitDecay } from "../../src/core/decay/fitDecay.ts";
 import { fitPowerLaw } from "../../src/core/decay/fitPowerLaw.ts";
 import { fitWindow, windowQuantity } from "../../src/core/decay/fitWindow.ts";
@@ -80,7 +81,8 @@ function coverWindows({ form, excess }: NearFieldCase, profiles: number, seed: n
   const random = seededRandom(seed);
   const xs = spacedFrom(0, 6, 100, 16);
   const error = 0.005;
-  const [given, union, silent] = [startTally(profiles), startTally(profiles), startTally(0)];
+  const [given, union, every] = [startTally(profiles), startTally(profiles), startTally(profiles)];
+  const silent = startTally(0);
   let begins = 0;
   for (let profile = 0; profile < profiles; profile++) {
     const stations = xs.map((x) => {
@@ -91,11 +93,16 @@ function coverWindows({ form, excess }: NearFieldCase, profiles: number, seed: n
     begins += decay.window[0] / profiles;
     add(given, decay.given_window.n, decay.given_window.x0);
     add(union, decay.n, decay.x0);
+    const all = everyStart(
+      decay.points.filter((point) => point.used),
+      plainSettings,
+    );
+    add(every, all?.n ?? decay.n, all?.x0 ?? decay.x0);
     if (decay.flags.some(({ code }) => code === "near-field")) continue;
     silent.profiles++;
     add(silent, decay.n, decay.x0);
   }
-  return { form, excess, begins, given, union, silent };
+  return { form, excess, begins, given, union, every, silent };
 }
 
 /** Stations sampled together, their neighbours correlated by rho; taken as such, as each for itself, or told by the data. */

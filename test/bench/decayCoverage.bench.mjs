@@ -94,7 +94,7 @@ async function printWindows(tools, ask) {
   const found = await ask({ kind: "windows", profiles, fields: nearFields });
   console.log(
     `\nAutomatic windows: 16 stations at x/M = 6 to 100, 0.5 %, q = (x - 3)^-1.25 (1 + excess form); bar ${100 * unionBar} % on the union for the pure law; ` +
-      "flagged: the flag near-field is raised; silent: the union where it is not",
+      "flagged: the flag near-field is raised; every start: the union over all that leave five stations; silent: the adopted union where the flag is not raised",
   );
   tools.table(
     [
@@ -106,15 +106,18 @@ async function printWindows(tools, ask) {
       "union: n %",
       "x0 %",
       "",
+      "every start: n %",
+      "x0 %",
       "flagged %",
       "silent: n %",
     ],
-    found.map(({ form, excess, begins, given, union, silent }) => [
+    found.map(({ form, excess, begins, given, union, every, silent }) => [
       `${(100 * excess).toFixed(0)} %`,
       excess === 0 ? "" : form,
       begins.toFixed(1),
       ...[given.n, given.x0, union.n, union.x0].map((held) => percent(held / profiles)),
       excess > 0 || Math.min(union.n, union.x0) >= unionBar * profiles ? "" : "OUTSIDE",
+      ...[every.n, every.x0].map((held) => percent(held / profiles)),
       percent(1 - silent.profiles / profiles),
       silent.profiles < 20 ? "few" : percent(silent.n / silent.profiles),
     ]),

@@ -7,6 +7,7 @@ import { type CommonBlocks, commonBlocks } from "./commonBlocks.ts";
 import { decayRoutes, routeDisagreements } from "./decayRoutes.ts";
 import { developmentLength } from "./developmentLength.ts";
 import { dissipationConstant } from "./dissipationConstant.ts";
+import { everyStart } from "./everyStart.ts";
 import { fitWindow, type WindowFit } from "./fitWindow.ts";
 import { flightFit } from "./flightFit.ts";
 import { growths } from "./growths.ts";
@@ -40,6 +41,7 @@ export function argueDecay(
   return {
     scan: windowScan(stations, decay, settings),
     region: window === null ? null : jointRegion(window),
+    everyStart: everyStart(points, settings, decay.flight, blocks),
     bootstrap: window === null ? null : bootstrapLaw(window, blocks),
     routes,
     disagreements: routeDisagreements(routes),

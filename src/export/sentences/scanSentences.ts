@@ -2,6 +2,7 @@ import { isNotHeld } from "../../core/decay/notHeld.ts";
 import type { Criterion, ScannedWindow } from "../../core/decayArgument.ts";
 import { type ArguedDecay, arguedOf } from "../../figures/arguedOf.ts";
 import { probabilityText, windowSentence } from "./decaySentences.ts";
+import { nearFieldSentence } from "./nearFieldSentence.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
 import { coordinate, position, symbolOf, valueWithInterval } from "./shownValue.ts";
@@ -16,6 +17,7 @@ export function scanSentences(of: SentenceCase): readonly Sentence[] {
   return [
     windowSentence(whole),
     ...earlierStart(whole, argued),
+    ...nearFieldSentence(whole, argued),
     ...sideOf(whole, scan.start, argued.decay.window[0], "start"),
     ...sideOf(whole, scan.end, argued.decay.window[1], "end"),
   ];
