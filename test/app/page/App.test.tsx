@@ -91,6 +91,28 @@ describe("the page", () => {
     expect(title()).toBe("Two inflows");
   });
 
+  it("moves the body by the arrow keys as one change when the key is let go, and takes it back", async () => {
+    const store = loadedPage();
+    store
+      .getState()
+      .dispatch({ kind: "changed", change: { kind: "set-body", caseId: null, body: { x: 0.9 } } });
+    await open(store);
+    const placed = () => {
+      const { session } = store.getState();
+      return session.kind === "ready" ? session.held.history.present.cases[0].sheet.body?.x : null;
+    };
+    const body = screen.getByRole("slider", { name: "Body" });
+    body.focus();
+    fireEvent.keyDown(body, { key: "ArrowRight" });
+    fireEvent.keyDown(body, { key: "ArrowRight" });
+    expect(placed()).toBe(0.9);
+    expect(Number(body.getAttribute("aria-valuenow"))).toBeGreaterThan(0.9);
+    fireEvent.keyUp(body, { key: "ArrowRight" });
+    expect(placed()).toBe(Number(body.getAttribute("aria-valuenow")));
+    fireEvent.keyDown(window, { key: "z", ctrlKey: true });
+    expect(placed()).toBe(0.9);
+  });
+
   it("turns dark when asked to, and keeps the choice for the next visit", () => {
     render(<App store={createPageStore()} work={work} />);
     fireEvent.click(screen.getByRole("button", { name: "Dark" }));
