@@ -38,7 +38,11 @@ export function plainComparison(comparison: Comparison, cases: readonly [Sentenc
     common_n,
     ...(comparison.common_n_of_all ? { common_n_of_all: comparison.common_n_of_all } : {}),
     origins: { own: plainOrigins(origins.own), common: plainOrigins(origins.common) },
-    spectra,
+    spectra: {
+      within: spectra.within,
+      why: spectra.why,
+      pairs: spectra.pairs.map((pair) => ({ ...pair, distance: plainQuantity(pair.distance) })),
+    },
   };
 }
 

@@ -14,6 +14,12 @@ export interface PageExports {
   readonly stations: (view: CaseView) => void;
   readonly sheets: (view: CaseView) => void;
   readonly results: () => void;
+  readonly stationsLatex: (view: CaseView) => void;
+  readonly fitsLatex: () => void;
+  readonly methodsText: () => void;
+  readonly bibTeX: () => void;
+  /** The methods paragraphs themselves. */
+  readonly methods: () => string;
 }
 
 /** The stations of one case after the other, and the files to take along. */
@@ -58,6 +64,28 @@ export function TableSection({
         <button type="button" className="action" onClick={exports.results}>
           Results, JSON
         </button>
+        <button type="button" className="action" onClick={() => exports.stationsLatex(view)}>
+          Stations of {view.name}, LaTeX
+        </button>
+        <button type="button" className="action" onClick={exports.fitsLatex}>
+          Fits, LaTeX
+        </button>
+        <button type="button" className="action" onClick={exports.methodsText}>
+          Methods, text
+        </button>
+        <button type="button" className="action" onClick={exports.bibTeX}>
+          Sources, BibTeX
+        </button>
+      </div>
+      <h3 className="methods-head">Methods</h3>
+      <div className="methods-text">
+        {exports
+          .methods()
+          .trim()
+          .split("\n\n")
+          .map((paragraph) => (
+            <p key={paragraph}>{paragraph}</p>
+          ))}
       </div>
     </SectionFrame>
   );

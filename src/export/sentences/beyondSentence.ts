@@ -1,5 +1,6 @@
 import type { Comparison } from "../../core/comparison.ts";
 import { isEstimate, scaled } from "../../core/quantity.ts";
+import { about } from "./about.ts";
 import { comparedPlace, comparedRange } from "./comparedPlace.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
@@ -38,9 +39,9 @@ function isBegin(from: number, begin: number): boolean {
 function needed({ align, extra_distance: extra, aligned_with }: Comparison, [, second]: Compared): Sentence {
   if (align !== "x0" || !isEstimate(extra)) return [];
   const { value, low, high } = extra;
-  const size = lengthValue(scaled(extra, value < 0 ? -1 : 1), second);
+  const size = about(lengthValue(scaled(extra, value < 0 ? -1 : 1), second), "extra_distance", extra);
   if (low === null || high === null || (low <= 0 && high >= 0))
-    return say`, and no difference of the way they need is shown: ${lengthValue(extra, second)}`;
+    return say`, and no difference of the way they need is shown: ${about(lengthValue(extra, second), "extra_distance", extra)}`;
   const each = aligned_with === "own n" ? ", each with its own exponent" : "";
   return say`, and ${caseOf(second)} needs ${size} ${value < 0 ? "less" : "more"}${each}`;
 }

@@ -1,5 +1,6 @@
 import type { Comparison } from "../../core/comparison.ts";
 import { isEstimate, type Quantity, scaled } from "../../core/quantity.ts";
+import { about } from "./about.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
 import { caseOf, coordinate, lengthValue, position, symbolOf, valueWithInterval } from "./shownValue.ts";
@@ -15,6 +16,7 @@ export function distanceSentences(
 ): Sentence[] {
   const later = first.along === "t";
   const origin = distancePart(
+    "extra_distance",
     extra_distance,
     second,
     later,
@@ -25,6 +27,7 @@ export function distanceSentences(
     ? say`${coordinate(first)} = ${position(Number(at.value.toPrecision(3)), first)}`
     : [];
   const apart = distancePart(
+    "matched_distance",
     matched_distance,
     second,
     later,
@@ -41,6 +44,7 @@ export function distanceSentences(
 
 /** A signed distance as a size and a direction; where its interval holds zero, that is said. */
 function distancePart(
+  key: string,
   distance: Quantity,
   of: SentenceCase,
   later: boolean,
@@ -48,7 +52,7 @@ function distancePart(
 ): Sentence[] {
   if (!isEstimate(distance)) return [];
   const before = distance.value < 0;
-  const size = lengthValue(scaled(distance, before ? -1 : 1), of);
+  const size = about(lengthValue(scaled(distance, before ? -1 : 1), of), key, distance);
   const { low, high } = distance;
   const open = low !== null && high !== null && low < 0 && high > 0;
   const words = later ? ["earlier", "later"] : ["further upstream", "further downstream"];

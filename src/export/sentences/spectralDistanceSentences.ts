@@ -1,5 +1,5 @@
 import type { Comparison } from "../../core/comparison.ts";
-import { bare } from "../../core/quantity.ts";
+import { bare, type Quantity } from "../../core/quantity.ts";
 import { formatDigits } from "../../figures/formatNumber.ts";
 import { middlePair } from "../../figures/middlePair.ts";
 import { comparedPlace } from "./comparedPlace.ts";
@@ -20,7 +20,7 @@ export function spectralDistanceSentences(
     return spectra.why === null ? [] : [say`The spectra are not compared: ${reason(spectra.why)}.`];
   const at = comparedPlace(middle.xi[0], { align: "x0" }, cases);
   const apart = number(middle.distance, "spectral_distance");
-  const chance = number(middle.chance, "spectral_chance");
+  const chance = number(bare(middle.chance, "a mean"), "spectral_chance");
   const more = middle.p < 0.05;
   const verdict = more ? "more than chance makes" : "no more than chance makes";
   const one = say`In Kolmogorov form the spectra at ${at} lie ${symbolOf("spectral_distance")} = ${apart} apart, ${verdict} of two spectra of one turbulence (${chance}, ${probabilityText(middle.p)})`;
@@ -32,7 +32,6 @@ export function spectralDistanceSentences(
   ];
 }
 
-function number(value: number, key: string): Piece {
-  const why = "held against what chance makes of it";
-  return { kind: "strong", text: formatDigits(value, 2), about: { key, quantity: bare(value, why) } };
+function number(quantity: Quantity, key: string): Piece {
+  return { kind: "strong", text: formatDigits(quantity.value ?? 0, 2), about: { key, quantity } };
 }
