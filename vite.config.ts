@@ -1,4 +1,5 @@
-import { cpSync, createReadStream, existsSync, readdirSync, statSync } from "node:fs";
+import { createHash } from "node:crypto";
+import { cpSync, createReadStream, existsSync, readdirSync, readFileSync, statSync } from "node:fs";
 import { extname, join, relative, resolve } from "node:path";
 import react from "@vitejs/plugin-react";
 import type { Plugin } from "vite";
@@ -84,6 +85,34 @@ function demoData(): Plugin {
   };
 }
 
+/** The worker that keeps a copy of the page, told of all files the page is made of; the demo's records are not. */
+function offlineCopy(): Plugin {
+  return {
+    name: "offline-copy",
+    apply: "build",
+    generateBundle: {
+      order: "post",
+      handler(_, bundle) {
+        const made = Object.values(bundle).filter(({ fileName }) => !fileName.startsWith("demo/"));
+        const hash = createHash("sha256");
+        for (const each of made) hash.update(each.fileName).update("code" in each ? each.code : each.source);
+        const fixed = ["./", "icon.svg", "manifest.webmanifest"];
+        const files = [
+          ...fixed,
+          ...made.map(({ fileName }) => fileName).filter((name) => name !== "index.html"),
+        ];
+        const copy = { version: hash.digest("hex").slice(0, 16), files };
+        const worker = readFileSync(resolve(top, "src/app/offline/offlineWorker.js"), "utf8");
+        this.emitFile({
+          type: "asset",
+          fileName: "offline.js",
+          source: `const copy = ${JSON.stringify(copy)};\n${worker}`,
+        });
+      },
+    },
+  };
+}
+
 const tests = {
   projects: [
     {
@@ -145,7 +174,7 @@ export default defineConfig(({ mode }) => {
     base: "./",
     cacheDir: resolve(top, "node_modules/.vite"),
     publicDir: resolve(top, "public"),
-    plugins: [react(), policyTag(), demoData()],
+    plugins: [react(), policyTag(), demoData(), offlineCopy()],
     worker: { format: "es" },
     build: {
       target: "es2022",

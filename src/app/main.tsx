@@ -3,6 +3,7 @@ import { createRoot } from "react-dom/client";
 import { createBrowserEngine } from "../engine/browserEngine.ts";
 import { App } from "./App.tsx";
 import { keepPage } from "./keeping/keepPage.ts";
+import { keepOffline } from "./offline/keepOffline.ts";
 import { createPageStore } from "./session/pageStore.ts";
 import { startPageWork } from "./session/pageWork.ts";
 import "./styles/fonts.css";
@@ -36,3 +37,4 @@ const show = () => {
 // a page that comes back at once is not shown empty first
 const patience = new Promise((resolve) => setTimeout(resolve, 250));
 void Promise.race([keepPage(store), patience]).finally(show);
+keepOffline();
