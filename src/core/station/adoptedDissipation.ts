@@ -1,49 +1,54 @@
-import { type Estimate, isEstimate, missing, type Quantity } from "../quantity.ts";
+import { missing, type Quantity } from "../quantity.ts";
 import type { ReduceSettings } from "../stationResult.ts";
+import type { InertialDissipation } from "./inertialDissipation.ts";
+import { inertialScales } from "./inertialScales.ts";
+import type { LeftOut } from "./stationErrors.ts";
 import type { ValueName } from "./stationValues.ts";
 
 /** Why a quantity waits for the decay law. */
 export const setByDecay = "it follows from the decay law, which is fitted after the stations are reduced";
 
+/** What the adopted dissipation is chosen from. */
+export interface DissipationChoice {
+  /** Of the gradients. */
+  readonly gradient: Pick<Record<ValueName, Quantity>, "epsilon_gradient" | "lambda" | "eta" | "Re_lambda">;
+  readonly inertial: InertialDissipation;
+  /** Of the gradients. */
+  readonly C_epsilon: Quantity;
+  /** Variance of the longitudinal component, of all blocks and less each group. */
+  readonly variance: LeftOut;
+  /** A value that is known without each group, with its interval. */
+  readonly quantity: (own: LeftOut) => Quantity;
+  /** The same over a length, times the integral length. */
+  readonly timesLength: (own: LeftOut) => Quantity;
+}
+
 /**
  * The adopted dissipation, and what follows from it: the gradients' by default, the decay's for a large-eddy
  * simulation, or what the user chose.
- * @param settings   the choice
- * @param values     of the gradients
- * @param inertial   dissipation from the inertial range
- * @param C_epsilon  of the gradients
- * @param uu         variance of u
  */
-export function adoptedDissipation(
-  settings: ReduceSettings,
-  values: Record<ValueName, Quantity>,
-  inertial: Quantity,
-  C_epsilon: Quantity,
-  uu: number,
-) {
+export function adoptedDissipation(settings: ReduceSettings, choice: DissipationChoice) {
   const route = adoptedRoute(settings);
   if (route === "decay") {
     const waits = missing(setByDecay);
     return { epsilon: waits, lambda: waits, eta: waits, Re_lambda: waits, C_epsilon: waits };
   }
   if (route === "gradient") {
-    const { epsilon_gradient, lambda, eta, Re_lambda } = values;
+    const { gradient, C_epsilon } = choice;
+    const { epsilon_gradient, lambda, eta, Re_lambda } = gradient;
     return { epsilon: epsilon_gradient, lambda, eta, Re_lambda, C_epsilon };
   }
+  const { quantity: epsilon, leaves } = choice.inertial;
   const nu = settings.kinematicViscosity;
-  if (!isEstimate(inertial) || nu === null) {
-    return { epsilon: inertial, lambda: inertial, eta: inertial, Re_lambda: inertial, C_epsilon: inertial };
-  }
-  const lambda = Math.sqrt((15 * nu * uu) / inertial.value);
-  const like = (value: number): Estimate => ({ ...inertial, value });
-  const gradient = values.epsilon_gradient;
-  const ratio = isEstimate(gradient) ? inertial.value / gradient.value : 0;
+  if (leaves === null || nu === null)
+    return { epsilon, lambda: epsilon, eta: epsilon, Re_lambda: epsilon, C_epsilon: epsilon };
+  const scales = inertialScales(leaves, choice.variance, nu);
   return {
-    epsilon: inertial,
-    lambda: like(lambda),
-    eta: like((nu ** 3 / inertial.value) ** 0.25),
-    Re_lambda: like((Math.sqrt(uu) * lambda) / nu),
-    C_epsilon: isEstimate(C_epsilon) ? like(C_epsilon.value * ratio) : C_epsilon,
+    epsilon,
+    lambda: choice.quantity(scales.lambda),
+    eta: choice.quantity(scales.eta),
+    Re_lambda: choice.quantity(scales.Re_lambda),
+    C_epsilon: choice.timesLength(scales.C_over_L),
   };
 }
 

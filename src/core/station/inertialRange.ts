@@ -8,6 +8,22 @@ const perDecade = 20;
 /** Bins in a quarter of a decade. */
 const quarter = 5;
 
+/** A spectrum in bands of a twentieth of a decade that hold three points or more. */
+export interface RangeSpectrum {
+  /** ln k1, and ln E11. */
+  readonly x: readonly number[];
+  readonly y: readonly number[];
+}
+
+export interface InertialRange {
+  /** m²/s³. */
+  readonly epsilon: number;
+  readonly spectrum: RangeSpectrum;
+  /** Its first band, and the one after its last. */
+  readonly first: number;
+  readonly end: number;
+}
+
 /**
  * Dissipation from an inertial range,
  *     E11 = 0.49 epsilon^(2/3) k1^(-5/3),
@@ -16,19 +32,30 @@ const quarter = 5;
  * @param k1  wavenumbers, rad/m, equally spaced, ascending
  * @param E11 one-sided spectrum at them, m³/s²
  * @param reynolds  Re_lambda; NaN: not known
- * @returns   epsilon, m²/s³, or why it is not reported
+ * @returns   epsilon with the bands that it rests on, or why it is not reported
  * @see   Pope (2000) eq. (6.243); Mydlarski & Warhaft (1996), J. Fluid Mech. 320, 331, on finite Reynolds numbers
  */
+export function inertialRange(k1: Float64Array, E11: Float64Array, reynolds: number): InertialRange | string {
+  if (Number.isNaN(reynolds)) return "without a viscosity it is not known whether there is an inertial range";
+  if (reynolds <= leastReynolds) {
+    return `Re_lambda is ${reynolds.toPrecision(3)}: an inertial range needs more than ${leastReynolds}`;
+  }
+  return nearestRange(banded(k1, E11)) ?? "no half decade of the spectrum has a slope within 0.1 of -5/3";
+}
+
+/** The dissipation of such a range alone. */
 export function dissipationFromInertialRange(
   k1: Float64Array,
   E11: Float64Array,
   reynolds: number,
 ): number | string {
-  if (Number.isNaN(reynolds)) return "without a viscosity it is not known whether there is an inertial range";
-  if (reynolds <= leastReynolds) {
-    return `Re_lambda is ${reynolds.toPrecision(3)}: an inertial range needs more than ${leastReynolds}`;
-  }
-  const { x, y, level } = binned(k1, E11);
+  const found = inertialRange(k1, E11, reynolds);
+  return typeof found === "string" ? found : found.epsilon;
+}
+
+/** The half decade whose slopes are nearest to -5/3; null where none is near enough. */
+export function nearestRange(spectrum: RangeSpectrum): InertialRange | null {
+  const { x, y } = spectrum;
   let best: number | null = null;
   let nearest = tolerance;
   for (let i = 0; i + 2 * quarter <= x.length; i++) {
@@ -37,19 +64,19 @@ export function dissipationFromInertialRange(
     const worse = Math.max(first, second);
     if (!(worse <= nearest)) continue;
     nearest = worse;
-    let sum = 0;
-    for (let j = i; j < i + 2 * quarter; j++) sum += level[j];
-    best = Math.exp(sum / (2 * quarter));
+    best = i;
   }
-  return best ?? "no half decade of the spectrum has a slope within 0.1 of -5/3";
+  if (best === null) return null;
+  let sum = 0;
+  const end = best + 2 * quarter;
+  for (let j = best; j < end; j++) sum += 1.5 * (y[j] + (5 / 3) * x[j] - Math.log(constant));
+  return { epsilon: Math.exp(sum / (2 * quarter)), spectrum, first: best, end };
 }
 
-/** Bands of a twentieth of a decade that hold three points or more: ln k, ln E and ln epsilon of each. */
-function binned(k1: Float64Array, E11: Float64Array): { x: number[]; y: number[]; level: number[] } {
+function banded(k1: Float64Array, E11: Float64Array): RangeSpectrum {
   const borders = logBins(1, k1.length + 1, perDecade);
   const x: number[] = [];
   const y: number[] = [];
-  const level: number[] = [];
   for (let b = 0; b + 1 < borders.length; b++) {
     const [from, to] = [borders[b] - 1, borders[b + 1] - 1];
     if (to - from < 3) continue;
@@ -62,12 +89,11 @@ function binned(k1: Float64Array, E11: Float64Array): { x: number[]; y: number[]
     if (!(E > 0)) continue;
     x.push(Math.log(k));
     y.push(Math.log(E));
-    level.push(1.5 * Math.log((E * k ** (5 / 3)) / constant));
   }
-  return { x, y, level };
+  return { x, y };
 }
 
-function slope(x: number[], y: number[], from: number, to: number): number {
+function slope(x: readonly number[], y: readonly number[], from: number, to: number): number {
   const n = to - from;
   let [mx, my] = [0, 0];
   for (let i = from; i < to; i++) {

@@ -5,6 +5,7 @@ import type { ReduceSettings, StationResult } from "../stationResult.ts";
 import { adoptedDissipation, setByDecay } from "./adoptedDissipation.ts";
 import { compareProbes } from "./compareProbes.ts";
 import { withoutDivided } from "./dividedStation.ts";
+import { inertialDissipation } from "./inertialDissipation.ts";
 import type { IntegralTimes } from "./integralTimes.ts";
 import type { JoinedRecord } from "./joinParts.ts";
 import { usualTime } from "./recordTime.ts";
@@ -12,16 +13,16 @@ import { sampling as samplingOf } from "./sampling.ts";
 import { stationBasis } from "./stationBasis.ts";
 import { stationCurves } from "./stationCurves.ts";
 import { stationCuts } from "./stationCuts.ts";
-import { replicates } from "./stationErrors.ts";
+import { leftOutError, leftOutQuantity, replicates } from "./stationErrors.ts";
 import { stationFacts } from "./stationFacts.ts";
 import { stationFlags } from "./stationFlags.ts";
 import { type ComponentGradient, stationGradients } from "./stationGradients.ts";
 import type { StationPart } from "./stationPart.ts";
 import {
-  inertialDissipation,
   type StationMaterial,
   scaleQuantity,
   timesScale,
+  timesScaleOf,
   valueQuantities,
 } from "./stationQuantities.ts";
 import { stationRoutes } from "./stationRoutes.ts";
@@ -125,11 +126,18 @@ function quantities(material: StationMaterial, values: Record<ValueName, Quantit
     gradient: values.gradient_u,
     epsilon_gradient,
     epsilon_decay: missing(setByDecay),
-    epsilon_inertial: inertial,
+    epsilon_inertial: inertial.quantity,
     balance: missing(setByDecay),
     Re_L: timesScale("Re_L_over_T", T_int, material, values),
     q: missing("the records give velocities, not a quantity q"),
-    ...adoptedDissipation(settings, values, inertial, C_epsilon, all.whole.uu),
+    ...adoptedDissipation(settings, {
+      gradient: values,
+      inertial,
+      C_epsilon,
+      variance: { value: all.whole.uu, without: all.without.map(({ uu }) => uu) },
+      quantity: (own) => leftOutQuantity(own, all, "log"),
+      timesLength: (own) => timesScaleOf(own.value, leftOutError(own, all, "log"), L11, sampling),
+    }),
     routes: stationRoutes(material, values),
   };
 }

@@ -55,17 +55,32 @@ export function replicates(
  *     se √(r/(1 - r/B)),  with B/r - 1 degrees of freedom,
  * for a group is r/B of all that there is.
  */
-export function valueError(
-  name: ValueName,
-  { whole, without, weights, repeats }: Replicates,
+export function valueError(name: ValueName, all: Replicates): StandardError | null {
+  return leftOutError(leftOut(name, all), all, valueScales[name]);
+}
+
+/** One value of all blocks, and of all less each group. */
+export interface LeftOut {
+  readonly value: number;
+  readonly without: readonly number[];
+  /** A standard error that the groups do not tell, on the value's own scale. */
+  readonly further?: number;
+}
+type Groups = Pick<Replicates, "weights" | "repeats">;
+
+function leftOut(name: ValueName, { whole, without }: Replicates): LeftOut {
+  return { value: whole[name], without: without.map((values) => values[name]) };
+}
+
+/** The error of any value that is known without each group. */
+export function leftOutError(
+  { value, without, further = 0 }: LeftOut,
+  { weights, repeats }: Groups,
+  scale: StandardError["scale"],
 ): StandardError | null {
-  const scale = valueScales[name];
-  const on = (value: number) => (scale === "log" ? Math.log(value) : value);
-  const error = jackknife(
-    on(whole[name]),
-    without.map((values) => on(values[name])),
-    weights,
-  );
+  const on = (one: number) => (scale === "log" ? Math.log(one) : one);
+  const told = jackknife(on(value), without.map(on), weights);
+  const error = told && { ...told, standard: Math.hypot(told.standard, further) };
   if (error === null || repeats <= 1) return error && { ...error, scale };
   const groups = without.length;
   const standard = error.standard * Math.sqrt(repeats / (1 - repeats / groups));
@@ -77,10 +92,19 @@ export function valueError(
  * @param absent  why the value is missing, where it is not a number
  */
 export function valueQuantity(name: ValueName, all: Replicates, absent: string): Quantity {
-  const value = all.whole[name];
-  if (!Number.isFinite(value)) return missing(absent);
+  const own = leftOut(name, all);
+  return Number.isFinite(own.value) ? leftOutQuantity(own, all, valueScales[name]) : missing(absent);
+}
+
+/** A value that is known without each group, with its interval. */
+export function leftOutQuantity(
+  own: LeftOut,
+  all: Groups & Pick<Replicates, "why">,
+  scale: StandardError["scale"],
+): Quantity {
+  const { value } = own;
   if (all.why !== null) return bare(value, all.why);
-  const error = valueError(name, all);
+  const error = leftOutError(own, all, scale);
   if (error === null) return bare(value, "a part of the record gives no value of it");
   const decided = error.scale === "log" && quantile(error.freedom) * error.standard > widest;
   return decided ? bare(value, "a single part of the record decides the value") : withError(value, error);

@@ -1,7 +1,6 @@
 import { bare, isEstimate, missing, type Quantity, type StandardError } from "../quantity.ts";
 import type { ReduceSettings } from "../stationResult.ts";
 import type { ProbeComparison } from "./compareProbes.ts";
-import { dissipationFromInertialRange } from "./inertialRange.ts";
 import type { IntegralTimes } from "./integralTimes.ts";
 import type { JoinedCorrelation } from "./joinCorrelations.ts";
 import type { JoinedRecord } from "./joinParts.ts";
@@ -79,11 +78,20 @@ export function timesScale(
 ): Quantity {
   const rest = values[name];
   if (!isEstimate(rest)) return rest;
-  if (!isEstimate(time)) return time;
-  const product = rest.value * time.value;
-  const error: StandardError | null = valueError(name, material.all);
-  if (error === null || material.sampling.scaleError === null) return bare(product, material.sampling.why);
-  return withError(product, joinedError(error, material.sampling.scaleError));
+  return timesScaleOf(rest.value, valueError(name, material.all), time, material.sampling);
+}
+
+/** A value with an error on the scale of the logarithm, times an integral scale. */
+export function timesScaleOf(
+  value: number,
+  error: StandardError | null,
+  scale: Quantity,
+  { scaleError, why }: Sampling,
+): Quantity {
+  if (!isEstimate(scale)) return scale;
+  const product = value * scale.value;
+  if (error === null || scaleError === null) return bare(product, why);
+  return withError(product, joinedError(error, scaleError));
 }
 
 /** Length scale of v or w: its correlation integrated to the first zero crossing of that of u, times U. */
@@ -99,18 +107,4 @@ export function lateralLength(
   const covariance = correlation.covariance[c];
   const area = (areaUpTo(covariance, times.tauStar / correlation.step) * correlation.step) / covariance[0];
   return scaleQuantity(record.means[0] * area, sampling);
-}
-
-/** Dissipation from the inertial range, which is no function of the blocks' sums: a value without an interval. */
-export function inertialDissipation({ record, spectra, all }: StationMaterial): Quantity {
-  const U = record.means[0];
-  if (spectra === null || !(U > 0))
-    return missing(record.untimed ?? "no piece of a record holds a whole segment of the spectrum");
-  const unit = (2 * Math.PI) / (U * spectra.size * spectra.step);
-  const k1 = Float64Array.from({ length: spectra.size / 2 }, (_, i) => (i + 1) * unit);
-  const E11 = spectra.density[0].subarray(1).map((value) => (value * U) / (2 * Math.PI));
-  const found = dissipationFromInertialRange(k1, E11, all.whole.Re_lambda);
-  return typeof found === "string"
-    ? missing(found)
-    : bare(found, "the fitted range gives no error of its own");
 }

@@ -1,4 +1,4 @@
-import { bare, isEstimate, missing, type Quantity } from "../../quantity.ts";
+import { bare, isEstimate, missing, type Quantity, type StandardError } from "../../quantity.ts";
 import { joinedError, withError } from "../stationErrors.ts";
 import { areaUpTo } from "../zeroCrossing.ts";
 import { lineComponents } from "./lineFields.ts";
@@ -54,11 +54,18 @@ export function timesLength(
   values: Record<LineValueName, Quantity>,
 ): Quantity {
   const rest = values[name];
-  if (!isEstimate(rest)) return rest;
+  return isEstimate(rest) ? timesLengthOf(rest.value, lineError(name, material.all), L11, material) : rest;
+}
+
+/** A value with an error on the scale of the logarithm, times L11. */
+export function timesLengthOf(
+  value: number,
+  error: StandardError | null,
+  L11: Quantity,
+  { sampling: { scaleError, why } }: LineMaterial,
+): Quantity {
   if (!isEstimate(L11)) return L11;
-  const error = lineError(name, material.all);
-  const { scaleError, why } = material.sampling;
-  const product = rest.value * L11.value;
+  const product = value * L11.value;
   return error && scaleError
     ? withError(product, joinedError(error, scaleError))
     : bare(product, why || "L11 has none");

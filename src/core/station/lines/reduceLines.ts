@@ -2,15 +2,21 @@ import { assert, ReductionFailure } from "../../failure.ts";
 import { isEstimate, missing, type Quantity, scaled } from "../../quantity.ts";
 import type { SourceNote } from "../../records.ts";
 import type { ReduceSettings, StationFacts, StationResult } from "../../stationResult.ts";
-import { setByDecay } from "../adoptedDissipation.ts";
-import { adoptedDissipation } from "./adoptedDissipation.ts";
+import { adoptedDissipation, setByDecay } from "../adoptedDissipation.ts";
+import { leftOutError, leftOutQuantity } from "../stationErrors.ts";
 import { lineCurves } from "./lineCurves.ts";
 import { lineDissipation } from "./lineDissipation.ts";
 import { lineComponents } from "./lineFields.ts";
 import { lineFlags } from "./lineFlags.ts";
 import { type LineMaterial, lineLength, lineMaterial } from "./lineMaterial.ts";
 import type { LinePart } from "./linePart.ts";
-import { lengthQuantity, lineQuantities, timesLength, transverseLength } from "./lineQuantities.ts";
+import {
+  lengthQuantity,
+  lineQuantities,
+  timesLength,
+  timesLengthOf,
+  transverseLength,
+} from "./lineQuantities.ts";
 import type { LineValueName } from "./lineValues.ts";
 
 /**
@@ -50,7 +56,8 @@ export function reduceLines(parts: readonly LinePart[], settings: ReduceSettings
 }
 
 function quantities(material: LineMaterial, values: Record<LineValueName, Quantity>) {
-  const { settings, scales, all } = material;
+  const { settings, scales, all, lines } = material;
+  const along = ({ x: "uu", y: "vv", z: "ww" } as const)[lines.along];
   const L11 = lengthQuantity(scales.routes[settings.integralScale], material);
   const { inertial, second, third } = lineDissipation(material);
   const { U, uu, vv, ww, uv, uw, vw, k, Tu, isotropy_uv, isotropy_uw, S_dudx, epsilon_gradient } = values;
@@ -62,11 +69,19 @@ function quantities(material: LineMaterial, values: Record<LineValueName, Quanti
     gradient: values.gradient_u,
     epsilon_gradient,
     epsilon_decay: missing(setByDecay),
-    epsilon_inertial: inertial,
+    epsilon_inertial: inertial.quantity,
     balance: missing(setByDecay),
     Re_L: timesLength("Re_L_over_L", L11, material, values),
     q: missing("the lines give velocities, not a quantity q"),
-    ...adoptedDissipation(material, values, inertial, C_epsilon),
+    ...adoptedDissipation(settings, {
+      gradient: values,
+      inertial,
+      C_epsilon,
+      variance: { value: all.whole[along], without: all.without.map((one) => one[along]) },
+      quantity: (own) => leftOutQuantity(own, { ...all, repeats: 1 }, "log"),
+      timesLength: (own) =>
+        timesLengthOf(own.value, leftOutError(own, { ...all, repeats: 1 }, "log"), L11, material),
+    }),
     routes: routes(material, values, second, third),
   };
 }
