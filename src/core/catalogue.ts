@@ -5,6 +5,7 @@ import { decayLabels } from "./decayLabels.ts";
 import { factLabels } from "./factLabels.ts";
 import { assert } from "./failure.ts";
 import { figureLabels } from "./figureLabels.ts";
+import { lineLabels } from "./lineLabels.ts";
 import { routeLabels } from "./routeLabels.ts";
 import { stationLabels } from "./stationLabels.ts";
 
@@ -43,6 +44,7 @@ export const catalogue: Readonly<Record<string, Label>> = Object.fromEntries(
     ...stationLabels,
     ...routeLabels,
     ...factLabels,
+    ...lineLabels,
     ...decayLabels,
     ...argumentLabels,
     ...compareLabels,

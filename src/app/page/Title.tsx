@@ -1,8 +1,10 @@
 import { useRef, useState } from "react";
 import { labelOf } from "../../core/catalogue.ts";
-import { isEstimate } from "../../core/quantity.ts";
+import { bare, isEstimate } from "../../core/quantity.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatDigits, formatNumber, withUnit } from "../../figures/formatNumber.ts";
+import { NumberButton } from "../sections/NumberButton.tsx";
+import { overStations } from "../sections/overStations.ts";
 import { SymbolText } from "../sections/SymbolText.tsx";
 import { UnitText } from "../sections/UnitText.tsx";
 import type { CaseView } from "../session/caseView.ts";
@@ -77,17 +79,22 @@ function Grounds({ cases }: { cases: readonly CaseView[] }) {
   const facts = [
     length !== null && (
       <span className="nowrap" key="length">
-        <i className="sym">{cases[0].symbol}</i> = {lengthText(length, units)}
+        <i className="sym">{cases[0].symbol}</i> ={" "}
+        <GivenNumber of="ell" view={cases[0]} value={length} shown={lengthText(length, units)} />
       </span>
     ),
     alike && (
       <span className="nowrap" key="U">
-        <SymbolText runs={labelOf("U").symbol} /> = {withUnit(formatDigits(mean, 3), unitOf("L/T", units))}
+        <SymbolText runs={labelOf("U").symbol} /> ={" "}
+        <NumberButton {...overStations(cases[0], "U", formatDigits(mean, 3), ({ U }) => U.value)}>
+          {withUnit(formatDigits(mean, 3), unitOf("L/T", units))}
+        </NumberButton>
       </span>
     ),
     nu !== null && (
       <span className="nowrap" key="nu">
-        <SymbolText runs={labelOf("nu").symbol} /> = {formatDigits(nu, 3)}
+        <SymbolText runs={labelOf("nu").symbol} /> ={" "}
+        <GivenNumber of="nu" view={cases[0]} value={nu} shown={formatDigits(nu, 3)} />
         {units === "SI" && (
           <>
             {"\u202f"}
@@ -104,6 +111,30 @@ function Grounds({ cases }: { cases: readonly CaseView[] }) {
       {words[cases.length] ?? cases.length} case{cases.length === 1 ? "" : "s"}, {stations} station
       {stations === 1 ? "" : "s"}.
     </>
+  );
+}
+
+/** A number that was given, not found. */
+function GivenNumber({
+  of,
+  view,
+  value,
+  shown,
+}: {
+  of: string;
+  view: CaseView;
+  value: number;
+  shown: string;
+}) {
+  const rows = [["given", "in the case sheet, or typed under Records"]] as const;
+  return (
+    <NumberButton
+      of={of}
+      quantity={bare(value, "given, not estimated")}
+      at={{ kind: "page", view, shown, rows }}
+    >
+      {shown}
+    </NumberButton>
   );
 }
 

@@ -82,7 +82,7 @@ const isRatio = (key: string) => key === "ratio" || key === "largest";
 function settingsOf({ key, quantity }: Asked, found: FoundNumber): readonly SettingRow[] {
   switch (found.kind) {
     case "station":
-      return stationSettings(key, found.station, found.view.of.sheet);
+      return stationSettings(key, found.station, found.view.of.sheet, quantity);
     case "decay":
       return fitSettings(found.decay, found.view.of.sheet);
     case "comparison":

@@ -1,7 +1,10 @@
+import { bare } from "../../core/quantity.ts";
 import type { Preview } from "../../core/records.ts";
 import { formatCount, formatPosition } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
+import { Definition } from "./Definition.tsx";
 import { Fold } from "./Fold.tsx";
+import { NumberButton } from "./NumberButton.tsx";
 import { TableScroll } from "./TableScroll.tsx";
 
 const origins = {
@@ -26,9 +29,13 @@ export function FilesFold({ cases, previews }: { cases: readonly CaseView[]; pre
               <th scope="col" className="text">
                 Columns
               </th>
-              <th scope="col">Lines, about</th>
               <th scope="col">
-                <i className="sym">x</i>
+                <Definition of="fileLines">Lines, about</Definition>
+              </th>
+              <th scope="col">
+                <Definition of="x">
+                  <i className="sym">x</i>
+                </Definition>
               </th>
               <th scope="col" className="text">
                 Position from
@@ -63,10 +70,52 @@ function FileRow({ name, view, preview }: { name: string; view: CaseView; previe
         <span className="well">{name}</span>
       </td>
       <td className="text wrap">{preview ? columnsText(preview) : "–"}</td>
-      <td>{preview ? formatCount(Number(preview.estimatedRows.toPrecision(3))) : "–"}</td>
-      <td>{xs.length === 0 ? "–" : xs.length === 1 ? formatPosition(xs[0]) : `${xs.length} positions`}</td>
+      <td>{preview ? <Lines view={view} preview={preview} /> : "–"}</td>
+      <td>{xs.length === 0 ? "–" : <Places view={view} name={name} xs={xs} position={position} />}</td>
       <td className="text">{position === null ? "–" : origins[position]}</td>
     </tr>
+  );
+}
+
+function Lines({ view, preview }: { view: CaseView; preview: Preview }) {
+  const shown = formatCount(Number(preview.estimatedRows.toPrecision(3)));
+  const rows = [
+    ["file", preview.file],
+    ["bytes", formatCount(preview.bytes)],
+  ] as const;
+  return (
+    <NumberButton
+      of="fileLines"
+      quantity={bare(preview.estimatedRows, "an estimate of its own")}
+      at={{ kind: "page", view, shown, rows }}
+    >
+      {shown}
+    </NumberButton>
+  );
+}
+
+function Places({
+  view,
+  name,
+  xs,
+  position,
+}: {
+  view: CaseView;
+  name: string;
+  xs: readonly number[];
+  position: keyof typeof origins | null;
+}) {
+  const shown = xs.length === 1 ? formatPosition(xs[0]) : `${xs.length} positions`;
+  const { zero } = view.of.sheet;
+  const rows = [
+    ["file", name],
+    ["from", position === null ? "not known" : origins[position]],
+    ["subtracted", zero === 0 ? "nothing" : formatPosition(zero)],
+  ] as const;
+  return (
+    <NumberButton of="x" quantity={bare(xs[0], "as it was told")} at={{ kind: "page", view, shown, rows }}>
+      {shown}
+    </NumberButton>
   );
 }
 

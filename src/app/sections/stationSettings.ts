@@ -1,3 +1,4 @@
+import type { Quantity } from "../../core/quantity.ts";
 import type { StationResult } from "../../core/stationResult.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { formatCount, formatDigits, withUnit } from "../../figures/formatNumber.ts";
@@ -22,7 +23,12 @@ export const integralRoutes = {
 } as const;
 
 /** What a number of a station rests on: record, correlation, spectrum, correction, and how its interval was made. */
-export function stationSettings(key: string, station: StationResult, sheet: CaseSheet): SettingRow[] {
+export function stationSettings(
+  key: string,
+  station: StationResult,
+  sheet: CaseSheet,
+  quantity?: Quantity,
+): SettingRow[] {
   const { facts } = station;
   const time = unitOf("T", sheet.units);
   const meaning = lineMeaning(key, facts);
@@ -36,10 +42,14 @@ export function stationSettings(key: string, station: StationResult, sheet: Case
     ...(isGradient(key) || isSpectral(key) ? segmentRows(station) : []),
     ...(isGradient(key) ? gradientRows(station, sheet) : []),
     key === "epsilon" && facts.dissipationReason !== undefined ? ["adopted", facts.dissipationReason] : null,
-    ["interval", intervalText(key, station)],
+    hasInterval(quantity) ? ["interval", intervalText(key, station)] : null,
   ];
   return rows.filter((row) => row !== null);
 }
+
+/** A count or a setting has none to explain. */
+const hasInterval = (quantity: Quantity | undefined) =>
+  quantity === undefined || quantity.value === null || quantity.low !== null || quantity.high !== null;
 
 function recordRow({ samples, duration, facts }: StationResult, time: string): SettingRow | null {
   if (duration === null) return null;
