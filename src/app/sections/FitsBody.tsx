@@ -1,6 +1,7 @@
 import { memo } from "react";
 import type { Comparison } from "../../core/comparison.ts";
 import { hypothesisSentence } from "../../export/sentences/decaySentences.ts";
+import { dissipationConstantSentence } from "../../export/sentences/dissipationConstantSentence.ts";
 import { growthSentences } from "../../export/sentences/growthSentences.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { arguedView } from "./arguedView.ts";
@@ -27,7 +28,9 @@ export const FitsBody = memo(function FitsBody({
       ))}
       <HypothesisTable cases={argued} />
       <CommonExponentTable cases={argued} comparisons={comparisons} />
-      <SaidSentences sentences={argued.flatMap(growthSentences)} />
+      <SaidSentences
+        sentences={argued.flatMap((view) => [...growthSentences(view), ...dissipationConstantSentence(view)])}
+      />
       <GrowthTable cases={argued} />
     </>
   );

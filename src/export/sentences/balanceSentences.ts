@@ -1,4 +1,5 @@
 import type { StationResult } from "../../core/stationResult.ts";
+import { formatNumber } from "../../figures/formatNumber.ts";
 import { isUsed } from "../../figures/windowOf.ts";
 import { type Sentence, say } from "./piece.ts";
 import type { SentenceCase } from "./sentenceCase.ts";
@@ -29,6 +30,7 @@ function balanceSentence(of: SentenceCase, tolerance: number): Sentence[] {
   return [
     say`In ${caseOf(of)} ${value} at ${position(middle.x, of)}, the middle of the window; ${verdict}.`,
     ...shortfall(of, middle, tolerance),
+    ...surplus(of, middle, tolerance),
   ];
 }
 
@@ -42,7 +44,15 @@ function shortfall(of: SentenceCase, { balance }: StationResult, tolerance: numb
   if (balance.value === null || balance.low === null || balance.low <= 1 + tolerance) return [];
   const share = percent(1 / balance.value);
   return [
-    say`The resolved gradients of ${caseOf(of)} carry ${{ kind: "strong", text: share }} of the dissipation that the decay asks for: ${symbolOf("lambda")}, ${symbolOf("eta")} and ${symbolOf("Re_lambda")} from gradients are upper bounds.`,
+    say`The resolved gradients of ${caseOf(of)} carry ${{ kind: "strong", text: share }} of the dissipation that the decay asks for: ${symbolOf("lambda")}, ${symbolOf("eta")} and ${symbolOf("Re_lambda")} from gradients are upper bounds. Scales that were not resolved are the usual cause: a coarse grid, a long sensor, a filter.`,
+  ];
+}
+
+/** What a departure means where the gradients carry clearly more. */
+function surplus(of: SentenceCase, { balance }: StationResult, tolerance: number): Sentence[] {
+  if (balance.value === null || balance.high === null || balance.high >= 1 / (1 + tolerance)) return [];
+  return [
+    say`The gradients of ${caseOf(of)} carry ${{ kind: "strong", text: formatNumber(1 / balance.value, 2) }} times the dissipation that the decay asks for: noise taken for gradients, or energy that is still fed by shear or by the wakes upstream, are the usual causes.`,
   ];
 }
 

@@ -40,7 +40,7 @@ export function sensitivitySentence(of: SentenceCase): Sentence[] {
   };
   const origin = symbolOf(of.along === "t" ? "t0" : "x0");
   return [
-    say`In ${caseOf(of)} ${listed(reasons)}: ${symbolOf("n")} moves by ${value} for each ${step(of)} that ${origin} lies farther downstream.`,
+    say`In ${caseOf(of)} ${listed(reasons)}: ${symbolOf("n")} moves by ${value} for each ${step(of)} that ${origin} lies ${of.along === "t" ? "later" : "farther downstream"}.`,
   ];
 }
 

@@ -167,6 +167,17 @@ describe("the sentence of the balance", () => {
   });
 });
 
+describe("the sentence of a balance below one", () => {
+  it("says what gradients mean that carry more than the decay asks for", () => {
+    const noisy = change(screen, () => ({ balance: { value: 0.8, low: 0.78, high: 0.82 } }));
+    expect(read(balanceSentences([noisy], 0.1))).toContain(
+      "The gradients of screen carry 1.25 times the dissipation that the decay asks for: noise taken for gradients",
+    );
+    const within = change(screen, () => ({ balance: { value: 0.93, low: 0.9, high: 0.96 } }));
+    expect(read(balanceSentences([within], 0.1))).not.toContain("times the dissipation");
+  });
+});
+
 describe("the sentences of two cases side by side", () => {
   const text = read(compareSentences(madeComparison, [screen, simulation]));
   it("give each verdict in words, with what was not compared", () => {
