@@ -104,7 +104,7 @@ export interface SpectrumPair {
   readonly range: readonly [number, number];
   readonly bands: number;
   /** Root mean square of ln (second/first) over the bands. */
-  readonly distance: number;
+  readonly distance: Quantity;
   /** What it would be by the errors of both spectra alone: its mean, and what 95 in 100 stay below. */
   readonly chance: number;
   readonly chance_95: number;

@@ -22,7 +22,9 @@ const titleBelow = 7.2;
  * so that titles, legends and second scales are placed as on paper; each panel has a pair of its own.
  */
 export function assembleFigure(parts: FigureParts, options: FigureOptions): FigureSpec {
-  const { key, widthMm, heightMm, panels, decor, table } = parts;
+  const { key, widthMm, panels, decor, table } = parts;
+  const below = decor.belowMm ?? 0;
+  const heightMm = parts.heightMm + below;
   const drawing = drawingOf(options);
   const { mm } = drawing;
   const page = { fixedrange: true, visible: false, autorange: false } as const;
@@ -37,7 +39,7 @@ export function assembleFigure(parts: FigureParts, options: FigureOptions): Figu
     dragmode: false,
     font: drawing.numeral,
     xaxis: { ...page, domain: [0, 1], range: [0, widthMm] },
-    yaxis: { ...page, domain: [0, 1], range: [0, heightMm] },
+    yaxis: { ...page, domain: [0, 1], range: [-below, parts.heightMm] },
     shapes: [...decor.shapes],
     annotations: [
       ...decor.notes,
@@ -46,7 +48,7 @@ export function assembleFigure(parts: FigureParts, options: FigureOptions): Figu
   };
   panels.forEach(({ box, x, y }, i) => {
     const across: [number, number] = [box.left / widthMm, box.right / widthMm];
-    const up: [number, number] = [box.bottom / heightMm, box.top / heightMm];
+    const up: [number, number] = [(box.bottom + below) / heightMm, (box.top + below) / heightMm];
     Object.assign(layout, {
       [`xaxis${i + 2}`]: { ...axisLayout(x, drawing), domain: across, anchor: `y${i + 2}` },
       [`yaxis${i + 2}`]: { ...axisLayout(y, drawing), domain: up, anchor: `x${i + 2}` },

@@ -2,7 +2,7 @@ import { type Drawing, drawingOf } from "./drawing.ts";
 import type { FigureCase, FigureOptions } from "./figureSpec.ts";
 import { letterCorner } from "./letterCorner.ts";
 import { pageNote } from "./pageNote.ts";
-import type { Box, Decor, Panel } from "./panel.ts";
+import { type Box, type Decor, joinDecor, type Panel } from "./panel.ts";
 import { pointsOf } from "./pointsOf.ts";
 import { caseLine, loneMarker } from "./stationTrace.ts";
 import { escapeText } from "./symbolHtml.ts";
@@ -16,6 +16,9 @@ const longestName = 26;
 /** With more cases than this, names are cut short sooner. */
 export const fewCases = 4;
 const crowdedName = 14;
+/** Rows that a panel can spare the room for. */
+const mostInside = 6;
+const columnGap = 4;
 
 /** One row: a line with a marker, and a name. */
 export interface LegendRow {
@@ -41,34 +44,58 @@ export function shortened(name: string, longest = longestName): string {
   return name.length > longest ? `${name.slice(0, longest - 1)}…` : name;
 }
 
-/** The legend in that corner of a panel where it covers fewest of its points, upper right first. */
+/**
+ * The legend in that corner of a panel where it covers fewest of its points, upper right first; more rows than a panel
+ * can spare stand in columns below the figure.
+ */
 export function legend(rows: readonly LegendRow[], panel: Panel, options: FigureOptions): Decor {
-  const drawing = drawingOf(options);
+  if (rows.length > mostInside) return legendBelow(rows, options);
+  const width = rowWidth(rows);
+  const corner = emptiestCorner(panel, { width, height: rows.length * rowMm });
+  return joinDecor(
+    ...rows.map((row, i) => legendRow(row, corner.left, corner.top - (i + 0.5) * rowMm, options)),
+  );
+}
+
+/** In as many columns as the figure is wide, top to bottom, then left to right. */
+export function legendBelow(rows: readonly LegendRow[], options: FigureOptions): Decor {
+  const width = rowWidth(rows);
+  const columns = Math.max(Math.floor((options.widthMm - columnGap) / (width + columnGap)), 1);
+  const deep = Math.ceil(rows.length / columns);
+  const placed = rows.map((row, i) =>
+    legendRow(
+      row,
+      columnGap + Math.floor(i / deep) * (width + columnGap),
+      -((i % deep) + 0.5) * rowMm,
+      options,
+    ),
+  );
+  return joinDecor(...placed, { belowMm: deep * rowMm + 1 });
+}
+
+function rowWidth(rows: readonly LegendRow[]): number {
   const longest = Math.max(...rows.map(({ text }) => text.replace(/<[^>]*>/g, "").length), 0);
   const lettered = rows.some(({ letter }) => letter !== undefined) ? letterRoomMm : 0;
-  const size = { width: lineMm + 2 + lettered + longest * letterMm, height: rows.length * rowMm };
-  const corner = emptiestCorner(panel, size);
-  const traces = rows.flatMap(({ mark, marker, weightPt }, i) => {
-    const y = corner.top - (i + 0.5) * rowMm;
-    const line = caseLine([corner.left, corner.left + lineMm], [y, y], mark, options, {
-      weightPt,
-      dashed: true,
+  return lineMm + 2 + lettered + longest * letterMm;
+}
+
+function legendRow(row: LegendRow, left: number, y: number, options: FigureOptions): Partial<Decor> {
+  const { mark, marker, weightPt, text, letter } = row;
+  const drawing = drawingOf(options);
+  const line = caseLine([left, left + lineMm], [y, y], mark, options, { weightPt, dashed: true });
+  const at = (what: string, x: number, font: Drawing["symbol"]) =>
+    pageNote(what, left + lineMm + 1.4 + x, y, {
+      xanchor: "left",
+      yanchor: "middle",
+      font: { ...font, color: options.tokens.ink2 },
     });
-    return marker ? [line, loneMarker({ x: corner.left + lineMm / 2, y }, mark, options)] : [line];
-  });
-  const notes = rows.flatMap(({ text, letter }, i) => {
-    const y = corner.top - (i + 0.5) * rowMm;
-    const at = (what: string, x: number, font: Drawing["symbol"]) =>
-      pageNote(what, corner.left + lineMm + 1.4 + x, y, {
-        xanchor: "left",
-        yanchor: "middle",
-        font: { ...font, color: options.tokens.ink2 },
-      });
-    return letter === undefined
-      ? [at(text, 0, drawing.numeral)]
-      : [at(`<i>${letter}</i>`, 0, drawing.symbol), at(text, letterRoomMm, drawing.numeral)];
-  });
-  return { traces, notes, shapes: [] };
+  return {
+    traces: marker ? [line, loneMarker({ x: left + lineMm / 2, y }, mark, options)] : [line],
+    notes:
+      letter === undefined
+        ? [at(text, 0, drawing.numeral)]
+        : [at(`<i>${letter}</i>`, 0, drawing.symbol), at(text, letterRoomMm, drawing.numeral)],
+  };
 }
 
 /** Corners first, upper right before all; else the first free place down the right side, the middle, the left. */

@@ -36,6 +36,8 @@ export interface Decor {
   readonly traces: readonly Partial<Data>[];
   readonly shapes: readonly Partial<Shape>[];
   readonly notes: readonly Partial<Annotations>[];
+  /** Room that it takes below the figure, mm; left out: none. */
+  readonly belowMm?: number;
 }
 
 type AxisOptions = Partial<Omit<PanelAxis, "log" | "range" | "title">>;
@@ -74,5 +76,6 @@ export function joinDecor(...parts: readonly Partial<Decor>[]): Decor {
     traces: parts.flatMap((part) => part.traces ?? []),
     shapes: parts.flatMap((part) => part.shapes ?? []),
     notes: parts.flatMap((part) => part.notes ?? []),
+    belowMm: Math.max(...parts.map((part) => part.belowMm ?? 0), 0),
   };
 }

@@ -19,7 +19,7 @@ export function changeWorkspace(workspace: Workspace, change: WorkspaceChange): 
     case "remove-case":
       return removeCase(workspace, change.caseId);
     case "edit-sheet":
-      return onSheet(workspace, change.caseId, (sheet) => ({ ...sheet, ...change.edit }));
+      return editSheet(workspace, change.caseId, change.edit);
     case "edit-every-sheet":
       return onSheet(workspace, null, (sheet) => ({ ...sheet, ...change.edit }));
     case "set-window":
@@ -93,6 +93,19 @@ function removeCase(workspace: Workspace, caseId: string): Workspace {
     cases: workspace.cases.filter(({ id }) => id !== caseId),
     picked: workspace.picked.filter((station) => station.caseId !== caseId),
   };
+}
+
+/** A case that is given another name is still the one that the others are held against. */
+function editSheet(workspace: Workspace, caseId: string, edit: Partial<CaseSheet>): Workspace {
+  const before = workspace.cases.find(({ id }) => id === caseId)?.sheet.case;
+  const edited = onSheet(workspace, caseId, (sheet) => ({ ...sheet, ...edit }));
+  const name = edit.case;
+  if (name === undefined || name === before) return edited;
+  return onSheet(edited, null, (sheet) =>
+    sheet.compare.against !== null && sheet.compare.against === before
+      ? { ...sheet, compare: { ...sheet.compare, against: name } }
+      : sheet,
+  );
 }
 
 /** Changes the sheet of one case (null: of all). */

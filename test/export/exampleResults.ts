@@ -149,7 +149,7 @@ export const exampleComparison: Comparison = {
         xi: [20, 21],
         range: [0.01, 0.8],
         bands: 18,
-        distance: 0.08,
+        distance: bare(0.08, "held against what chance makes of it"),
         chance: 0.07,
         chance_95: 0.09,
         p: 0.2,

@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { missing } from "../../src/core/quantity.ts";
 import { balanceFigure } from "../../src/figures/balanceFigure.ts";
+import { comparedPairs } from "../../src/figures/comparedPair.ts";
 import { comparisonFigure } from "../../src/figures/comparisonFigure.ts";
 import { decayFigure } from "../../src/figures/decayFigure.ts";
 import {
@@ -10,6 +11,7 @@ import {
   type FigureSpec,
 } from "../../src/figures/figureSpec.ts";
 import { isotropyFigure } from "../../src/figures/isotropyFigure.ts";
+import { overlayFigure } from "../../src/figures/overlayFigure.ts";
 import { scalesFigure } from "../../src/figures/scalesFigure.ts";
 import { spectrumFigure } from "../../src/figures/spectrumFigure.ts";
 import { darkTokens, lightTokens } from "../../src/figures/tokens.ts";
@@ -25,7 +27,8 @@ const everyFigure: [string, (options: FigureOptions) => FigureSpec][] = [
   ["scales", (how) => scalesFigure(madePair, how)],
   ["balance", (how) => balanceFigure(madePair, how)],
   ["spectrum", (how) => spectrumFigure(picked, how)],
-  ["comparison", (how) => comparisonFigure(madeComparison, "M", how)],
+  ["overlay", (how) => overlayFigure([madeComparison], madePair, "L11", how)],
+  ["comparison", (how) => comparisonFigure(comparedPairs([madeComparison], madePair), how)],
 ];
 
 /** A trace as the tests look at it. */
@@ -207,7 +210,8 @@ describe("figures of what is missing", () => {
     expect(spectrumFigure(picked, options, "dimensional", "E22").table.heading[3]).toBe("E22");
   });
   it("say that a quantity is not compared", () => {
-    const notes = (comparisonFigure(madeComparison, "M", options).layout.annotations ?? []) as {
+    const notes = (comparisonFigure(comparedPairs([madeComparison], madePair), options).layout.annotations ??
+      []) as {
       text: string;
     }[];
     expect(notes.map(({ text }) => text)).toContain("not compared");

@@ -1,6 +1,7 @@
 import { use, useMemo } from "react";
 import { useStore } from "zustand";
 import { plainText } from "../../export/sentences/piece.ts";
+import { compareSettings } from "../../sheet/compareSettings.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { figureNumbers } from "../page/figureNumbers.ts";
 import { LiveRegion } from "../page/LiveRegion.tsx";
@@ -152,7 +153,7 @@ export function Argument({
             stale={late !== null}
             sentences={findings.compare}
             comparisons={comparisons}
-            settings={workspace.cases[0].sheet.compare}
+            settings={compareSettings(workspace.cases[0].sheet)}
             onChange={change}
           />
           {folded.length > 0 && (

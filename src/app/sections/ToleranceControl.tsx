@@ -1,31 +1,21 @@
 import { useId, useState } from "react";
 import { formatNumber } from "../../figures/formatNumber.ts";
 import type { SheetCompare } from "../../sheet/caseSheet.ts";
-import type { WorkspaceChange } from "../../sheet/workspace.ts";
-import { ChoiceField } from "./ChoiceField.tsx";
 
 const [least, most] = [1, 30];
-const alignments = {
-  x0: "distance from the origins",
-  x: "position",
-  Tu: "intensity",
-} as const;
-
 /** How far two cases may differ and still be called equivalent; it counts when the slider is let go. */
 export function ToleranceControl({
   settings,
   onChange,
 }: {
   settings: SheetCompare;
-  onChange: (change: WorkspaceChange) => void;
+  onChange: (edit: Partial<SheetCompare>) => void;
 }) {
   const id = useId();
   const [moving, move] = useState<number | null>(null);
   const percent = moving ?? Math.round(settings.tolerance * 100);
-  const compare = (edit: Partial<SheetCompare>) =>
-    onChange({ kind: "edit-every-sheet", edit: { compare: { ...settings, ...edit } } });
   const settle = () => {
-    if (moving !== null && moving / 100 !== settings.tolerance) compare({ tolerance: moving / 100 });
+    if (moving !== null && moving / 100 !== settings.tolerance) onChange({ tolerance: moving / 100 });
     move(null);
   };
   return (
@@ -55,12 +45,6 @@ export function ToleranceControl({
         Two one-sided tests at 5{"\u202f"}% each. <i>Undecided</i> means that the data are too few, not that
         the cases agree.
       </p>
-      <ChoiceField
-        label="at equal"
-        value={settings.align}
-        choices={alignments}
-        onChange={(align) => compare({ align })}
-      />
     </>
   );
 }

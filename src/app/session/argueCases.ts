@@ -30,11 +30,21 @@ export function argumentAsk({ history, reductions }: Held): ArgumentAsk | null {
   if (cases.length === 0) return null;
   const compare = compareSettings(history.present.cases[0].sheet);
   return {
-    key: JSON.stringify([cases.map(({ id, name, key }) => [id, name, key]), compare]),
+    key: JSON.stringify([
+      cases.map(({ id, name, key }) => [id, name, key]),
+      compare,
+      placeOfTu(cases, compare),
+    ]),
     keys: Object.fromEntries(cases.map(({ id, key }) => [id, key])),
     cases,
     compare,
   };
+}
+
+/** Where equal Tu is looked for: a body that is moved takes it along, unless it was chosen. */
+function placeOfTu(cases: ArgumentAsk["cases"], { at, against }: CompareSettings): number | null {
+  const base = cases.find(({ name }) => name === against) ?? cases[0];
+  return at ?? base.settings.body?.x ?? null;
 }
 
 /** Asks the worker. Of the curves only the spectra go along: nothing else is compared, and copying them costs time. */

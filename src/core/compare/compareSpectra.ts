@@ -1,5 +1,6 @@
 import type { CaseInput, ComparedSpectra, SpectrumPair } from "../comparison.ts";
 import { placeAlong } from "../decay/flightCourse.ts";
+import { bare } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import { type Alignment, usedOrigins } from "./alignment.ts";
 import { kolmogorovSpectrum } from "./kolmogorovSpectrum.ts";
@@ -83,5 +84,11 @@ function pairAt(
   if (typeof other === "string") return `${second.name}: ${other}`;
   const found = spectralDistance(of, other);
   if (typeof found === "string") return found;
-  return { x: [a.station.x, b.station.x], xi: [a.xi, b.xi], ...found };
+  const { distance, ...rest } = found;
+  return {
+    x: [a.station.x, b.station.x],
+    xi: [a.xi, b.xi],
+    distance: bare(distance, "held against what chance makes of it"),
+    ...rest,
+  };
 }

@@ -20,7 +20,7 @@ export function routeSentences(of: SentenceCase): readonly Sentence[] {
     const pairs = disagreements.filter((one) => one.of === what);
     return partedFrom(pairs).map(({ route, others }) => {
       const value = (key: RouteKey) => shownOf(of, routes, key, what);
-      return say`In ${caseOf(of)} the route “${routeWords(route)}” gives ${symbolOf(what === "n" ? "n" : originKey(of))} = ${value(route)}, beyond the interval of ${listed(others.map((key) => say`${routeWords(key)}, ${value(key)}`))}.`;
+      return say`In ${caseOf(of)} the route “${routeWords(route, of.along)}” gives ${symbolOf(what === "n" ? "n" : originKey(of))} = ${value(route)}, beyond the interval of ${listed(others.map((key) => say`${routeWords(key, of.along)}, ${value(key)}`))}.`;
     });
   });
 }

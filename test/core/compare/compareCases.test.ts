@@ -66,7 +66,7 @@ describe("two laws of known ratio, shift and exponent", () => {
   });
   it("have equal Tu where both laws say, at the place that was chosen", () => {
     const at = 40;
-    const [chosen] = compare([aCase("a", first, 1), aCase("b", second, 2)], { at });
+    const [chosen] = compare([aCase("a", first, 11), aCase("b", second, 12)], { at });
     // A (x - 3)^-n = 1.2 A (x' - 12)^-n
     const place = 12 + (at - 3) * 1.2 ** (1 / 1.25);
     expect(chosen.matched.x[0].value).toBe(at);

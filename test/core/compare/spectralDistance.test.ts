@@ -173,7 +173,7 @@ describe("the spectra of two cases", () => {
     ];
     const { spectra } = argueCases(cases, { align: "x0", tolerance: 0.1 }).comparisons[0];
     for (const { distance, chance_95, p } of spectra.pairs) {
-      expect(distance).toBeGreaterThan(chance_95);
+      expect(distance.value).toBeGreaterThan(chance_95);
       expect(p).toBeLessThan(0.05);
     }
   });
