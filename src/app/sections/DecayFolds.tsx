@@ -66,5 +66,5 @@ function factOf(cases: readonly CaseView[]): string {
   const parted = cases.reduce((sum, view) => sum + (arguedOf(view)?.argument.disagreements.length ?? 0), 0);
   return parted === 0
     ? "no two part beyond their intervals"
-    : `${counted(parted, "pair")} of them apart beyond their intervals`;
+    : `${counted(parted, "pair")} apart beyond their intervals`;
 }

@@ -72,8 +72,8 @@ function OriginSymbol({ along }: { along: "x" | "t" }) {
 const caption = (
   <>
     (<i>a</i>) Exponent and (<i>b</i>) origin by every route over the same window. Bars: 95 %; one that runs
-    into the frame goes on beyond it, or has no end there. Open: held, not fitted. Shaded: the interval
-    adopted. A row without a mark: refused, or not to be had; the table says why.
+    into the frame goes on beyond it, or has no end there. Open: held, not fitted. A row without a mark:
+    refused, or not to be had; the table says why.
   </>
 );
 
@@ -93,14 +93,14 @@ function RoutesTable({ cases }: { cases: readonly CaseView[] }) {
             {(arguedOf(view)?.argument.routes ?? []).map(({ key, n, x0, note }) => (
               <tr key={key}>
                 <th scope="row" className="text">
-                  <SentenceText sentence={routeWords(key)} />
+                  <SentenceText sentence={routeWords(key, view.along)} />
                 </th>
                 <PairCells
                   view={view}
                   n={n}
                   x0={x0}
                   rows={[
-                    ["route", plainText(routeWords(key))],
+                    ["route", plainText(routeWords(key, view.along))],
                     ["rests on", note],
                   ]}
                 />
