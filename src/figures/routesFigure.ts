@@ -178,7 +178,9 @@ function rowNames({ box }: Panel, keys: readonly RowKey[], options: FigureOption
   const { numeral } = drawingOf(options);
   return keys.map((key, row) =>
     pageNote(
-      key === "adopted" ? key : routeNames[key],
+      key === "adopted"
+        ? key
+        : routeNames[key].replaceAll("<i>x</i><sub>0</sub>", `<i>${options.along}</i><sub>0</sub>`),
       box.left - 2,
       box.top - ((row + 0.5) * (box.top - box.bottom)) / keys.length,
       {
