@@ -82,6 +82,9 @@ export interface LateralTotals {
 /** Sums over pairs m steps up- and downstream of the station, a number a half separation m = 0, 1 …. */
 export interface StreamwisePairs {
   readonly counts: Float64Array;
+  /** What u is taken about downstream and upstream: every file has references of its own. */
+  readonly afterReference: Float64Array;
+  readonly beforeReference: Float64Array;
   /** Σ of the value downstream, upstream, their squares, and their product; of u. */
   readonly after: Float64Array;
   readonly before: Float64Array;

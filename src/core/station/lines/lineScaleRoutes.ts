@@ -3,6 +3,7 @@ import { type IntegralTimes, integralTimes } from "../integralTimes.ts";
 import { areaUpTo } from "../zeroCrossing.ts";
 import type { JoinedLines } from "./joinLines.ts";
 import { lineComponents } from "./lineFields.ts";
+import type { StreamwisePairs } from "./linePart.ts";
 import type { LineSpectra } from "./lineSpectra.ts";
 
 /** Integral length of the component along the line by each route, as integralTimes tells times. */
@@ -60,17 +61,29 @@ export function streamwiseScales(lines: JoinedLines, adopted: ReduceSettings["in
   const pairs = parts.flatMap((part) => (part.pairs ? [part.pairs] : []));
   if (spacing === null || pairs.length < parts.length)
     return noScale("the points are not equally spaced, so there is no correlation");
-  const rho = pairs[0].counts.map((_, m) => {
-    const sum = (pick: (one: (typeof pairs)[number]) => Float64Array) =>
-      pairs.reduce((total, one) => total + pick(one)[m], 0) / pairs.reduce((n, one) => n + one.counts[m], 0);
-    const [a, b] = [sum(({ after }) => after), sum(({ before }) => before)];
-    const variances =
-      (sum(({ afterSquared }) => afterSquared) - a * a) * (sum(({ beforeSquared }) => beforeSquared) - b * b);
-    return variances > 0 ? (sum(({ product }) => product) - a * b) / Math.sqrt(variances) : 0;
-  });
+  const rho = pairs[0].counts.map((_, m) => correlationAt(pairs, m));
   if (rho.length < 3 || !(rho[0] > 0)) return noScale("the station is too near the end of its line");
   const correlation = { step: 2 * spacing, stride: 1, covariance: [rho] };
   return inSpace(integralTimes(correlation, null, adopted));
+}
+
+/** Correlation of u m steps down- and upstream over the pairs of all files, put about the first one's references. */
+function correlationAt(pairs: readonly StreamwisePairs[], m: number): number {
+  const [first] = pairs;
+  let [n, a, b, aa, bb, ab] = [0, 0, 0, 0, 0, 0];
+  for (const one of pairs) {
+    const count = one.counts[m];
+    const da = one.afterReference[m] - first.afterReference[m];
+    const db = one.beforeReference[m] - first.beforeReference[m];
+    n += count;
+    a += one.after[m] + count * da;
+    b += one.before[m] + count * db;
+    aa += one.afterSquared[m] + 2 * da * one.after[m] + count * da * da;
+    bb += one.beforeSquared[m] + 2 * db * one.before[m] + count * db * db;
+    ab += one.product[m] + da * one.before[m] + db * one.after[m] + count * da * db;
+  }
+  const variances = (aa / n - (a / n) ** 2) * (bb / n - (b / n) ** 2);
+  return variances > 0 ? (ab / n - (a / n) * (b / n)) / Math.sqrt(variances) : 0;
 }
 
 function noScale(why: string): LineScales {

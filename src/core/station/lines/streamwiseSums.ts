@@ -27,6 +27,7 @@ export function startStreamwiseSums(grid: LineGrid, at: number): StreamwiseSums 
   const halves = Math.min(side, mostHalves) + 1;
   const sums = Array.from({ length: 5 }, () => new Float64Array(halves));
   const counts = new Float64Array(halves);
+  const [afterReference, beforeReference] = [new Float64Array(halves), new Float64Array(halves)];
   const width = 2 * components.length + 2;
 
   function addOrder(columns: readonly Float64Array[], l: number, row: Float64Array, fourth: boolean): void {
@@ -42,8 +43,10 @@ export function startStreamwiseSums(grid: LineGrid, at: number): StreamwiseSums 
   }
   function addPairs(u: Float64Array, references: readonly Float64Array[], l: number): void {
     for (let m = 0; m < halves; m++) {
-      const a = u[(at + m) * lines + l] - references[at + m][0];
-      const b = u[(at - m) * lines + l] - references[at - m][0];
+      afterReference[m] = references[at + m][0];
+      beforeReference[m] = references[at - m][0];
+      const a = u[(at + m) * lines + l] - afterReference[m];
+      const b = u[(at - m) * lines + l] - beforeReference[m];
       counts[m] += 1;
       [a, b, a * a, b * b, a * b].forEach((value, i) => {
         sums[i][m] += value;
@@ -61,7 +64,8 @@ export function startStreamwiseSums(grid: LineGrid, at: number): StreamwiseSums 
     pairs: () => {
       if (step === null) return null;
       const [after, before, afterSquared, beforeSquared, product] = sums;
-      return { counts, after, before, afterSquared, beforeSquared, product };
+      const about = { afterReference, beforeReference };
+      return { counts, ...about, after, before, afterSquared, beforeSquared, product };
     },
   };
 }
