@@ -71,6 +71,8 @@ export interface StationFacts {
   readonly integralTimes: number | null;
   /** Groups behind the jackknife; 0: no intervals. */
   readonly groups: number;
+  /** How often the record repeats itself; left out where it does not. */
+  readonly repeats?: number;
   readonly segment: number | null;
   readonly segments: number;
   /** Integral of the Welch spectrum over the variance. */

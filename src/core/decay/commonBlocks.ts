@@ -1,6 +1,7 @@
 import type { DecaySettings } from "../decayResult.ts";
 import { isEstimate } from "../quantity.ts";
 import { groupBlocks } from "../station/groupBlocks.ts";
+import { fewestInPeriod } from "../station/sampling.ts";
 import type { BlockTable, StationResult } from "../stationResult.ts";
 import type { DecayQuantity } from "./decayQuantity.ts";
 
@@ -13,6 +14,8 @@ export interface CommonBlocks {
   readonly moves: readonly Float64Array[];
   /** Mean correlation of these moves between neighbouring stations. */
   readonly correlation: number;
+  /** How often the records repeat themselves, as where an inflow is replayed: so many groups tell what one does. */
+  readonly repeats?: number;
 }
 
 /** Fewer integral times than this do not make groups to leave out. */
@@ -26,6 +29,7 @@ const significant = 2.33;
  * start: every block is left out once.
  * Records count as sampled together where step, start and length agree and, unless the settings say so, neighbours
  * prove correlated: a single probe that is moved along also starts each record at zero.
+ * Where the inflow is replayed, groups are as many as in one period times the periods, and errors those of one.
  * @param stations of the window, in order of x
  * @returns        null where the records were not sampled together, or are too short to tell
  * @see            Künsch (1989), Ann. Statist. 17, 1217
@@ -42,8 +46,10 @@ export function commonBlocks(
   const integralTimes = Math.min(...stations.map(({ facts }) => facts.integralTimes ?? 0));
   if (integralTimes < leastIntegralTimes) return null;
   const [first] = tables;
-  const groups = groupBlocks(column(first, "weight"), integralTimes);
-  if (groups.count < 2) return null;
+  // where one station shows that the inflow is replayed, it is for all of them
+  const repeats = Math.max(1, ...stations.map(({ facts }) => facts.repeats ?? 1));
+  const groups = groupBlocks(column(first, "weight"), integralTimes, repeats);
+  if (groups.count < 2 || (repeats > 1 && groups.count < fewestInPeriod * repeats)) return null;
   const moves = Array.from({ length: groups.count }, () => new Float64Array(stations.length));
   for (let station = 0; station < tables.length; station++) {
     const left = energiesWithout(tables[station], what, groups.of, groups.count, shifts[station]);
@@ -57,9 +63,9 @@ export function commonBlocks(
     weights[groups.of[row]] += weight;
   });
   const correlation = neighbourCorrelation(moves, stations.length);
-  const bound = significant / Math.sqrt((groups.count - 1) * (stations.length - 1));
+  const bound = significant / Math.sqrt((groups.count / repeats - 1) * (stations.length - 1));
   if (simultaneous === "auto" && !(correlation > bound)) return null;
-  return { groups: groups.count, weights, moves, correlation };
+  return { groups: groups.count, weights, moves, correlation, repeats };
 }
 
 /** Whether all tables are cut alike. */

@@ -9,7 +9,7 @@ import { minimiseLaw } from "./minimiseLaw.ts";
 export interface JackknifedLaw {
   /** Of (ln A, x0, n), row-major 3 × 3. */
   readonly covariance: readonly number[];
-  /** Groups less one. */
+  /** Groups less one; of records that repeat themselves, groups in one period less one. */
   readonly freedom: number;
 }
 
@@ -53,7 +53,13 @@ export function jackknifeLaw({ fit }: WindowFit, blocks: CommonBlocks, from: num
       if (sum === null || difference === null) return null;
       covariance[3 * a + b] = covariance[3 * b + a] = (sum - difference) / 4;
     }
-  return { covariance, freedom: blocks.groups - 1 };
+  // of a record that repeats itself the error is that of one period, as for a station's own
+  const { groups, repeats = 1 } = blocks;
+  const factor = repeats > 1 ? repeats / (1 - repeats / groups) : 1;
+  return {
+    covariance: covariance.map((value) => factor * value),
+    freedom: Math.max(1, groups / repeats - 1),
+  };
 }
 
 /** ln A, x0, n. */

@@ -18,7 +18,7 @@ export interface Sampling {
 export const shortestRecord = 100;
 
 /** Groups that a period of a replayed record must hold. */
-const fewestInPeriod = 5;
+export const fewestInPeriod = 5;
 
 /**
  * Groups for the jackknife, and the error of the integral scale by its own law,

@@ -16,6 +16,7 @@ export function stationFacts(material: StationMaterial, values: Record<ValueName
     step: record.untimed === null ? record.step : null,
     integralTimes: sampling.integralTimes,
     groups: sampling.groups?.count ?? 0,
+    ...(record.repeats > 1 ? { repeats: record.repeats } : {}),
     segment: spectra?.size ?? null,
     segments: spectra?.segments ?? 0,
     recoveredVariance:
