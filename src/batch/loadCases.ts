@@ -1,9 +1,10 @@
 import type { PlainFailure } from "../core/failure.ts";
 import { ReductionFailure } from "../core/failure.ts";
+import { againstWarning } from "../sheet/againstWarning.ts";
 import type { LoadedCase } from "./loadCase.ts";
 import { loadCase } from "./loadCase.ts";
 
-/** All sheets that can be used, each case name once. What cannot be used is told. */
+/** All sheets that can be used, each case name once. What cannot be used is told, and a case to compare with that is none. */
 export function loadCases(
   sheets: readonly string[],
   { folder, tell }: { readonly folder: string; tell(line: string): void },
@@ -23,7 +24,13 @@ export function loadCases(
       fail(error.at({ file: path }).plain());
     }
   }
-  return [...loaded.values()];
+  const cases = [...loaded.values()];
+  const doubt = againstWarning(
+    cases.map(({ sheet }) => sheet),
+    cases[0]?.path ?? "",
+  );
+  if (doubt !== null) tell(doubt);
+  return cases;
 }
 
 function twice(later: LoadedCase, earlier: LoadedCase): ReductionFailure {
