@@ -22,7 +22,10 @@ export function Definition({ of, children }: { of: string; children: ReactNode }
       </button>
       <div id={id} ref={text} popover="auto" className="definition-text">
         <p>
-          <b>{label.name}</b>: <RichText text={label.definition} />.
+          <b>
+            <RichText text={label.name} />
+          </b>
+          : <RichText text={label.definition} />.
         </p>
         <p>{label.source}</p>
       </div>

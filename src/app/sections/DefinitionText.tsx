@@ -22,7 +22,10 @@ export function DefinitionText({ asked, found }: { asked: Asked; found: FoundNum
   return (
     <>
       <p>
-        <b>{label.name}</b>, <SymbolText runs={label.symbol} />: <RichText text={label.definition} />.
+        <b>
+          <RichText text={label.name} />
+        </b>
+        , <SymbolText runs={label.symbol} />: <RichText text={label.definition} />.
       </p>
       {found && <Place found={found} />}
       {found && <ValueLine of={key} quantity={quantity} found={found} />}

@@ -8,6 +8,7 @@ const across = [/^(L_v|K_v|gradient_v|E22)/, /^(L_w|K_w|gradient_w|E33)/];
 /** What a label's component is on lateral lines, in words; null where the station has none, or the label no component. */
 export function lineMeaning(key: string, { lines }: Pick<StationFacts, "lines">): string | null {
   if (lines === undefined || lines.along === "x") return null;
+  if (/^(step|tauStar|lagLimit)$/.test(key)) return "a separation along the line over U";
   const [own, ...others] = lineComponents(lines.along);
   if (alongTheLine.test(key)) return `formed with ${own}, the component along ${lines.along}, in place of u`;
   const i = across.findIndex((pattern) => pattern.test(key));
