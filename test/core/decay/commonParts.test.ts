@@ -55,15 +55,13 @@ function energyWithout(
 ): number {
   const table = station.blocks;
   if (!table) throw new Error("no blocks");
-  const total = (name: string) => {
+  const sumOf = (name: string) => {
     let sum = 0;
     for (let row = 0; row < rows; row++)
       if (!out(row)) sum += table.data[row * table.fields.length + table.fields.indexOf(name)];
-    return sum / (total.weight || 1);
+    return sum;
   };
-  total.weight = 0;
-  const n = total("weight");
-  total.weight = n;
+  const total = (name: string) => sumOf(name) / sumOf("weight");
   return Math.log(
     Object.entries(factors).reduce(
       (sum, [name, factor]) => sum + factor * (total(name + name) - total(name) ** 2),

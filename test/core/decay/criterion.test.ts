@@ -98,6 +98,14 @@ describe("the interval of its place", () => {
       estimate(1.07, 1.07, 1.07, { standard, freedom: null, scale: "log" });
     expect(of(relative(0.02 / 1.07))).toBe(30);
     expect(of(relative(0.01 / 1.07))).toBe(10);
+    // at ten times the size a relative error is ten times as large
+    const large = (standard: number, scale: "log" | "linear") => {
+      const quantity = estimate(10.7, 10.7, 10.7, { standard, freedom: null, scale });
+      const condition = { key: "r", words: "r", values: [bare(10, ""), quantity, ...exact([10, 10, 10])] };
+      const { inside } = criterion(xs, { ...condition, low: 9, high: 11 });
+      return isEstimate(inside) ? inside.high : null;
+    };
+    expect([large(0.02, "log"), large(0.02, "linear")]).toEqual([30, 10]);
     // the draw moves value and ends alike: 1.0 ± 0.06, upper end 1.06, has an error of 0.031
     expect(of(estimate(1, 0.94, 1.06))).toBe(30);
     expect(of(estimate(1, 0.98, 1.02))).toBe(10);

@@ -15,9 +15,9 @@ export function invertTail({ tail, density }: PositiveDistribution, q: number, s
   if (q >= 1) return 0;
   if (q <= 0) return Infinity;
   let low = 0;
-  let high = Math.max(start, 1e-300);
+  let high = start;
   while (tail(high) > q) high *= 2;
-  let x = Math.min(start, high);
+  let x = start;
   for (let i = 0; i < 200; i++) {
     const excess = tail(x) - q;
     if (excess === 0) return x;
