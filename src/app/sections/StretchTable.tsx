@@ -17,7 +17,9 @@ export function StretchTable({ cases, comparison }: { cases: readonly CaseView[]
       <table className="data dense">
         <thead>
           <tr>
-            <th scope="col">From</th>
+            <th scope="col">
+              <Definition of={placeKey[comparison.align]}>From</Definition>
+            </th>
             <th scope="col">To</th>
             <th scope="col" className="text">
               <Definition of="equivalent_from">Equivalent</Definition>
@@ -60,5 +62,8 @@ export function StretchTable({ cases, comparison }: { cases: readonly CaseView[]
     </TableScroll>
   );
 }
+
+/** Label of what the stretches lie on. */
+const placeKey = { x0: "(x-x0)/ell", x: "x", Tu: "Tu" } as const;
 
 const asRatio = { factor: 1, unit: "", digits: 3 };
