@@ -13,12 +13,9 @@ import { type JointLayout, pairIndex } from "./jointMoments.ts";
 export function mergeJoint(into: Float64Array, from: Float64Array, layout: JointLayout): void {
   const na = into[0];
   const nb = from[0];
-  if (!(nb > 0)) return;
-  if (!(na > 0)) {
-    into.set(from.subarray(0, layout.length));
-    return;
-  }
   const n = na + nb;
+  // two empty rows have no mean
+  if (!(n > 0)) return;
   const { sequences, mean, second } = layout;
   for (let a = 0; a < sequences; a++) mergeHigher(into, from, layout, a);
   for (let a = 0; a < sequences; a++) {

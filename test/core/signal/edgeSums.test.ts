@@ -34,6 +34,11 @@ describe("the edges of a record", () => {
         const borders = [0, ...inside, values.length].map((border) => border + skip);
         const edges = edgesOf(x, borders, lags * stride, stride);
         const record = x.subarray(skip);
+        expect([edges.heads().length, edges.tails().length, edges.pairs().length]).toEqual([
+          lags,
+          lags,
+          lags,
+        ]);
         const at = (l: number) => Math.min(l, record.length);
         for (let i = 0; i < lags; i++) {
           const l = i * stride;

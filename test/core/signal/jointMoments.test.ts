@@ -92,6 +92,11 @@ describe("no samples", () => {
     mergeJoint(row, none, layout);
     expect(row).toEqual(before);
   });
+  it("added to no samples are none, not NaN", () => {
+    const row = filled(9, 9, null);
+    mergeJoint(row, filled(3, 3, null), layout);
+    expect(Array.from(row)).toEqual(new Array(layout.length).fill(0));
+  });
   it("take over whatever is added to them", () => {
     const row = filled(9, 9, null);
     mergeJoint(row, filled(0, 30, null), layout);

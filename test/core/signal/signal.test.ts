@@ -47,6 +47,24 @@ describe("Fourier transform of real sequences", () => {
   });
 });
 
+describe("a transform of a length that is a power of two", () => {
+  it("is refused for any other", () => {
+    for (const size of [0, 1, 0.5, 3, 12]) expect(() => realFourier(size)).toThrow(/power of two/);
+  });
+  it("is planned once", () => expect(realFourier(64)).toBe(realFourier(64)));
+  it("goes back into as much as is wanted, and no farther than the sequence is long", () => {
+    const x = gaussian(8);
+    const spectrum = realFourier(8).forward(x).slice(0, 10);
+    for (const length of [1, 3, 5, 6, 8, 11]) {
+      const out = new Float64Array(length).fill(99);
+      realFourier(8).inverse(spectrum, out);
+      out.forEach((value, n) => {
+        expectClose(value, n < 8 ? x[n] : 99, { absolute: 1e-13, because: "rounding" });
+      });
+    }
+  });
+});
+
 describe("Hann window, periodic", () => {
   const window = hannWindow(4096);
   const mean = window.reduce((sum, w) => sum + w, 0) / 4096;
@@ -182,8 +200,9 @@ describe("lag products", () => {
   it("taken in at its place in a chunk are the same: a record that begins within one", () => {
     const lags = startLagProducts(32, 16, 1);
     const row = new Float64Array(32);
-    lags.add(x, 0, 11, 5);
-    lags.add(x, 11, 200);
+    // at 21: the sixth of a chunk of 16
+    lags.add(x, 0, 43, 21);
+    lags.add(x, 43, 200);
     lags.flush(row);
     row.forEach((value, l) => {
       expectClose(value, direct(l, 0, 200), { absolute: 1e-10, because: "rounding of some hundred terms" });
