@@ -25,13 +25,14 @@ self.addEventListener("fetch", (event) => {
 
 async function page(request) {
   const cache = await caches.open(name);
-  return (await cache.match("./")) ?? fetch(request);
+  return (await cache.match("./", { ignoreVary: true })) ?? fetch(request);
 }
 
 /** From the copy; what is not in it (the demo's records) is fetched once and kept. */
 async function own(request) {
   const cache = await caches.open(name);
-  const kept = await cache.match(request, { ignoreSearch: true });
+  // servers say that answers vary with the origin; there is but one here
+  const kept = await cache.match(request, { ignoreSearch: true, ignoreVary: true });
   if (kept) return kept;
   const answer = await fetch(request);
   if (answer.ok) await cache.put(request, answer.clone());

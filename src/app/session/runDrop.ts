@@ -28,8 +28,22 @@ export async function runDrop(
   await untilIdle(store);
   store.getState().setNotice(null);
   const records = await withoutWorkspace(store, files);
-  if (records.length > 0) await planRecords(store, engine, records);
+  if (records.length === 0) return;
+  try {
+    await planRecords(store, engine, records);
+  } catch (error) {
+    // the page does not wait for what will not come
+    store.getState().dispatch({ kind: "planned", plan: emptyPlan });
+    throw error;
+  }
 }
+
+const emptyPlan: Plan = {
+  cases: [],
+  files: [],
+  previews: [],
+  aside: { leftOut: [], failures: [], warnings: [] },
+};
 
 /** Opens the workspace of a drop, if it holds one; what else it holds. */
 async function withoutWorkspace(store: PageStore, files: readonly DroppedFile[]): Promise<DroppedFile[]> {
