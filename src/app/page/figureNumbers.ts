@@ -1,4 +1,4 @@
-/** Numbers of the figures in the order of the page; those of the comparisons follow one another, that of the body comes last. */
+/** Numbers of the figures in the order of the page. */
 export const figureNumbers = {
   decay: 1,
   window: 2,
@@ -7,6 +7,7 @@ export const figureNumbers = {
   spectra: 5,
   balance: 6,
   ratios: 7,
+  body: 8,
 } as const;
 
 /** "Figure 3"; "Figure 3 (continued)" for what stands in a fold under it. */

@@ -3,7 +3,6 @@ import { useStore } from "zustand";
 import { plainText } from "../../export/sentences/piece.ts";
 import { compareSettings } from "../../sheet/compareSettings.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
-import { figureNumbers } from "../page/figureNumbers.ts";
 import { LiveRegion } from "../page/LiveRegion.tsx";
 import { pageExports } from "../page/pageExports.ts";
 import { RestedCases } from "../page/restedCases.ts";
@@ -156,14 +155,7 @@ export function Argument({
             settings={compareSettings(workspace.cases[0].sheet)}
             onChange={change}
           />
-          {folded.length > 0 && (
-            <BodySection
-              cases={folded}
-              late={late !== null}
-              figureNumber={figureNumbers.ratios + comparisons.length}
-              onChange={change}
-            />
-          )}
+          {folded.length > 0 && <BodySection cases={folded} late={late !== null} onChange={change} />}
           <TableSection
             cases={reduced}
             exports={exports}

@@ -12,6 +12,7 @@ import { bodyFigure } from "../../figures/bodyFigure.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { formatPosition, withUnit } from "../../figures/formatNumber.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import { sectionOf } from "../page/sectionList.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { BodyChoices } from "./BodyChoices.tsx";
@@ -29,14 +30,12 @@ import { TargetTable } from "./TargetTable.tsx";
 export function BodySection({
   cases,
   late,
-  figureNumber,
   onChange,
 }: {
   /** At rest; the same list while nothing in it changes. */
   cases: readonly CaseView[];
   /** The worker has been at it for more than a moment. */
   late: boolean;
-  figureNumber: number;
   onChange: (change: WorkspaceChange) => void;
 }) {
   const wanted = useMemo(() => cases.filter(({ of }) => of.sheet.body !== null), [cases]);
@@ -45,12 +44,8 @@ export function BodySection({
     <SectionFrame section={sectionOf("body")} notes={notesOf(cases, wanted, onChange)}>
       <Finding sentences={findingOf(cases, wanted)} stale={stale} />
       <SaidSentences sentences={beyondTargetSentences(wanted)} />
-      {wanted.length === 0 ? (
-        <NoBody cases={cases} onChange={onChange} />
-      ) : (
-        <Met cases={wanted} figureNumber={figureNumber} />
-      )}
-      <DevelopmentFold cases={cases} figureName={`Figure ${figureNumber} (continued)`} onChange={onChange} />
+      {wanted.length === 0 ? <NoBody cases={cases} onChange={onChange} /> : <Met cases={wanted} />}
+      <DevelopmentFold cases={cases} onChange={onChange} />
     </SectionFrame>
   );
 }
@@ -103,7 +98,7 @@ function NoBody({
 }
 
 /** Figure and tables of the cases in which a body stands. */
-function Met({ cases, figureNumber }: { cases: readonly CaseView[]; figureNumber: number }) {
+function Met({ cases }: { cases: readonly CaseView[] }) {
   const build = useCallback((options: FigureOptions) => bodyFigure(cases, options), [cases]);
   const placed = useMemo(() => placedBodies(cases), [cases]);
   if (placed.length === 0) return null;
@@ -112,7 +107,7 @@ function Met({ cases, figureNumber }: { cases: readonly CaseView[]; figureNumber
       {/* one column of print holds the numbers of two cases; more stand under the figure */}
       <div className={placed.length <= 2 ? "pair" : undefined}>
         <FigureBlock
-          name={`Figure ${figureNumber}`}
+          name={figureName("body")}
           title="Intensity and integral scale of each case as a path, and where the body stands on it"
           widthMm={86}
           build={build}

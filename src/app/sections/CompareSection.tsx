@@ -10,6 +10,7 @@ import { formatNumber } from "../../figures/formatNumber.ts";
 import { overlayFigure } from "../../figures/overlayFigure.ts";
 import type { SheetCompare } from "../../sheet/caseSheet.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import { RestedCases } from "../page/restedCases.ts";
 import { sectionOf } from "../page/sectionList.ts";
 import type { CaseView } from "../session/caseView.ts";
@@ -95,7 +96,7 @@ function CompareFigures({ comparisons }: { comparisons: readonly Comparison[] })
   return (
     <>
       <FigureBlock
-        name="Figure 6"
+        name={figureName("ratios")}
         title={`Ratios to ${first.name}`}
         widthMm={178}
         build={ratios}
@@ -115,7 +116,7 @@ function CompareFigures({ comparisons }: { comparisons: readonly Comparison[] })
         />
       </div>
       <FigureBlock
-        name="Figure 6 (continued)"
+        name={figureName("ratios", true)}
         title={`${labelOf(quantity).name} of all cases over one another, and ratios along the stream`}
         widthMm={spectra ? 178 : 86}
         build={overlay}

@@ -4,6 +4,7 @@ import { arguedOf } from "../../figures/arguedOf.ts";
 import { developmentFigure } from "../../figures/developmentFigure.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
+import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { DevelopmentTable } from "./DevelopmentTable.tsx";
 import { DrawnFold } from "./DrawnFold.tsx";
@@ -14,11 +15,9 @@ import { SaidSentences } from "./SaidSentences.tsx";
 /** From where on the flow has developed, each criterion by itself, at a tolerance that can be set. */
 export function DevelopmentFold({
   cases,
-  figureName,
   onChange,
 }: {
   cases: readonly CaseView[];
-  figureName: string;
   onChange: (change: WorkspaceChange) => void;
 }) {
   const argued = cases.filter((view) => arguedOf(view) !== null);
@@ -44,7 +43,7 @@ export function DevelopmentFold({
               }
             />
           </div>
-          <Drawn cases={argued} name={figureName} />
+          <Drawn cases={argued} />
           <DevelopmentTable cases={argued} />
         </>
       )}
@@ -52,13 +51,13 @@ export function DevelopmentFold({
   );
 }
 
-function Drawn({ cases, name }: { cases: readonly CaseView[]; name: string }) {
+function Drawn({ cases }: { cases: readonly CaseView[] }) {
   // the list is made anew with every rendering, its cases are not
   // biome-ignore lint/correctness/useExhaustiveDependencies: the cases themselves are what the drawing follows from
   const build = useCallback((options: FigureOptions) => developmentFigure(cases, options), [...cases]);
   return (
     <FigureBlock
-      name={name}
+      name={figureName("body", true)}
       title="From where on each criterion of a developed flow holds"
       widthMm={178}
       build={build}

@@ -21,7 +21,7 @@ function shown(cases: readonly CaseView[]) {
   const onChange = vi.fn<(change: WorkspaceChange) => void>();
   render(
     <DefinitionPanel cases={cases} comparisons={[]}>
-      <BodySection cases={cases} late={false} figureNumber={8} onChange={onChange} />
+      <BodySection cases={cases} late={false} onChange={onChange} />
     </DefinitionPanel>,
   );
   return onChange;
