@@ -1,3 +1,6 @@
+import { meanSquareRate } from "../../src/core/station/meanSquareRate.ts";
+import { noiseFloor } from "../../src/core/station/noiseFloor.ts";
+
 /** A one-sided spectrum against wavenumber, as a table prints it. */
 export interface Table {
   readonly k: readonly number[];
@@ -32,4 +35,15 @@ export function asDensity(of: (k1: number) => number, highest: number, size: num
 /** ∫ E df of such a density. */
 export function varianceOf({ density, size, step }: ReturnType<typeof asDensity>): number {
   return density.reduce((sum, value) => sum + value, 0) / (size * step);
+}
+
+/** Two columns of a published table, without the places that it leaves blank. */
+export function columnsOf(rows: readonly Record<string, string>[], k: string, E: string): Table {
+  const used = rows.filter((row) => row[E] !== "");
+  return { k: used.map((row) => Number(row[k])), E: used.map((row) => Number(row[E])) };
+}
+
+/** <(du/dx)²> of such a density, as the reduction forms it: no noise, no tail. */
+export function gradientOf({ density, size, step }: ReturnType<typeof asDensity>): number {
+  return meanSquareRate(density, size, step, noiseFloor(density, size, Infinity));
 }
