@@ -70,9 +70,11 @@ function ChoiceList({ cases }: { cases: readonly CaseView[] }) {
       <dt>weights</dt>
       <dd>{said((fit, view) => weights[view.decay?.weights ?? fit.weights])}</dd>
       <dt>
-        <Origin />
+        <Origin along={cases[0].along} />
       </dt>
-      <dd>{said((fit, view) => held(fit.x0, unitOf("L", view.of.sheet.units)))}</dd>
+      <dd>
+        {said((fit, view) => held(fit.x0, unitOf(view.along === "t" ? "T" : "L", view.of.sheet.units)))}
+      </dd>
       <dt>
         <i className="sym">n</i>
       </dt>
@@ -123,16 +125,16 @@ function ChoicesForm({
           onChange={(coordinate) => all({ coordinate })}
         />
       )}
-      {cases.map(({ id, name, of }) => (
+      {cases.map(({ id, name, of, along }) => (
         <fieldset key={id} className="case-choices">
           <legend>{name}</legend>
           <NumberField
             label={
               <>
-                hold <Origin /> at
+                hold <Origin along={along} /> at
               </>
             }
-            unit={unitOf("L", of.sheet.units)}
+            unit={unitOf(along === "t" ? "T" : "L", of.sheet.units)}
             placeholder="free"
             value={of.sheet.fit.x0}
             onChange={(x0) => onChange({ kind: "hold-origin", caseId: id, x0 })}
@@ -162,10 +164,11 @@ function ChoicesForm({
   );
 }
 
-function Origin() {
+function Origin({ along }: { along: "x" | "t" | undefined }) {
   return (
     <span className="sym">
-      x<sub className="up">0</sub>
+      {along ?? "x"}
+      <sub className="up">0</sub>
     </span>
   );
 }

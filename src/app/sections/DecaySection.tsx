@@ -23,10 +23,10 @@ const figure: SectionFigure = {
     <>
       (<i>a</i>) Energy against distance from the virtual origin. Filled: inside the fit window; open:
       outside; the law is thin where it is extended. Below, residuals from the law; an open arrowhead stands
-      for one beyond the strip. Bars: 95 %. (<i>b</i>) Joint 68 % and 95 % regions of <i>n</i> and <i>x</i>
-      <sub>0</sub> in the chosen window, the contours of the profile itself (dotted and empty while they are
-      those of the window before); bars: their adopted 95 % intervals, for an automatic window the union over
-      later starts; dashed: exponents of the classical hypotheses.
+      for one beyond the strip. Bars: 95 %. (<i>b</i>) Joint 68 % and 95 % regions of <i>n</i> and the virtual
+      origin in the chosen window, the contours of the profile itself (dotted and empty while they are those
+      of the window before); bars: their adopted 95 % intervals, for an automatic window the union over later
+      starts; dashed: exponents of the classical hypotheses.
     </>
   ),
 };
@@ -95,6 +95,7 @@ function correlationNote(cases: readonly CaseView[]): Note[] {
   const values = cases.flatMap(({ decay }) => decay?.correlation_n_x0 ?? []);
   if (!values.some((value) => Math.abs(value) > tied)) return [];
   const text = values.map((value) => formatNumber(value, 2)).join(" and ");
+  const along = cases[0].along ?? "x";
   return [
     {
       name: "Correlation",
@@ -102,9 +103,11 @@ function correlationNote(cases: readonly CaseView[]): Note[] {
         <p>
           <i className="sym">n</i> and{" "}
           <span className="sym">
-            x<sub className="up">0</sub>
+            {along}
+            <sub className="up">0</sub>
           </span>{" "}
-          are tied ({text}): an origin further downstream asks for a smaller exponent. Quote both.
+          are tied ({text}): an origin {along === "t" ? "that is later" : "further downstream"} asks for a
+          smaller exponent. Quote both.
         </p>
       ),
     },

@@ -32,7 +32,7 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
             <th scope="col">
               <Definition of="stations">Stations</Definition>
             </th>
-            <Head of="x" unit={unitOf("L", units)} />
+            <Head of={placeKey(cases[0])} unit={unitOf(placeDimension(cases[0]), units)} />
             <Head of="U" unit={unitOf("L/T", units)} />
             <Head of="integralTimes" unit="" />
             <Head of="k1max_eta" unit="" />
@@ -51,7 +51,7 @@ function WideTable({ cases }: { cases: readonly CaseView[] }) {
               <td>
                 <NumberButton {...stationCount(view)}>{view.stations.length}</NumberButton>
               </td>
-              <Cell view={view} of="x" shown={placesOf(view)} value={({ x }) => x} />
+              <Cell view={view} of={placeKey(view)} shown={placesOf(view)} value={({ x }) => x} />
               <Cell view={view} of="U" shown={speedOf(view)} value={({ U }) => U.value} />
               <Cell
                 view={view}
@@ -86,8 +86,8 @@ function RecordsList({ cases }: { cases: readonly CaseView[] }) {
             <span>
               <b>{view.name}</b>, {layoutOf(view)}, {stationsText(view.stations.length)},{" "}
               <span className="nowrap">
-                <StationsNumber view={view} of="x" shown={xs} value={({ x }) => x} />
-                {withUnit("", unitOf("L", units))}
+                <StationsNumber view={view} of={placeKey(view)} shown={xs} value={({ x }) => x} />
+                {withUnit("", unitOf(placeDimension(view), units))}
               </span>
               <br />
               <SymbolText runs={labelOf("U").symbol} /> ={" "}
@@ -144,6 +144,10 @@ function Head({ of, unit }: { of: string; unit: string }) {
     </th>
   );
 }
+
+/** Stations of a decay in time stand at times. */
+const placeKey = ({ along }: CaseView) => (along === "t" ? "t" : "x");
+const placeDimension = ({ along }: CaseView) => (along === "t" ? "T" : "L");
 
 const layoutNames = { series: "probe series", lines: "line samples", profile: "profile" } as const;
 

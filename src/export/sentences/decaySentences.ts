@@ -35,7 +35,7 @@ export function decaySentences(
 function lawPart(of: SentenceCase, decay: DecayResult, first: boolean): Sentence {
   const origin = equated(symbolOf(of.along === "t" ? "t0" : "x0"), lengthValue(decay.x0, of));
   const what = first ? `${quantityWord(decay)} decays ` : "";
-  return say`${first ? "In" : "in"} ${caseOf(of)} ${what}with exponent ${equation(decay.n, "n", of.units)} from a virtual origin ${origin}, fitted over ${coordinate(of)} = ${stretch(decay.window, of)}`;
+  return say`${first ? "In" : "in"} ${caseOf(of)} ${what}with exponent ${equation(decay.n, "n", of.units)} from a virtual origin ${origin}, fitted ${decay.flight ? "along the time of flight " : ""}over ${coordinate(of)} = ${stretch(decay.window, of)}`;
 }
 
 function quantityWord({ quantity, assumption }: DecayResult): string {
