@@ -4,8 +4,10 @@ import { methodsText } from "../../export/methodsText.ts";
 import { resultsFile, resultsText } from "../../export/resultsFile.ts";
 import { safeFileNames } from "../../export/safeFileNames.ts";
 import { stationsCsv } from "../../export/stationsCsv.ts";
+import type { ArchiveFile } from "../../export/zipFiles.ts";
 import { decaySettings } from "../../sheet/decaySettings.ts";
 import { writeCaseSheet } from "../../sheet/writeCaseSheet.ts";
+import { keptPage } from "../keeping/keptPage.ts";
 import type { PageExports } from "../sections/TableSection.tsx";
 import type { CaseView } from "../session/caseView.ts";
 import type { Held } from "../session/session.ts";
@@ -15,8 +17,36 @@ import { download } from "./download.ts";
 export function pageExports(cases: readonly CaseView[], held: Held): PageExports {
   const names = safeFileNames(cases.map(({ name }) => name));
   const nameOf = (view: CaseView) => names[cases.indexOf(view)] ?? "case";
-  const methods = () => methodsText(cases.map(methodsCase), held.argued?.comparisons ?? []);
+  const comparisons = held.argued?.comparisons ?? [];
+  const methods = () => methodsText(cases.map(methodsCase), comparisons);
+  const resultsJson = () => resultsText(resultsFile(cases.flatMap(resultOf), comparisons));
   return {
+    everything: async () => {
+      const [{ zipFiles }, { figureFiles }, { workspaceText }] = await Promise.all([
+        import("../../export/zipFiles.ts"),
+        import("./figureFiles.ts"),
+        import("../keeping/workspaceFile.ts"),
+      ]);
+      const { text, bibTeX } = methods();
+      const ofCase = (view: CaseView): ArchiveFile[] => [
+        { path: `${nameOf(view)}.json`, content: writeCaseSheet(view.of.sheet) },
+        {
+          path: `${nameOf(view)}-stations.csv`,
+          content: stationsCsv(view.name, view.stations, view.of.sheet),
+        },
+        { path: `${nameOf(view)}-stations.tex`, content: stationsLatex(view) },
+      ];
+      const archive = zipFiles([
+        ...cases.flatMap(ofCase),
+        { path: "results.json", content: resultsJson() },
+        { path: "fits.tex", content: fitsLatex(cases) },
+        { path: "methods.txt", content: text },
+        { path: "sources.bib", content: bibTeX },
+        { path: "page.workspace.json", content: workspaceText(keptPage(held)) },
+        ...(await figureFiles()),
+      ]);
+      download("waneline.zip", new Blob([archive.slice()], { type: "application/zip" }));
+    },
     stationsLatex: (view) =>
       download(`${nameOf(view)}-stations.tex`, stationsLatex(view), "application/x-tex"),
     fitsLatex: () => download("fits.tex", fitsLatex(cases), "application/x-tex"),
@@ -30,12 +60,7 @@ export function pageExports(cases: readonly CaseView[], held: Held): PageExports
         "text/csv",
       ),
     sheets: (view) => download(`${nameOf(view)}.json`, writeCaseSheet(view.of.sheet), "application/json"),
-    results: () =>
-      download(
-        "results.json",
-        resultsText(resultsFile(cases.flatMap(resultOf), held.argued?.comparisons ?? [])),
-        "application/json",
-      ),
+    results: () => download("results.json", resultsJson(), "application/json"),
   };
 }
 

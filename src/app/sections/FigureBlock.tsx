@@ -36,7 +36,7 @@ export function FigureBlock({
         <p className="caption">
           <b>{name}</b> {caption}
         </p>
-        <FigureSave widthMm={widthMm} build={build} />
+        <FigureSave name={name} widthMm={widthMm} build={build} />
       </div>
     </div>
   );

@@ -14,6 +14,8 @@ export interface PageExports {
   readonly stations: (view: CaseView) => void;
   readonly sheets: (view: CaseView) => void;
   readonly results: () => void;
+  /** All of it in one archive, the figures too. */
+  readonly everything: () => Promise<void>;
   readonly stationsLatex: (view: CaseView) => void;
   readonly fitsLatex: () => void;
   readonly methodsText: () => void;
@@ -34,6 +36,16 @@ export function TableSection({
 }) {
   const [chosen, choose] = useState<string | null>(null);
   const view = cases.find(({ id }) => id === chosen) ?? cases[0];
+  const [packing, setPacking] = useState<string | null>(null);
+  const pack = async () => {
+    setPacking("at work");
+    try {
+      await exports.everything();
+      setPacking(null);
+    } catch (error) {
+      setPacking(`The archive could not be made: ${error instanceof Error ? error.message : error}.`);
+    }
+  };
   return (
     <SectionFrame section={sectionOf("table")} notes={[figureNote]}>
       <Finding sentences={[lead]} />
@@ -76,6 +88,10 @@ export function TableSection({
         <button type="button" className="action" onClick={exports.bibTeX}>
           Sources, BibTeX
         </button>
+        <button type="button" className="action" onClick={() => void pack()} disabled={packing === "at work"}>
+          {packing === "at work" ? "Everything is being packed" : "Everything, zip"}
+        </button>
+        {packing !== null && packing !== "at work" && <span role="alert">{packing}</span>}
       </div>
       <h3 className="methods-head">Methods</h3>
       <div className="methods-text">
