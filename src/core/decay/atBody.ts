@@ -104,7 +104,7 @@ function smallestMiss(
 /** Tu at the first station of a law of the same n and x0 but another A, such that the body meets its target. */
 function inflowIntensity(
   stations: readonly StationResult[],
-  { law }: { readonly law: PowerLaw | null },
+  { law, quantity }: Pick<DecayResult, "law" | "quantity">,
   x: number,
   Tu: number,
 ): BodyArgument["inflow"] {
@@ -112,6 +112,7 @@ function inflowIntensity(
   const from = stations[0].x;
   const none = (why: string) => ({ x: from, Tu: missing(why), extrapolated: true as const });
   if (law === null) return none("there is no law");
+  if (quantity === "q") return none("the profile's own quantity is not known to be an energy");
   const [there, here] = [lawAt(law, from), lawAt(law, x)];
   if (there === null || here === null)
     return none("the first station, or the body, lies before the virtual origin");

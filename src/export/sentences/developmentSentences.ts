@@ -31,7 +31,8 @@ function heldSentences(of: SentenceCase, development: Development): Sentence[] {
   const lost = say`In ${caseOf(of)} ${words(refuted)} ${refuted.length === 1 ? "does" : "do"} not hold at the last station.`;
   const [first, last] = [latest(judged, "notContradicted"), latest(judged, "inside")];
   if (first === null) return [lost];
-  const subject = refuted.length === 0 ? say`In ${caseOf(of)} all that is asked is` : say`The rest is`;
+  const all = judged.length === development.criteria.length ? "all that is asked" : "all that can be judged";
+  const subject = refuted.length === 0 ? say`In ${caseOf(of)} ${all} is` : say`The rest is`;
   const possible = say`${subject} contradicted by no interval from ${placeOf(first, "notContradicted", of)} on`;
   return [...(refuted.length === 0 ? [] : [lost]), say`${possible}${certainPart(of, last, open, words)}.`];
 }

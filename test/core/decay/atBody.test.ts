@@ -7,7 +7,7 @@ import { isEstimate, type Quantity } from "../../../src/core/quantity.ts";
 import { seededRandom } from "../../../src/core/signal/seededRandom.ts";
 import type { StationResult } from "../../../src/core/stationResult.ts";
 import { expectClose } from "../../support/expectClose.ts";
-import { known, lawStations, plainSettings, spacedFrom } from "../../support/lawStations.ts";
+import { known, lawStations, plainSettings, spacedFrom, stationAt } from "../../support/lawStations.ts";
 
 const M = 0.025;
 const law = { A: 0.06, x0: 3 * M, n: 1.25, ell: M, U: 6, nu: 1.5e-5, B: 0.005, m: 0.375 };
@@ -99,6 +99,13 @@ describe("targets at the body", () => {
       why: "the intensity is 2.00 times the target at the last station still",
     });
     expect(targets.L11_chord?.x).toMatchObject({ value: null, why: expect.stringMatching(/already/) });
+  });
+  it("need nothing that could be told of the inflow where the decaying quantity may be no energy", () => {
+    const given = xs.map((x) => stationAt(x, { q: known((x - law.x0) ** -1.2, 0.01) }));
+    expect(at(given, { Tu: 0.02 }).inflow?.Tu).toMatchObject({
+      value: null,
+      why: expect.stringMatching(/not known to be an energy/),
+    });
   });
   it("need at the inflow what the law makes of them on the way, marked as extrapolated", () => {
     const { inflow } = at(exact, { Tu: 0.02 });
