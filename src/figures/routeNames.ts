@@ -1,7 +1,7 @@
 import type { RouteKey } from "../core/decayArgument.ts";
 
-/** Routes to n and x0 in a few words, in the markup of a figure's text. */
-export const routeNames: Readonly<Record<RouteKey, string>> = {
+/** Routes to n and the origin in a few words, in the markup of a figure's text. */
+const routeNames: Readonly<Record<RouteKey, string>> = {
   joint: "joint fit",
   "origin-scan": "scan of <i>x</i><sub>0</sub>",
   "straight-line": "straight line, <i>n</i> held",
@@ -13,3 +13,8 @@ export const routeNames: Readonly<Record<RouteKey, string>> = {
   flight: "along time of flight",
   "along-x": "along <i>x</i>",
 };
+
+/** The name of a route where the origin is a place, or a time. */
+export function routeName(key: RouteKey, along: "x" | "t"): string {
+  return along === "t" ? routeNames[key].replace("<i>x</i><sub>0", "<i>t</i><sub>0") : routeNames[key];
+}

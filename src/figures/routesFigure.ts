@@ -11,7 +11,7 @@ import { caseRows, legend } from "./legend.ts";
 import { pageNote } from "./pageNote.ts";
 import { pageLine } from "./pageShapes.ts";
 import { type Box, joinDecor, linearAxis, type Panel } from "./panel.ts";
-import { routeNames } from "./routeNames.ts";
+import { routeName } from "./routeNames.ts";
 import { endsOf } from "./stationPoints.ts";
 import { caseLine, stationTrace } from "./stationTrace.ts";
 
@@ -180,7 +180,10 @@ function rowNames({ box }: Panel, keys: readonly RowKey[], options: FigureOption
     pageNote(
       key === "adopted"
         ? key
-        : routeNames[key].replaceAll("<i>x</i><sub>0</sub>", `<i>${options.along}</i><sub>0</sub>`),
+        : routeName(key, options.along).replaceAll(
+            "<i>x</i><sub>0</sub>",
+            `<i>${options.along}</i><sub>0</sub>`,
+          ),
       box.left - 2,
       box.top - ((row + 0.5) * (box.top - box.bottom)) / keys.length,
       {

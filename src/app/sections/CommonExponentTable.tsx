@@ -5,6 +5,7 @@ import { formatNumber, formatProbability } from "../../figures/formatNumber.ts";
 import { quantityText } from "../../figures/formatQuantity.ts";
 import { endsOf } from "../../figures/stationPoints.ts";
 import type { CaseView } from "../session/caseView.ts";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { NumberButton } from "./NumberButton.tsx";
 import { formatted, QuantityCells } from "./QuantityText.tsx";
@@ -32,7 +33,7 @@ export function CommonExponentTable({
   return (
     <>
       <TableScroll label="One exponent or one each">
-        <table className="data dense">
+        <table className="data dense" {...cellKeys}>
           <thead>
             <tr>
               <th scope="col" className="text">
@@ -75,12 +76,14 @@ function SharedRow({ row, cases }: { row: Shared; cases: readonly CaseView[] }) 
         {row.cases.join(", ")}
       </th>
       <QuantityCells
+        cell
         quantity={n}
         at={{ kind: "page", view, shown: quantityText(formatted(n, manner)), rows }}
         {...manner}
       />
       <td title={String(p)}>
         <NumberButton
+          cell
           of="p"
           quantity={bare(p, "a probability of these data: it has no interval")}
           at={{

@@ -9,6 +9,7 @@ import { positionDecimals } from "../../figures/positionDecimals.ts";
 import { endsOf } from "../../figures/stationPoints.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { NumberButton } from "./NumberButton.tsx";
 import { RichText } from "./RichText.tsx";
@@ -26,7 +27,7 @@ export function ConditionsTable({ cases }: { cases: readonly CaseView[] }) {
   return (
     <>
       <TableScroll label="Conditions on the ends of the window">
-        <table className="data dense">
+        <table className="data dense" {...cellKeys}>
           <thead>
             <tr>
               <th scope="col" className="text">
@@ -105,6 +106,7 @@ function PlaceCells({
     <>
       <td title={String(place.value)}>
         <NumberButton
+          cell
           of="condition_place"
           quantity={place}
           at={{

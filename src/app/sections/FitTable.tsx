@@ -73,8 +73,8 @@ export function FitTable({ cases }: { cases: readonly CaseView[] }) {
               <tr key={name + label}>
                 <th scope="row" className="text">
                   {name}{" "}
-                  <Definition of={label}>
-                    <SymbolText runs={labelOf(label).symbol} />
+                  <Definition of={keyOf(label, cases)}>
+                    <SymbolText runs={labelOf(keyOf(label, cases)).symbol} />
                   </Definition>
                 </th>
                 {fitted.map(({ view, decay }) => (
@@ -95,6 +95,10 @@ export function FitTable({ cases }: { cases: readonly CaseView[] }) {
     </>
   );
 }
+
+/** The origin of a decay in time is one. */
+const keyOf = (label: string, cases: readonly CaseView[]) =>
+  label === "x0" && cases[0]?.along === "t" ? "t0" : label;
 
 function mannerOf(label: string, view: CaseView): Manner {
   return label === "x0" ? originManner(view) : { label, units: view.units };

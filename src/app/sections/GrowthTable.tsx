@@ -6,6 +6,7 @@ import { quantityText } from "../../figures/formatQuantity.ts";
 import { endsOf } from "../../figures/stationPoints.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { formatted, QuantityCells } from "./QuantityText.tsx";
 import { SymbolText } from "./SymbolText.tsx";
@@ -20,7 +21,7 @@ export function GrowthTable({ cases }: { cases: readonly CaseView[] }) {
   return (
     <>
       <TableScroll label="Growth of the scales">
-        <table className="data dense">
+        <table className="data dense" {...cellKeys}>
           <thead>
             <tr>
               <th scope="col" className="text">
@@ -70,11 +71,13 @@ function GrowthRow({ view, growth: { key, exponent, implied, agrees } }: { view:
         </Definition>
       </th>
       <QuantityCells
+        cell
         quantity={exponent}
         at={at(exponent, "the stations of the window, from the adopted origin")}
         {...manner}
       />
       <QuantityCells
+        cell
         quantity={implied}
         at={at(implied, `${implications[key]} with the adopted n, C_epsilon constant`)}
         {...manner}

@@ -5,6 +5,7 @@ import type { FigureTable } from "../../figures/figureSpec.ts";
 import { formatProbability } from "../../figures/formatNumber.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseHeads } from "./CaseHeads.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { Definition } from "./Definition.tsx";
 import { NumberButton } from "./NumberButton.tsx";
 import { TableSave } from "./TableSave.tsx";
@@ -17,7 +18,7 @@ export function HypothesisTable({ cases }: { cases: readonly CaseView[] }) {
   return (
     <>
       <TableScroll label="Hypotheses">
-        <table className="data dense">
+        <table className="data dense" {...cellKeys}>
           <CaseHeads cases={fitted} first={<Definition of="p">Exponent held at</Definition>} />
           <tbody>
             {names.map(({ name, n }) => (
@@ -59,6 +60,7 @@ function HypothesisCells({ view, hypothesis }: { view: CaseView; hypothesis: Hyp
     <>
       <td title={String(p)}>
         <NumberButton
+          cell
           of="p"
           quantity={bare(p, "a probability of these data: it has no interval")}
           at={{

@@ -32,6 +32,7 @@ export function PairCells({
   ].map(({ quantity, manner }) => (
     <QuantityCells
       key={manner.label}
+      cell
       quantity={quantity}
       at={{
         kind: "page",

@@ -22,6 +22,8 @@ interface Cells extends Manner {
   readonly at?: FoundNumber;
   /** What stands behind the value: the sign of a doubt. */
   readonly beside?: ReactNode;
+  /** In a table of many numbers, which is one stop of the Tab key. */
+  readonly cell?: boolean;
 }
 
 export function formatted(quantity: Quantity, { label, units, per }: Manner): FormattedQuantity {
@@ -37,7 +39,7 @@ export function valueText({ value, power }: FormattedQuantity): string {
 }
 
 /** A value and its interval as two cells of a table; the reason of a gap spans both. */
-export function QuantityCells({ quantity, at, beside, ...manner }: Cells) {
+export function QuantityCells({ quantity, at, beside, cell = false, ...manner }: Cells) {
   const shown = formatted(quantity, manner);
   if (quantity.value === null)
     return (
@@ -48,7 +50,7 @@ export function QuantityCells({ quantity, at, beside, ...manner }: Cells) {
   return (
     <>
       <td title={String(quantity.value)}>
-        <NumberButton of={manner.label} quantity={quantity} at={at}>
+        <NumberButton of={manner.label} quantity={quantity} at={at} cell={cell}>
           {withUnit(valueText(shown), manner.per ? shown.unit : "")}
         </NumberButton>
         {beside}

@@ -9,6 +9,7 @@ import { endsOf } from "../../figures/stationPoints.ts";
 import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { PairCells } from "./PairCells.tsx";
 import { PairHeads } from "./PairHeads.tsx";
@@ -28,7 +29,7 @@ export const RegionBody = memo(function RegionBody({ cases }: { cases: readonly 
         caption={caption}
       />
       <TableScroll label="Intervals by every way of making them">
-        <table className="data dense">
+        <table className="data dense" {...cellKeys}>
           <PairHeads view={cases[0]} first="Interval" />
           {cases.map((view) => (
             <tbody key={view.id}>

@@ -11,6 +11,7 @@ import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { CaseMark } from "./CaseMark.tsx";
+import { cellKeys } from "./cellKeys.ts";
 import { FigureBlock } from "./FigureBlock.tsx";
 import { NumberField } from "./NumberField.tsx";
 import { PairCells } from "./PairCells.tsx";
@@ -80,7 +81,7 @@ const caption = (
 function RoutesTable({ cases }: { cases: readonly CaseView[] }) {
   return (
     <TableScroll label="Exponent and origin by every route">
-      <table className="data dense">
+      <table className="data dense" {...cellKeys}>
         <PairHeads view={cases[0]} first="Route" last="rests on" />
         {cases.map((view) => (
           <tbody key={view.id}>

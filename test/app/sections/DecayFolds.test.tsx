@@ -93,6 +93,15 @@ describe("the fold of the routes", () => {
     expect(panel.textContent).toContain("scan of x0 for the least scatter");
     expect(panel.textContent).toContain("all stations weigh alike");
   });
+  it("is one stop of the Tab key for all its numbers, arrow keys between them", () => {
+    shown(views);
+    const cells = [...opened(/^Routes$/).querySelectorAll<HTMLElement>("[data-cell]")];
+    expect(cells.length).toBeGreaterThan(20);
+    expect(cells.filter(({ tabIndex }) => tabIndex === 0)).toHaveLength(1);
+    cells[0].focus();
+    fireEvent.keyDown(cells[0], { key: "ArrowRight" });
+    expect(document.activeElement).toBe(cells[1]);
+  });
   it("takes another origin to try, and leaves the fit as it is", () => {
     const change = shown(views);
     const fold = opened(/^Routes$/);
