@@ -59,7 +59,7 @@ export function equivalentBeyond(
   return {
     quantities: chosen,
     from: none ? null : stretches[first].from,
-    why: why(laid, chosen, first === 0 ? null : (tested[first - 1] ?? null)),
+    why: why(laid, chosen, first === 0 ? null : (tested[first - 1] ?? null), none),
     stretches,
   };
 }
@@ -109,16 +109,18 @@ function why(
   laid: Overlay,
   chosen: readonly ComparedQuantity[],
   stopped: readonly Tested[] | null,
+  none: boolean,
 ): string | null {
   if (laid.why !== null) return laid.why;
   const absent = chosen.find((quantity) => typeof laid.curves[quantity] === "string");
   if (absent !== undefined) return String(laid.curves[absent]);
   if (laid.stretches.length === 0) return "the common range holds fewer than three stations of a case";
   if (stopped === null) return null;
+  const which = none ? "the last stretch" : "the stretch before";
   if (stopped.length < chosen.length)
-    return "a chosen quantity is not carried by the stations of the stretch before, or has no errors there";
+    return `a chosen quantity is not carried by the stations of ${which}, or has no errors there`;
   const beyond = stopped.some(({ room }) => room <= -oneSided);
   return beyond
-    ? "the stretch before departs by more than the tolerance"
-    : "the interval of the stretch before reaches beyond the tolerance";
+    ? `${which} departs by more than the tolerance`
+    : `the interval of ${which} reaches beyond the tolerance`;
 }

@@ -28,10 +28,16 @@ export function spectralDistanceSentences(
   if (count < 2) return [say`${one}.`];
   const far = spectra.pairs.filter(({ p }) => p < 0.05).length;
   return [
-    say`${one}; of ${counted(count, "such pair")} of stations ${far === 0 ? "none lies" : far === 1 ? "one lies" : `${countWord(far)} lie`} farther apart than 95 in 100 would by chance.`,
+    say`${one}; of ${counted(count, "such pair")} of stations ${farText(far, count)} farther apart than 95 in 100 would by chance.`,
   ];
 }
 
 function number(quantity: Quantity, key: string): Piece {
   return { kind: "strong", text: formatDigits(quantity.value ?? 0, 2), about: { key, quantity } };
+}
+
+function farText(far: number, count: number): string {
+  if (far === 0) return "none lies";
+  if (far === count) return "all lie";
+  return far === 1 ? "one lies" : `${countWord(far)} lie`;
 }
