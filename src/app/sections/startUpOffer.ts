@@ -1,24 +1,15 @@
-import type { StationResult } from "../../core/stationResult.ts";
+import { type StartUpTime, startUpTime } from "../../core/decay/startUpTime.ts";
 import type { CaseView } from "../session/caseView.ts";
-
-/** The time after which a case's records are steady, from their beginning, and the station that takes longest. */
-export interface StartUpOffer {
-  readonly time: number;
-  readonly station: StationResult;
-}
 
 /**
  * What the checks propose to leave out of a case's records; null where every record begins as it goes on, and while
  * they are reduced anew.
  */
-export function startUpOffer({ stations, of, work }: CaseView): StartUpOffer | null {
+export function startUpOffer({ stations, of, work }: CaseView): StartUpTime | null {
   if (work !== null) return null;
-  const found = stations.flatMap((station) => {
-    const flag = station.flags.find(({ code }) => code === "start-up");
-    // told from the first sample kept: what is left out already comes before it
-    return flag?.value === undefined ? [] : [{ time: roundUp(of.sheet.startup + flag.value), station }];
-  });
-  return found.length === 0 ? null : found.reduce((a, b) => (b.time > a.time ? b : a));
+  const found = startUpTime(stations);
+  // told from the first sample kept: what is left out already comes before it
+  return found && { ...found, time: roundUp(of.sheet.startup + found.time) };
 }
 
 /** Three digits are enough for a time to leave out; never less than what was found. */
