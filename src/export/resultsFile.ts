@@ -128,6 +128,7 @@ function plainDecay(decay: DecayResult) {
     x0: plainQuantity(decay.x0),
     A: plainQuantity(decay.A),
     correlation_n_x0: decay.correlation_n_x0,
+    covariance: decay.law === null ? null : { of: ["ln A", "x0", "n"], rows: rowsOf(decay.law.covariance) },
     chi2_reduced: decay.chi2_reduced,
     p: decay.p,
     given_window: plainEach(decay.given_window),
@@ -153,6 +154,11 @@ function sentenceCase({ argued, settings }: ResultCase, mark: number): SentenceC
     units,
     along: decaySettings.along,
   };
+}
+
+/** A row-major 3 × 3 as its rows. */
+function rowsOf(matrix: readonly number[]): (readonly number[])[] {
+  return [0, 3, 6].map((at) => matrix.slice(at, at + 3));
 }
 
 function plainEach<K extends string>(quantities: Readonly<Record<K, Quantity>>): Record<K, PlainQuantity> {

@@ -18,10 +18,14 @@ interface Ends {
 }
 interface FoundCase {
   case: string;
+  settings: { fit: { coordinate: string }; compare: { tolerance: number } };
+  development: { tolerance: number };
+  flags: { code: string }[];
   decay: Record<"n" | "x0" | "A", Ends> & {
     given_window: { n: Ends; x0: Ends };
     stations: number;
     coordinate: string;
+    covariance: { rows: number[][] };
   };
 }
 
@@ -31,6 +35,9 @@ const laws = readRows(reference("decay/decay_laws.csv")).flatMap((row) => {
   const [A, n, x0] = [Number(row.A || "1"), Number(row.n), Number(row.x0_over_M || "0")];
   return [A, n, x0].every(Number.isFinite) && n > 0.9 ? [{ id: row.id, A, n, x0 }] : [];
 });
+
+/** q ~ age^-1.25 in a stream that speeds up, U = 4 + x, the age from x = 1 on being ln(U/5) and before it (x - 1)/5. */
+const carried = spacedFrom(0.4, 1, 12, 14).map((x) => [x, 4 + x, (Math.log((4 + x) / 5) + 0.6 / 5) ** -1.25]);
 
 let batch: BuiltBatch;
 let top = "";
@@ -79,6 +86,8 @@ beforeAll(async () => {
       table.map((row) => [Number(row.tU0_over_M), Number(row.u1_rms_cm_s) ** 2]),
       { fit: { x0: 3.5 } },
     ),
+    profile("duct", "x,U,q", carried, { development: { tolerance: 0.2 } }),
+    profile("duct-x", "x,U,q", carried, { fit: { coordinate: "x" } }),
   ];
   const done = batch.run([...sheets, "--out", "out", "--jobs", "1"], top);
   expect(done.code, done.stderr).toBe(0);
@@ -106,6 +115,14 @@ describe("Bennett5 of NIST as a profile, from its sheet to the results file", ()
     expectClose(x0.value, -b2.value, digits);
     expectClose(n.value, 1 / b3.value, digits);
   });
+  it("has a covariance whose diagonal holds the certified standard deviations", () => {
+    const [b1, b2, b3] = bennett5.certified;
+    const { rows } = decayOf("Bennett5").covariance;
+    const digits = { relative: 1e-6, because: "eleven digits are certified of each" };
+    expectClose(Math.sqrt(rows[0][0]), b1.standardDeviation / -b1.value, digits);
+    expectClose(Math.sqrt(rows[1][1]), b2.standardDeviation, digits);
+    expectClose(Math.sqrt(rows[2][2]), b3.standardDeviation / b3.value ** 2, digits);
+  });
   it("has intervals of about two certified standard deviations to each side", () => {
     // those given the window: the adopted ones are the union over later starts, as nothing tells where to begin
     const { x0 } = decayOf("Bennett5").given_window;
@@ -125,6 +142,26 @@ describe("stations on a published law, from their sheet to the results file", ()
     expectClose(decay.n.value, n, { relative: 1e-7, because });
     expectClose(decay.x0.value, x0, { absolute: 1e-5, because });
     expectClose(decay.A.value, A, { relative: 1e-6, because });
+  });
+});
+
+describe("a law in time, carried by a stream that speeds up", () => {
+  it("runs along the time of flight by itself, and gives back n and x0", () => {
+    const decay = decayOf("duct");
+    const digits = { relative: 1e-8, because: "U is straight between stations" };
+    expect(decay.coordinate).toBe("flight");
+    expectClose(decay.n.value, 1.25, digits);
+    expectClose(decay.x0.value, 0.4, digits);
+    expect(cases.get("duct")?.flags.map(({ code }) => code)).toContain("u-varies");
+  });
+  it("runs along x where the sheet says so, with another n", () => {
+    expect(cases.get("duct-x")?.settings.fit.coordinate).toBe("x");
+    expect(decayOf("duct-x").coordinate).toBe("x");
+    expect(Math.abs(decayOf("duct-x").n.value - 1.25)).toBeGreaterThan(0.05);
+  });
+  it("has a tolerance of the development length that is not that of the comparison", () => {
+    const found = cases.get("duct");
+    expect([found?.development.tolerance, found?.settings.compare.tolerance]).toEqual([0.2, 0.1]);
   });
 });
 
