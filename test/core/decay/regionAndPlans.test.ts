@@ -178,6 +178,31 @@ describe("what would narrow the intervals", () => {
       expectClose(n, reach * Math.sqrt(variances(window, places, errors, null).n / before.n), digits);
     }
   });
+  it("with equal weights of q itself takes the same error of q everywhere", () => {
+    const points = pointsOf(null);
+    const window = windowOf(null, { residuals: "linear" });
+    // residuals of q: an error of one in q is 1/q in ln q
+    const errors = points.map(({ q }) => 1 / q);
+    const linear = (places: readonly number[], of: readonly number[]) =>
+      variances(
+        window,
+        places,
+        places.map((_, i) => of[i]),
+        null,
+      );
+    const before = linear(xs, errors);
+    const records = narrowing(points, window).filter(({ kind }) => kind === "record");
+    for (const { x, n: width } of records) {
+      const after = linear(
+        xs,
+        errors.map((error, i) => (xs[i] === x ? error / Math.SQRT2 : error)),
+      );
+      expectClose(width, Math.sqrt(after.n / before.n), {
+        relative: 1e-6,
+        because: "an error of q measured, taken as a share of q on the law",
+      });
+    }
+  });
   it("is nothing where both are held", () => {
     expect(narrowing(pointsOf(0.02), windowOf(0.02, { n: 1.25, x0: 1 }))).toEqual([]);
   });

@@ -87,6 +87,10 @@ describe("where ratios settle", () => {
     const eight = (from: number) => windowOf(() => 1, ratio("isotropy_uv", from), 8).first;
     expect([eight(3), eight(4)]).toEqual([3, 0]);
   });
+  it("from the first station on is not worth a word, nor what never settles", () => {
+    expect(of(ratio("isotropy_uv", 0)).reason).not.toMatch(/settled/);
+    expect(of(ratio("isotropy_uv", 11)).reason).not.toMatch(/settled/);
+  });
   it("is said where no run agrees either", () => {
     const wild = windowOf((i) => (i % 2 ? 2 : 1), ratio("isotropy_uv", 2));
     expect([wild.first, wild.last, wild.withoutPlateau]).toEqual([2, 11, true]);
