@@ -90,7 +90,6 @@ describe("scales that rest on the decay", () => {
         facts: { ...facts, lines: of },
         vv: known(4e-3, 0.01),
         ww: known(9e-3, 0.01),
-        k: exact[4].k,
       });
     };
     const expected = (variance: number, epsilon: Quantity) =>
