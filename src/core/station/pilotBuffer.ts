@@ -217,8 +217,9 @@ export class PilotBuffer {
   }
 
   private grow(needed: number): void {
-    if (needed <= this.columns[0].length) return;
+    // lent arrays differ in length: each is looked at
     this.columns = this.columns.map((column) => {
+      if (needed <= column.length) return column;
       const larger = borrowColumn(Math.max(needed, 2 * column.length));
       larger.set(column.subarray(0, this.count));
       returnColumn(column);
