@@ -86,7 +86,12 @@ describe("records that begin in a transient", () => {
     expect(times.text).toContain("record length in integral times");
     expect(times.text).toContain("greatest");
     const table = page.getByRole("region", { name: "Stations", exact: true });
-    const L11 = await definitionOf(page, table.locator("tbody tr").nth(2).locator(".number").nth(2));
+    // x, Tu, u'/v', L11: without a reference length there is no distance from the origin
+    const columnOfL11 = 3;
+    const L11 = await definitionOf(
+      page,
+      table.locator("tbody tr").nth(2).locator(".number").nth(columnOfL11),
+    );
     expect(L11.text).toContain("integral length scale");
     expect(L11.text).toContain("spread of the routes");
     expect(L11.text).toContain("lag at 1/e");

@@ -7,6 +7,7 @@ export function CommonNumber({
   label,
   unit,
   above,
+  least,
   of,
   sheets,
   onChange,
@@ -14,6 +15,7 @@ export function CommonNumber({
   label: ReactNode;
   unit: string;
   above?: number;
+  least?: number;
   of: (sheet: CaseSheet) => number | null;
   sheets: readonly CaseSheet[];
   onChange: (value: number | null) => void;
@@ -25,6 +27,7 @@ export function CommonNumber({
       label={label}
       unit={unit}
       {...(above === undefined ? {} : { above })}
+      {...(least === undefined ? {} : { least })}
       value={agree ? first : null}
       placeholder={agree ? "not given" : "they differ"}
       onChange={onChange}

@@ -5,15 +5,8 @@ import type { CaseView } from "../session/caseView.ts";
 import { Definition } from "./Definition.tsx";
 import { Fold } from "./Fold.tsx";
 import { NumberButton } from "./NumberButton.tsx";
+import { origins } from "./stationSettings.ts";
 import { TableScroll } from "./TableScroll.tsx";
-
-const origins = {
-  sheet: "case sheet",
-  column: "x column",
-  comment: "comment line",
-  name: "file name",
-  hand: "typed here",
-} as const;
 
 /** Every file: what its columns were taken as, where it stands and how that is known. */
 export function FilesFold({ cases, previews }: { cases: readonly CaseView[]; previews: readonly Preview[] }) {

@@ -9,6 +9,7 @@ export function NumberField({
   value,
   unit = "",
   above,
+  least,
   open = false,
   placeholder,
   onChange,
@@ -18,6 +19,8 @@ export function NumberField({
   unit?: string;
   /** The number must be above this. */
   above?: number;
+  /** The number must be this or more. */
+  least?: number;
   /** True where the page asks for it. */
   open?: boolean;
   placeholder?: string;
@@ -27,7 +30,10 @@ export function NumberField({
   const [text, setText] = useState<string | null>(null);
   const shown = text ?? (value === null ? "" : String(value));
   const parsed = parseNumber(shown);
-  const wrong = parsed === "wrong" || (above !== undefined && parsed !== null && parsed <= above);
+  const tooSmall =
+    typeof parsed === "number" &&
+    ((above !== undefined && parsed <= above) || (least !== undefined && parsed < least));
+  const wrong = parsed === "wrong" || tooSmall;
   const settle = () => {
     if (text === null || parsed === "wrong" || wrong) return;
     setText(null);
@@ -54,7 +60,13 @@ export function NumberField({
         }}
       />
       {wrong && (
-        <span role="alert">{above === 0 ? "A number above zero is needed." : "This is not a number."}</span>
+        <span role="alert">
+          {least === 0
+            ? "Zero or a number above it is needed."
+            : above === 0
+              ? "A number above zero is needed."
+              : "This is not a number."}
+        </span>
       )}
     </div>
   );

@@ -21,9 +21,10 @@ export function StartUpField({
       <CommonNumber
         label="left out at the start"
         unit={unit}
+        least={0}
         of={({ startup }) => startup}
         sheets={cases.map((view) => view.of.sheet)}
-        onChange={(startup) => onChange(Math.max(0, startup ?? 0))}
+        onChange={(startup) => onChange(startup ?? 0)}
       />
       {time > 0 && (
         <button type="button" className="action" onClick={() => onChange(time)}>

@@ -1,6 +1,7 @@
 import { labelOf } from "../../core/catalogue.ts";
 import { lawDistance } from "../../core/decay/lawDistance.ts";
 import type { Flag } from "../../core/flag.ts";
+import { bare } from "../../core/quantity.ts";
 import { withReference } from "../../core/symbolRuns.ts";
 import { unitOf } from "../../core/unitText.ts";
 import { type StationColumn, stationColumn, tableKeys } from "../../export/stationColumns.ts";
@@ -24,6 +25,7 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
   const shown = columns.filter((column) => column.why === null);
   const decimals = positionDecimals(view.stations.map((station) => station.x));
   const distances = distancesOf(view);
+  const place = along === "t" ? "t" : "x";
   const runsAlong = along === "t" ? "t" : view.decay?.law?.flight ? "s" : "x";
   const distanceKey = `(${runsAlong}-${runsAlong}0)/ell`;
   return (
@@ -33,12 +35,16 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
           <thead>
             <tr>
               <th scope="col">
-                <SymbolText runs={labelOf(along === "t" ? "t" : "x").symbol} />
-                {units === "SI" && ` (${unitOf(along === "t" ? "T" : "L", units)})`}
+                <Definition of={place}>
+                  <SymbolText runs={labelOf(place).symbol} />
+                  {units === "SI" && ` (${unitOf(along === "t" ? "T" : "L", units)})`}
+                </Definition>
               </th>
               {distances && (
                 <th scope="col">
-                  <SymbolText runs={withReference(labelOf(distanceKey).symbol, view.symbol)} />
+                  <Definition of={distanceKey}>
+                    <SymbolText runs={withReference(labelOf(distanceKey).symbol, view.symbol)} />
+                  </Definition>
                 </th>
               )}
               {shown.map((column) => (
@@ -57,10 +63,28 @@ export function StationTable({ view, onHover }: { view: CaseView; onHover: (x: n
                 onPointerLeave={() => onHover(null)}
               >
                 <td>
-                  {formatNumber(station.x, decimals)}
+                  <NumberButton
+                    of={place}
+                    quantity={bare(station.x, "a position is told, not estimated")}
+                    at={{ kind: "station", view, station }}
+                    cell
+                  >
+                    {formatNumber(station.x, decimals)}
+                  </NumberButton>
                   <CellFlags flags={station.flags.filter((flag) => concernOf(flag) === null)} />
                 </td>
-                {distances && <td>{distances[row]}</td>}
+                {distances && view.decay && (
+                  <td>
+                    <NumberButton
+                      of={distanceKey}
+                      quantity={bare(distances[row], "it carries the interval of the origin")}
+                      at={{ kind: "decay", view, decay: view.decay }}
+                      cell
+                    >
+                      {formatNumber(distances[row], 1)}
+                    </NumberButton>
+                  </td>
+                )}
                 {shown.map((column) => (
                   <Cells column={column} row={row} flags={station.flags} key={column.key} />
                 ))}
@@ -143,8 +167,8 @@ function isUsed({ decay }: CaseView, x: number): boolean {
   return decay?.points.some((point) => point.x === x && point.used) ?? true;
 }
 
-function distancesOf({ stations, decay, length }: CaseView): string[] | null {
+function distancesOf({ stations, decay, length }: CaseView): number[] | null {
   const law = decay?.law;
   if (!law || length === null) return null;
-  return stations.map((station) => formatNumber(lawDistance(law, station.x) / length, 1));
+  return stations.map((station) => lawDistance(law, station.x) / length);
 }

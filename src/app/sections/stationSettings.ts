@@ -33,10 +33,12 @@ export function stationSettings(
   const time = unitOf("T", sheet.units);
   const meaning = lineMeaning(key, facts);
   const rows: (SettingRow | null)[] = [
+    key === "x" || key === "t" ? positionRow(station) : null,
     recordRow(station, time),
     sheet.startup > 0 && station.duration !== null
       ? ["left out at the start", withUnit(formatDigits(sheet.startup, 3), time)]
       : null,
+    probesRow(station),
     meaning === null ? null : ["on this line", meaning],
     ...(isTime(key) ? timeRows(station, sheet, time) : []),
     ...(isGradient(key) || isSpectral(key) ? segmentRows(station) : []),
@@ -50,6 +52,21 @@ export function stationSettings(
 /** A count or a setting has none to explain. */
 const hasInterval = (quantity: Quantity | undefined) =>
   quantity === undefined || quantity.value === null || quantity.low !== null || quantity.high !== null;
+
+export const origins = {
+  sheet: "case sheet",
+  column: "x column",
+  comment: "comment line",
+  name: "file name",
+  hand: "typed here",
+} as const;
+
+function positionRow({ sources }: StationResult): SettingRow | null {
+  const [source] = sources;
+  if (source === undefined || source.position === null) return null;
+  const more = sources.length > 1 ? `, and of ${sources.length - 1} more` : "";
+  return ["told by", `${origins[source.position]}, ${source.name}${more}`];
+}
 
 function recordRow({ samples, duration, facts }: StationResult, time: string): SettingRow | null {
   if (duration === null) return null;
@@ -115,8 +132,25 @@ function gradientRows({ facts }: StationResult, { reduce, units }: CaseSheet): (
   ];
 }
 
-function intervalText(key: string, { facts }: StationResult): string {
-  if (facts.integralTimes === null) return "from the errors given in the profile, where there are any";
+/** How several probes at one x make the station. */
+function probesRow({ probes = [] }: StationResult): SettingRow | null {
+  if (probes.length < 2) return null;
+  const apart = probes.filter(({ setAside }) => setAside).length;
+  const unlike = probes.filter(({ agrees }) => agrees === false).length;
+  if (apart > 0) return ["probes", `${probes.length - apart} that agree; ${apart} set aside`];
+  if (unlike > 0) return ["probes", `${probes.length}, of which not all agree`];
+  const untold = probes.some(({ agrees }) => agrees === null);
+  return [
+    "probes",
+    `${probes.length}, averaged${untold ? "; whether they agree is not known" : ": they agree"}`,
+  ];
+}
+
+function intervalText(key: string, { facts, duration }: StationResult): string {
+  if (facts.integralTimes === null)
+    return duration === null
+      ? "from the errors given in the profile, where there are any"
+      : "none: the integral time is not known";
   if (facts.groups === 0) return "none: the record is too short";
   if (/^(L11|T_int|L_[vw]$)/.test(key)) {
     return facts.lines === undefined
@@ -124,7 +158,10 @@ function intervalText(key: string, { facts }: StationResult): string {
       : "relative error from the separation at the first zero and the length of all independent lines";
   }
   const groups = `jackknife over ${facts.groups} groups of ${facts.lines === undefined ? "blocks" : "snapshots"}`;
-  return `${groups}, Student’s t with ${facts.groups - 1} degrees of freedom`;
+  const student = `Student’s t with ${facts.groups - 1} degrees of freedom`;
+  if (key === "epsilon_inertial")
+    return `${groups} and, of resampled spectra, the choice of the range; ${student}`;
+  return `${groups}, ${student}`;
 }
 
 const percent = (share: number) => withUnit(formatDigits(100 * share, 2), "%");

@@ -84,4 +84,13 @@ describe("the choices of the reduction", () => {
     expect(heard).not.toHaveBeenCalled();
     expect(screen.getByRole("alert").textContent).toBe("A number above zero is needed.");
   });
+
+  it("refuse to leave out less than nothing", () => {
+    const heard = opened([screenCase]);
+    const field = screen.getByLabelText(/left out at the start/);
+    fireEvent.change(field, { target: { value: "-1" } });
+    fireEvent.blur(field);
+    expect(heard).not.toHaveBeenCalled();
+    expect(screen.getByRole("alert").textContent).toBe("Zero or a number above it is needed.");
+  });
 });
