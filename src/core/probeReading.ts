@@ -15,4 +15,6 @@ export interface ProbeReading {
   readonly agrees: boolean | null;
   /** In what it differs. */
   readonly departs: readonly ProbedName[];
+  /** Its record is no part of the station's values; left out where it is. */
+  readonly setAside?: true;
 }

@@ -67,8 +67,14 @@ export function compareProbes(
     return { ...reading, agrees: departs.length === 0, departs };
   });
   if (oneProbe || wanted === "all") return { probes, p: first.p, ...all };
-  const kept = divided.length > 0 ? parts : parts.filter((_, i) => !apart.has(i));
-  return { probes, p: first.p, kept, divided, oneProbe };
+  if (divided.length > 0) return { probes, p: first.p, kept: parts, divided, oneProbe };
+  return {
+    probes: probes.map((probe, i) => (apart.has(i) ? { ...probe, setAside: true } : probe)),
+    p: first.p,
+    kept: parts.filter((_, i) => !apart.has(i)),
+    divided,
+    oneProbe,
+  };
 }
 
 /** The probes that stand out from a larger part, or in what there is no such part. */

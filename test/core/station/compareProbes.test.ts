@@ -120,6 +120,13 @@ describe("a station whose probes do not all agree", () => {
       expect(four.flags.map(({ code }) => code)).not.toContain("inhomogeneous");
       expect(station.probes?.map(({ agrees }) => agrees)).toEqual([true, true, false, true, true]);
       expect(station.probes?.[2].departs).toEqual(["U"]);
+      expect(station.probes?.map(({ setAside }) => setAside === true)).toEqual([
+        false,
+        false,
+        true,
+        false,
+        false,
+      ]);
       expect(textOf(station)).toMatch(/4 of 5 which agree\. Set aside: at y = 0\.2 U 1[01]\.\d/);
     },
   );
@@ -162,6 +169,7 @@ describe("a station whose probes do not all agree", () => {
     expectClose(numberOf(station.U) as number, 10.2, { relative: 0.01, because: "three standard errors" });
     expect(station.samples).toBe(5 * samples);
     expect(station.probes?.[2].agrees).toBe(false);
+    expect(station.probes?.[2]).not.toHaveProperty("setAside");
     expect(textOf(station)).toContain("All of them are averaged, as chosen");
   });
   it("is the average of the records of one probe, though it drifts from one to the next", () => {
