@@ -17,13 +17,16 @@ import { sheetFiles } from "../../src/sheet/sheetFiles.ts";
 export const sampleFolder = resolve(import.meta.dirname, "../../sample-data");
 
 /** A case of the sample data, read and reduced as the program does it, one file after another. */
-export async function reduceSheet(name: string): Promise<{ sheet: CaseSheet; stations: StationResult[] }> {
-  const { sheet } = readCaseSheet(readFileSync(join(sampleFolder, name), "utf8"), name);
-  const { files, names } = sheetFiles(sheet, name, csvFiles(sampleFolder));
+export async function reduceSheet(
+  name: string,
+  folder = sampleFolder,
+): Promise<{ sheet: CaseSheet; stations: StationResult[] }> {
+  const { sheet } = readCaseSheet(readFileSync(join(folder, name), "utf8"), name);
+  const { files, names } = sheetFiles(sheet, name, csvFiles(folder));
   const reduce = reduceSettings(sheet);
   const stations: StationResult[] = [];
   for (const [i, file] of files.entries()) {
-    const path = join(sampleFolder, names[i]);
+    const path = join(folder, names[i]);
     const bytes = statSync(path).size;
     const source = fileSource(names[i], path, bytes);
     const content = { name: names[i], bytes, fingerprint: names[i], content: { path } };

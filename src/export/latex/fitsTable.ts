@@ -22,7 +22,7 @@ export function fitsTable(cases: readonly FittedCase[]): string {
   return [
     "% needs \\usepackage{booktabs}",
     "\\begin{table}",
-    "\\centering",
+    "\\centering\\footnotesize\\setlength{\\tabcolsep}{2.5pt}",
     "\\caption{Power laws fitted to the decay, with 95\\,\\% intervals.}",
     "\\begin{tabular}{llrllrr}",
     "\\toprule",

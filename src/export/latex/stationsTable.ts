@@ -33,7 +33,7 @@ export function stationsTable(
   return [
     "% needs \\usepackage{booktabs}",
     "\\begin{table}",
-    "\\centering",
+    "\\centering\\footnotesize\\setlength{\\tabcolsep}{2.5pt}",
     `\\caption{Turbulence of ${texText(name)} along the stream. Half-widths of 95\\,\\% intervals after $\\pm$${
       stations.some(outside) ? "; $^{*}$ outside the fit window" : ""
     }.}`,

@@ -26,7 +26,7 @@ export function decayMethods({ settings, decay }: MethodsCase): MethodsPart {
   const sentences = [
     `The law q = A ((${along} − ${origin})/ℓ)^(−n) was fitted to ${what} by least squares of ${decay.residuals === "log" ? "ln q" : "q"}, ${decay.weights === "sampling" ? "weighted with the sampling errors of the stations" : "with equal weights"}${held.length > 0 ? `, ${held.join(" and ")}` : ""}.`,
     decay.coordinate === "flight" ? "Since the mean velocity varies, the time of flight stands for x." : "",
-    `The window is ${along} = ${formatPosition(decay.window[0])} to ${place(decay.window[1])} with ${decay.stations} stations, ${decay.windowChosen === "auto" ? `chosen automatically: ${decay.windowReason}` : "given."}`,
+    `The window is ${along} = ${formatPosition(decay.window[0])} to ${place(decay.window[1])} with ${decay.stations} stations, ${decay.windowChosen === "auto" ? `chosen automatically: ${decay.windowReason.replace(/\.$/, "")}.` : "given."}`,
     `Intervals of n and ${origin} are from the profile of the residuals${decay.windowChosen === "auto" ? ", and are the union over later starts of the window" : ""}${decay.together == null ? "" : "; the records were sampled together, and the profile was widened by a jackknife over their common blocks"}.`,
   ];
   return {

@@ -26,6 +26,9 @@ export function stationMethods({ settings, stations }: MethodsCase): MethodsPart
   return { text: parts.map(({ text }) => text).join(" "), sources: parts.flatMap((part) => part.sources) };
 }
 
+/** A sentence ends in a full stop. */
+const ended = (text: string) => (text.endsWith(".") ? text : `${text}.`);
+
 type Settings = MethodsCase["settings"];
 type Reduced = Pick<MethodsCase, "settings" | "stations">;
 
@@ -77,7 +80,7 @@ function gradients({ reduce }: Settings, onLines: boolean): MethodsPart {
 function dissipation({ stations }: Reduced): MethodsPart {
   const reasons = [...new Set(stations.flatMap(({ facts }) => facts.dissipationReason ?? []))];
   return {
-    text: reasons.length === 0 ? "" : `Dissipation: ${reasons.join(" ")}`,
+    text: reasons.length === 0 ? "" : `Dissipation: ${ended(reasons.join("; "))}`,
     sources: [sources.pope],
   };
 }
