@@ -78,8 +78,11 @@ export function noLawSentence(of: SentenceCase): Sentence {
 export function windowSentence(of: SentenceCase): Sentence {
   const { decay } = of;
   if (decay === null) return [];
-  const how = decay.windowChosen === "auto" ? "automatic" : "given by hand";
-  return say`${caseOf(of)}: window ${stretch(decay.window, of)}, ${how}, ${counted(decay.stations, "station")}. ${capitalised(reason(decay.windowReason))}.`;
+  const what = say`${caseOf(of)}: window ${stretch(decay.window, of)}`;
+  const stations = counted(decay.stations, "station");
+  return decay.windowChosen === "auto"
+    ? say`${what}, automatic, ${stations}. ${capitalised(reason(decay.windowReason))}.`
+    : say`${what}, set by hand, ${stations}.`;
 }
 
 /** "In screen n = 6/5 (Saffman, p = 0.06) is not excluded; 10/7 (Loitsyansky, p < 0.001) is excluded by these data …" */
