@@ -8,8 +8,10 @@ import { Head } from "./page/Head.tsx";
 import { headActions } from "./page/headActions.ts";
 import { Notice } from "./page/Notice.tsx";
 import { PageRuler } from "./page/PageRuler.tsx";
+import { PlacedCases } from "./page/placedCases.ts";
 import { RestedCases } from "./page/restedCases.ts";
 import { sectionList } from "./page/sectionList.ts";
+import { createStillCases } from "./page/stillCases.ts";
 import { useCaseViews } from "./page/useCaseViews.ts";
 import { useHeadHeight } from "./page/useHeadHeight.ts";
 import { useScreenFigures } from "./page/useScreenFigures.ts";
@@ -29,6 +31,7 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
   const [mode, toggleMode] = useTheme();
   const narrow = useMediaQuery("screen and (max-width: 959px)");
   const { live, rested } = useCaseViews(store);
+  const still = useMemo(createStillCases, []);
   const held = heldOf(session);
   const axis = held?.history.present.axis ?? "x";
   const settings = useScreenFigures(held, mode, narrow);
@@ -48,29 +51,38 @@ export function App({ store, work }: { store: PageStore; work: PageWork }) {
   };
   return (
     <FigureSettings value={settings}>
-      <RestedCases value={rested}>
-        <a className="skip" href="#top">
-          To the page
-        </a>
-        <Head
-          ref={head}
-          sections={sections}
-          actions={headActions({ held, mode, picker, dispatch, toggleMode })}
-          lanes={live.length}
-          more={axisActions(live, axis, dispatch)}
-        >
-          <DefinitionContext value={openDefinition}>
-            <PageRuler store={store} cases={live} work={work} />
-          </DefinitionContext>
-        </Head>
-        <main id="top" tabIndex={-1}>
-          {notice !== null && <Notice text={notice} onClose={() => setNotice(null)} />}
-          <DefinitionDoor value={door}>
-            <PageBody store={store} work={work} cases={live} narrow={narrow} picker={picker} onDemo={demo} />
-          </DefinitionDoor>
-        </main>
-        <FilePicker ref={picker} onChoice={(files) => drop(Promise.resolve(files))} />
-        <DropVeil more={there} onDrop={drop} />
+      <RestedCases value={still(rested)}>
+        <PlacedCases value={rested}>
+          <a className="skip" href="#top">
+            To the page
+          </a>
+          <Head
+            ref={head}
+            sections={sections}
+            actions={headActions({ held, mode, picker, dispatch, toggleMode })}
+            lanes={live.length}
+            more={axisActions(live, axis, dispatch)}
+          >
+            <DefinitionContext value={openDefinition}>
+              <PageRuler store={store} cases={live} work={work} />
+            </DefinitionContext>
+          </Head>
+          <main id="top" tabIndex={-1}>
+            {notice !== null && <Notice text={notice} onClose={() => setNotice(null)} />}
+            <DefinitionDoor value={door}>
+              <PageBody
+                store={store}
+                work={work}
+                cases={live}
+                narrow={narrow}
+                picker={picker}
+                onDemo={demo}
+              />
+            </DefinitionDoor>
+          </main>
+          <FilePicker ref={picker} onChoice={(files) => drop(Promise.resolve(files))} />
+          <DropVeil more={there} onDrop={drop} />
+        </PlacedCases>
       </RestedCases>
     </FigureSettings>
   );

@@ -5,6 +5,7 @@ import { compareSettings } from "../../sheet/compareSettings.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { LiveRegion } from "../page/LiveRegion.tsx";
 import { pageExports } from "../page/pageExports.ts";
+import { PlacedCases } from "../page/placedCases.ts";
 import { RestedCases } from "../page/restedCases.ts";
 import { Title } from "../page/Title.tsx";
 import type { CaseView } from "../session/caseView.ts";
@@ -66,6 +67,8 @@ export function Argument({
   const shared = { cases: reduced, stale };
   // the many numbers of the folds follow a bracket once it rests
   const rested = use(RestedCases);
+  const withBody = use(PlacedCases);
+  const placed = useMemo(() => withBody.filter((view) => view.stations.length > 0), [withBody]);
   const folded = useMemo(() => rested.filter((view) => view.stations.length > 0), [rested]);
   return (
     <DefinitionPanel cases={cases} comparisons={comparisons}>
@@ -155,7 +158,7 @@ export function Argument({
             settings={compareSettings(workspace.cases[0].sheet)}
             onChange={change}
           />
-          {folded.length > 0 && <BodySection cases={folded} late={late !== null} onChange={change} />}
+          {placed.length > 0 && <BodySection cases={placed} late={late !== null} onChange={change} />}
           <TableSection
             cases={reduced}
             exports={exports}
