@@ -34,7 +34,7 @@ export function ReductionForm({
   const edit = (change: ReductionEdit) =>
     onChange({ kind: "set-reduction", caseId: shown.length === 1 ? shown[0].id : null, edit: change });
   return (
-    <div className="choices-form">
+    <div className="choices-form reduction-form">
       {cases.length > 1 && (
         <ChoiceField
           label="change it in"
