@@ -20,7 +20,7 @@ import {
   w,
   whole,
 } from "./quickStation.ts";
-import { partOf, settings } from "./records.ts";
+import { partOf, settings, smooth, whiteNoise } from "./records.ts";
 
 describe("the curves of a station", () => {
   const { curves } = station;
@@ -102,6 +102,34 @@ describe("how the gradient varies along a record", () => {
     const total = found.rows.reduce((sum, value) => sum + value, 0);
     expectClose(total / count, found.rate, close);
     expect(blocks.rows).toBe(found.rows.length);
+  });
+  it("has the record's own noise taken out of every block, up to its cut", () => {
+    const white = whiteNoise(count, 6);
+    const part = partOf({ u: smooth(count, 8).map((value, i) => 10 + value + 0.06 * white[i]) });
+    const { bands } = part;
+    if (bands === null) throw new Error("no bands");
+    const own = joinParts([part], settings);
+    const [one] = stationGradients(own, joinSpectra(own), { ...times, scale: 0.04 });
+    expect(one.rule.floor).toBeGreaterThan(0);
+    const borders = bandBorders(bands.size);
+    const at = (block: number) => {
+      let [power, squares] = [0, 0];
+      for (let band = one.rule.cut; band < borders.length; band++) {
+        power += bands.sums[0][block * bands.count + band];
+        const end = band === 0 ? bands.size / 2 + 1 : borders[band - 1];
+        for (let f = borders[band]; f < end; f++) squares += f * f;
+      }
+      const width = 1 / (bands.size * step);
+      const density = (2 * step * power) / (bands.segments[block] * 0.375 * bands.size);
+      const row = own.rows[block];
+      const variance = row[own.fields.indexOf("uu")] / row[0];
+      const rate = (2 * Math.PI * width) ** 2 * width * (density - one.rule.floor * squares);
+      return row[0] * (rate - (4 / 3) * (Math.PI * width) ** 2 * variance);
+    };
+    const steady = Array.from({ length: part.blocks.rows }, (_, b) => b).filter((b) => bands.segments[b] > 0);
+    const total = steady.reduce((sum, b) => sum + at(b), 0);
+    const weight = steady.reduce((sum, b) => sum + own.rows[b][0], 0);
+    for (const b of steady.slice(0, 6)) expectClose(one.rows[b], (at(b) * one.rate * weight) / total, close);
   });
   it("is taken like the record's where a block has no segment of its own", () => {
     const bands = whole.bands && {
