@@ -141,14 +141,14 @@ async function printTogether(tools, ask) {
 }
 
 async function printTimes(tools, ask) {
-  const rounds = 12;
+  const rounds = 40;
   mkdirSync(tools.generated, { recursive: true });
   const file = join(tools.generated, "refits.json");
   writeFileSync(file, JSON.stringify(await ask({ kind: "profiles", profiles })));
   const own = await ask({ kind: "refits", profiles, rounds });
   const warm = Math.min(...own.times.slice(1));
   console.log(`\n${profiles} refits of 30 stations, CPU milliseconds of one core, best of ${rounds} rounds`);
-  const peer = await tools.measured("python3", [join(import.meta.dirname, "refitPeer.py"), file, "3"]);
+  const peer = await tools.measured("python3", [join(import.meta.dirname, "refitPeer.py"), file, "5"]);
   const rows = [["Waneline", own.times[0].toFixed(0), warm.toFixed(1), ...numbers(own.mean)]];
   if (peer.code === 0) {
     const { times, mean, scipy, failed } = JSON.parse(peer.out);
