@@ -5,6 +5,7 @@ import { firstPicks } from "./firstPicks.ts";
 import { advance, redo, startHistory, undo } from "./history.ts";
 import type { Aside, Held, Offer, Plan, Reduced, Session, Work } from "./session.ts";
 import type { SessionEvent } from "./sessionEvent.ts";
+import { withKnownCases } from "./withKnownCases.ts";
 
 /**
  * The session after an event; pure. An event that does not belong to the state it meets (an answer that
@@ -44,7 +45,7 @@ export function nextSession(session: Session, event: SessionEvent): Session {
       // work that is under way goes on: it would tell of cases that are not there any more
       return session.kind === "reducing" ? session : { kind: "ready", held: event.held };
     case "argued":
-      return withHeld(session, (held) => ({ ...held, argued: event.argued }));
+      return withHeld(session, (held) => ({ ...held, argued: withKnownCases(held.argued, event.argued) }));
     default:
       return assertNever(event);
   }
