@@ -116,6 +116,17 @@ describe("the fold of the routes", () => {
   });
 });
 
+describe("the folds of a decay in time", () => {
+  const timed = arguedCases({ along: "t" }).map((of) => asView(of, { along: "t" }));
+  it("name the origin t0 and count places in seconds", () => {
+    shown(timed);
+    expect(opened(/^Routes$/).textContent).toContain("t0 held at zero");
+    const table = within(opened(/^Window$/)).getByRole("region", { name: /^Conditions/ });
+    expect(table.textContent).toContain("t (s)");
+    expect(within(opened(/^Fits$/)).getByRole("row", { name: /^virtual origin t/ })).toBeDefined();
+  });
+});
+
 describe("the fold of the joint region", () => {
   it("gives the interval by union, profile, covariance and refits, one below the other", () => {
     shown(views);
