@@ -9,6 +9,7 @@ import { spectrumFigure } from "../../figures/spectrumFigure.ts";
 import type { PickedStation, WorkspaceChange } from "../../sheet/workspace.ts";
 import { figureName } from "../page/figureNumbers.ts";
 import { pickLetters } from "../page/pickLetters.ts";
+import { createStillCases } from "../page/stillCases.ts";
 import type { CaseView } from "../session/caseView.ts";
 import { ArgumentSection, type SectionFigure } from "./ArgumentSection.tsx";
 import { CaseMark } from "./CaseMark.tsx";
@@ -48,16 +49,18 @@ export function SpectraSection({
 }) {
   const [form, setForm] = useState<Form>("compensated");
   const [component, setComponent] = useState<Component>("E11");
+  const still = useMemo(createStillCases, []);
+  const steady = still(cases);
   const build = useCallback(
     (shown: readonly CaseView[], options: FigureOptions) =>
       spectrumFigure(pickedCurves(shown, picked), options, form, component),
     [picked, form, component],
   );
   const buildLocal = useCallback(
-    (options: FigureOptions) => localSpectrumFigure(pickedCurves(cases, picked), options),
-    [cases, picked],
+    (options: FigureOptions) => localSpectrumFigure(pickedCurves(steady, picked), options),
+    [steady, picked],
   );
-  const curves = useMemo(() => pickedCurves(cases, picked), [cases, picked]);
+  const curves = useMemo(() => pickedCurves(steady, picked), [steady, picked]);
   const sentences = useMemo(() => spectrumSentences(curves), [curves]);
   const figure: SectionFigure = {
     name: figureName("spectra"),
