@@ -1,4 +1,5 @@
 import type { Dimension, Label } from "./catalogue.ts";
+import { sourceOf } from "./labelSources.ts";
 import { symbolRuns } from "./symbolRuns.ts";
 
 /** What a label may say beyond the usual. */
@@ -8,9 +9,7 @@ interface Manner {
   readonly digits?: number;
 }
 
-const pope = "Pope (2000)";
-
-/** One entry of the catalogue; three significant digits and Pope (2000) unless said otherwise. */
+/** One entry of the catalogue; three significant digits and the source of labelSources.ts unless said otherwise. */
 export function label(
   key: string,
   symbol: string,
@@ -18,7 +17,7 @@ export function label(
   dimension: Dimension,
   definition: string,
   manner: Manner = {},
-  source = pope,
+  source = sourceOf(key),
 ): Label {
   return { key, symbol: symbolRuns(symbol), name, dimension, digits: 3, ...manner, definition, source };
 }

@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { catalogue, labelOf } from "../../src/core/catalogue.ts";
 import { comparedQuantities } from "../../src/core/comparison.ts";
+import { sourcedKeys } from "../../src/core/labelSources.ts";
 import { missing } from "../../src/core/quantity.ts";
 import { routeNames } from "../../src/core/stationResult.ts";
 import { symbolRuns, withReference } from "../../src/core/symbolRuns.ts";
@@ -31,6 +32,15 @@ describe("the catalogue of labels", () => {
       expect(digits, key).toBeGreaterThan(1);
       expect(symbol.map(({ text }) => text).join(""), key).not.toMatch(/[{}^_"]/);
     }
+  });
+  it("has a label for each key that a source is given for, and no key under two sources", () => {
+    for (const key of sourcedKeys) expect(labelOf(key).key).toBe(key);
+    expect(new Set(sourcedKeys).size).toBe(sourcedKeys.length);
+  });
+  it("names who defined what Pope did not", () => {
+    expect(labelOf("barycentric_1").source).toContain("Banerjee");
+    expect(labelOf("samples").source).toBe("common practice, no source");
+    expect(labelOf("lambda").source).toContain("Pope");
   });
   it("lists no key twice", () => {
     const keys = Object.values(catalogue).map(({ key }) => key);

@@ -28,7 +28,12 @@ export function comparisonSettings(
     compared === undefined ? null : ["quantity", labelOf(compared).name],
     ["aligned", alignments[align] + (align === "x0" ? exponentText(aligned_with) : "")],
     overlap === null ? null : ["common range", rangeText(overlap, comparison, views)],
-    ["interval", "every station value drawn anew about the measured one, both laws fitted again each time"],
+    quantity.value === null || quantity.low === null
+      ? null
+      : [
+          "interval",
+          "every station value drawn anew about the measured one, both laws fitted again each time",
+        ],
     ["tolerance", withUnit(formatDigits(100 * tolerance, 2), "%")],
     ...(compared === undefined ? [] : verdictRows(comparison.quantities[compared])),
   ];
