@@ -6,6 +6,7 @@ import { localDecayFigure } from "../../src/figures/localDecayFigure.ts";
 import { regionFigure } from "../../src/figures/regionFigure.ts";
 import { routesFigure } from "../../src/figures/routesFigure.ts";
 import { scanFigure } from "../../src/figures/scanFigure.ts";
+import { straightLineFigure } from "../../src/figures/straightLineFigure.ts";
 import { darkTokens, lightTokens } from "../../src/figures/tokens.ts";
 import { arguedCases, screenLaw } from "../support/arguedCases.ts";
 import { expectClose } from "../support/expectClose.ts";
@@ -18,6 +19,7 @@ const everyFigure: [string, (of: readonly FigureCase[], how: FigureOptions) => F
   ["the window scan", scanFigure],
   ["the routes", routesFigure],
   ["the local exponent", localDecayFigure],
+  ["the straight line", straightLineFigure],
 ];
 
 interface Seen {
@@ -186,5 +188,22 @@ describe("the local exponent", () => {
       });
     for (const level of column(spec, "compensated") as number[])
       expectClose(level, screenLaw.A, { relative: 1e-6, because: "as above" });
+  });
+});
+
+describe("the straight line", () => {
+  it("of an exact law is the distance from its origin in reference lengths", () => {
+    const spec = straightLineFigure([exact[0]], options);
+    const [xs, ys] = [column(spec, "x") as number[], column(spec, "straightened") as number[]];
+    for (const [i, y] of ys.entries())
+      expectClose(y, (xs[i] - screenLaw.x0) / screenLaw.ell, { relative: 1e-6, because: "the law is exact" });
+  });
+  it("turns the ends of an interval round: more energy is nearer the origin", () => {
+    const spec = straightLineFigure([cases[0]], options);
+    const [lows, ys] = [
+      column(spec, "straightened_low") as number[],
+      column(spec, "straightened") as number[],
+    ];
+    expect(lows.every((low, i) => low < ys[i])).toBe(true);
   });
 });

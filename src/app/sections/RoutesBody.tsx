@@ -7,6 +7,7 @@ import { routeWords } from "../../export/sentences/routeWords.ts";
 import { arguedOf } from "../../figures/arguedOf.ts";
 import type { FigureOptions } from "../../figures/figureSpec.ts";
 import { routesFigure } from "../../figures/routesFigure.ts";
+import { straightLineFigure } from "../../figures/straightLineFigure.ts";
 import type { WorkspaceChange } from "../../sheet/workspace.ts";
 import { figureName } from "../page/figureNumbers.ts";
 import type { CaseView } from "../session/caseView.ts";
@@ -31,6 +32,7 @@ export const RoutesBody = memo(function RoutesBody({
   onChange: (change: WorkspaceChange) => void;
 }) {
   const build = useCallback((options: FigureOptions) => routesFigure(cases, options), [cases]);
+  const buildLine = useCallback((options: FigureOptions) => straightLineFigure(cases, options), [cases]);
   return (
     <>
       {cases.map((view) => (
@@ -44,6 +46,13 @@ export const RoutesBody = memo(function RoutesBody({
         caption={caption}
       />
       <RoutesTable cases={cases} />
+      <FigureBlock
+        name={figureName("window", true)}
+        title="Straight line of the energy, n held"
+        widthMm={86}
+        build={buildLine}
+        caption={lineCaption}
+      />
       <div className="fields argued-fields">
         {cases.map(({ id, name, of }) => (
           <NumberField
@@ -75,6 +84,14 @@ const caption = (
     (<i>a</i>) Exponent and (<i>b</i>) origin by every route over the same window. Bars: 95 %; one that runs
     into the frame goes on beyond it, or has no end there. Open: held, not fitted. A row without a mark:
     refused, or not to be had; the table says why.
+  </>
+);
+
+const lineCaption = (
+  <>
+    Straight line, <i>n</i> held as fitted: energy over <i>A</i> to the power −1/<i>n</i>. Line: the law, thin
+    where it is extended. At zero: the origin of the straight line and its 95 % interval. Filled: inside the
+    fit window. Bars: 95 %.
   </>
 );
 
