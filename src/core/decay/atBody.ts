@@ -40,7 +40,7 @@ export function atBody(
     L11_chord: chord === null ? noChord : scaled(at.L11, 1 / chord),
     change: each((key) => (chord === null ? noChord : curves[key].change(x, x + chord))),
     targets: {
-      Tu: Tu === null ? null : { target: Tu, x: targetPlace(curves.Tu, stations, decay.law, Math.log(Tu)) },
+      Tu: Tu === null ? null : { target: Tu, x: targetPlace(curves.Tu, stations, Math.log(Tu)) },
       L11_chord:
         L11 === null
           ? null

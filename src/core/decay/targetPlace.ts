@@ -1,4 +1,3 @@
-import type { PowerLaw } from "../decayResult.ts";
 import { bare, isEstimate, missing, type Quantity } from "../quantity.ts";
 import type { StationResult } from "../stationResult.ts";
 import type { BodyCurve } from "./bodyCurves.ts";
@@ -16,7 +15,6 @@ const halvings = 60;
 export function targetPlace(
   curve: BodyCurve,
   stations: readonly StationResult[],
-  law: PowerLaw | null,
   logarithm: number,
 ): Quantity {
   const known = stations.flatMap(({ x }) => {
@@ -32,13 +30,13 @@ export function targetPlace(
   if (right === 0 && known[0].above < 0)
     return missing(`the intensity is ${times(known[0].above)} times the target at the first station already`);
   const at = right === 0 ? known[0].x : crossingOf(curve, logarithm, known[right - 1].x, known[right].x);
-  const error = relativeError(curve.at(at));
+  const value = curve.at(at);
+  const error = relativeError(value);
   const [low, high] = [known[Math.max(right - 1, 0)].x, known[Math.max(right, 1)]?.x ?? at];
   const [before, after] = [low, high].map((x) => curve.logarithm(x));
   const slope = before === null || after === null || high === low ? 0 : (after - before) / (high - low);
   if (error === null || slope === 0) return bare(at, "the stations beside it carry no interval");
-  const value = curve.at(at);
-  const freedom = isEstimate(value) ? (value.error?.freedom ?? null) : (law?.freedom ?? null);
+  const freedom = isEstimate(value) ? (value.error?.freedom ?? null) : null;
   const reach = studentReach(freedom) * Math.abs(error / slope);
   return { value: at, low: at - reach, high: at + reach };
 }

@@ -78,7 +78,7 @@ describe("the place where the intensity falls to a target", () => {
     change: () => missing(""),
   });
   const place = (target: number, error: number | null = 0.01) =>
-    targetPlace(curve(error), stations, law, Math.log(target));
+    targetPlace(curve(error), stations, Math.log(target));
 
   it("is found on the curve itself, between the stations that bracket it", () => {
     expectClose(place(1 / 7.3).value, 7.3, rounding);
@@ -105,7 +105,7 @@ describe("the place where the intensity falls to a target", () => {
       ...curve(0),
       at: (x) => estimate(1 / x, 0.9 / x, 1.1 / x, { standard: 0.01, freedom: 9, scale: "log" }),
     };
-    const found = targetPlace(few, stations, law, Math.log(1 / 7.3));
+    const found = targetPlace(few, stations, Math.log(1 / 7.3));
     if (!isEstimate(found)) throw new Error("no place");
     // 2.262 at nine degrees of freedom (table; from memory)
     expectClose((found.high ?? 0) - found.value, (2.262 * 0.01 * 4) / Math.log(9 / 5), {
@@ -118,7 +118,7 @@ describe("the place where the intensity falls to a target", () => {
     expect(why(place(0.75))).toMatch(/^the intensity is 0\.667 times the target at the first station/);
     expect(why(place(1 / 18))).toMatch(/^the intensity is 2\.00 times the target at the last station/);
     const nothing: BodyCurve = { ...curve(null), logarithm: () => null };
-    expect(why(targetPlace(nothing, stations, law, 0))).toMatch(/no station/);
+    expect(why(targetPlace(nothing, stations, 0))).toMatch(/no station/);
   });
 });
 
