@@ -1,5 +1,5 @@
 import { type ComparedQuantity, comparedQuantities } from "../comparison.ts";
-import { drawTogether } from "../decay/drawTogether.ts";
+import { drawStations } from "../decay/drawStations.ts";
 import { placeAlong } from "../decay/flightCourse.ts";
 import type { CentredLaw } from "../decay/lawProblem.ts";
 import { type SeededRandom, seededRandom } from "../signal/seededRandom.ts";
@@ -62,8 +62,7 @@ function movingSeries(source: ComparedCase, quantity: ComparedQuantity): MovingS
 export function moveLaw({ source, random, ofQ }: MovingCase): void {
   const { law } = source;
   if (law === null) return;
-  if (law.blocks !== null) drawTogether(law.blocks, random, ofQ);
-  else for (let i = 0; i < ofQ.length; i++) ofQ[i] = law.error[i] * random.gaussian();
+  drawStations(law.blocks, law.error, random, ofQ);
   moveStations(law, ofQ);
 }
 

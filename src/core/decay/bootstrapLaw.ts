@@ -2,7 +2,7 @@ import type { Bootstrap } from "../decayArgument.ts";
 import { estimate, type Quantity } from "../quantity.ts";
 import { seededRandom } from "../signal/seededRandom.ts";
 import type { CommonBlocks } from "./commonBlocks.ts";
-import { drawTogether } from "./drawTogether.ts";
+import { drawStations } from "./drawStations.ts";
 import { evaluateLaw } from "./evaluateLaw.ts";
 import type { WindowFit } from "./fitWindow.ts";
 import { placeBack, quantityBack } from "./flightCourse.ts";
@@ -36,13 +36,13 @@ export function bootstrapLaw(
   const measured = problem.y.slice();
   const fitted = measured.map((value, i) => value - problem.residual[i] / problem.w[i]);
   const root = Math.sqrt(variance);
+  const error = problem.w.map((weight) => root / weight);
   const random = seededRandom(seedOf(problem.d));
   const [n, x0]: [number[], number[]] = [[], []];
   let withoutLaw = 0;
   const moves = new Float64Array(problem.count);
   for (let draw = 0; draw < refits; draw++) {
-    if (blocks !== null) drawTogether(blocks, random, moves);
-    else for (let i = 0; i < problem.count; i++) moves[i] = (root * random.gaussian()) / problem.w[i];
+    drawStations(blocks, error, random, moves);
     const scaled = blocks !== null && problem.linear;
     for (let i = 0; i < problem.count; i++)
       problem.y[i] = scaled ? fitted[i] * Math.exp(moves[i]) : fitted[i] + moves[i];
