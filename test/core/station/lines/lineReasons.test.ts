@@ -16,7 +16,12 @@ const spacing = 0.1;
 const settings = { ...lineSettings, kinematicViscosity: 1e-2, periodic: true } as const;
 const all: readonly Component[] = ["u", "v", "w"];
 
-function partOf(snapshots: readonly Float64Array[][], components = all, along: LineGrid["along"] = "y") {
+function partOf(
+  snapshots: readonly Float64Array[][],
+  components = all,
+  along: LineGrid["along"] = "y",
+  begin = 0,
+) {
   const size = snapshots[0][0].length;
   const reducer = startLines({
     ...{ file: "line.csv", position: "column", along, components, stations: [2] },
@@ -24,7 +29,7 @@ function partOf(snapshots: readonly Float64Array[][], components = all, along: L
     across: [{ y: null, z: null }],
   });
   snapshots.forEach((snapshot, t) => {
-    reducer.add(5 * t, snapshot);
+    reducer.add(begin + 5 * t, snapshot);
   });
   return reducer.finish()[0];
 }
@@ -96,6 +101,41 @@ describe("the gradient by snapshots", () => {
     for (let m = 1; m <= 9; m++) gradient += (((2 * Math.PI * m) / 3.2) ** 2 * Math.exp(-1.8 * m)) / 2;
     if (periodic) expectClose(found.rows[0], 32 * gradient, close);
   });
+  it.each([true, false])("and with the shape of each one's spectrum; periodic: %s", (periodic) => {
+    const rates = [0.9, 0.6];
+    const snapshots = Array.from({ length: 12 }, (_, s) =>
+      [0, 1, 2].map((c) =>
+        line(32, (i) => {
+          let sum = c === 0 ? 5 : 0;
+          for (let m = 1; m <= 9; m++)
+            sum += Math.exp(-rates[s % 2] * m) * Math.cos((2 * Math.PI * m * i) / 32 + m * m);
+          return sum;
+        }),
+      ),
+    );
+    const lines = joinLines([partOf(snapshots)]);
+    const spectra = lineSpectra(lines, periodic);
+    const [, found] = lateralGradients(lines, spectra, null);
+    // of one snapshot by itself, its own spectrum gives the same
+    const alone = [0, 1].map((s) => {
+      const own = joinLines([partOf([snapshots[s], snapshots[s + 2]])]);
+      return lateralGradients(own, lineSpectra(own, periodic), null)[1].rate;
+    });
+    expectClose(found.rows[1] / found.rows[0], alone[1] / alone[0], {
+      relative: 2e-3,
+      because: "the last harmonic counts by a tail, which is that of both",
+    });
+    if (!periodic) return;
+    const gradient = (rate: number) => {
+      let sum = 0;
+      for (let m = 1; m <= 9; m++) sum += m * m * Math.exp(-2 * rate * m);
+      return sum;
+    };
+    expectClose(found.rows[1] / found.rows[0], gradient(0.6) / gradient(0.9), {
+      relative: 2e-3,
+      because: "the same tail",
+    });
+  });
 });
 
 describe("lines of few points or components", () => {
@@ -141,5 +181,14 @@ describe("lines of few points or components", () => {
     expectClose(station.uv.value, co(0, 1), close);
     expectClose(station.uw.value, co(0, 2), close);
     expectClose(station.vw.value, co(1, 2), close);
+  });
+  it("that begin at another time are the same lines", () => {
+    const [early, late] = [0, 100].map((begin) =>
+      reduceLines([partOf(wave(16, 3), all, "y", begin)], settings),
+    );
+    expect([early.duration, late.duration]).toEqual([55, 55]);
+    expect([late.blocks?.start, late.blocks?.step]).toEqual([100, 5]);
+    expectClose(late.facts.lines?.independentSnapshots, early.facts.lines?.independentSnapshots ?? 0, close);
+    expectClose(late.L11.value, early.L11.value ?? 0, close);
   });
 });
