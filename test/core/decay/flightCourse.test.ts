@@ -124,7 +124,9 @@ describe("distances from the origin of a law", () => {
     expectClose(lawRate(law, 4), 5 / 4, close);
   });
   it("are x - x0 without one", () => {
-    expect([lawDistance({ x0: 0.5 }, 2), lawPlace({ x0: 0.5 }, 1.5), lawRate({ x0: 0 }, 7)]).toEqual([1.5, 2, 1]);
+    expect([lawDistance({ x0: 0.5 }, 2), lawPlace({ x0: 0.5 }, 1.5), lawRate({ x0: 0 }, 7)]).toEqual([
+      1.5, 2, 1,
+    ]);
     expect(lawDistance({ x0: 3, flight: null }, 2)).toBe(-1);
   });
 });
