@@ -101,7 +101,7 @@ function legendRow(row: LegendRow, left: number, y: number, options: FigureOptio
 /** Corners first, upper right before all; else the first free place down the right side, the middle, the left. */
 function emptiestCorner(panel: Panel, size: { width: number; height: number }): Box {
   const { box } = panel;
-  const places = pointsOf(panel);
+  const places = [...pointsOf(panel)];
   const letter = panel.letter === "" ? null : letterCorner(panel);
   if (letter !== null) places.push([letter.x, letter.y], [letter.x + 3.4, letter.y]);
   const [left, right] = [box.left + 2.4, box.right - 2.4 - size.width];
