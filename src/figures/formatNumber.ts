@@ -40,6 +40,9 @@ export function formatDigits(value: number, digits: number): string {
   const power = powerOfTen(value);
   if (power === null) return formatNumber(value, decimalsForDigits(value, digits));
   const mantissa = formatNumber(value / 10 ** power, digits - 1);
+  // Rounding may carry it into the next power: 0.9996 thousandths are 0.0010, not 10.0 ten-thousandths.
+  const rounded = Number(value.toPrecision(digits));
+  if (Math.abs(rounded) >= 10 ** (power + 1)) return formatDigits(rounded, digits);
   return `${mantissa}${thinSpace}×${thinSpace}10${raisedDigits(power)}`;
 }
 

@@ -28,6 +28,11 @@ describe("numbers as they are printed", () => {
     expect(formatDigits(1.51e-5, 3)).toBe(`1.51${thin}×${thin}10⁻⁵`);
     expect(formatDigits(0.00151, 3)).toBe("0.00151");
   });
+  it("go to the next power where rounding carries them there", () => {
+    expect(formatDigits(0.000997, 2)).toBe("0.0010");
+    expect(formatDigits(9.97e-5, 2)).toBe(`1.0${thin}×${thin}10⁻⁴`);
+    expect(formatDigits(-9.97e-5, 2)).toBe(`\u22121.0${thin}×${thin}10⁻⁴`);
+  });
   it("give positions two decimals below ten and no more digits than they have", () => {
     expect(["0.3", "1.85", "0.0254", "40", "12.5"].map(Number).map(formatPosition)).toEqual([
       "0.30",

@@ -28,7 +28,7 @@ export function FlagNotes({ groups, unit }: { groups: readonly FlagGroup[]; unit
 }
 
 function FlagNote({ group, unit }: { group: FlagGroup; unit: string }) {
-  const { mark, name, xs, text } = group;
+  const { mark, name, xs, text, alike } = group;
   return (
     <p className="flag-note">
       <Pennant />
@@ -40,6 +40,7 @@ function FlagNote({ group, unit }: { group: FlagGroup; unit: string }) {
           </>
         )}
         {xs.length > 3 && ` (${xs.length} stations)`}: <RichText text={text} />
+        {!alike && ` So at ${withUnit(formatPosition(xs[0]), unit)}; each station has its own figure.`}
       </span>
     </p>
   );
