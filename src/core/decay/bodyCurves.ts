@@ -95,6 +95,8 @@ function byLaw(
     stations.map((station) => station.U),
     along,
   );
+  // the unit speed of a decay in time makes no intensity
+  if (settings.referenceSpeed === null && U.x.length === 0) return between;
   const inside = (x: number) => x >= window[0] && x <= window[1];
   /** ln(Us/Uref) at a place; no station's U: 0. */
   const speedRatio = (x: number) => {

@@ -105,10 +105,13 @@ export function leftOutQuantity(
   const { value } = own;
   if (all.why !== null) return bare(value, all.why);
   const error = leftOutError(own, all, scale);
-  if (error === null) return bare(value, "a part of the record gives no value of it");
+  if (error === null) return bare(value, partless);
   const decided = error.scale === "log" && quantile(error.freedom) * error.standard > widest;
   return decided ? bare(value, "a single part of the record decides the value") : withError(value, error);
 }
+
+/** Why a value has no interval although the record is long enough for one. */
+export const partless = "a part of the record gives no value of it";
 
 /** Half the width of an interval in the logarithm, a factor of 150, beyond which it tells of one group only. */
 const widest = 5;

@@ -6,7 +6,14 @@ import type { JoinedCorrelation } from "./joinCorrelations.ts";
 import type { JoinedRecord } from "./joinParts.ts";
 import type { JoinedSpectra } from "./joinSpectra.ts";
 import type { Sampling } from "./sampling.ts";
-import { joinedError, type Replicates, valueError, valueQuantity, withError } from "./stationErrors.ts";
+import {
+  joinedError,
+  partless,
+  type Replicates,
+  valueError,
+  valueQuantity,
+  withError,
+} from "./stationErrors.ts";
 import type { ComponentGradient } from "./stationGradients.ts";
 import { type ValueName, valueScales } from "./stationValues.ts";
 import type { StructureSums } from "./structureSums.ts";
@@ -90,7 +97,8 @@ export function timesScaleOf(
 ): Quantity {
   if (!isEstimate(scale)) return scale;
   const product = value * scale.value;
-  if (error === null || scaleError === null) return bare(product, why);
+  if (scaleError === null) return bare(product, why);
+  if (error === null) return bare(product, partless);
   return withError(product, joinedError(error, scaleError));
 }
 

@@ -134,6 +134,16 @@ describe("the intensity", () => {
     const of = (x: number) => (intensity(x) * 6) / (6 * x ** 0.001);
     expectClose(found.curves.Tu.at(7).value, of(7), { relative: 1e-6, because: "k does not change with U" });
   });
+  it("of a decay in time, where no station has a U and no speed is given, is missing with the reason", () => {
+    const none = missing("neither U nor a reference speed is given");
+    const inTime = stations.map(({ x, uu, vv, ww, k }) => stationAt(x, { uu, vv, ww, k, Tu: none }));
+    const { decay: ofTime, curves: unscaled } = curvesOf(inTime, { along: "t" });
+    expect(ofTime.law).not.toBeNull();
+    expect(whyOf(unscaled.Tu.at(7))).toBe(none.why);
+    expect(unscaled.Tu.logarithm(7)).toBeNull();
+    const { curves: scaled } = curvesOf(inTime, { along: "t", referenceSpeed: law.U });
+    expectClose(scaled.Tu.at(7).value, intensity(7), { relative: 1e-6, because: "an exact law, refitted" });
+  });
   it("of a profile of q, which may be no energy, is that between the stations", () => {
     const profile = stations.map(({ x, k }) => stationAt(x, { q: k, Tu: known(0.05, 0.1) }));
     expectClose(curvesOf(profile).curves.Tu.at(7).value, 0.05, rounding);

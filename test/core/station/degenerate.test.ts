@@ -35,6 +35,8 @@ describe.each(Object.entries(signals))("%s", (_, u) => {
       for (const [name, q] of numbers(stationOf({ u, ...more }))) {
         if (!isEstimate(q)) expect(q.why.length, name).toBeGreaterThan(10);
         else expect([q.value, q.low ?? 0, q.high ?? 0].every(Number.isFinite), name).toBe(true);
+        if (isEstimate(q) && q.low === null) expect(q.why_low?.length, name).toBeGreaterThan(10);
+        if (isEstimate(q) && q.high === null) expect(q.why_high?.length, name).toBeGreaterThan(10);
       }
     }
   });
