@@ -11,7 +11,7 @@ import { type CommonExponent, commonExponent } from "./commonExponent.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import { compareSpectra } from "./compareSpectra.ts";
 import { equivalentBeyond } from "./equivalentBeyond.ts";
-import type { Overlay } from "./overlay.ts";
+import { type Overlay, spaceAndTime } from "./overlay.ts";
 import { noErrors, pairRatios } from "./pairRatios.ts";
 import type { LaidPair, Resampled } from "./resampleCases.ts";
 
@@ -80,11 +80,15 @@ function originsBy(found: PairFindings, way: "own" | "common"): AlignedOrigins |
     return spread === null ? bare(value, unsettled) : linearNormal(value, spread);
   };
   const spread = resampled.pairs[at].distance[way];
-  const apart = held.every(Boolean)
-    ? bare(b - a, "both origins are held, not fitted")
-    : spread === null
-      ? bare(b - a, unsettled)
-      : linearNormal(b - a, spread);
+  const unlike = spaceAndTime(of.map((one) => inputs[one]));
+  const apart =
+    unlike !== null
+      ? missing(unlike)
+      : held.every(Boolean)
+        ? bare(b - a, "both origins are held, not fitted")
+        : spread === null
+          ? bare(b - a, unsettled)
+          : linearNormal(b - a, spread);
   const exponent = (one: 0 | 1): Quantity =>
     way === "common" && aligned.common !== null
       ? sharedExponent(aligned.common)

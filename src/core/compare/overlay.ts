@@ -63,9 +63,13 @@ export function overlay(
   };
   const shown = shownFrom(align);
   const lines = cases.map((one, i) => lineOf(one, origins[i]));
-  const matched = matchedIntensity(cases, lines, at ?? inputs[0].decaySettings.body?.x ?? null, at !== null);
+  const apart = spaceAndTime(inputs);
+  const matched =
+    apart ?? matchedIntensity(cases, lines, at ?? inputs[0].decaySettings.body?.x ?? null, at !== null);
   const base = { matched, coordinates, shown };
-  const refused = refusal(align, cases, origins, lines);
+  const scaled = inputs.every(({ decaySettings }) => decaySettings.referenceLength !== null);
+  const unlike = align === "x" || (align === "x0" && !scaled) ? apart : null;
+  const refused = unlike ?? refusal(align, cases, origins, lines);
   if (refused !== null) return { ...base, ...nothing(refused) };
   const s = cases.map(({ x }, side) => {
     const out = new Float64Array(x.length);
@@ -89,6 +93,13 @@ export function overlay(
 export function commonLengths(inputs: readonly [CaseInput, CaseInput]): readonly [number, number] {
   const [a, b] = inputs.map(({ decaySettings }) => decaySettings.referenceLength);
   return a === null || b === null ? [1, 1] : [a, b];
+}
+
+/** Why no distance lies between two cases: one decays along x, the other in time; null where both do the same. */
+export function spaceAndTime(inputs: readonly CaseInput[]): string | null {
+  const inTime = inputs.filter(({ decaySettings }) => decaySettings.along === "t");
+  if (inTime.length === 0 || inTime.length === inputs.length) return null;
+  return `${inTime[0].name} decays in time, the other case along x: no distance lies between them`;
 }
 
 function nothing(why: string): Pick<Overlay, "overlap" | "why" | "curves" | "stretches"> {

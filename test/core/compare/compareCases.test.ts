@@ -145,6 +145,24 @@ describe("more than two cases", () => {
   });
 });
 
+describe("a decay in time beside one along x", () => {
+  const pair = [aCase("tunnel", first, 51), aCase("box", first, 52, 0.005, { along: "t" })];
+  const why = (quantity: Quantity) => (isEstimate(quantity) ? "" : quantity.why);
+
+  it("has no shift and no distance to it, which would be metres less seconds", () => {
+    const [found] = compare(pair);
+    for (const none of [found.extra_distance, found.origins.own?.extra_distance, found.matched_distance])
+      expect(why(none ?? { value: null, why: "" })).toMatch(/^box decays in time/);
+  });
+  it("is laid over it where both have a scale of their own, and at equal Tu, but not at equal x", () => {
+    expectHeld(compare(pair)[0].quantities.lambda.ratio, 1);
+    expect(compare(pair, { align: "Tu" })[0].why).toBeNull();
+    expect(compare(pair, { align: "x" })[0].why).toMatch(/^box decays in time/);
+    const unscaled = pair.map((one) => ({ ...one, settings: { ...one.settings, referenceLength: null } }));
+    expect(compare(unscaled)[0].why).toMatch(/^box decays in time/);
+  });
+});
+
 describe("laws along the time of flight", () => {
   // U grows by 4 % along the window: both laws hold in the time of flight
   const course = (x: number) => 6 * (1 + 0.0004 * x);
