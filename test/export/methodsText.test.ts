@@ -3,6 +3,7 @@ import { program } from "../../src/core/program.ts";
 import { methodsText } from "../../src/export/methodsText.ts";
 import { defaultCaseSheet } from "../../src/sheet/defaultCaseSheet.ts";
 import { decayOf, stationAt } from "../app/fixtures.ts";
+import { madeComparison } from "../figures/madeComparison.ts";
 
 const stations = [0.2, 0.4, 0.8].map((x) => stationAt(x));
 const screen = {
@@ -34,6 +35,14 @@ describe("the methods text", () => {
     expect(textOf({ settings: { ...screen.settings, fit: { ...screen.settings.fit, n: 1.2 } } })).toContain(
       "n held at 1.20",
     );
+  });
+
+  it("says with which exponent the origins were found that cases are held against each other by", () => {
+    const compared = (change: object) =>
+      methodsText([screen], [{ ...madeComparison, align: "x0" as const, ...change }]).text;
+    expect(compared({ aligned_with: "common n" })).toContain("with one common exponent");
+    expect(compared({ aligned_with: "own n" })).toContain("each law has with its own exponent");
+    expect(compared({ align: "x", aligned_with: "own n" })).not.toContain("exponent,");
   });
 
   it("names as sources what it used and nothing else", () => {

@@ -100,9 +100,17 @@ function SectionIndex({ sections }: { sections: readonly (SectionName & { readon
   );
 }
 
+/** What can do nothing just now stays in the order of the keys: the last Undo must not lose the focus. */
 function Actions({ actions }: { actions: readonly HeadAction[] }) {
   return actions.map(({ name, run, disabled = false, title }) => (
-    <button type="button" className="action" key={name} onClick={run} disabled={disabled} title={title}>
+    <button
+      type="button"
+      className="action"
+      key={name}
+      onClick={() => !disabled && run()}
+      aria-disabled={disabled}
+      title={title}
+    >
       {name}
     </button>
   ));

@@ -32,6 +32,7 @@ export function DurationFold() {
       <NumberField
         label="95 % interval wanted, ± per cent of the value"
         value={percent}
+        above={0}
         onChange={(value) => value !== null && value > 0 && setPercent(value)}
       />
       <TableScroll label="Record lengths">

@@ -26,6 +26,8 @@ const symbols = new RegExp(
   ].join("|"),
   "gu",
 );
+/** A minus of plain text: before a number, or between blanks; the hyphen of a word or of a file's name is none. */
+const minusSigns = /(?<=^|[ (])-(?=\d| )/g;
 /** Of an index: components, orders and the letters of other symbols are italic, words and numbers upright. */
 const running = /^[a-z]$|^L+$|^[ijk]{2}$|^[uvw]{2}$|^[α-ω]$/;
 
@@ -35,13 +37,14 @@ const running = /^[a-z]$|^L+$|^[ijk]{2}$|^[uvw]{2}$|^[α-ω]$/;
  */
 export function symbolParts(text: string): readonly TextPart[] {
   const parts: TextPart[] = [];
+  const plain = (piece: string) => parts.push({ kind: "text", text: piece.replace(minusSigns, "\u2212") });
   let from = 0;
   for (const match of text.matchAll(symbols)) {
-    if (match.index > from) parts.push({ kind: "text", text: text.slice(from, match.index) });
+    if (match.index > from) plain(text.slice(from, match.index));
     parts.push(partOf(match[0], match.groups ?? {}));
     from = match.index + match[0].length;
   }
-  if (from < text.length || parts.length === 0) parts.push({ kind: "text", text: text.slice(from) });
+  if (from < text.length || parts.length === 0) plain(text.slice(from));
   return parts;
 }
 

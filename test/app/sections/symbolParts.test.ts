@@ -25,6 +25,7 @@ describe("the symbols in a plain text", () => {
     ["Tu = √(2k/3)/U", "[Tu] = √(2[k]/3)/[U]"],
     ["q = A ((x − x0)/ℓ)^(−n)", "[q] = [A] (([x] − [x0])/ℓ){−n}"],
     ["⟨uv⟩/(u′v′)", "⟨[uv]⟩/([u′][v′])"],
+    ["The last x - x0 moves n by -2.8", "The last [x] − [x0] moves [n] by −2.8"],
     ["Student’s t with 4", "Student’s [t] with 4"],
   ])("%j", (text, expected) => expect(marked(text)).toBe(expected));
 
@@ -32,6 +33,7 @@ describe("the symbols in a plain text", () => {
     "run_x0700.csv, line 48, column 3",
     "x0.3.csv and u.csv and lines/v.txt",
     "A station and a record of 3 m, 2 s and 6 m/s",
+    "large-eddy simulation of run-2 in run-2.csv",
     "the beginning of the record differs from the rest",
   ])("there are none in %j", (text) => expect(marked(text)).toBe(text));
 });
