@@ -11,6 +11,8 @@ export interface DecaySettings {
   readonly residuals: "log" | "linear";
   readonly weights: "sampling" | "equal";
   readonly along: "x" | "t";
+  /** Left out: SI. */
+  readonly units?: "SI" | "nondimensional";
   /** What the law runs along; "auto" or left out: the time of flight where U varies, else x. */
   readonly coordinate?: "auto" | "x" | "flight";
   /** Another origin, to see the exponent it would give: a route, not the fit; null or left out: none. */

@@ -7,6 +7,7 @@ export function decaySettings(sheet: CaseSheet): DecaySettings {
   return {
     ...sheet.fit,
     along,
+    units: sheet.units,
     referenceLength: reference.length,
     referenceSpeed: reference.speed,
     kinematicViscosity,

@@ -11,7 +11,7 @@ import { type CommonExponent, commonExponent } from "./commonExponent.ts";
 import type { ComparedCase } from "./comparedCase.ts";
 import { compareSpectra } from "./compareSpectra.ts";
 import { equivalentBeyond } from "./equivalentBeyond.ts";
-import { type Overlay, spaceAndTime } from "./overlay.ts";
+import { noDistance, type Overlay } from "./overlay.ts";
 import { noErrors, pairRatios } from "./pairRatios.ts";
 import type { LaidPair, Resampled } from "./resampleCases.ts";
 
@@ -80,7 +80,7 @@ function originsBy(found: PairFindings, way: "own" | "common"): AlignedOrigins |
     return spread === null ? bare(value, unsettled) : linearNormal(value, spread);
   };
   const spread = resampled.pairs[at].distance[way];
-  const unlike = spaceAndTime(of.map((one) => inputs[one]));
+  const unlike = noDistance(of.map((one) => inputs[one]));
   const apart =
     unlike !== null
       ? missing(unlike)

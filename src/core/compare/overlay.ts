@@ -63,13 +63,13 @@ export function overlay(
   };
   const shown = shownFrom(align);
   const lines = cases.map((one, i) => lineOf(one, origins[i]));
-  const apart = spaceAndTime(inputs);
+  const apart = noDistance(inputs);
   const matched =
     apart ?? matchedIntensity(cases, lines, at ?? inputs[0].decaySettings.body?.x ?? null, at !== null);
   const base = { matched, coordinates, shown };
   const scaled = inputs.every(({ decaySettings }) => decaySettings.referenceLength !== null);
-  const unlike = align === "x" || (align === "x0" && !scaled) ? apart : null;
-  const refused = unlike ?? refusal(align, cases, origins, lines);
+  const offScale = align === "x" || (align === "x0" && !scaled) ? apart : null;
+  const refused = offScale ?? refusal(align, cases, origins, lines);
   if (refused !== null) return { ...base, ...nothing(refused) };
   const s = cases.map(({ x }, side) => {
     const out = new Float64Array(x.length);
@@ -79,11 +79,12 @@ export function overlay(
   const low = Math.max(...s.map((own) => own[0] ?? Number.POSITIVE_INFINITY));
   const high = Math.min(...s.map((own) => own[own.length - 1] ?? Number.NEGATIVE_INFINITY));
   if (!(high > low)) return { ...base, ...nothing("the ranges of the two cases do not overlap") };
-  const curves = everyQuantity((quantity) =>
-    align === "Tu" && quantity === "Tu"
-      ? "the cases are laid over one another at equal Tu"
-      : curve([cases[0].series[quantity], cases[1].series[quantity]], cases, s, low, high),
-  );
+  const unlike = unlikeUnits(inputs, "their lengths have no ratio");
+  const curves = everyQuantity((quantity) => {
+    if (align === "Tu" && quantity === "Tu") return "the cases are laid over one another at equal Tu";
+    if (unlike !== null && lengthsCompared.includes(quantity)) return unlike;
+    return curve([cases[0].series[quantity], cases[1].series[quantity]], cases, s, low, high);
+  });
   const ends = [shown(low), shown(high)].sort((a, b) => a - b);
   const stretches = stretchesOf(s, [low, high]);
   return { ...base, overlap: [ends[0], ends[1]], why: null, curves, stretches };
@@ -95,12 +96,22 @@ export function commonLengths(inputs: readonly [CaseInput, CaseInput]): readonly
   return a === null || b === null ? [1, 1] : [a, b];
 }
 
-/** Why no distance lies between two cases: one decays along x, the other in time; null where both do the same. */
-export function spaceAndTime(inputs: readonly CaseInput[]): string | null {
+/** Why no distance lies between two cases: they decay in space and time, or count in unlike units; null: one does. */
+export function noDistance(inputs: readonly CaseInput[]): string | null {
   const inTime = inputs.filter(({ decaySettings }) => decaySettings.along === "t");
-  if (inTime.length === 0 || inTime.length === inputs.length) return null;
+  if (inTime.length === 0 || inTime.length === inputs.length)
+    return unlikeUnits(inputs, "no distance lies between them");
   return `${inTime[0].name} decays in time, the other case along x: no distance lies between them`;
 }
+
+function unlikeUnits(inputs: readonly CaseInput[], so: string): string | null {
+  const without = inputs.filter(({ decaySettings }) => decaySettings.units === "nondimensional");
+  if (without.length === 0 || without.length === inputs.length) return null;
+  return `${without[0].name} is nondimensional, the other case in SI units: ${so}`;
+}
+
+/** Quantities that have a unit. */
+const lengthsCompared: readonly ComparedQuantity[] = ["L11", "lambda", "eta"];
 
 function nothing(why: string): Pick<Overlay, "overlap" | "why" | "curves" | "stretches"> {
   return { overlap: null, why, curves: everyQuantity(() => why), stretches: [] };

@@ -163,6 +163,23 @@ describe("a decay in time beside one along x", () => {
   });
 });
 
+describe("a case without units beside one in SI units", () => {
+  const pair = [aCase("tunnel", first, 61), aCase("solver", first, 62, 0.005, { units: "nondimensional" })];
+  const [found] = compare(pair);
+
+  it("has no ratio of lengths, no shift and no distance, for metres do not divide by them", () => {
+    const { L11, lambda, eta } = found.quantities;
+    for (const none of [L11.ratio, lambda.ratio, eta.ratio, found.extra_distance, found.matched_distance])
+      expect(isEstimate(none) ? "" : none.why).toMatch(/^solver is nondimensional/);
+    expect(lambda.verdict).toBeNull();
+    expect(found.equivalent_beyond.from).toBeNull();
+  });
+  it("is compared in what has no unit, at equal distance over each one's own scale", () => {
+    expectHeld(found.quantities.Tu.ratio, 1);
+    expect(compare(pair, { align: "x" })[0].why).toMatch(/^solver is nondimensional/);
+  });
+});
+
 describe("laws along the time of flight", () => {
   // U grows by 4 % along the window: both laws hold in the time of flight
   const course = (x: number) => 6 * (1 + 0.0004 * x);
