@@ -101,6 +101,7 @@ describe("the body in a real browser", () => {
     const { page } = open;
     await marker(page).focus();
     await page.keyboard.press("Enter");
+    await page.waitForFunction(() => document.activeElement instanceof HTMLInputElement);
     await page.keyboard.type("1.05");
     await page.keyboard.press("Enter");
     await settled(page);

@@ -86,7 +86,7 @@ describe("the demo in a real browser", () => {
     const widthPx = png.bytes.readUInt32BE(16);
     expect([86, 178].map((mm) => Math.round((mm / 25.4) * 600))).toContain(widthPx);
     const csv = await downloaded(open.page, () =>
-      open.page.getByRole("button", { name: /^Stations of/ }).click(),
+      open.page.getByRole("button", { name: /^Stations of .*, CSV$/ }).click(),
     );
     expect(csv.bytes.toString("utf8").split("\n").length).toBeGreaterThan(12);
   });
