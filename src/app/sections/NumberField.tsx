@@ -61,21 +61,25 @@ export function NumberField({
       />
       {wrong && (
         <span role="alert">
-          {least === 0
-            ? "Zero or a number above it is needed."
-            : above === 0
-              ? "A number above zero is needed."
-              : "This is not a number."}
+          {parsed === "wrong"
+            ? "A plain number, such as 0.5 or 1.5e-5, is needed."
+            : least === 0
+              ? "Zero or a number above it is needed."
+              : `A number above ${above === 0 ? "zero" : above} is needed.`}
         </span>
       )}
     </div>
   );
 }
 
-/** Decimal point or comma, powers of ten as 1.5e-5; null: nothing typed. */
+/** No length, speed, viscosity or intensity lies beyond these: a slip of the exponent must not stretch the axes. */
+const [smallest, largest] = [1e-12, 1e9];
+
+/** Decimal point or comma, powers of ten as 1.5e-5; null: nothing typed; beyond any quantity of a tunnel: wrong. */
 export function parseNumber(text: string): number | null | "wrong" {
   const plain = text.trim().replace("−", "-").replace(",", ".");
   if (plain === "") return null;
   const value = Number(plain);
-  return Number.isFinite(value) ? value : "wrong";
+  const size = Math.abs(value);
+  return value === 0 || (size >= smallest && size <= largest) ? value : "wrong";
 }

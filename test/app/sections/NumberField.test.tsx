@@ -10,6 +10,9 @@ describe("a number typed by hand", () => {
     ["  ", null],
     ["1.2.3", "wrong"],
     ["air", "wrong"],
+    ["1e300", "wrong"],
+    ["1e-300", "wrong"],
+    ["0", 0],
   ])("reads %j as %j", (text, value) => expect(parseNumber(text)).toBe(value));
 
   it("counts when Enter is pressed, not before", () => {
