@@ -13,7 +13,6 @@ export const flagCodes = [
   "short-record",
   "record-unsteady-scale",
   "unequal-steps",
-  "missing-values",
   "backward-time",
   "gap",
   "rounded-times",

@@ -6,7 +6,7 @@ import { exampleCase, exampleComparison } from "./exampleResults.ts";
 
 const settings = { case: "a", layout: "series", files: [] };
 const sources = [{ name: "x0200.csv", bytes: 4096, x: 0.2, position: "sheet" as const }];
-const flags = [{ code: "missing-values" as const, text: "Three values are missing", value: 3 }];
+const flags = [{ code: "gap" as const, text: "Three gaps", value: 3 }];
 const file = resultsFile(
   [
     { argued: exampleCase("a"), settings, sources, flags },
@@ -76,7 +76,7 @@ describe("the results file", () => {
   });
 
   it("lists the doubts about the case and about its decay together", () => {
-    expect(first.flags.map((flag: { code: string }) => flag.code)).toEqual(["missing-values", "half-open"]);
+    expect(first.flags.map((flag: { code: string }) => flag.code)).toEqual(["gap", "half-open"]);
   });
 
   it("has every key of a comparison", () => {
