@@ -117,6 +117,10 @@ const figureNote = {
         <dt>formats</dt>
         <dd>SVG, PNG 600 dpi, CSV</dd>
       </dl>
+      <p>
+        The archive holds the figures that stand on the page: those of an open fold too, those of a closed one
+        not.
+      </p>
       <p>Always in the light colours. The screen shows a figure at 5 px for each millimetre of paper.</p>
     </>
   ),

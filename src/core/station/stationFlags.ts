@@ -129,7 +129,7 @@ function spectrumFlags({ gradients, spectra, settings }: StationMaterial, facts:
     const extrapolated = gradients.some(({ name, rule }) => name === "u" && rule.tail !== null);
     const text = extrapolated
       ? `The spectrum stands out of its noise up to a wavenumber times eta of ${highest} only: lambda, eta and the dissipation rest on what is extrapolated beyond.`
-      : `The highest usable wavenumber times eta is ${highest}: lambda and eta are upper bounds, the dissipation is a lower one.`;
+      : `The highest usable wavenumber times eta is ${highest}: lambda and eta from gradients are upper bounds, the dissipation from them is a lower one.`;
     flags.push({ code: "resolution", text, value: facts.k1max_eta });
   }
   const sensor = settings.sensorLength;

@@ -42,6 +42,12 @@ function needed({ align, extra_distance: extra, aligned_with }: Comparison, [, s
   const size = about(lengthValue(scaled(extra, value < 0 ? -1 : 1), second), "extra_distance", extra);
   if (low === null || high === null || (low <= 0 && high >= 0))
     return say`, and no difference of the way they need is shown: ${about(lengthValue(extra, second), "extra_distance", extra)}`;
-  const each = aligned_with === "own n" ? ", each with its own exponent" : "";
-  return say`, and ${caseOf(second)} needs ${size} ${value < 0 ? "less" : "more"}${each}`;
+  return say`, and ${caseOf(second)} needs ${size} ${value < 0 ? "less" : "more"}${exponents[aligned_with]}`;
 }
+
+/** What the distance rests on: with other exponents it is another one. */
+const exponents = {
+  "own n": ", each with its own exponent",
+  "common n": ", with one exponent for all",
+  none: "",
+} as const;

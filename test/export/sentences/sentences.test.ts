@@ -188,7 +188,7 @@ describe("the sentences of two cases side by side", () => {
   });
   it("open with the place from which on all chosen quantities agree, and with what the second case needs", () => {
     expect(text).toMatch(
-      /^Beyond \(x − x0\)\/M = 24 screen and simulation are equivalent within 10 % in Tu and L11, and simulation needs 6\.1 M \(3\.2 to 9\.2\) less\./,
+      /^Beyond \(x − x0\)\/M = 24 screen and simulation are equivalent within 10 % in Tu and L11, and simulation needs 6\.1 M \(3\.2 to 9\.2\) less, with one exponent for all\./,
     );
   });
   it("say that the whole common range agrees, or from no place on, with the reason", () => {

@@ -86,7 +86,7 @@ function spectrumFlags({ gradients }: LineMaterial, k1max_eta: number | null): F
     flags.push({ code: "noise-floor", text, value: cut.rule.shareBeyond });
   }
   if (k1max_eta !== null && k1max_eta < resolved) {
-    const text = `The highest usable wavenumber times eta is ${k1max_eta.toPrecision(2)}: lambda and eta are upper bounds, the dissipation is a lower one.`;
+    const text = `The highest usable wavenumber times eta is ${k1max_eta.toPrecision(2)}: lambda and eta from gradients are upper bounds, the dissipation from them is a lower one.`;
     flags.push({ code: "resolution", text, value: k1max_eta });
   }
   return flags;
