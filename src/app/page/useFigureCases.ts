@@ -6,7 +6,7 @@ import { useInView } from "./useInView.ts";
 import { useThrottled } from "./useThrottled.ts";
 
 /** Between two redraws of the figure in view while a bracket is dragged, ms. */
-const pause = 90;
+const pause = 40;
 
 /**
  * The cases a section's figures are drawn from: those in the hand while the section is in view, a few times

@@ -1,4 +1,4 @@
-import { use, useMemo } from "react";
+import { memo, use, useCallback, useMemo } from "react";
 import { useStore } from "zustand";
 import { plainText } from "../../export/sentences/piece.ts";
 import { compareSettings } from "../../sheet/compareSettings.ts";
@@ -57,8 +57,10 @@ export function Argument({
   const comparisons = held.argued?.comparisons ?? noComparisons;
   const { tolerance } = workspace.cases[0].sheet.compare;
   const findings = useMemo(() => findingsOf(cases, comparisons, tolerance), [cases, comparisons, tolerance]);
-  const change = (changed: WorkspaceChange) => dispatch({ kind: "changed", change: changed });
-  const exports = pageExports(cases, held);
+  const change = useCallback(
+    (changed: WorkspaceChange) => dispatch({ kind: "changed", change: changed }),
+    [dispatch],
+  );
   // an argument is told late after a moment; a reduction takes longer than that
   const stale = cases.some((view) =>
     view.work === null ? late !== null && view.stale : view.stations.length > 0,
@@ -70,6 +72,16 @@ export function Argument({
   const withBody = use(PlacedCases);
   const placed = useMemo(() => withBody.filter((view) => view.stations.length > 0), [withBody]);
   const folded = useMemo(() => rested.filter((view) => view.stations.length > 0), [rested]);
+  const exports = useMemo(() => pageExports(rested, held), [rested, held]);
+  const { compare } = useMemo(
+    () => findingsOf(rested, comparisons, tolerance),
+    [rested, comparisons, tolerance],
+  );
+  const settings = useMemo(() => compareSettings(workspace.cases[0].sheet), [workspace]);
+  const point = useCallback(
+    (caseId: string, x: number | null) => setHover(x === null ? null : { caseId, x }),
+    [setHover],
+  );
   return (
     <DefinitionPanel cases={cases} comparisons={comparisons}>
       <div className="row page-top">
@@ -101,7 +113,7 @@ export function Argument({
             sentences={findings.decay}
             onChange={change}
           >
-            <NarrowingFold cases={folded} onMarks={setPlans} />
+            <StillNarrowing cases={folded} onMarks={setPlans} />
           </DecaySection>
           <ArgumentSection
             id="isotropy"
@@ -111,10 +123,10 @@ export function Argument({
             notes={isotropyNotes}
           >
             <Fold name="Small scales, stress tensor, skewness and flatness">
-              <InvariantsBlock cases={folded} />
-              <LinesNote cases={folded} />
-              <StationRoutes label="Anisotropy" cases={folded} columns={anisotropyColumns} />
-              <StationRoutes label="Skewness and flatness" cases={folded} columns={momentColumns} />
+              <StillInvariants cases={folded} />
+              <StillLines cases={folded} />
+              <StillRoutes label="Anisotropy" cases={folded} columns={anisotropyColumns} />
+              <StillRoutes label="Skewness and flatness" cases={folded} columns={momentColumns} />
             </Fold>
           </ArgumentSection>
           <ArgumentSection
@@ -122,11 +134,11 @@ export function Argument({
             {...shared}
             sentences={findings.scales}
             figure={scalesPicture}
-            notes={[{ name: "Integral scale", body: <IntegralScaleNote cases={folded} onChange={change} /> }]}
+            notes={[{ name: "Integral scale", body: <StillScaleNote cases={folded} onChange={change} /> }]}
           >
             <Fold name="Integral scale by every route, transverse scales">
-              <LinesNote cases={folded} />
-              <StationRoutes label="Integral scales by route" cases={folded} columns={integralColumns} />
+              <StillLines cases={folded} />
+              <StillRoutes label="Integral scales by route" cases={folded} columns={integralColumns} />
             </Fold>
           </ArgumentSection>
           <SpectraSection {...shared} picked={workspace.picked} onChange={change} />
@@ -136,34 +148,30 @@ export function Argument({
             sentences={findings.balance}
             figure={balancePicture}
             notes={[
-              { name: "Adopted", body: <DissipationNote cases={folded} onChange={change} /> },
+              { name: "Adopted", body: <StillDissipation cases={folded} onChange={change} /> },
               ...balanceNotes,
             ]}
           >
             <Fold name="Dissipation and gradients by every route">
-              <LinesNote cases={folded} />
-              <StationRoutes
+              <StillLines cases={folded} />
+              <StillRoutes
                 label="Dissipation of every station by route"
                 cases={folded}
                 columns={dissipationColumns}
               />
-              <StationRoutes label="Gradients by route" cases={folded} columns={gradientColumns} />
+              <StillRoutes label="Gradients by route" cases={folded} columns={gradientColumns} />
             </Fold>
           </ArgumentSection>
-          <CompareSection
-            cases={reduced}
+          <StillComparison
+            cases={folded}
             stale={late !== null}
-            sentences={findings.compare}
+            sentences={compare}
             comparisons={comparisons}
-            settings={compareSettings(workspace.cases[0].sheet)}
+            settings={settings}
             onChange={change}
           />
-          {placed.length > 0 && <BodySection cases={placed} late={late !== null} onChange={change} />}
-          <TableSection
-            cases={reduced}
-            exports={exports}
-            onHover={(caseId, x) => setHover(x === null ? null : { caseId, x })}
-          />
+          {placed.length > 0 && <StillBody cases={placed} late={late !== null} onChange={change} />}
+          <StillTable cases={folded} exports={exports} onHover={point} />
         </>
       )}
       <PageFoot cases={cases} />
@@ -171,6 +179,17 @@ export function Argument({
     </DefinitionPanel>
   );
 }
+
+// what follows a bracket only once it rests is not gone through in every frame of a drag
+const StillBody = memo(BodySection);
+const StillComparison = memo(CompareSection);
+const StillDissipation = memo(DissipationNote);
+const StillInvariants = memo(InvariantsBlock);
+const StillLines = memo(LinesNote);
+const StillNarrowing = memo(NarrowingFold);
+const StillRoutes = memo(StationRoutes);
+const StillScaleNote = memo(IntegralScaleNote);
+const StillTable = memo(TableSection);
 
 const noComparisons = [] as const;
 

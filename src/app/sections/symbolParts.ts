@@ -36,6 +36,19 @@ const running = /^[a-z]$|^L+$|^[ijk]{2}$|^[uvw]{2}$|^[α-ω]$/;
  * and letters that stand alone. Words, numbers, units and names of files stay as they are.
  */
 export function symbolParts(text: string): readonly TextPart[] {
+  const before = known.get(text);
+  if (before !== undefined) return before;
+  const parts = partsOf(text);
+  if (known.size >= mostKnown) known.clear();
+  known.set(text, parts);
+  return parts;
+}
+
+/** A page sets the same texts again and again while a bracket moves. */
+const known = new Map<string, readonly TextPart[]>();
+const mostKnown = 2000;
+
+function partsOf(text: string): TextPart[] {
   const parts: TextPart[] = [];
   const plain = (piece: string) => parts.push({ kind: "text", text: piece.replace(minusSigns, "\u2212") });
   let from = 0;
