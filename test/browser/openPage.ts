@@ -45,5 +45,7 @@ export async function openPage(
       complaints.push(`request: ${url.href}`);
   });
   await page.goto(home.href);
+  // a drop is heard once the page stands, which it does when what was kept is there
+  await page.locator("main").waitFor();
   return { page, context, complaints };
 }
