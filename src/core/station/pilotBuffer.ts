@@ -6,6 +6,7 @@ import { borrowColumn, returnColumn } from "./columnStore.ts";
 import { CutKeeper, type CutList } from "./cutList.ts";
 import { examineSteps } from "./examineSteps.ts";
 import { planRecord } from "./planRecord.ts";
+import { recentStep } from "./recentStep.ts";
 import { backwardTime, tooFew } from "./recordFailures.ts";
 import type { RecordPlan } from "./recordPlan.ts";
 import { type PlaceOf, SamplePlaces } from "./samplePlaces.ts";
@@ -29,8 +30,6 @@ export interface PilotFacts {
 
 const smallest = 1 << 14;
 const names: readonly Component[] = ["u", "v", "w"];
-/** Steps before a restart that tell how long one is. */
-const recent = 1000;
 
 /**
  * The first samples of a record, held until they have decided how the rest is treated. Where time runs backward,
@@ -244,11 +243,4 @@ export class PilotBuffer {
 function hasEqual(t: Float64Array, count: number): boolean {
   for (let i = 1; i < count; i++) if (t[i] === t[i - 1]) return true;
   return false;
-}
-
-/** Median of the last steps that are longer than none. */
-function recentStep(t: Float64Array, count: number): number {
-  const steps: number[] = [];
-  for (let i = Math.max(1, count - recent); i < count; i++) if (t[i] > t[i - 1]) steps.push(t[i] - t[i - 1]);
-  return steps.sort((a, b) => a - b)[steps.length >> 1] ?? 0;
 }
