@@ -63,6 +63,7 @@ describe("the body in a real browser", () => {
     await marker(page).focus();
     await page.keyboard.down("ArrowRight");
     await expect.poll(() => placeOf(page)).toBeGreaterThan(Number(before[0]));
+    expect(await finding(page)).toBe(before[1]);
     await page.keyboard.up("ArrowRight");
     await expect.poll(() => finding(page)).not.toBe(before[1]);
     await page.keyboard.press("Control+z");

@@ -1,4 +1,4 @@
-import { useRef } from "react";
+import { useEffect, useRef } from "react";
 
 interface BodyFieldProps {
   readonly px: number;
@@ -13,6 +13,12 @@ interface BodyFieldProps {
 /** The body's position as a number to type, in place of its name. What is no number changes nothing. */
 export function BodyField({ px, before, x, name, onDone }: BodyFieldProps) {
   const ended = useRef(false);
+  const field = useRef<HTMLInputElement>(null);
+  // once, when it comes: what is being typed would be selected, and replaced, whenever the page draws anew
+  useEffect(() => {
+    field.current?.focus();
+    field.current?.select();
+  }, []);
   const end = (text: string) => {
     if (ended.current) return;
     ended.current = true;
@@ -27,7 +33,7 @@ export function BodyField({ px, before, x, name, onDone }: BodyFieldProps) {
       aria-label={`Position of ${name}`}
       inputMode="decimal"
       defaultValue={x}
-      ref={(field) => field?.select()}
+      ref={field}
       onBlur={(event) => end(event.currentTarget.value)}
       onKeyDown={(event) => {
         if (event.key === "Enter") end(event.currentTarget.value);

@@ -276,6 +276,14 @@ describe("the body", () => {
     await userEvent.keyboard("1,05{Enter}");
     expect(spies.onBody.mock.lastCall).toEqual([1.05, "rest"]);
   });
+  it("keeps what is being typed when the page draws anew in the middle of it", async () => {
+    const { rerender } = show([screenCase()], body);
+    slider("Body, heated tube").focus();
+    await userEvent.keyboard("{Enter}1");
+    rerender(<KeptRuler cases={[screenCase()]} spies={spies} {...body} />);
+    await userEvent.keyboard(".05{Enter}");
+    expect(spies.onBody.mock.lastCall).toEqual([1.05, "rest"]);
+  });
   it("goes 1 % of the scale with an arrow, 5 % with Shift, and stays on the scale", async () => {
     show([screenCase()], body);
     const grip = slider("Body, heated tube");
